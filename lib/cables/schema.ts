@@ -44,7 +44,9 @@ export const lineModelSchema = z
     cFPerM: positive("The capacitance").describe("capacitance at 1 MHz, F/m"),
     lossTangent: notNegative("The loss tangent").max(1, { error: "The loss tangent must be at most 1." }).optional(),
     g0SPerM: notNegative("The leakage").optional().describe("dc leakage conductance, S/m"),
-    temperatureCoefficientPerK: finite("The temperature coefficient").optional().describe("per kelvin; default 0.00393"),
+    temperatureCoefficientPerK: finite("The temperature coefficient")
+      .optional()
+      .describe("per kelvin; default 0.00393"),
     lossSlopes: z
       .array(
         z.strictObject({

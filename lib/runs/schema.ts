@@ -3,7 +3,11 @@
  * the OpenAPI document. Pure, runs in the browser too.
  */
 import { z } from "zod";
-import type { Circuit as EngineCircuit, Element as EngineElement, Termination as EngineTermination } from "@/lib/line/element";
+import type {
+  Circuit as EngineCircuit,
+  Element as EngineElement,
+  Termination as EngineTermination,
+} from "@/lib/line/element";
 import { lineModelSchema, notNegative, positive, temperature } from "@/lib/cables/schema";
 
 export const maxFrequencies = 10_001;
@@ -46,10 +50,13 @@ const sampledSchema = z
       im: z.array(finite("A reflection")).max(maxFrequencies),
     }),
   })
-  .refine((s) => s.reflection.re.length === s.frequenciesHz.length && s.reflection.im.length === s.frequenciesHz.length, {
-    path: ["reflection"],
-    error: "The reflection needs as many values as there are frequencies.",
-  })
+  .refine(
+    (s) => s.reflection.re.length === s.frequenciesHz.length && s.reflection.im.length === s.frequenciesHz.length,
+    {
+      path: ["reflection"],
+      error: "The reflection needs as many values as there are frequencies.",
+    },
+  )
   .refine((s) => s.frequenciesHz.every((f, i) => i === 0 || f > (s.frequenciesHz[i - 1] ?? 0)), {
     path: ["frequenciesHz"],
     error: "The frequencies must ascend.",
@@ -166,7 +173,9 @@ export const elementSchema = z
         kind: z.literal("joint"),
         name,
         lossDb: notNegative("The loss").max(200, { error: "A joint loses at most 200 dB." }).optional(),
-        lossDbAtOneGhz: notNegative("The loss at 1 GHz").max(200, { error: "A joint loses at most 200 dB." }).optional(),
+        lossDbAtOneGhz: notNegative("The loss at 1 GHz")
+          .max(200, { error: "A joint loses at most 200 dB." })
+          .optional(),
         referenceOhm: positive("The reference").optional(),
         shuntF: notNegative("The capacitance").optional(),
       }),
@@ -222,7 +231,9 @@ export const targetSchema = z
     atLeast: finite("The least value").optional(),
     atMost: finite("The greatest value").optional(),
   })
-  .refine((t) => t.atLeast !== undefined || t.atMost !== undefined, { error: "A target needs a least or a greatest value." })
+  .refine((t) => t.atLeast !== undefined || t.atMost !== undefined, {
+    error: "A target needs a least or a greatest value.",
+  })
   .meta({ id: "Target" });
 export type Target = z.infer<typeof targetSchema>;
 
@@ -235,7 +246,10 @@ const title = z
   .min(1, { error: "Give the run a name." })
   .max(120, { error: "A name has at most 120 characters." });
 const words = (what: string, most: number) =>
-  z.string({ error: `${what} must be text.` }).trim().max(most, { error: `${what} has at most ${most} characters.` });
+  z
+    .string({ error: `${what} must be text.` })
+    .trim()
+    .max(most, { error: `${what} has at most ${most} characters.` });
 
 const runFields = {
   name: title,
@@ -290,7 +304,21 @@ export type Run = z.infer<typeof runSchema>;
 
 /** A row of the run list. */
 export const runItemSchema = runSchema
-  .pick({ id: true, number: true, name: true, site: true, folder: true, state: true, condition: true, ownerId: true, ownerName: true, version: true, changedAt: true, designHz: true, bandHz: true })
+  .pick({
+    id: true,
+    number: true,
+    name: true,
+    site: true,
+    folder: true,
+    state: true,
+    condition: true,
+    ownerId: true,
+    ownerName: true,
+    version: true,
+    changedAt: true,
+    designHz: true,
+    bandHz: true,
+  })
   .extend({ totalLengthM: z.number(), cables: z.array(z.string()).describe("designations, in order, once each") })
   .meta({ id: "RunItem" });
 export type RunItem = z.infer<typeof runItemSchema>;
