@@ -1,0 +1,43 @@
+import { abs2, arg, type Complex } from "@/lib/line/complex";
+import { distancesAtCosine, impedanceAlong, reflectionAgainst, wavelengths } from "@/lib/line/match/line-angle";
+
+export interface SectionPlan {
+  load: Complex;
+  /** the line between load and section, ohm */
+  lineOhm: number;
+  sectionOhm: number;
+  /** what the match must show, ohm */
+  targetOhm: number;
+}
+
+export interface SectionSolution {
+  /** wavelengths of the line, load to section */
+  distance: number;
+  /** wavelengths of the section's own line */
+  length: number;
+}
+
+/**
+ * Two-length series section on lossless lines, every solution: a length of the line brings the load onto the circle
+ * on which the section's own line carries the target, then the section turns it there.
+ * @returns sorted by distance from the load; empty where the two lines' impedances cannot reach the target from this
+ *   load, or where section and line are equal
+ * Source: derived here. On the section the quantity (|Z|² + Zs²)/(2·Zs·Re Z) does not change along it; equating it at
+ * both ends and writing Z in the line's reflection angle ψ gives cos ψ in closed form. Convention e^{+jωt}.
+ */
+export function seriesSection(plan: SectionPlan): SectionSolution[] {
+  const { load, lineOhm, sectionOhm, targetOhm } = plan;
+  const reflection = reflectionAgainst(load, lineOhm);
+  const size = abs2(reflection);
+  if (!(load.re > 0 && size > 0)) return [];
+  const onSection = (targetOhm ** 2 + sectionOhm ** 2) / targetOhm;
+  const left = onSection * lineOhm * (1 - size) - (lineOhm ** 2 + sectionOhm ** 2) * (1 + size);
+  const cosine = left / (2 * Math.sqrt(size) * (lineOhm ** 2 - sectionOhm ** 2));
+  const wanted = targetOhm >= sectionOhm ? 0 : Math.PI;
+  return distancesAtCosine(reflection, cosine)
+    .map((distance) => {
+      const seen = reflectionAgainst(impedanceAlong(load, lineOhm, distance), sectionOhm);
+      return { distance, length: wavelengths((arg(seen) - wanted) / 2) };
+    })
+    .sort((a, b) => a.distance - b.distance);
+}
