@@ -135,3 +135,20 @@ export function redone(h: History): History {
   if (!next) return h;
   return { past: [...h.past, h.present], present: next, future, tag: null };
 }
+
+/** A field whose text cannot be read: the text stays, with the sentence beside it. Keyed by path, "elements.2.lengthM". */
+export type Faults = Readonly<Record<string, { text: string; message: string }>>;
+
+/** The same faults after the elements were rearranged: they go where their element went, and away with it. */
+export function faultsAfter(faults: Faults, before: readonly Element[], after: readonly Element[]): Faults {
+  const isRearranged = before.length !== after.length || before.some((e, i) => e !== after[i] && after.includes(e));
+  if (!isRearranged) return faults;
+  const moved = Object.entries(faults).flatMap(([path, fault]) => {
+    const [, index, rest] = /^elements\.(\d+)\.(.*)$/.exec(path) ?? [];
+    if (index === undefined) return [[path, fault] as const];
+    const element = before[Number(index)];
+    const now = element === undefined ? -1 : after.indexOf(element);
+    return now < 0 ? [] : [[`elements.${now}.${rest}`, fault] as const];
+  });
+  return Object.fromEntries(moved);
+}

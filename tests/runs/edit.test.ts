@@ -89,3 +89,16 @@ test("changeBetween(saved, next) holds the changed fields and nothing else", () 
   expect(changeBetween(draft(1), draft(1))).toEqual({});
   expect(Object.keys(changeBetween(draft(1), draft(2)))).toEqual(["circuit"]);
 });
+
+test("a field that cannot be read keeps its text with its element, wherever the element goes", () => {
+  const before = [cable(1), cable(2), cable(3)];
+  const fault = { text: "abc", message: "not a length" };
+  const faults = { "elements.1.lengthM": fault, temperatureC: fault };
+  expect(faultsAfter(faults, before, insertAt(before, 0, [cable(9)]))).toEqual({
+    "elements.2.lengthM": fault,
+    temperatureC: fault,
+  });
+  expect(faultsAfter(faults, before, removeAt(before, 1))).toEqual({ temperatureC: fault });
+  expect(faultsAfter(faults, before, move(before, 1, 0))).toEqual({ "elements.0.lengthM": fault, temperatureC: fault });
+  expect(faultsAfter(faults, before, [cable(1.5), ...before.slice(1)])).toBe(faults);
+});

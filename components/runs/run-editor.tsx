@@ -1,0 +1,104 @@
+"use client";
+
+import { createContext, useContext, useState, type ReactNode } from "react";
+import type { CableLine } from "@/lib/cables/line";
+import { draftOf, edited, faultsAfter, history, redone, undone, type Faults, type RunDraft } from "@/lib/runs/edit";
+import type { Run } from "@/lib/runs/schema";
+import { useSaving, type Saving } from "@/components/runs/use-saving";
+
+/** What is selected on the strip: an element by its place, or an end. */
+export type Selected = number | "source" | "load" | null;
+
+export interface RunEditor {
+  /** as last saved, with number, state, owner, version */
+  saved: Run;
+  draft: RunDraft;
+  canEdit: boolean;
+  /** why not, in a sentence */
+  cannotEditBecause: string | null;
+  /** @param tag - edits with the same tag in a row are one undo step */
+  edit: (next: RunDraft, tag?: string | null) => void;
+  undo: (() => void) | null;
+  redo: (() => void) | null;
+  selected: Selected;
+  select: (selected: Selected) => void;
+  /** fields that hold something which cannot be read, by path, with the sentence beside them */
+  faults: Faults;
+  setFault: (path: string, fault: Faults[string] | null) => void;
+  lines: ReadonlyMap<string, CableLine>;
+  addLine: (line: CableLine) => void;
+  saving: Saving;
+  retry: () => void;
+  settle: (keep: "mine" | "theirs") => void;
+}
+
+const Context = createContext<RunEditor | null>(null);
+
+export function useRunEditor(): RunEditor {
+  const editor = useContext(Context);
+  if (!editor) throw new Error("useRunEditor: not inside a RunEditorProvider");
+  return editor;
+}
+
+interface Props {
+  run: Run;
+  lines: CableLine[];
+  /** why this person may not change this run, null when they may */
+  cannotEditBecause: string | null;
+  children: ReactNode;
+}
+
+/** One run being worked on. It outlives the views, so a change not yet saved survives going from one to the next. */
+export function RunEditorProvider({ run, lines: given, cannotEditBecause, children }: Props) {
+  const canEdit = cannotEditBecause === null;
+  const [steps, setSteps] = useState(() => history(draftOf(run)));
+  const [selected, select] = useState<Selected>(null);
+  const [faults, setFaults] = useState<Faults>({});
+  const [lines, setLines] = useState(() => new Map(given.map((line) => [line.cableId, line])));
+  const draft = steps.present;
+  const isReadable = Object.keys(faults).length === 0;
+  const { saved, saving, retry, settle } = useSaving(run, draft, canEdit && isReadable, (theirs) =>
+    setSteps((before) => edited(before, draftOf(theirs), null)),
+  );
+
+  const setFault = (path: string, fault: Faults[string] | null) =>
+    setFaults((before) => {
+      if (fault === null && !(path in before)) return before;
+      const { [path]: _gone, ...rest } = before;
+      return fault === null ? rest : { ...rest, [path]: fault };
+    });
+  const edit = (next: RunDraft, tag: string | null = null) => {
+    if (!canEdit) return;
+    setFaults((before) => faultsAfter(before, draft.circuit.elements, next.circuit.elements));
+    setSteps((before) => edited(before, next, tag));
+  };
+  const go = (step: typeof undone) => () => {
+    setFaults({});
+    setSteps(step);
+  };
+
+  return (
+    <Context
+      value={{
+        saved,
+        draft,
+        canEdit,
+        cannotEditBecause,
+        edit,
+        undo: steps.past.length > 0 ? go(undone) : null,
+        redo: steps.future.length > 0 ? go(redone) : null,
+        selected,
+        select,
+        faults,
+        setFault,
+        lines,
+        addLine: (line) => setLines((before) => new Map(before).set(line.cableId, line)),
+        saving,
+        retry,
+        settle,
+      }}
+    >
+      {children}
+    </Context>
+  );
+}
