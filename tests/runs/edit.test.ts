@@ -3,6 +3,7 @@ import { expect, test } from "vitest";
 import {
   changeBetween,
   edited,
+  faultsAfter,
   history,
   insertAt,
   move,
