@@ -1,0 +1,88 @@
+/** The catalogue: an entry, and the revisions in which its values live. */
+import { type AnySQLiteColumn, foreignKey, index, integer, primaryKey, real, sqliteTable, text, uniqueIndex } from "drizzle-orm/sqlite-core";
+import type { Build, Construction, Figure, Limits } from "@/lib/cables/schema";
+import type { LineModel } from "@/lib/line/element";
+import { people, teams } from "@/db/schema/team";
+
+export const cables = sqliteTable(
+  "cables",
+  {
+    id: text("id").primaryKey(),
+    teamId: text("team_id")
+      .notNull()
+      .references(() => teams.id, { onDelete: "cascade" }),
+    designation: text("designation").notNull(),
+    aliases: text("aliases", { mode: "json" }).$type<string[]>().notNull(),
+    preferred: integer("preferred", { mode: "boolean" }).notNull().default(false),
+    /** the revision people see: the approved one, or the newest while none has been approved */
+    currentRevision: integer("current_revision").notNull(),
+    successorId: text("successor_id").references((): AnySQLiteColumn => cables.id),
+    equivalence: text("equivalence", { enum: ["dropIn", "electricallyEqual", "needsRedesign"] }),
+    createdAt: text("created_at").notNull(),
+  },
+  (table) => [uniqueIndex("cables_designation").on(table.teamId, table.designation)],
+);
+
+/**
+ * One state of an entry's values. Once a revision has been approved its values never change (a trigger refuses it); only
+ * its state and condition do.
+ */
+export const cableRevisions = sqliteTable(
+  "cable_revisions",
+  {
+    cableId: text("cable_id")
+      .notNull()
+      .references(() => cables.id, { onDelete: "cascade" }),
+    /** from 1 */
+    revision: integer("revision").notNull(),
+    state: text("state", {
+      enum: ["draft", "inReview", "approved", "restricted", "quarantined", "superseded", "withdrawn"],
+    }).notNull(),
+    /** use condition of a restricted revision */
+    condition: text("condition"),
+    /** why there is this revision */
+    reason: text("reason").notNull(),
+    authorId: text("author_id")
+      .notNull()
+      .references(() => people.id),
+    createdAt: text("created_at").notNull(),
+    approvedById: text("approved_by_id").references(() => people.id),
+    approvedAt: text("approved_at"),
+
+    name: text("name").notNull(),
+    family: text("family", { enum: ["coaxial", "twistedPair", "twinaxial"] }).notNull(),
+    model: text("model", { mode: "json" }).$type<LineModel>().notNull(),
+    construction: text("construction", { mode: "json" }).$type<Construction>(),
+    build: text("build", { mode: "json" }).$type<Build>(),
+    figures: text("figures", { mode: "json" }).$type<Figure[]>().notNull(),
+    limits: text("limits", { mode: "json" }).$type<Limits>().notNull(),
+
+    /* Derived from the above by `derivedFigures`, kept so that search need not read every model. 20 °C. */
+    z0Ohm: real("z0_ohm").notNull(),
+    velocityFactor: real("velocity_factor").notNull(),
+    capacitanceFPerM: real("capacitance_f_per_m").notNull(),
+    delaySPerM: real("delay_s_per_m").notNull(),
+    /** at 10 MHz */
+    lossLowDbPer100m: real("loss_low_db_per_100m").notNull(),
+    /** at 1 GHz */
+    lossHighDbPer100m: real("loss_high_db_per_100m").notNull(),
+    outerDiameterMm: real("outer_diameter_mm"),
+    maxFrequencyHz: real("max_frequency_hz"),
+    /** lower-case words an entry is found by: designation, aliases, name, family, construction; blanks at both ends */
+    words: text("words").notNull(),
+  },
+  (table) => [
+    primaryKey({ columns: [table.cableId, table.revision] }),
+    index("cable_revisions_by_state").on(table.state, table.family),
+    index("cable_revisions_by_author").on(table.authorId),
+  ],
+);
+
+/** For tables that point at one revision of a cable. */
+export function revisionReference(table: { cableId: AnySQLiteColumn; revision: AnySQLiteColumn }, name: string) {
+  return foreignKey({
+    name,
+    columns: [table.cableId, table.revision],
+    foreignColumns: [cableRevisions.cableId, cableRevisions.revision],
+  });
+}

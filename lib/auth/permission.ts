@@ -1,0 +1,44 @@
+/** Who may do what: the one table. Whether a particular record is theirs to see is the services' business. */
+import { AppError } from "@/lib/http/errors";
+import type { Actor, Role } from "@/lib/auth/actor";
+
+const everyone: readonly Role[] = ["designer", "librarian", "admin", "installer", "auditor"];
+
+export const permissions = {
+  /** approved entries of the catalogue; of installers only the cables in their runs */
+  "cables.read": everyone,
+  /** the whole catalogue rather than the cables in one's own runs */
+  "cables.readCatalogue": ["designer", "librarian", "admin", "auditor"],
+  /** drafts and reviews of others */
+  "cables.readUnapproved": ["librarian", "admin", "auditor"],
+  /** runs; of installers only issued ones assigned to them */
+  "runs.read": everyone,
+  /** every run of the team */
+  "runs.readAll": ["designer", "librarian", "admin", "auditor"],
+  /** create, change and remove any run of the team */
+  "runs.write": ["designer", "librarian", "admin"],
+  /** computing, which stores nothing */
+  "compute.use": everyone,
+  /** one's own sign-in and password */
+  "account.own": everyone,
+} as const satisfies Record<string, readonly Role[]>;
+
+export type Permission = keyof typeof permissions;
+
+/** Whether the actor's role has the permission. */
+export function may(actor: Actor, permission: Permission): boolean {
+  return (permissions[permission] as readonly Role[]).includes(actor.role);
+}
+
+const named: Record<Role, string> = {
+  designer: "A designer",
+  librarian: "A librarian",
+  admin: "An admin",
+  installer: "An installer",
+  auditor: "An auditor",
+};
+
+/** @throws AppError `forbidden` when the actor's role lacks the permission */
+export function requirePermission(actor: Actor, permission: Permission): void {
+  if (!may(actor, permission)) throw new AppError("forbidden", `${named[actor.role]} may not do this.`);
+}

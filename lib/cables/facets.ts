@@ -1,0 +1,64 @@
+/** How many entries each value of a filter has under all the other filters. Pure. */
+import type { Candidate, FilterName } from "@/lib/cables/filter";
+import type { Facets } from "@/lib/cables/query";
+
+const mostBins = 12;
+
+/** The smallest of 1, 2 and 5 times a power of ten that covers a span in at most `mostBins` steps. */
+function binWidth(span: number): number {
+  const rough = span / (mostBins - 1);
+  const power = 10 ** Math.floor(Math.log10(rough));
+  return power * ([1, 2, 5, 10].find((step) => step * power >= rough) ?? 10);
+}
+
+/**
+ * Counts values in bins of equal, round width. The bins cover `range`, not only what is counted, so that they stay where
+ * they are while other filters move.
+ * @param range - every value there is; the lowest and the highest give the ends
+ * @param counted - the values to count
+ */
+export function histogram(range: number[], counted: number[]): { from: number; to: number; count: number }[] {
+  if (range.length === 0) return [];
+  const low = range.reduce((a, b) => Math.min(a, b));
+  const high = range.reduce((a, b) => Math.max(a, b));
+  const width = binWidth(high - low || Math.abs(low) || 1);
+  const first = Math.floor(low / width);
+  const bins = Array.from({ length: Math.floor(high / width) - first + 1 }, (_, i) => ({
+    // Through a whole number, so that an edge is 0.7 and not 0.7000000000000001.
+    from: Number(((first + i) * width).toPrecision(12)),
+    to: Number(((first + i + 1) * width).toPrecision(12)),
+    count: 0,
+  }));
+  for (const value of counted) {
+    const bin = bins[Math.floor(value / width) - first];
+    if (bin) bin.count += 1;
+  }
+  return bins;
+}
+
+function tally<T extends string>(values: T[]): { value: T; count: number }[] {
+  const counts = new Map<T, number>();
+  for (const value of values) counts.set(value, (counts.get(value) ?? 0) + 1);
+  return [...counts].map(([value, count]) => ({ value, count })).sort((a, b) => (a.value < b.value ? -1 : 1));
+}
+
+const present = (values: (number | null)[]) => values.filter((value) => value !== null);
+
+/** @param entries - all that the search found and the person may see, before any filter */
+export function facetsOf(entries: Candidate[], filters: Record<FilterName, (entry: Candidate) => boolean>): Facets {
+  const names = Object.keys(filters) as FilterName[];
+  const under = (left: FilterName) => {
+    const kept = names.filter((name) => name !== left).map((name) => filters[name]);
+    return entries.filter((entry) => kept.every((passes) => passes(entry)));
+  };
+  const numeric = (name: "z0Ohm" | "velocityFactor" | "lossDbPer100m" | "outerDiameterMm") =>
+    histogram(present(entries.map((entry) => entry[name])), present(under(name).map((entry) => entry[name])));
+  return {
+    z0Ohm: numeric("z0Ohm"),
+    velocityFactor: numeric("velocityFactor"),
+    lossDbPer100m: numeric("lossDbPer100m"),
+    outerDiameterMm: numeric("outerDiameterMm"),
+    family: tally(under("family").map((entry) => entry.family)),
+    state: tally(under("state").map((entry) => entry.state)),
+  };
+}

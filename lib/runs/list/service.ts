@@ -1,0 +1,65 @@
+/** The list of runs, a page at a time. */
+import { and, count, desc, eq, inArray, lt, or, sql, type SQL } from "drizzle-orm";
+import { database } from "@/db/client";
+import { cables } from "@/db/schema/cables";
+import { runs } from "@/db/schema/runs";
+import { people } from "@/db/schema/team";
+import type { Actor } from "@/lib/auth/actor";
+import { requirePermission } from "@/lib/auth/permission";
+import { type Cursor, defaultLimit, encodeCursor } from "@/lib/http/list";
+import { visible } from "@/lib/runs/access/service";
+import { cableIdsOf, totalLength } from "@/lib/runs/circuit";
+import type { RunPage, RunQuery } from "@/lib/runs/query";
+import type { RunItem } from "@/lib/runs/schema";
+
+function found(text: string | undefined): SQL | undefined {
+  if (!text) return undefined;
+  const pattern = `%${text.toLowerCase().replaceAll(/[\\%_]/g, (character) => `\\${character}`)}%`;
+  const columns = [runs.number, runs.name, runs.site, runs.folder];
+  return or(...columns.map((column) => sql`lower(${column}) like ${pattern} escape '\\'`));
+}
+
+// Times are ISO 8601 in one zone, so their order is that of the text.
+function after(cursor: Cursor | undefined): SQL | undefined {
+  if (!cursor) return undefined;
+  const changedAt = String(cursor.key);
+  return or(lt(runs.changedAt, changedAt), and(eq(runs.changedAt, changedAt), lt(runs.id, cursor.id)));
+}
+
+function designations(ids: string[]): Map<string, string> {
+  const rows = database().select({ id: cables.id, designation: cables.designation }).from(cables).where(inArray(cables.id, ids)).all();
+  return new Map(rows.map((row) => [row.id, row.designation]));
+}
+
+function toItem(row: typeof runs.$inferSelect, ownerName: string, names: Map<string, string>): RunItem {
+  const { id, number, name, site, folder, state, condition, ownerId, version, changedAt, designHz, bandHz, circuit } = row;
+  return {
+    ...{ id, number, name, site, folder, state, condition, ownerId, ownerName, version, changedAt, designHz, bandHz },
+    totalLengthM: totalLength(circuit),
+    cables: cableIdsOf(circuit).flatMap((cableId) => names.get(cableId) ?? []),
+  };
+}
+
+/** The runs the actor may see, the latest changed first. */
+export function listRuns(actor: Actor, query: RunQuery = {}): RunPage {
+  requirePermission(actor, "runs.read");
+  const db = database();
+  const matching = and(visible(actor), found(query.q), query.state ? inArray(runs.state, query.state) : undefined);
+  const limit = query.limit ?? defaultLimit;
+  const rows = db
+    .select({ run: runs, ownerName: people.name })
+    .from(runs)
+    .innerJoin(people, eq(people.id, runs.ownerId))
+    .where(and(matching, after(query.cursor)))
+    .orderBy(desc(runs.changedAt), desc(runs.id))
+    .limit(limit + 1)
+    .all();
+  const page = rows.slice(0, limit);
+  const names = designations(page.flatMap(({ run }) => cableIdsOf(run.circuit)));
+  const last = page.at(-1)?.run;
+  return {
+    items: page.map(({ run, ownerName }) => toItem(run, ownerName, names)),
+    nextCursor: last && rows.length > limit ? encodeCursor({ key: last.changedAt, id: last.id }) : null,
+    total: db.select({ total: count() }).from(runs).where(matching).get()?.total ?? 0,
+  };
+}
