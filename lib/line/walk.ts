@@ -83,7 +83,7 @@ export function sourceImpedance({ source }: Walk): Complex {
  * rounding from making it so
  * @param reference - ohm, to tell power from the rounding of a wave reflected whole
  */
-export function powerThrough({ v, i }: Port, behind: number, reference: number): number {
+export function powerThrough({ v, i }: { v: Complex; i: Complex }, behind: number, reference: number): number {
   const power = v.re * i.re + v.im * i.im;
   if (behind > 0) return Math.max(power, behind);
   const waves = (v.re * v.re + v.im * v.im) / reference + (i.re * i.re + i.im * i.im) * reference;
