@@ -57,16 +57,15 @@ function shuntAdmittance(model: LineModel, s: Complex): Analytic {
 }
 
 /**
- * Propagation constant and characteristic impedance: γ = √Z·√Y, Zc = √Z/√Y with principal roots, so both have real
- * parts of at least 0 wherever Re s is.
+ * Propagation constant and characteristic impedance: γ = √(ZY), Zc = Z/γ. The principal root has a real part of at
+ * least 0 and is √Z·√Y wherever Re s is at least 0; taken of the product, a lossless line has no loss at all.
  * @param model - as it is, no temperature applied
  * @param s - complex frequency, rad/s; real part at least 0
  */
 export function propagation(model: LineModel, s: Complex): Propagation {
   const { z, y } = perMetre(model, s);
-  const rootZ = root(z);
-  const rootY = root(y);
-  return { z, y, gamma: product(rootZ, rootY), zc: divide(rootZ, rootY) };
+  const gamma = root(product(z, y));
+  return { z, y, gamma, zc: divide(z, gamma) };
 }
 
 export interface NominalFigures {
