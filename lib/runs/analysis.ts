@@ -1,0 +1,222 @@
+/**
+ * A run -> everything the Line view shows. Pure, the same in the browser and on the server; every figure comes from
+ * `lib/line`. Values without a finite number are left as the engine gives them; `lib/format` shows them as a dash.
+ */
+import { DB_PER_NEPER } from "@/lib/line/constants";
+import { prepareElements } from "@/lib/line/element-two-port";
+import type { Circuit, Element, Plane } from "@/lib/line/element";
+import { lineFigures } from "@/lib/line/line-figures";
+import { sweep, type Sweep } from "@/lib/line/run";
+import { standingWave, type StandingWave } from "@/lib/line/standing-wave";
+
+export interface Conditions {
+  designHz: number;
+  bandHz: readonly [number, number] | null;
+  availablePowerW: number | null;
+  temperatureC: number;
+}
+
+/** The worst value in the band and where it is. */
+export interface Worst {
+  frequencyHz: number;
+  value: number;
+}
+
+export interface Spot {
+  inputImpedance: { re: number; im: number };
+  sourceReturnLossDb: number;
+  sourceVswr: number;
+  loadReturnLossDb: number;
+  loadVswr: number;
+  transducerLossDb: number;
+  matchedLossDb: number;
+  mismatchLossDb: number;
+  extraLossDb: number;
+  groupDelayS: number;
+}
+
+/** One line of "where the power goes". */
+export interface PieceFigures {
+  element: number;
+  lengthM: number | null;
+  delayS: number | null;
+  electricalLength: number | null;
+  matchedLossDb: number;
+  /** impedance at its source side, looking toward the load */
+  impedance: { re: number; im: number };
+  /** what it really loses here, power in over power out */
+  lossDb: number;
+}
+
+export interface Analysis {
+  sweep: Sweep;
+  sourceReturnLossDb: Float64Array;
+  loadReturnLossDb: Float64Array;
+  spot: Spot;
+  pieces: PieceFigures[];
+  worst: { sourceReturnLoss: Worst; loadReturnLoss: Worst; loss: Worst; sourceVswr: Worst; loadVswr: Worst };
+  /** what return loss the source end reads with the load missing and with it shorted, worst case for finding out */
+  masking: { openDb: Worst; shortDb: Worst };
+  wave: StandingWave | null;
+}
+
+const loadPlane: Plane = { at: "load" };
+
+/** Frequencies shown: the band and as much again on both sides, with the band's ends among the points. */
+export function shownFrequencies({ designHz, bandHz }: Conditions, points = 1001): Float64Array {
+  const [from, to] = bandHz && bandHz[1] > bandHz[0] ? bandHz : [designHz * 0.98, designHz * 1.02];
+  const third = Math.floor((points - 1) / 3);
+  const step = (to - from) / third;
+  const below = Math.min(third, Math.ceil(from / step) - 1);
+  return Float64Array.from({ length: points }, (_, i) => from + (i - below) * step);
+}
+
+function spotOf(circuit: Circuit, { designHz, temperatureC }: Conditions): { spot: Spot; at: Sweep } {
+  const planes: Plane[] = [loadPlane, ...circuit.elements.map((_, beforeElement) => ({ beforeElement }))];
+  const at = sweep(circuit, [designHz], { temperatureC, planes });
+  const load = at.atPlanes[0]!;
+  const spot: Spot = {
+    inputImpedance: { re: at.inputImpedance.re[0]!, im: at.inputImpedance.im[0]! },
+    sourceReturnLossDb: at.returnLossDb[0]!,
+    sourceVswr: at.vswr[0]!,
+    loadReturnLossDb: load.returnLossDb[0]!,
+    loadVswr: load.vswr[0]!,
+    transducerLossDb: at.transducerLossDb[0]!,
+    matchedLossDb: at.matchedLossDb[0]!,
+    mismatchLossDb: at.mismatchLossDb[0]!,
+    extraLossDb: at.extraLossDb[0]!,
+    groupDelayS: at.groupDelayS[0]!,
+  };
+  return { spot, at };
+}
+
+function laidLine(element: Element) {
+  return element.kind === "cable" || element.kind === "stub" ? element : null;
+}
+
+function pieceFigures(circuit: Circuit, { designHz, temperatureC }: Conditions, at: Sweep): PieceFigures[] {
+  const s = { re: 0, im: 2 * Math.PI * designHz };
+  const twoPorts = prepareElements(circuit, temperatureC);
+  return circuit.elements.map((element, index) => {
+    const laid = laidLine(element);
+    const figures = laid && lineFigures(laid.line.model, [designHz], laid.temperatureC ?? temperatureC);
+    const plane = at.atPlanes[index + 1]!;
+    return {
+      element: index,
+      lengthM: laid ? laid.lengthM : null,
+      delayS: laid && figures ? laid.lengthM * figures.groupDelaySPerM[0]! : null,
+      electricalLength: laid && figures ? (laid.lengthM * figures.phaseRadPerM[0]!) / (2 * Math.PI) : null,
+      matchedLossDb: twoPorts[index]!(s).matchedLoss * DB_PER_NEPER,
+      impedance: { re: plane.impedance.re[0]!, im: plane.impedance.im[0]! },
+      lossDb: at.elementLossDb[index]![0]!,
+    };
+  });
+}
+
+/** The least of a curve inside the band, refined between the samples by golden section. */
+export function worstIn(
+  frequencies: Float64Array,
+  values: Float64Array,
+  band: readonly [number, number],
+  valueAt: (frequency: number) => number,
+): Worst {
+  let best = -1;
+  for (let k = 0; k < values.length; k++) {
+    const f = frequencies[k]!;
+    const isInside = f >= band[0] * (1 - 1e-12) && f <= band[1] * (1 + 1e-12);
+    if (isInside && !Number.isNaN(values[k]!) && (best < 0 || values[k]! < values[best]!)) best = k;
+  }
+  if (best < 0) return { frequencyHz: band[0], value: valueAt(band[0]) };
+  const sampled = { frequencyHz: frequencies[best]!, value: values[best]! };
+  const low = Math.max(band[0], frequencies[best - 1] ?? band[0]);
+  const high = Math.min(band[1], frequencies[best + 1] ?? band[1]);
+  const refined = goldenSection(valueAt, low, high);
+  return refined.value < sampled.value ? refined : sampled;
+}
+
+const golden = (Math.sqrt(5) - 1) / 2;
+
+function goldenSection(valueAt: (frequency: number) => number, low: number, high: number): Worst {
+  let [a, b] = [low, high];
+  for (let i = 0; i < 18 && b - a > 1e-9 * b; i++) {
+    const [c, d] = [b - golden * (b - a), a + golden * (b - a)];
+    if (valueAt(c) < valueAt(d)) b = d;
+    else a = c;
+  }
+  const frequencyHz = (a + b) / 2;
+  return { frequencyHz, value: valueAt(frequencyHz) };
+}
+
+type Curve = (at: Sweep) => Float64Array;
+
+function worstValues(circuit: Circuit, conditions: Conditions, shown: Sweep): Analysis["worst"] {
+  const { designHz, temperatureC } = conditions;
+  const band = conditions.bandHz ?? [designHz, designHz];
+  const least = (curve: Curve, sign: 1 | -1): Worst => {
+    const valueAt = (f: number) => sign * curve(sweep(circuit, [f], { temperatureC, planes: [loadPlane] }))[0]!;
+    const found = worstIn(
+      shown.frequencies,
+      curve(shown).map((v) => sign * v),
+      band,
+      valueAt,
+    );
+    return { ...found, value: sign * found.value };
+  };
+  return {
+    sourceReturnLoss: least((at) => at.returnLossDb, 1),
+    loadReturnLoss: least((at) => at.atPlanes[0]!.returnLossDb, 1),
+    loss: least((at) => at.transducerLossDb, -1),
+    sourceVswr: least((at) => at.vswr, -1),
+    loadVswr: least((at) => at.atPlanes[0]!.vswr, -1),
+  };
+}
+
+/** Return loss at the source with the load gone: the greatest in the band, which is what a limit must stay above. */
+function maskingOf(circuit: Circuit, conditions: Conditions): Analysis["masking"] {
+  const { designHz, temperatureC } = conditions;
+  const [from, to] = conditions.bandHz ?? [designHz, designHz];
+  const frequencies = from === to ? [from] : Array.from({ length: 101 }, (_, i) => from + ((to - from) * i) / 100);
+  const greatest = (kind: "open" | "short"): Worst => {
+    const at = sweep({ ...circuit, load: { kind } }, frequencies, { temperatureC });
+    let best = 0;
+    at.returnLossDb.forEach((value, k) => value > at.returnLossDb[best]! && (best = k));
+    return { frequencyHz: frequencies[best]!, value: at.returnLossDb[best]! };
+  };
+  return { openDb: greatest("open"), shortDb: greatest("short") };
+}
+
+/** A source without resistance has no available power, so no wave can be drawn for it. */
+function waveOf(
+  circuit: Circuit,
+  designHz: number,
+  powerW: number,
+  temperatureC: number,
+  pieces: PieceFigures[],
+): StandingWave | null {
+  const longest = Math.max(0, ...pieces.map(({ electricalLength }) => electricalLength ?? 0));
+  const pointsPerElement = Math.min(4001, Math.max(101, Math.ceil(longest * 2 * 16) + 1));
+  const { source } = circuit;
+  const hasPower = source.kind === "constant" ? source.reOhm > 0 : source.kind === "network" && (source.rOhm ?? 0) > 0;
+  return hasPower ? standingWave(circuit, designHz, powerW, { temperatureC, pointsPerElement }) : null;
+}
+
+/**
+ * Analyses a run.
+ * @throws RangeError when the circuit is electrically impossible (a source without resistance and no reference …)
+ */
+export function analyseRun(circuit: Circuit, conditions: Conditions, points = 1001): Analysis {
+  const { designHz, availablePowerW, temperatureC } = conditions;
+  const shown = sweep(circuit, shownFrequencies(conditions, points), { temperatureC, planes: [loadPlane] });
+  const { spot, at } = spotOf(circuit, conditions);
+  const pieces = pieceFigures(circuit, conditions, at);
+  return {
+    sweep: shown,
+    sourceReturnLossDb: shown.returnLossDb,
+    loadReturnLossDb: shown.atPlanes[0]!.returnLossDb,
+    spot,
+    pieces,
+    worst: worstValues(circuit, conditions, shown),
+    masking: maskingOf(circuit, conditions),
+    wave: availablePowerW === null ? null : waveOf(circuit, designHz, availablePowerW, temperatureC, pieces),
+  };
+}
