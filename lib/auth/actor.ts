@@ -4,6 +4,7 @@ import type { Route } from "next";
 import { cache } from "react";
 import { headers } from "next/headers";
 import { redirect } from "next/navigation";
+import { bearerToken } from "@/lib/auth/bearer";
 import { sentCookie, unsealedKey } from "@/lib/auth/cookie";
 import { findSessionActor, findTokenActor } from "@/lib/auth/service";
 import { AppError } from "@/lib/http/errors";
@@ -22,19 +23,9 @@ export interface Actor {
   sessionId?: string;
 }
 
-const bearer = /^bearer +(\S+) *$/i;
-
-/** Whether the request proves who asks by a token rather than by the cookie. */
-export function hasToken(request: Request): boolean {
-  return request.headers.has("authorization");
-}
-
 async function findActor(sent: Headers): Promise<Actor | undefined> {
-  const authorization = sent.get("authorization");
-  if (authorization !== null) {
-    const token = bearer.exec(authorization)?.[1];
-    return token === undefined ? undefined : findTokenActor(token);
-  }
+  const token = bearerToken(sent);
+  if (token !== undefined) return findTokenActor(token);
   const sealed = sentCookie(sent);
   const key = sealed === undefined ? undefined : await unsealedKey(sealed);
   return key === undefined ? undefined : findSessionActor(key);

@@ -29,7 +29,8 @@ const range = (what: string) =>
       context.addIssue({ code: "custom", message });
       return z.NEVER;
     })
-    .optional();
+    .optional()
+    .describe("a range: 45..55, 45.. or ..55");
 
 const frequency = (what: string) =>
   z
@@ -54,7 +55,7 @@ export const cableQuerySchema = z
     z0Ohm: range("The impedance"),
     velocityFactor: range("The velocity factor"),
     outerDiameterMm: range("The outer diameter"),
-    lossDbPer100m: range("The loss").describe("at lossAtHz"),
+    lossDbPer100m: range("The loss").describe("a range: 2..6, 2.. or ..6, at lossAtHz"),
     lossAtHz: frequency("The frequency of the loss"),
     maxFrequencyHz: frequency("The highest frequency").describe("entries rated at least this high"),
     state: several(stateSchema).describe("repeatable; default approved, which includes restricted ones, marked"),

@@ -1,3 +1,5 @@
+import { z } from "zod";
+
 /** What can be refused, with its HTTP status: the only place where the two meet. */
 export const statusOf = {
   malformed: 400,
@@ -50,7 +52,8 @@ export class AppError extends Error {
   }
 }
 
-const titles: Record<ErrorCode, string> = {
+/** What a status is called (RFC 9110, RFC 6585). */
+export const titleOf: Record<ErrorCode, string> = {
   malformed: "Bad Request",
   unauthenticated: "Unauthorized",
   forbidden: "Forbidden",
@@ -66,13 +69,27 @@ const titles: Record<ErrorCode, string> = {
   internal: "Internal Server Error",
 };
 
+export const problemSchema = z
+  .object({
+    type: z.string(),
+    title: z.string(),
+    status: z.int(),
+    code: z.enum(Object.keys(statusOf) as [ErrorCode, ...ErrorCode[]]),
+    detail: z.string().describe("a sentence for people"),
+    errors: z
+      .array(z.object({ path: z.string().describe("dotted; empty for the whole body"), message: z.string() }))
+      .optional()
+      .describe("all that is wrong with a body, at once"),
+  })
+  .meta({ id: "Problem", description: "RFC 9457. A stale change also carries the resource as it now stands, under `current`." });
+
 /** The problem document (RFC 9457) of a refusal. */
 export function problem(error: AppError): Response {
   const errors = Object.entries(error.fields).flatMap(([path, messages]) => messages.map((message) => ({ path, message })));
   const body = {
     ...error.extra.members,
     type: "about:blank",
-    title: titles[error.code],
+    title: titleOf[error.code],
     status: error.status,
     code: error.code,
     detail: error.message,

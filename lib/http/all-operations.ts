@@ -1,0 +1,8 @@
+/** Every operation of the API, in the order of the description. */
+import * as account from "@/lib/auth/operations";
+import * as cables from "@/lib/cables/operations";
+import * as service from "@/lib/http/operations";
+import type { Operation } from "@/lib/http/operation";
+import * as runs from "@/lib/runs/operations";
+
+export const operations: Operation[] = [account, cables, runs, service].flatMap((noun) => Object.values<Operation>(noun));

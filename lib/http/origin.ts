@@ -1,0 +1,43 @@
+/** Where a request comes from: the page behind it, and the network address. */
+import { bearerToken } from "@/lib/auth/bearer";
+import { AppError } from "@/lib/http/errors";
+
+function ownOrigins(request: Request): string[] {
+  const { host: urlHost } = new URL(request.url);
+  const host = request.headers.get("host") ?? urlHost;
+  const publicUrl = process.env.PUBLIC_URL;
+  return [`http://${host}`, `https://${host}`, ...(publicUrl && URL.canParse(publicUrl) ? [new URL(publicUrl).origin] : [])];
+}
+
+/** Whether the request was made by one of our own pages: Sec-Fetch-Site says so, else Origin; undefined when neither is sent. */
+function isFromOwnPage(request: Request): boolean | undefined {
+  const site = request.headers.get("sec-fetch-site");
+  if (site !== null) return site === "same-origin";
+  const origin = request.headers.get("origin");
+  return origin === null ? undefined : ownOrigins(request).includes(origin);
+}
+
+const changing = (request: Request) => request.method !== "GET" && request.method !== "HEAD";
+
+/**
+ * Refuses a change that the browser's cookie would let through on behalf of another site's page. Requests with a token
+ * need no such check: no page can make a browser send one.
+ * @throws AppError `forbidden` unless the request says that it comes from the same origin
+ */
+export function refuseCrossSite(request: Request): void {
+  if (changing(request) && bearerToken(request.headers) === undefined && isFromOwnPage(request) !== true)
+    throw new AppError("forbidden", "A change made with the sign-in cookie must come from this site.");
+}
+
+/**
+ * For signing in, which needs no cookie: a script, which sends neither header, may; another site's page may not.
+ * @throws AppError `forbidden`
+ */
+export function refuseOtherPage(request: Request): void {
+  if (isFromOwnPage(request) === false) throw new AppError("forbidden", "Sign in from this site.");
+}
+
+/** The network address a request came from: what the nearest proxy, or the server itself, says it is. */
+export function networkAddress(request: Request): string {
+  return request.headers.get("x-forwarded-for")?.split(",").at(-1)?.trim() || "unknown";
+}
