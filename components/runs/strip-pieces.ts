@@ -113,14 +113,8 @@ function drawing(element: Element, lines: Lines, figures: PieceFigures | undefin
   }
 }
 
-function sentence(
-  name: string,
-  element: Element,
-  index: number,
-  count: number,
-  figures: PieceFigures | undefined,
-): string {
-  const parts = [`${index + 1} of ${count}`, name];
+function sentence(name: string, element: Element, figures: PieceFigures | undefined): string {
+  const parts = [name];
   if ("lengthM" in element) parts.push(spoken(metres(element.lengthM)));
   if (figures?.delayS != null) parts.push(spoken(nanoseconds(figures.delayS)));
   if (figures) parts.push(spoken(decibels(figures.matchedLossDb)));

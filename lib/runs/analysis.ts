@@ -55,8 +55,8 @@ export interface Analysis {
   spot: Spot;
   pieces: PieceFigures[];
   worst: { sourceReturnLoss: Worst; loadReturnLoss: Worst; loss: Worst; sourceVswr: Worst; loadVswr: Worst };
-  /** what return loss the source end reads with the load missing and with it shorted, worst case for finding out */
-  masking: { openDb: Worst; shortDb: Worst };
+  /** the least return loss a sweep of the band reads at the source with the load missing, and with it shorted */
+  masking: { openDb: number; shortDb: number };
   wave: StandingWave | null;
 }
 
@@ -171,18 +171,15 @@ function worstValues(circuit: Circuit, conditions: Conditions, shown: Sweep): An
   };
 }
 
-/** Return loss at the source with the load gone: the greatest in the band, which is what a limit must stay above. */
+/** What a sweep of the band reads at the source with the load gone: the least return loss, which a limit is held against. */
 function maskingOf(circuit: Circuit, conditions: Conditions): Analysis["masking"] {
   const { designHz, temperatureC } = conditions;
   const [from, to] = conditions.bandHz ?? [designHz, designHz];
-  const frequencies = from === to ? [from] : Array.from({ length: 101 }, (_, i) => from + ((to - from) * i) / 100);
-  const greatest = (kind: "open" | "short"): Worst => {
-    const at = sweep({ ...circuit, load: { kind } }, frequencies, { temperatureC });
-    let best = 0;
-    at.returnLossDb.forEach((value, k) => value > at.returnLossDb[best]! && (best = k));
-    return { frequencyHz: frequencies[best]!, value: at.returnLossDb[best]! };
-  };
-  return { openDb: greatest("open"), shortDb: greatest("short") };
+  const count = from === to ? 1 : 51;
+  const frequencies = Float64Array.from({ length: count }, (_, i) => from + ((to - from) * i) / Math.max(1, count - 1));
+  const least = (kind: "open" | "short") =>
+    sweep({ ...circuit, load: { kind } }, frequencies, { temperatureC }).returnLossDb.reduce((a, b) => Math.min(a, b));
+  return { openDb: least("open"), shortDb: least("short") };
 }
 
 /** A source without resistance has no available power, so no wave can be drawn for it. */

@@ -45,7 +45,7 @@ export function verdicts(targets: readonly Target[], analysis: Analysis): Verdic
 /** Whether a return-loss limit at the source would notice that the load is missing or shorted. */
 export interface Masking {
   limitDb: number;
-  /** greatest reading with nothing there */
+  /** what the sweep reads with nothing there */
   openDb: number;
   shortDb: number;
   isBlind: boolean;
@@ -54,7 +54,6 @@ export interface Masking {
 export function masking(targets: readonly Target[], analysis: Analysis): Masking | null {
   const limit = targets.find((t) => t.quantity === "returnLoss" && !atLoad(t) && t.atLeast !== undefined)?.atLeast;
   if (limit === undefined) return null;
-  const openDb = analysis.masking.openDb.value;
-  const shortDb = analysis.masking.shortDb.value;
+  const { openDb, shortDb } = analysis.masking;
   return { limitDb: limit, openDb, shortDb, isBlind: Math.max(openDb, shortDb) >= limit };
 }
