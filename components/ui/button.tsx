@@ -1,6 +1,6 @@
 import type { Route } from "next";
 import Link from "next/link";
-import type { ComponentProps, ReactNode } from "react";
+import { useId, type ComponentProps, type ReactNode } from "react";
 
 export type ButtonKind = "main" | "plain" | "quiet";
 export type ButtonSize = "normal" | "small" | "touch";
@@ -43,17 +43,23 @@ export interface ButtonProps extends ComponentProps<"button">, Look {
 
 /** A button. `type` is "button" unless said otherwise. */
 export function Button({ kind, size, refused, className = "", type = "button", onClick, ...rest }: ButtonProps) {
+  const reason = useId();
   if (!refused)
     return <button {...rest} type={type} onClick={onClick} className={`${buttonClass(kind, size)} ${className}`} />;
   return (
-    <button
-      {...rest}
-      type="button"
-      aria-disabled="true"
-      title={refused}
-      aria-description={refused}
-      className={`${buttonClass(kind, size, true)} ${className}`}
-    />
+    <>
+      <button
+        {...rest}
+        type="button"
+        aria-disabled="true"
+        aria-describedby={reason}
+        title={refused}
+        className={`${buttonClass(kind, size, true)} ${className}`}
+      />
+      <span id={reason} hidden>
+        {refused}
+      </span>
+    </>
   );
 }
 

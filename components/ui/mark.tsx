@@ -26,12 +26,8 @@ export function Mark({ height = 20, isOneColour = false, ground = "var(--paper)"
       <path d={paths.first} stroke="var(--ink)" strokeWidth="3.6" strokeLinecap="round" />
       <path d={paths.second} stroke={ground} strokeWidth="7" />
       <path d={paths.second} stroke={copper} strokeWidth="3.6" strokeLinecap="round" />
-      {paths.firstRising.map((d) => (
-        <g key={d}>
-          <path d={d} stroke={ground} strokeWidth="7" />
-          <path d={d} stroke="var(--ink)" strokeWidth="3.6" />
-        </g>
-      ))}
+      <path d={paths.firstRising} stroke={ground} strokeWidth="7" />
+      <path d={paths.firstRising} stroke="var(--ink)" strokeWidth="3.6" />
     </svg>
   );
 }
