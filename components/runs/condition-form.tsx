@@ -1,0 +1,19 @@
+"use client";
+
+import { LeafForm } from "@/components/runs/leaf-form";
+import type { LeafField } from "@/lib/runs/leaf/field";
+
+interface Props<T> {
+  fields: LeafField<T>[];
+  edited: T;
+  write: (next: T, tag: string) => void;
+}
+
+/** Fields of the run itself, in a row beside what they govern. */
+export function ConditionForm<T>(props: Props<T>) {
+  return (
+    <div className="flex flex-wrap items-start gap-3">
+      <LeafForm {...props} path="conditions" />
+    </div>
+  );
+}

@@ -1,0 +1,99 @@
+"use client";
+
+import type { Route } from "next";
+import Link from "next/link";
+import { usePathname } from "next/navigation";
+import { useEffect, type ReactNode } from "react";
+import { useRunEditor } from "@/components/runs/run-editor";
+import { Conflict, SavingNote } from "@/components/runs/saving-note";
+import { Button, ButtonLink } from "@/components/ui/button";
+import { ViewTabs } from "@/components/ui/view-tabs";
+
+interface Props {
+  /** right of the title: the readings of the view */
+  head: ReactNode;
+  children: ReactNode;
+}
+
+/** Title, views and saving state of a run; the view itself inside. */
+export function RunFrame({ head, children }: Props) {
+  const { saved, draft, edit, undo, redo, canEdit } = useRunEditor();
+  const path = usePathname();
+  const base = `/runs/${saved.id}`;
+  const views = [
+    { href: base as Route, label: "Line" },
+    { href: `${base}/match` as Route, label: "Match" },
+  ];
+  useUndoKeys(undo, redo);
+  return (
+    <>
+      <div className="flex min-h-14.5 items-start gap-8 folded:flex-col folded:gap-2">
+        <div className="w-128 min-w-0 folded:w-full">
+          <p className="truncate text-label text-ink-3">
+            <Link href="/runs" className="hover:text-copper">
+              Runs
+            </Link>{" "}
+            / {[saved.number, draft.site, draft.folder].filter(Boolean).join(" / ")}
+          </p>
+          {canEdit ? (
+            <input
+              aria-label="Name of the run"
+              value={draft.name}
+              maxLength={120}
+              onChange={(event) =>
+                event.target.value.trim() !== "" && edit({ ...draft, name: event.target.value }, "name")
+              }
+              className="flared -mx-1 w-full truncate border-b border-transparent bg-transparent px-1 text-title tracking-[-0.012em] text-ink hover:border-rule phone:text-figure"
+            />
+          ) : (
+            <h1 className="truncate">{draft.name}</h1>
+          )}
+        </div>
+        {head}
+      </div>
+      <div className="mt-3">
+        <ViewTabs
+          items={views}
+          current={path}
+          name="Views of this run"
+          aside={
+            <>
+              <SavingNote />
+              {canEdit && (
+                <>
+                  <Button size="small" onClick={() => undo?.()} refused={!undo && "There is nothing to undo."}>
+                    Undo
+                  </Button>
+                  <Button size="small" onClick={() => redo?.()} refused={!redo && "There is nothing to redo."}>
+                    Redo
+                  </Button>
+                </>
+              )}
+              {path === base && (
+                <ButtonLink href={`${base}/match` as Route} kind="main" size="small">
+                  Compare matches
+                </ButtonLink>
+              )}
+            </>
+          }
+        />
+      </div>
+      <Conflict />
+      {children}
+    </>
+  );
+}
+
+function useUndoKeys(undo: (() => void) | null, redo: (() => void) | null) {
+  useEffect(() => {
+    const press = (event: KeyboardEvent) => {
+      if (!(event.ctrlKey || event.metaKey) || event.key.toLowerCase() !== "z") return;
+      const act = event.shiftKey ? redo : undo;
+      if (!act) return;
+      event.preventDefault();
+      act();
+    };
+    window.addEventListener("keydown", press);
+    return () => window.removeEventListener("keydown", press);
+  });
+}

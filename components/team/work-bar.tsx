@@ -1,0 +1,42 @@
+"use client";
+
+import type { Route } from "next";
+import { Bar } from "@/components/ui/bar";
+import { call } from "@/lib/http/call";
+import type { SignedIn } from "@/lib/team/schema";
+
+interface Props {
+  signedIn: SignedIn;
+  current: "/cables" | "/runs";
+  /** what a phone shows in place of the name */
+  title: string;
+  back?: Route;
+  hasOwnFoot?: boolean;
+}
+
+const places: { href: Route; label: string }[] = [
+  { href: "/cables", label: "Catalogue" },
+  { href: "/runs", label: "Runs" },
+];
+
+/** Ends the session and leaves nothing of the team's in the browser's memory: the door is loaded afresh. */
+async function signOut() {
+  await call("/session", { method: "DELETE" });
+  window.location.assign("/sign-in");
+}
+
+export function WorkBar({ signedIn, current, title, back, hasOwnFoot }: Props) {
+  return (
+    <Bar
+      places={places}
+      current={current}
+      home="/runs"
+      teamName={signedIn.team.name}
+      member={{ name: signedIn.person.name, email: signedIn.person.email, role: signedIn.role }}
+      signOut={signOut}
+      title={title}
+      back={back}
+      hasOwnFoot={hasOwnFoot}
+    />
+  );
+}
