@@ -153,6 +153,7 @@ CREATE TABLE `teams` (
 	`id` text PRIMARY KEY NOT NULL,
 	`name` text NOT NULL,
 	`next_run_number` integer DEFAULT 1 NOT NULL,
+	`words_version` integer DEFAULT 0 NOT NULL,
 	`created_at` text NOT NULL
 );
 --> statement-breakpoint

@@ -1,5 +1,5 @@
 -- A revision that has been approved keeps its values for good. A migration that rebuilds cable_revisions drops this
--- trigger with the old table and must make it anew; tests/db/approved-values.test.ts notices when it does not.
+-- trigger with the old table and must make it anew; a test notices when it does not.
 CREATE TRIGGER `cable_revisions_approved_values_stay`
 BEFORE UPDATE OF `cable_id`, `revision`, `name`, `family`, `model`, `construction`, `build`, `figures`, `limits`, `author_id` ON `cable_revisions`
 WHEN OLD.`approved_at` IS NOT NULL

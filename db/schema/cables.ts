@@ -1,5 +1,15 @@
 /** The catalogue: an entry, and the revisions in which its values live. */
-import { type AnySQLiteColumn, foreignKey, index, integer, primaryKey, real, sqliteTable, text, uniqueIndex } from "drizzle-orm/sqlite-core";
+import {
+  type AnySQLiteColumn,
+  foreignKey,
+  index,
+  integer,
+  primaryKey,
+  real,
+  sqliteTable,
+  text,
+  uniqueIndex,
+} from "drizzle-orm/sqlite-core";
 import type { Build, Construction, Figure, Limits } from "@/lib/cables/schema";
 import type { LineModel } from "@/lib/line/element";
 import { people, teams } from "@/db/schema/team";
@@ -68,7 +78,7 @@ export const cableRevisions = sqliteTable(
     lossHighDbPer100m: real("loss_high_db_per_100m").notNull(),
     outerDiameterMm: real("outer_diameter_mm"),
     maxFrequencyHz: real("max_frequency_hz"),
-    /** lower-case words an entry is found by: designation, aliases, name, family, construction; blanks at both ends */
+    /** the words an entry is found by, from `cableWords`; triggers copy them into the full-text table `cable_search` */
     words: text("words").notNull(),
   },
   (table) => [

@@ -91,5 +91,8 @@ export const runAssignees = sqliteTable(
       .notNull()
       .references(() => people.id, { onDelete: "cascade" }),
   },
-  (table) => [primaryKey({ columns: [table.runId, table.personId] }), index("run_assignees_by_person").on(table.personId)],
+  (table) => [
+    primaryKey({ columns: [table.runId, table.personId] }),
+    index("run_assignees_by_person").on(table.personId),
+  ],
 );

@@ -6,6 +6,8 @@ export const teams = sqliteTable("teams", {
   name: text("name").notNull(),
   /** what the next run is numbered; only ever grows, so that a sheet's number is never given twice */
   nextRunNumber: integer("next_run_number").notNull().default(1),
+  /** one more whenever a word of the team's catalogue changes (kept by triggers): tells a stale vocabulary */
+  wordsVersion: integer("words_version").notNull().default(0),
   /** ISO 8601 */
   createdAt: text("created_at").notNull(),
 });

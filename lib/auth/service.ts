@@ -109,16 +109,25 @@ export function signOut(actor: Actor): void {
  */
 export async function changePassword(actor: Actor, input: PasswordChange, from: string): Promise<void> {
   const { sessionId } = actor;
-  if (sessionId === undefined) throw new AppError("forbidden", "A password is changed by its owner, signed in, not by a token.");
+  if (sessionId === undefined)
+    throw new AppError("forbidden", "A password is changed by its owner, signed in, not by a token.");
   const attempt = beginAttempt(from, actor.email);
   const db = database();
-  const person = db.select({ passwordHash: people.passwordHash }).from(people).where(eq(people.id, actor.personId)).get();
+  const person = db
+    .select({ passwordHash: people.passwordHash })
+    .from(people)
+    .where(eq(people.id, actor.personId))
+    .get();
   if (!(await isPassword(input.current, person?.passwordHash)))
-    throw new AppError("invalid_input", "The current password is not right.", { current: ["This is not the current password."] });
+    throw new AppError("invalid_input", "The current password is not right.", {
+      current: ["This is not the current password."],
+    });
   forgetAttempts(attempt);
   const passwordHash = await hashPassword(input.next);
   db.transaction((tx) => {
     tx.update(people).set({ passwordHash }).where(eq(people.id, actor.personId)).run();
-    tx.delete(sessions).where(and(eq(sessions.personId, actor.personId), ne(sessions.id, sessionId))).run();
+    tx.delete(sessions)
+      .where(and(eq(sessions.personId, actor.personId), ne(sessions.id, sessionId)))
+      .run();
   });
 }

@@ -25,7 +25,8 @@ function isWithin(value: number | null, range: Range | undefined): boolean {
   return value >= (range.from ?? -Infinity) && value <= (range.to ?? Infinity);
 }
 
-export type FilterName = "family" | "state" | "z0Ohm" | "velocityFactor" | "outerDiameterMm" | "lossDbPer100m" | "others";
+export type FilterName =
+  "family" | "state" | "z0Ohm" | "velocityFactor" | "outerDiameterMm" | "lossDbPer100m" | "others";
 
 function statesAsked(query: CableQuery, whenNotAsked: CableState[] | undefined): CableState[] | undefined {
   const states = query.state ?? whenNotAsked;
@@ -37,7 +38,10 @@ function statesAsked(query: CableQuery, whenNotAsked: CableState[] | undefined):
  * The filters of a query, by name, each telling whether an entry passes.
  * @param defaultStates - the states meant when none is asked; undefined for all
  */
-export function filters(query: CableQuery, defaultStates: CableState[] | undefined): Record<FilterName, (entry: Candidate) => boolean> {
+export function filters(
+  query: CableQuery,
+  defaultStates: CableState[] | undefined,
+): Record<FilterName, (entry: Candidate) => boolean> {
   const states = statesAsked(query, defaultStates);
   return {
     family: (entry) => !query.family || query.family.includes(entry.family),

@@ -1,13 +1,8 @@
 /** From a revision of an entry to what the engine and the catalogue need of it. Pure. */
-import type { Build, Cable, CableState, Construction, Family, Limits } from "@/lib/cables/schema";
+import type { CableState, Construction, Limits } from "@/lib/cables/schema";
 import { propagation } from "@/lib/line/cable";
 import { DB_PER_NEPER, SPEED_OF_LIGHT } from "@/lib/line/constants";
-import type { Line, LineModel } from "@/lib/line/element";
-
-/** The engine's line for a cable of the catalogue. */
-export function lineOf(cable: Pick<Cable, "id" | "revision" | "model">): Line {
-  return { model: cable.model, cableId: cable.id, revision: cable.revision };
-}
+import type { LineModel } from "@/lib/line/element";
 
 /** Attenuation of 100 m at 20 °C, dB; `frequency` in hertz, above 0. */
 export function lossDbPer100m(model: LineModel, frequency: number): number {
@@ -30,41 +25,6 @@ export function derivedFigures(model: LineModel, construction: Construction | nu
     outerDiameterMm: construction?.outerDiameterMm ?? null,
     maxFrequencyHz: limits.maxFrequencyHz ?? null,
   };
-}
-
-const familyWords: Record<Family, string> = {
-  coaxial: "coaxial coax",
-  twistedPair: "twisted pair",
-  twinaxial: "twinaxial twinax pair",
-};
-const dielectricWords: Record<Build["dielectric"], string> = {
-  solid: "solid",
-  foam: "foam foamed cellular",
-  airSpaced: "air-spaced semi-air",
-};
-
-interface Named {
-  designation: string;
-  aliases: string[];
-  name: string;
-  family: Family;
-  build: Build | null;
-}
-
-/** The words an entry is found by: lower case, each once, a blank between and at both ends. */
-export function searchWords({ designation, aliases, name, family, build }: Named): string {
-  const texts = [designation, ...aliases, name, familyWords[family]];
-  if (build) {
-    texts.push(build.conductor, build.isStranded ? "stranded strand" : "", dielectricWords[build.dielectric], build.dielectricName);
-    texts.push(build.screenName, build.screen.length > 0 ? "screened" : "unscreened", build.screen.join(" "));
-    texts.push(build.jacket ?? "");
-  }
-  const words = texts
-    .join(" ")
-    .toLowerCase()
-    .split(/[\s,;()/]+/)
-    .filter((word) => word !== "");
-  return ` ${[...new Set(words)].join(" ")} `;
 }
 
 /** Whether an entry in this state may be put into a run that does not use it yet. */

@@ -19,7 +19,8 @@ const range = (what: string) =>
       const match = rangePattern.exec(text.trim());
       const from = match?.[1] === undefined ? undefined : Number(match[1]);
       const to = match?.[2] === undefined ? undefined : Number(match[2]);
-      const isRead = match !== null && (from ?? to) !== undefined && Number.isFinite(from ?? 0) && Number.isFinite(to ?? 0);
+      const isRead =
+        match !== null && (from ?? to) !== undefined && Number.isFinite(from ?? 0) && Number.isFinite(to ?? 0);
       const message = !isRead
         ? `${what} is a range like 45..55, 45.. or ..55.`
         : from !== undefined && to !== undefined && from > to
@@ -42,7 +43,8 @@ const frequency = (what: string) =>
     .optional();
 
 const flag = z.enum(["true", "false"], { error: "This is true or false." }).transform((text) => text === "true");
-const several = <T extends z.ZodType>(one: T) => z.preprocess((given) => (Array.isArray(given) ? given : [given]), z.array(one)).optional();
+const several = <T extends z.ZodType>(one: T) =>
+  z.preprocess((given) => (Array.isArray(given) ? given : [given]), z.array(one)).optional();
 
 export const sortKeys = ["relevance", "designation", "z0", "loss", "velocityFactor", "outerDiameter"] as const;
 export type SortKey = (typeof sortKeys)[number];
@@ -50,7 +52,12 @@ const sorts = [...sortKeys, ...sortKeys.map((key) => `-${key}` as const)] as con
 
 export const cableQuerySchema = z
   .strictObject({
-    q: z.string({ error: "The search is given once." }).trim().max(200, { error: "A search has at most 200 characters." }).optional(),
+    q: z
+      .string({ error: "The search is given once." })
+      .trim()
+      .max(200, { error: "A search has at most 200 characters." })
+      .optional(),
+    exact: flag.optional().describe("true takes every word of the search as typed"),
     family: several(familySchema).describe("repeatable"),
     z0Ohm: range("The impedance"),
     velocityFactor: range("The velocity factor"),
@@ -60,14 +67,19 @@ export const cableQuerySchema = z
     maxFrequencyHz: frequency("The highest frequency").describe("entries rated at least this high"),
     state: several(stateSchema).describe("repeatable; default approved, which includes restricted ones, marked"),
     preferred: flag.optional(),
-    sort: z.enum(sorts, { error: `The sort is one of ${sortKeys.join(", ")}, with a leading - to reverse.` }).optional(),
+    sort: z
+      .enum(sorts, { error: `The sort is one of ${sortKeys.join(", ")}, with a leading - to reverse.` })
+      .optional(),
     facets: flag.optional(),
     ...pageFields,
   })
-  .refine((query) => query.lossAtHz !== undefined || (query.lossDbPer100m === undefined && !query.sort?.endsWith("loss")), {
-    path: ["lossAtHz"],
-    error: "A loss needs the frequency it is meant at.",
-  });
+  .refine(
+    (query) => query.lossAtHz !== undefined || (query.lossDbPer100m === undefined && !query.sort?.endsWith("loss")),
+    {
+      path: ["lossAtHz"],
+      error: "A loss needs the frequency it is meant at.",
+    },
+  );
 export type CableQuery = z.output<typeof cableQuerySchema>;
 
 const histogramSchema = z.array(z.strictObject({ from: z.number(), to: z.number(), count: z.int() }));
@@ -82,7 +94,10 @@ export const facetsSchema = z
     family: valuesSchema(familySchema),
     state: valuesSchema(stateSchema),
   })
-  .meta({ id: "CableFacets", description: "For each filter, how many entries each value has under all the other filters." });
+  .meta({
+    id: "CableFacets",
+    description: "For each filter, how many entries each value has under all the other filters.",
+  });
 export type Facets = z.infer<typeof facetsSchema>;
 
 export const cablePageSchema = z
@@ -91,6 +106,10 @@ export const cablePageSchema = z
     nextCursor: nextCursorSchema,
     total: z.int(),
     readAs: z.string().optional().describe("how the search was read"),
+    corrected: z
+      .array(z.strictObject({ typed: z.string(), read: z.string() }))
+      .optional()
+      .describe("words of the search that were read as others"),
     facets: facetsSchema.optional(),
   })
   .meta({ id: "CablePage" });

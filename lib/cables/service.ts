@@ -1,5 +1,5 @@
 /** The catalogue as its reader may see it. */
-import { and, countDistinct, eq, inArray, isNull, like, type SQL } from "drizzle-orm";
+import { and, countDistinct, eq, inArray, isNull } from "drizzle-orm";
 import { alias } from "drizzle-orm/sqlite-core";
 import { database } from "@/db/client";
 import { cableRevisions, cables } from "@/db/schema/cables";
@@ -9,12 +9,12 @@ import { may, requirePermission } from "@/lib/auth/permission";
 import { currentRevision, known, readable } from "@/lib/cables/access/service";
 import { facetsOf } from "@/lib/cables/facets";
 import { type Candidate, comparePlaces, filters, sortAsked, sortValue } from "@/lib/cables/filter";
-import { lossDbPer100m, unapprovedStates } from "@/lib/cables/model";
+import { unapprovedStates } from "@/lib/cables/model";
 import type { CablePage, CableQuery } from "@/lib/cables/query";
 import type { Cable, CableItem, CableState } from "@/lib/cables/schema";
+import { listCandidates, readSearchIn } from "@/lib/cables/search/service";
 import { AppError } from "@/lib/http/errors";
 import { defaultLimit, encodeCursor } from "@/lib/http/list";
-import type { LineModel } from "@/lib/line/element";
 
 const successors = alias(cables, "successors");
 
@@ -24,7 +24,11 @@ function selectWhole() {
     .from(cables)
     .leftJoin(successors, eq(successors.id, cables.successorId));
 }
-type WholeRow = { cable: typeof cables.$inferSelect; revision: typeof cableRevisions.$inferSelect; successorDesignation: string | null };
+type WholeRow = {
+  cable: typeof cables.$inferSelect;
+  revision: typeof cableRevisions.$inferSelect;
+  successorDesignation: string | null;
+};
 
 function toCable({ cable, revision, successorDesignation }: WholeRow): Cable {
   const { successorId, equivalence } = cable;
@@ -89,43 +93,15 @@ export function listReferredCables(actor: Actor, references: CableReference[]): 
   if (references.length === 0) return [];
   const ids = [...new Set(references.map((reference) => reference.cableId))];
   const isAsked = ({ cable, revision }: WholeRow) =>
-    references.some((asked) => asked.cableId === cable.id && (asked.revision ?? cable.currentRevision) === revision.revision);
+    references.some(
+      (asked) => asked.cableId === cable.id && (asked.revision ?? cable.currentRevision) === revision.revision,
+    );
   return selectWhole()
     .innerJoin(cableRevisions, eq(cableRevisions.cableId, cables.id))
     .where(and(readable(actor), inArray(cables.id, ids)))
     .all()
     .filter(isAsked)
     .map(toCable);
-}
-
-/** Words of a search: each must occur at the start of a word of the entry. */
-function found(words: string[]): SQL | undefined {
-  return and(...words.map((word) => like(cableRevisions.words, `% ${word.replaceAll(/[%_]/g, "")}%`)));
-}
-
-function listCandidates(actor: Actor, words: string[], lossAtHz: number | undefined): Candidate[] {
-  const rows = database()
-    .select({
-      id: cables.id,
-      designation: cables.designation,
-      preferred: cables.preferred,
-      family: cableRevisions.family,
-      state: cableRevisions.state,
-      z0Ohm: cableRevisions.z0Ohm,
-      velocityFactor: cableRevisions.velocityFactor,
-      outerDiameterMm: cableRevisions.outerDiameterMm,
-      maxFrequencyHz: cableRevisions.maxFrequencyHz,
-      ...(lossAtHz !== undefined && { model: cableRevisions.model }),
-    })
-    .from(cables)
-    .innerJoin(cableRevisions, currentRevision)
-    .where(and(readable(actor), found(words)))
-    .all() as (Omit<Candidate, "lossDbPer100m" | "relevance"> & { model?: LineModel })[];
-  return rows.map(({ model, ...row }) => ({
-    ...row,
-    lossDbPer100m: model && lossAtHz !== undefined ? lossDbPer100m(model, lossAtHz) : null,
-    relevance: words.filter((word) => row.designation.toLowerCase().startsWith(word)).length,
-  }));
 }
 
 function countUses(actor: Actor, ids: string[]): Map<string, number> {
@@ -150,7 +126,15 @@ function listItems(actor: Actor, entries: Candidate[]): CableItem[] {
     const { model: _model, figures: _figures, limits: _limits, successor: _successor, ...cable } = toCable(row);
     const { z0Ohm, velocityFactor, capacitanceFPerM, delaySPerM, outerDiameterMm } = row.revision;
     const lossRangeDbPer100m: [number, number] = [row.revision.lossLowDbPer100m, row.revision.lossHighDbPer100m];
-    const figures = { z0Ohm, velocityFactor, capacitanceFPerM, delaySPerM, outerDiameterMm, lossDbPer100m, lossRangeDbPer100m };
+    const figures = {
+      z0Ohm,
+      velocityFactor,
+      capacitanceFPerM,
+      delaySPerM,
+      outerDiameterMm,
+      lossDbPer100m,
+      lossRangeDbPer100m,
+    };
     return [{ ...cable, ...figures, usedInRuns: uses.get(id) ?? 0 }];
   });
 }
@@ -158,8 +142,8 @@ function listItems(actor: Actor, entries: Candidate[]): CableItem[] {
 /** A page of the catalogue: what the query finds of what the actor may read. */
 export function listCables(actor: Actor, query: CableQuery): CablePage {
   requirePermission(actor, "cables.read");
-  const words = (query.q ?? "").toLowerCase().split(/[\s,;]+/).filter((word) => word !== "");
-  const entries = listCandidates(actor, words, query.lossAtHz);
+  const reading = readSearchIn(actor, query.q, query.exact ?? false);
+  const entries = listCandidates(actor, reading, query.lossAtHz);
   // Whoever sees the catalogue is shown what may be used; an installer, what was used.
   const defaultStates: CableState[] | undefined = may(actor, "cables.readCatalogue") ? ["approved"] : undefined;
   const passes = filters(query, defaultStates);
@@ -173,10 +157,13 @@ export function listCables(actor: Actor, query: CableQuery): CablePage {
   const page = rest.slice(0, query.limit ?? defaultLimit);
   const last = page.at(-1);
   return {
-    items: listItems(actor, page.map(({ entry }) => entry)),
+    items: listItems(
+      actor,
+      page.map(({ entry }) => entry),
+    ),
     nextCursor: last && rest.length > page.length ? encodeCursor(last.place) : null,
     total: passing.length,
-    ...(words.length > 0 && { readAs: words.join(" ") }),
+    ...(reading && { readAs: reading.text, corrected: reading.corrected }),
     ...(query.facets && { facets: facetsOf(entries, passes) }),
   };
 }

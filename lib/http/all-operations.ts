@@ -5,4 +5,6 @@ import * as service from "@/lib/http/operations";
 import type { Operation } from "@/lib/http/operation";
 import * as runs from "@/lib/runs/operations";
 
-export const operations: Operation[] = [account, cables, runs, service].flatMap((noun) => Object.values<Operation>(noun));
+export const operations: Operation[] = [account, cables, runs, service].flatMap((noun) =>
+  Object.values<Operation>(noun),
+);

@@ -81,11 +81,16 @@ export const problemSchema = z
       .optional()
       .describe("all that is wrong with a body, at once"),
   })
-  .meta({ id: "Problem", description: "RFC 9457. A stale change also carries the resource as it now stands, under `current`." });
+  .meta({
+    id: "Problem",
+    description: "RFC 9457. A stale change also carries the resource as it now stands, under `current`.",
+  });
 
 /** The problem document (RFC 9457) of a refusal. */
 export function problem(error: AppError): Response {
-  const errors = Object.entries(error.fields).flatMap(([path, messages]) => messages.map((message) => ({ path, message })));
+  const errors = Object.entries(error.fields).flatMap(([path, messages]) =>
+    messages.map((message) => ({ path, message })),
+  );
   const body = {
     ...error.extra.members,
     type: "about:blank",

@@ -13,7 +13,9 @@ export const emptyForm: FormState = { fields: {}, values: {} };
 
 /** The texts of a form; React's own hidden fields start with $ and are left out. */
 export function formValues(form: FormData): Record<string, string> {
-  const texts = [...form].filter((entry): entry is [string, string] => !entry[0].startsWith("$") && typeof entry[1] === "string");
+  const texts = [...form].filter(
+    (entry): entry is [string, string] => !entry[0].startsWith("$") && typeof entry[1] === "string",
+  );
   return Object.fromEntries(texts);
 }
 

@@ -101,7 +101,9 @@ export function route(handlers: Partial<Record<Method, Handler>>): Record<Method
   const own = methods.filter((method) => handlers[method]);
   const allow = [...own, ...(handlers.GET ? ["HEAD"] : []), "OPTIONS"].join(", ");
   const refuse: Handler = async (request) =>
-    problem(new AppError("method_not_allowed", `${request.method} is not possible here.`, {}, { headers: { Allow: allow } }));
+    problem(
+      new AppError("method_not_allowed", `${request.method} is not possible here.`, {}, { headers: { Allow: allow } }),
+    );
   const options: Handler = async () => new Response(null, { status: 204, headers: { Allow: allow } });
   const all = methods.map((method): [Method, Handler] => [method, handlers[method] ?? refuse]);
   return { ...(Object.fromEntries(all) as Record<Method, Handler>), OPTIONS: options };

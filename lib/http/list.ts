@@ -12,14 +12,19 @@ export interface Cursor {
 
 export function encodeCursor(cursor: Cursor): string {
   const bytes = new TextEncoder().encode(JSON.stringify([cursor.key, cursor.id]));
-  return btoa(String.fromCharCode(...bytes)).replaceAll("+", "-").replaceAll("/", "_").replaceAll("=", "");
+  return btoa(String.fromCharCode(...bytes))
+    .replaceAll("+", "-")
+    .replaceAll("/", "_")
+    .replaceAll("=", "");
 }
 
 const cursorContent = z.tuple([z.union([z.string(), z.number(), z.null()]), z.string()]);
 
 function decodeCursor(text: string): Cursor | undefined {
   try {
-    const bytes = Uint8Array.from(atob(text.replaceAll("-", "+").replaceAll("_", "/")), (character) => character.charCodeAt(0));
+    const bytes = Uint8Array.from(atob(text.replaceAll("-", "+").replaceAll("_", "/")), (character) =>
+      character.charCodeAt(0),
+    );
     const read = cursorContent.safeParse(JSON.parse(new TextDecoder().decode(bytes)));
     return read.success ? { key: read.data[0], id: read.data[1] } : undefined;
   } catch {

@@ -18,7 +18,12 @@ export function refusalsOf(declared: Operation): ErrorCode[] {
 }
 
 const pathParameters = (path: string): Json[] =>
-  [...path.matchAll(/\{(\w+)\}/g)].map(([, name]) => ({ name, in: "path", required: true, schema: { type: "string" } }));
+  [...path.matchAll(/\{(\w+)\}/g)].map(([, name]) => ({
+    name,
+    in: "path",
+    required: true,
+    schema: { type: "string" },
+  }));
 
 function queryParameters(query: z.ZodType): Json[] {
   const made = z.toJSONSchema(query, { io: "input" }) as { properties?: Record<string, Json>; required?: string[] };
@@ -68,7 +73,10 @@ function describe(declared: Operation, parts: SchemaParts): Json {
     security: declared.permission === null ? [] : [{ cookie: [] }, { token: [] }],
     ...(parameters.length > 0 && { parameters }),
     ...(declared.body && {
-      requestBody: { required: true, content: { "application/json": { schema: parts.reference(declared.body, "input") } } },
+      requestBody: {
+        required: true,
+        content: { "application/json": { schema: parts.reference(declared.body, "input") } },
+      },
     }),
     responses: responses(declared, parts),
   };

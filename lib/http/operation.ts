@@ -5,7 +5,11 @@ import type { ErrorCode } from "@/lib/http/errors";
 
 export type Method = "GET" | "POST" | "PUT" | "PATCH" | "DELETE";
 
-export interface Operation<Path extends string = string, Query extends z.ZodType = z.ZodType, Body extends z.ZodType = z.ZodType> {
+export interface Operation<
+  Path extends string = string,
+  Query extends z.ZodType = z.ZodType,
+  Body extends z.ZodType = z.ZodType,
+> {
   /** unique name of the operation */
   id: string;
   method: Method;

@@ -8,7 +8,11 @@ export const readHealth = operation({
   path: "/health",
   summary: "Whether the service answers and its database can be read.",
   permission: null,
-  answer: { status: 200, description: "All is well.", schema: z.strictObject({ status: z.literal("ok") }).meta({ id: "Health" }) },
+  answer: {
+    status: 200,
+    description: "All is well.",
+    schema: z.strictObject({ status: z.literal("ok") }).meta({ id: "Health" }),
+  },
 });
 
 export const readDescription = operation({

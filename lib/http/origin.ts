@@ -6,7 +6,11 @@ function ownOrigins(request: Request): string[] {
   const { host: urlHost } = new URL(request.url);
   const host = request.headers.get("host") ?? urlHost;
   const publicUrl = process.env.PUBLIC_URL;
-  return [`http://${host}`, `https://${host}`, ...(publicUrl && URL.canParse(publicUrl) ? [new URL(publicUrl).origin] : [])];
+  return [
+    `http://${host}`,
+    `https://${host}`,
+    ...(publicUrl && URL.canParse(publicUrl) ? [new URL(publicUrl).origin] : []),
+  ];
 }
 
 /** Whether the request was made by one of our own pages: Sec-Fetch-Site says so, else Origin; undefined when neither is sent. */

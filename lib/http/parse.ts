@@ -8,10 +8,13 @@ const most = 500;
 
 /** The sentence for a fault whose schema has none of its own. */
 function plainSentence(issue: RawIssue): string {
-  if (issue.code === "invalid_type") return issue.input === undefined ? "This is needed." : `This must be ${nounOf(issue.expected)}.`;
+  if (issue.code === "invalid_type")
+    return issue.input === undefined ? "This is needed." : `This must be ${nounOf(issue.expected)}.`;
   if (issue.code === "unrecognized_keys") return "There is no such field here.";
-  if (issue.code === "too_small") return `This must be ${issue.inclusive ? "at least" : "more than"} ${bound(issue.minimum, issue.origin)}.`;
-  if (issue.code === "too_big") return `This must be ${issue.inclusive ? "at most" : "less than"} ${bound(issue.maximum, issue.origin)}.`;
+  if (issue.code === "too_small")
+    return `This must be ${issue.inclusive ? "at least" : "more than"} ${bound(issue.minimum, issue.origin)}.`;
+  if (issue.code === "too_big")
+    return `This must be ${issue.inclusive ? "at most" : "less than"} ${bound(issue.maximum, issue.origin)}.`;
   if (issue.code === "invalid_value") return `This must be one of ${issue.values.map(String).join(", ")}.`;
   return "This is not as it should be.";
 }
@@ -69,5 +72,9 @@ export function parse<Schema extends z.ZodType>(schema: Schema, input: unknown):
   if (read.success) return read.data;
   const fields = fieldErrorsOf(read.error);
   const count = Object.keys(fields).length;
-  throw new AppError("invalid_input", count === 1 ? "One field is not right." : `${count} fields are not right.`, fields);
+  throw new AppError(
+    "invalid_input",
+    count === 1 ? "One field is not right." : `${count} fields are not right.`,
+    fields,
+  );
 }

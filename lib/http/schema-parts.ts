@@ -29,7 +29,9 @@ function relinked(value: unknown): unknown {
   if (Array.isArray(value)) return value.map(relinked);
   if (typeof value !== "object" || value === null) return value;
   const entries = Object.entries(value).map(([key, inner]) =>
-    key === "$ref" && typeof inner === "string" ? [key, inner.replace("#/$defs/", "#/components/schemas/")] : [key, relinked(inner)],
+    key === "$ref" && typeof inner === "string"
+      ? [key, inner.replace("#/$defs/", "#/components/schemas/")]
+      : [key, relinked(inner)],
   );
   return Object.fromEntries(entries);
 }

@@ -8,7 +8,10 @@ import { may } from "@/lib/auth/permission";
 import { unapprovedStates } from "@/lib/cables/model";
 
 /** Joins an entry with the revision people see of it. */
-export const currentRevision = and(eq(cableRevisions.cableId, cables.id), eq(cableRevisions.revision, cables.currentRevision));
+export const currentRevision = and(
+  eq(cableRevisions.cableId, cables.id),
+  eq(cableRevisions.revision, cables.currentRevision),
+);
 
 /** Whether the actor has been given an issued run with the cable in it. */
 function isInOwnRuns(actor: Actor): SQL {
@@ -38,5 +41,8 @@ export function known(actor: Actor): SQL | undefined {
 /** Of the known ones, those the actor may read: drafts and reviews are for their author and for whoever reviews. */
 export function readable(actor: Actor): SQL | undefined {
   if (may(actor, "cables.readUnapproved")) return known(actor);
-  return and(known(actor), or(notInArray(cableRevisions.state, unapprovedStates), eq(cableRevisions.authorId, actor.personId)));
+  return and(
+    known(actor),
+    or(notInArray(cableRevisions.state, unapprovedStates), eq(cableRevisions.authorId, actor.personId)),
+  );
 }

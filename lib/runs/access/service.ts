@@ -15,5 +15,9 @@ function isAssigned(actor: Actor): SQL | undefined {
 
 /** The team's runs that are not removed; of an installer, those issued and assigned. */
 export function visible(actor: Actor): SQL | undefined {
-  return and(eq(runs.teamId, actor.teamId), isNull(runs.removedAt), may(actor, "runs.readAll") ? undefined : isAssigned(actor));
+  return and(
+    eq(runs.teamId, actor.teamId),
+    isNull(runs.removedAt),
+    may(actor, "runs.readAll") ? undefined : isAssigned(actor),
+  );
 }

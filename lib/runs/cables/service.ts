@@ -45,9 +45,12 @@ export function pinCables(actor: Actor, circuit: Circuit, pinned: Pinned): Pinne
   const fields: FieldErrors = {};
   const pins = new Map<string, Pinned[number]>();
   for (const { path, ref } of refs) {
-    const cable = found.find((one) => one.id === ref.cableId && (ref.revision === undefined || one.revision === ref.revision));
+    const cable = found.find(
+      (one) => one.id === ref.cableId && (ref.revision === undefined || one.revision === ref.revision),
+    );
     const isPinned = pinned.some((pin) => pin.cableId === cable?.id && pin.revision === cable.revision);
-    if (!cable) fields[`circuit.${path}.cableId`] = ["There is no such cable, or no such revision of it, in the catalogue."];
+    if (!cable)
+      fields[`circuit.${path}.cableId`] = ["There is no such cable, or no such revision of it, in the catalogue."];
     else if (!isPinned && !isUsable(cable.state)) fields[`circuit.${path}.cableId`] = [refusalOf(cable)];
     else pins.set(`${cable.id} ${cable.revision}`, { cableId: cable.id, revision: cable.revision });
   }
@@ -69,7 +72,10 @@ export function listPinned(runId: string): Pinned {
 export function replacePinned(runId: string, pinned: Pinned): void {
   const db = database();
   db.delete(runCables).where(eq(runCables.runId, runId)).run();
-  if (pinned.length > 0) db.insert(runCables).values(pinned.map((pin) => ({ runId, ...pin }))).run();
+  if (pinned.length > 0)
+    db.insert(runCables)
+      .values(pinned.map((pin) => ({ runId, ...pin })))
+      .run();
 }
 
 /** The cables of a run, whole, in the revisions it uses. */

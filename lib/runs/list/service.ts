@@ -27,12 +27,17 @@ function after(cursor: Cursor | undefined): SQL | undefined {
 }
 
 function designations(ids: string[]): Map<string, string> {
-  const rows = database().select({ id: cables.id, designation: cables.designation }).from(cables).where(inArray(cables.id, ids)).all();
+  const rows = database()
+    .select({ id: cables.id, designation: cables.designation })
+    .from(cables)
+    .where(inArray(cables.id, ids))
+    .all();
   return new Map(rows.map((row) => [row.id, row.designation]));
 }
 
 function toItem(row: typeof runs.$inferSelect, ownerName: string, names: Map<string, string>): RunItem {
-  const { id, number, name, site, folder, state, condition, ownerId, version, changedAt, designHz, bandHz, circuit } = row;
+  const { id, number, name, site, folder, state, condition, ownerId, version, changedAt, designHz, bandHz, circuit } =
+    row;
   return {
     ...{ id, number, name, site, folder, state, condition, ownerId, ownerName, version, changedAt, designHz, bandHz },
     totalLengthM: totalLength(circuit),

@@ -10,6 +10,9 @@ export const { GET, POST, PUT, PATCH, DELETE, OPTIONS } = route({
 
   POST: handle(startRun, async ({ actor, body }) => {
     const run = createRun(actor, await body());
-    return Response.json(run, { status: 201, headers: { ETag: entityTag(run.version), Location: `/api/v1/runs/${run.id}` } });
+    return Response.json(run, {
+      status: 201,
+      headers: { ETag: entityTag(run.version), Location: `/api/v1/runs/${run.id}` },
+    });
   }),
 });

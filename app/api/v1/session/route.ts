@@ -6,7 +6,9 @@ import { networkAddress, refuseOtherPage } from "@/lib/http/origin";
 import { describeActor } from "@/lib/team/service";
 
 export const { GET, POST, PUT, PATCH, DELETE, OPTIONS } = route({
-  GET: handle(readSession, ({ actor }) => Response.json(describeActor(actor), { headers: { "Cache-Control": "no-store" } })),
+  GET: handle(readSession, ({ actor }) =>
+    Response.json(describeActor(actor), { headers: { "Cache-Control": "no-store" } }),
+  ),
 
   POST: handlePublic(openSession, async ({ request, body }) => {
     refuseOtherPage(request);

@@ -18,7 +18,11 @@ export const { GET, POST, PUT, PATCH, DELETE, OPTIONS } = route({
 
   DELETE: handle(removeRun, ({ actor, request, params }) => {
     const before = getRun(actor, params.runId);
-    deleteRun(actor, params.runId, requireMatch(request, before.version, () => staleRun(before)));
+    deleteRun(
+      actor,
+      params.runId,
+      requireMatch(request, before.version, () => staleRun(before)),
+    );
     return new Response(null, { status: 204 });
   }),
 });
