@@ -1,7 +1,10 @@
 /** Fills a migrated database: the demo, or with DEMO=off the first admin. Running it again changes nothing. */
 import { fileURLToPath } from "node:url";
+import { database } from "@/db/client";
+import { teams } from "@/db/schema/team";
 import { seedCables } from "@/seeds/cables";
 import { seedRuns } from "@/seeds/runs";
+import demo from "@/seeds/data/team.json";
 import { seedFirstAdmin, seedTeam } from "@/seeds/team";
 
 /** The demo team with its people, catalogue and runs. */
@@ -11,12 +14,37 @@ export async function seedDemo(): Promise<void> {
   seedRuns();
 }
 
+/**
+ * The demo's passwords are printed for all to read, so it never shares a database with a team of its own.
+ * @throws Error when the database is the other kind
+ */
+export function refuseMixing(isDemo: boolean): void {
+  const ids = database()
+    .select({ id: teams.id })
+    .from(teams)
+    .all()
+    .map(({ id }) => id);
+  const holdsDemo = ids.includes(demo.team.id);
+  if (isDemo && !holdsDemo && ids.length > 0)
+    throw new Error("This database holds a team of its own, and the demo's passwords are public. Start with DEMO=off.");
+  if (!isDemo && holdsDemo)
+    throw new Error("This database holds the demo, whose passwords are public. Give another file in DATABASE_FILE.");
+}
+
+async function seed(): Promise<string | undefined> {
+  const isDemo = process.env.DEMO !== "off";
+  refuseMixing(isDemo);
+  if (!isDemo) return seedFirstAdmin(process.env);
+  await seedDemo();
+  return "The demo is in place.";
+}
+
 if (process.argv[1] === fileURLToPath(import.meta.url)) {
-  if (process.env.DEMO === "off") {
-    const told = await seedFirstAdmin(process.env);
+  try {
+    const told = await seed();
     if (told) console.log(told);
-  } else {
-    await seedDemo();
-    console.log("The demo is in place.");
+  } catch (error) {
+    console.error(error instanceof Error ? error.message : error);
+    process.exitCode = 1;
   }
 }
