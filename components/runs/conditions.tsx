@@ -2,7 +2,7 @@
 
 import { ConditionForm } from "@/components/runs/condition-form";
 import { useRunEditor } from "@/components/runs/run-editor";
-import { optionalQuantity, quantity, type LeafField } from "@/lib/runs/leaf/field";
+import { optionalQuantity, quantity, type LeafField, type TypedField } from "@/lib/runs/leaf/field";
 import type { RunDraft } from "@/lib/runs/edit";
 
 /** What the figures are given at: the parts of a run that are not pieces of its line. */
@@ -19,7 +19,7 @@ const spot: LeafField<Conditions>[] = [
       kind: "power",
       bounds: { ...positive, most: 1e9 },
     }),
-    write: (edited, value) => ({ ...edited, availablePowerW: value ?? null }),
+    write: (edited: Conditions, value: number | undefined) => ({ ...edited, availablePowerW: value ?? null }),
   },
   quantity<Conditions>({
     key: "temperatureC",
@@ -30,19 +30,20 @@ const spot: LeafField<Conditions>[] = [
   }),
 ];
 
-const bandEnd = (index: 0 | 1, label: string): LeafField<Conditions> => {
+const bandEnd = (index: 0 | 1, label: string): TypedField<Conditions> => {
   const shape = quantity<{ end: number }>({ key: "end", label, kind: "frequency", bounds: positive });
   return {
     ...shape,
-    name: `bandHz.${index}`.replace(".", "_"),
-    text: ({ bandHz, designHz }) => shape.text({ end: bandHz?.[index] ?? designHz }),
-    write: (edited, value: number) => {
+    isShown: undefined,
+    name: `bandHz_${index}`,
+    text: ({ bandHz, designHz }: Conditions) => shape.text({ end: bandHz?.[index] ?? designHz }),
+    write: (edited: Conditions, value: number) => {
       const [from, to] = edited.bandHz ?? [edited.designHz, edited.designHz];
       // The other end gives way, so that a band is never upside down while its first end is being typed.
       const next: [number, number] = index === 0 ? [value, Math.max(value, to)] : [Math.min(from, value), value];
       return { ...edited, bandHz: next };
     },
-  } as LeafField<Conditions>;
+  };
 };
 
 const band = [bandEnd(0, "Band from"), bandEnd(1, "to")];

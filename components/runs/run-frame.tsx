@@ -17,7 +17,7 @@ interface Props {
 
 /** Title, views and saving state of a run; the view itself inside. */
 export function RunFrame({ head, children }: Props) {
-  const { saved, draft, edit, undo, redo, canEdit } = useRunEditor();
+  const { saved, draft, undo, redo, canEdit } = useRunEditor();
   const path = usePathname();
   const base = `/runs/${saved.id}`;
   const views = [
@@ -35,19 +35,7 @@ export function RunFrame({ head, children }: Props) {
             </Link>{" "}
             / {[saved.number, draft.site, draft.folder].filter(Boolean).join(" / ")}
           </p>
-          {canEdit ? (
-            <input
-              aria-label="Name of the run"
-              value={draft.name}
-              maxLength={120}
-              onChange={(event) =>
-                event.target.value.trim() !== "" && edit({ ...draft, name: event.target.value }, "name")
-              }
-              className="flared -mx-1 w-full truncate border-b border-transparent bg-transparent px-1 text-title tracking-[-0.012em] text-ink hover:border-rule phone:text-figure"
-            />
-          ) : (
-            <h1 className="truncate">{draft.name}</h1>
-          )}
+          {canEdit ? <NameField /> : <h1 className="truncate">{draft.name}</h1>}
         </div>
         {head}
       </div>
@@ -80,6 +68,32 @@ export function RunFrame({ head, children }: Props) {
       </div>
       <Conflict />
       {children}
+    </>
+  );
+}
+
+/** The title, which is edited where it stands. */
+function NameField() {
+  const { draft, edit, faults, setFault } = useRunEditor();
+  const fault = faults["name"];
+  function take(text: string) {
+    const isEmpty = text.trim() === "";
+    setFault("name", isEmpty ? { text, message: "Give the run a name." } : null);
+    if (!isEmpty) edit({ ...draft, name: text }, "name");
+  }
+  return (
+    <>
+      <h1>
+        <input
+          aria-label="Name of the run"
+          aria-invalid={fault ? true : undefined}
+          value={fault?.text ?? draft.name}
+          maxLength={120}
+          onChange={(event) => take(event.target.value)}
+          className={`-mx-1 w-full truncate border-b bg-transparent px-1 hover:border-rule phone:text-figure ${fault ? "border-fail" : "border-transparent"}`}
+        />
+      </h1>
+      {fault && <p className="text-note text-fail">{fault.message}</p>}
     </>
   );
 }

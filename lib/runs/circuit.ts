@@ -22,7 +22,9 @@ function linesIn(element: Element): { path: string; line: LineRef }[] {
 /** Every reference to the catalogue in a circuit, in order, with its place. */
 export function cableRefsOf(circuit: Circuit): { path: string; ref: CableRef }[] {
   return circuit.elements.flatMap((element, i) =>
-    linesIn(element).flatMap(({ path, line }) => ("cableId" in line ? [{ path: `elements.${i}.${path}`, ref: line }] : [])),
+    linesIn(element).flatMap(({ path, line }) =>
+      "cableId" in line ? [{ path: `elements.${i}.${path}`, ref: line }] : [],
+    ),
   );
 }
 
@@ -39,7 +41,10 @@ export function totalLength(circuit: Circuit): number {
 function withLines(element: Element, toLine: (ref: LineRef, path: string) => Line): EngineElement {
   if (element.kind === "cable" || element.kind === "stub") return { ...element, line: toLine(element.line, "line") };
   if (element.kind !== "parallel") return element;
-  const branches = element.branches.map((branch, i) => ({ ...branch, line: toLine(branch.line, `branches.${i}.line`) }));
+  const branches = element.branches.map((branch, i) => ({
+    ...branch,
+    line: toLine(branch.line, `branches.${i}.line`),
+  }));
   return { ...element, branches };
 }
 
@@ -67,5 +72,8 @@ export function resolveCircuit(
 
 /** A look-up by reference in a list of cables: with a revision that one, without it the one of the list. */
 export function findIn(lines: Line[]): (ref: CableRef) => Line | undefined {
-  return (ref) => lines.find((line) => line.cableId === ref.cableId && (ref.revision === undefined || line.revision === ref.revision));
+  return (ref) =>
+    lines.find(
+      (line) => line.cableId === ref.cableId && (ref.revision === undefined || line.revision === ref.revision),
+    );
 }

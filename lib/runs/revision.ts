@@ -46,6 +46,7 @@ function enumerate(parts: string[]): string {
 /** What differs between two states of a run, for example "Changed the load and 2 elements."; undefined when nothing does. */
 export function saveSentence(before: Content, after: Content): string | undefined {
   const changes = changesInCircuit(before.circuit, after.circuit);
-  for (const key of Object.keys(named) as (keyof typeof named)[]) if (!isSame(before[key], after[key])) changes.push(named[key]);
+  for (const key of Object.keys(named) as (keyof typeof named)[])
+    if (!isSame(before[key], after[key])) changes.push(named[key]);
   return changes.length === 0 ? undefined : `Changed ${enumerate(changes)}.`;
 }

@@ -34,7 +34,21 @@ export function getRun(actor: Actor, runId: string): Run {
   const { id, number, name, site, folder, state, condition, ownerId, circuit, temperatureC, designHz } = row.run;
   const { availablePowerW, bandHz, targets, sourceName, loadName, version, changedAt } = row.run;
   return {
-    ...{ id, number, name, site, folder, circuit, temperatureC, designHz, availablePowerW, bandHz, targets, sourceName, loadName },
+    ...{
+      id,
+      number,
+      name,
+      site,
+      folder,
+      circuit,
+      temperatureC,
+      designHz,
+      availablePowerW,
+      bandHz,
+      targets,
+      sourceName,
+      loadName,
+    },
     ...{ state, condition, ownerId, ownerName, version, changedAt, changedByName },
     pinned: listPinned(id),
   };
@@ -44,7 +58,14 @@ export function getRun(actor: Actor, runId: string): Run {
 function keepRevision(actor: Actor, run: Run, sentence: string): Run {
   database()
     .insert(runRevisions)
-    .values({ runId: run.id, version: run.version, savedAt: run.changedAt, savedById: actor.personId, sentence, content: run })
+    .values({
+      runId: run.id,
+      version: run.version,
+      savedAt: run.changedAt,
+      savedById: actor.personId,
+      sentence,
+      content: run,
+    })
     .run();
   return run;
 }

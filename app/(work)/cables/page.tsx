@@ -1,0 +1,25 @@
+import type { Metadata } from "next";
+import { Catalogue } from "@/components/cables/catalogue";
+import { WorkBar } from "@/components/team/work-bar";
+import { currentActor } from "@/lib/auth/actor";
+import { may } from "@/lib/auth/permission";
+import { readCatalogueAddress } from "@/lib/cables/address";
+import { describeActor } from "@/lib/team/service";
+
+export const metadata: Metadata = { title: "Catalogue" };
+
+interface Props {
+  searchParams: Promise<Record<string, string | string[] | undefined>>;
+}
+
+export default async function CataloguePage({ searchParams }: Props) {
+  const actor = await currentActor();
+  return (
+    <>
+      <WorkBar signedIn={describeActor(actor)} current="/cables" title="Catalogue" />
+      <main id="main" className="page-margin pt-2.5 pb-20">
+        <Catalogue asked={readCatalogueAddress(await searchParams)} canStartRun={may(actor, "runs.write")} />
+      </main>
+    </>
+  );
+}

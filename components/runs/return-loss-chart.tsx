@@ -1,0 +1,72 @@
+"use client";
+
+import dynamic from "next/dynamic";
+import { BandConditions } from "@/components/runs/conditions";
+import { useRunEditor } from "@/components/runs/run-editor";
+import { TargetList } from "@/components/runs/target-list";
+import { ChartFrame } from "@/components/plot/chart-frame";
+import { digits, frequency, inWords } from "@/lib/format/quantity";
+import type { Analysis } from "@/lib/runs/analysis";
+import { plotted, returnLossDomain, thinned } from "@/lib/runs/curves";
+import { bandWords } from "@/lib/runs/sentences";
+
+const SweepPlot = dynamic(() => import("@/components/plot/sweep-plot").then((file) => file.SweepPlot), {
+  ssr: false,
+  loading: () => <div className="h-72.5" />,
+});
+
+export const megahertz = (value: number) => digits(value / 1e6, decimalsOf(value / 1e6));
+const decimalsOf = (value: number) => Math.min(3, Number(value.toFixed(3)).toString().split(".")[1]?.length ?? 0);
+
+/** Return loss over the band at both ends of the run, with the target. */
+export function ReturnLossChart({ analysis }: { analysis: Analysis }) {
+  const { draft } = useRunEditor();
+  const { bandHz, sourceName, loadName, targets, designHz } = draft;
+  const limitDb = targets.find((t) => t.quantity === "returnLoss" && t.atLeast !== undefined)?.atLeast ?? null;
+  const xs = Array.from(analysis.sweep.frequencies);
+  const source = plotted(analysis.sourceReturnLossDb);
+  const load = plotted(analysis.loadReturnLossDb);
+  const worst = analysis.worst.sourceReturnLoss;
+  const yDomain = returnLossDomain([source, load], limitDb);
+  const summary = `Return loss at ${sourceName} falls to ${digits(worst.value, 1)} dB at ${inWords(frequency(worst.frequencyHz))}${limitDb === null ? "" : `; target ${digits(limitDb, 1)}`}`;
+  const rows = thinned(
+    xs.map((x, i) => [megahertz(x), digits(source[i], 2), digits(load[i], 2)]),
+    120,
+  );
+  return (
+    <ChartFrame
+      level={2}
+      title="Return loss over the band"
+      note="dB; higher is better"
+      summary={summary}
+      figures={{ head: ["MHz", `at ${sourceName}, dB`, `at ${loadName}, dB`], rows }}
+    >
+      <div className="mt-2 flex flex-wrap items-end gap-3">
+        <BandConditions />
+        <TargetList />
+      </div>
+      <SweepPlot
+        xs={xs}
+        series={[
+          { id: "source", label: `at ${sourceName}`, look: 1, values: source },
+          { id: "load", label: `at ${loadName}`, look: 2, values: load },
+        ]}
+        xDomain={[xs[0] ?? 0, xs.at(-1) ?? 1]}
+        yDomain={yDomain}
+        xUnit="MHz"
+        formatX={megahertz}
+        formatY={(value) => digits(value, 0)}
+        mark={designHz}
+        band={bandHz ? { from: bandHz[0], to: bandHz[1], label: bandWords(bandHz) } : undefined}
+        limit={
+          limitDb === null ? undefined : { value: limitDb, forbidden: "below", label: `target ${digits(limitDb, 1)}` }
+        }
+        worst={
+          Number.isFinite(worst.value)
+            ? { x: worst.frequencyHz, y: worst.value, label: digits(worst.value, 1) }
+            : undefined
+        }
+      />
+    </ChartFrame>
+  );
+}

@@ -1,0 +1,32 @@
+/** A run opened for work: the run, every cable it may be worked with, and whether this person may change it. */
+import type { Actor } from "@/lib/auth/actor";
+import { may } from "@/lib/auth/permission";
+import { lineOf, type CableLine } from "@/lib/cables/line";
+import { listReferredCables, listUsableCables } from "@/lib/cables/service";
+import { getRun } from "@/lib/runs/service";
+import type { Run } from "@/lib/runs/schema";
+
+export interface OpenedRun {
+  run: Run;
+  lines: CableLine[];
+  /** a sentence; null when the run can be changed */
+  cannotEditBecause: string | null;
+}
+
+function refusal(actor: Actor, run: Run): string | null {
+  if (run.state !== "draft")
+    return `${run.state === "issued" ? "Issued" : "Verified"}, revision ${run.version}: it can no longer be changed`;
+  return may(actor, "runs.write") ? null : "You are reading; your role changes nothing";
+}
+
+/**
+ * @throws AppError `not_found`: unknown, another team's, or not given to this installer
+ */
+export function openRun(actor: Actor, runId: string): OpenedRun {
+  const run = getRun(actor, runId);
+  const pinned = listReferredCables(actor, run.pinned);
+  const others = may(actor, "cables.readCatalogue") ? listUsableCables(actor) : [];
+  const ids = new Set(pinned.map(({ id }) => id));
+  const lines = [...pinned, ...others.filter(({ id }) => !ids.has(id))].map(lineOf);
+  return { run, lines, cannotEditBecause: refusal(actor, run) };
+}
