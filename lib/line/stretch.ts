@@ -74,30 +74,45 @@ function alongBundle(waves: LineWave[]): Stretch {
   };
 }
 
-/** Most places at which a bundle's current is looked at before refining. */
+/** Most places at which a bundle's current is looked at before refining; a longer bundle is looked at less densely. */
 const mostSamples = 20_000;
+/** With 32 places in each half wave a crest is at most 0.13 % above its highest place; all that may win are refined. */
+const mayWin = 0.995;
 
-/** Largest value over 0 to length: the highest of many samples, then golden section between its neighbours. */
+/** Largest value over 0 to length: every crest of many samples that may be the highest, then golden section. */
 function largestOf(value: (distance: number) => number, length: number, halfWaves: number): Peak {
   const count = Math.min(mostSamples, 64 + Math.ceil(32 * halfWaves));
-  let best = 0;
-  let highest = -Infinity;
-  for (let n = 0; n <= count; n++) {
-    const each = value((length * n) / count);
-    if (each > highest) {
-      highest = each;
-      best = n;
+  const samples = Float64Array.from({ length: count + 1 }, (_, n) => value((length * n) / count));
+  const highest = samples.reduce((most, each) => Math.max(most, each), 0);
+  let best: Peak = { value: -Infinity, at: 0 };
+  samples.forEach((each, n) => {
+    const isCrest = each >= (samples[n - 1] ?? -Infinity) && each >= (samples[n + 1] ?? -Infinity);
+    if (!isCrest || each < mayWin * highest) return;
+    if (each > best.value) best = { value: each, at: (length * n) / count };
+    const crest = goldenSection(value, (length * Math.max(0, n - 1)) / count, (length * Math.min(count, n + 1)) / count);
+    if (crest.value > best.value) best = crest;
+  });
+  return best;
+}
+
+const golden = (Math.sqrt(5) - 1) / 2;
+
+/** The crest between two places that have one between them; 50 steps narrow it by 3·10⁻¹¹. */
+function goldenSection(value: (distance: number) => number, from: number, to: number): Peak {
+  let [low, high] = [from, to];
+  let left = high - golden * (high - low);
+  let right = low + golden * (high - low);
+  let [atLeft, atRight] = [value(left), value(right)];
+  for (let n = 0; n < 50; n++) {
+    if (atLeft > atRight) {
+      [high, right, atRight] = [right, left, atLeft];
+      left = high - golden * (high - low);
+      atLeft = value(left);
+    } else {
+      [low, left, atLeft] = [left, right, atRight];
+      right = low + golden * (high - low);
+      atRight = value(right);
     }
   }
-  const golden = (Math.sqrt(5) - 1) / 2;
-  let low = (length * Math.max(0, best - 1)) / count;
-  let high = (length * Math.min(count, best + 1)) / count;
-  for (let n = 0; n < 60; n++) {
-    const left = high - golden * (high - low);
-    const right = low + golden * (high - low);
-    if (value(left) > value(right)) high = right;
-    else low = left;
-  }
-  const at = (low + high) / 2;
-  return value(at) > highest ? { value: value(at), at } : { value: highest, at: (length * best) / count };
+  return atLeft > atRight ? { value: atLeft, at: left } : { value: atRight, at: right };
 }
