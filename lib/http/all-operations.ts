@@ -1,10 +1,11 @@
 /** Every operation of the API, in the order of the description. */
 import * as account from "@/lib/auth/operations";
 import * as cables from "@/lib/cables/operations";
+import * as compute from "@/lib/compute/operations";
 import * as service from "@/lib/http/operations";
 import type { Operation } from "@/lib/http/operation";
 import * as runs from "@/lib/runs/operations";
 
-export const operations: Operation[] = [account, cables, runs, service].flatMap((noun) =>
+export const operations: Operation[] = [account, cables, runs, compute, service].flatMap((noun) =>
   Object.values<Operation>(noun),
 );

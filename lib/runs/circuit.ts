@@ -70,10 +70,21 @@ export function resolveCircuit(
   return faults.length > 0 ? { faults } : { circuit: { ...circuit, elements } };
 }
 
-/** A look-up by reference in a list of cables: with a revision that one, without it the one of the list. */
-export function findIn(lines: Line[]): (ref: CableRef) => Line | undefined {
+/** A look-up by reference in a list of lines; a reference without a revision finds the first of its cable. */
+export function findIn<L extends Line>(lines: L[]): (ref: CableRef) => L | undefined {
   return (ref) =>
     lines.find(
       (line) => line.cableId === ref.cableId && (ref.revision === undefined || line.revision === ref.revision),
     );
+}
+
+function referred({ model, cableId, revision }: Line): LineRef {
+  return cableId === undefined ? { model } : { cableId, revision };
+}
+
+/** An element of the engine as it is stored and sent: a line that came from the catalogue as a reference to it. */
+export function referredElement(element: EngineElement): Element {
+  if (element.kind === "cable" || element.kind === "stub") return { ...element, line: referred(element.line) };
+  if (element.kind !== "parallel") return element;
+  return { ...element, branches: element.branches.map((branch) => ({ ...branch, line: referred(branch.line) })) };
 }
