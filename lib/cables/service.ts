@@ -88,20 +88,31 @@ export interface CableReference {
   revision?: number;
 }
 
-/** The readable ones among the cables referred to, each in the revision asked for, in no particular order. */
-export function listReferredCables(actor: Actor, references: CableReference[]): Cable[] {
-  if (references.length === 0) return [];
+/**
+ * A look-up of cables by reference, among those the actor may read.
+ * @param references - all that will be looked up
+ */
+export function cableFinder(
+  actor: Actor,
+  references: CableReference[],
+): (reference: CableReference) => Cable | undefined {
   const ids = [...new Set(references.map((reference) => reference.cableId))];
-  const isAsked = ({ cable, revision }: WholeRow) =>
-    references.some(
-      (asked) => asked.cableId === cable.id && (asked.revision ?? cable.currentRevision) === revision.revision,
-    );
-  return selectWhole()
+  const rows = selectWhole()
     .innerJoin(cableRevisions, eq(cableRevisions.cableId, cables.id))
     .where(and(readable(actor), inArray(cables.id, ids)))
-    .all()
-    .filter(isAsked)
-    .map(toCable);
+    .all();
+  const byRevision = new Map(rows.map((row) => [`${row.cable.id} ${row.revision.revision}`, row]));
+  const currentRevisions = new Map(rows.map(({ cable }) => [cable.id, cable.currentRevision]));
+  return ({ cableId, revision }) => {
+    const row = byRevision.get(`${cableId} ${revision ?? currentRevisions.get(cableId)}`);
+    return row && toCable(row);
+  };
+}
+
+/** The cables referred to that the actor may read, in the order of the references. */
+export function listReferredCables(actor: Actor, references: CableReference[]): Cable[] {
+  const find = cableFinder(actor, references);
+  return references.flatMap((reference) => find(reference) ?? []);
 }
 
 function countUses(actor: Actor, ids: string[]): Map<string, number> {

@@ -3,7 +3,7 @@ import type { z } from "zod";
 import type { Actor } from "@/lib/auth/actor";
 import { requirePermission } from "@/lib/auth/permission";
 import type { Cable } from "@/lib/cables/schema";
-import { listReferredCables, listUsableCables } from "@/lib/cables/service";
+import { cableFinder, listUsableCables } from "@/lib/cables/service";
 import { lineAnswer, matchesAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
 import { profileFaults, sweepFaults } from "@/lib/compute/faults";
 import { frequenciesOf } from "@/lib/compute/frequencies";
@@ -11,7 +11,7 @@ import type { lineRequestSchema, MatchesRequest, ProfileRequest, SweepRequest } 
 import { AppError } from "@/lib/http/errors";
 import type { Circuit as EngineCircuit } from "@/lib/line/element";
 import type { MatchLine } from "@/lib/line/match/match-request";
-import { cableRefsOf, type CableRef, type CircuitFault, findIn, resolveCircuit } from "@/lib/runs/circuit";
+import { cableRefsOf, type CableRef, type CircuitFault, resolveCircuit } from "@/lib/runs/circuit";
 import type { Circuit, LineRef } from "@/lib/runs/schema";
 
 const mostOfCatalogue = 200;
@@ -36,15 +36,17 @@ function toLine({ id, revision, designation, model }: Cable): MatchLine {
   return { cableId: id, revision, label: designation, model };
 }
 
-/** A look-up of the references given among what the actor may read; without a revision, the current one. */
-function finder(actor: Actor, refs: CableRef[]): (ref: CableRef) => MatchLine | undefined {
-  const found = listReferredCables(actor, refs);
-  // An older revision and the current one may both have been asked for; the current one is the newest approved.
-  return findIn(found.map(toLine).sort((one, other) => (other.revision ?? 0) - (one.revision ?? 0)));
+/** A look-up of the references given as lines to compute with. */
+function lineFinder(actor: Actor, refs: CableRef[]): (ref: CableRef) => MatchLine | undefined {
+  const find = cableFinder(actor, refs);
+  return (ref) => {
+    const cable = find(ref);
+    return cable && toLine(cable);
+  };
 }
 
 function resolved(actor: Actor, circuit: Circuit): EngineCircuit {
-  const find = finder(
+  const find = lineFinder(
     actor,
     cableRefsOf(circuit).map(({ ref }) => ref),
   );
@@ -56,7 +58,7 @@ function resolved(actor: Actor, circuit: Circuit): EngineCircuit {
 
 /** The lines of references outside a circuit, in order. */
 function linesOf(actor: Actor, refs: { path: string; ref: LineRef }[]): MatchLine[] {
-  const find = finder(
+  const find = lineFinder(
     actor,
     refs.flatMap(({ ref }) => ("cableId" in ref ? [ref] : [])),
   );

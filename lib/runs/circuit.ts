@@ -70,14 +70,6 @@ export function resolveCircuit(
   return faults.length > 0 ? { faults } : { circuit: { ...circuit, elements } };
 }
 
-/** A look-up by reference in a list of lines; a reference without a revision finds the first of its cable. */
-export function findIn<L extends Line>(lines: L[]): (ref: CableRef) => L | undefined {
-  return (ref) =>
-    lines.find(
-      (line) => line.cableId === ref.cableId && (ref.revision === undefined || line.revision === ref.revision),
-    );
-}
-
 function referred({ model, cableId, revision }: Line): LineRef {
   return cableId === undefined ? { model } : { cableId, revision };
 }

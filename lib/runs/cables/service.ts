@@ -5,7 +5,7 @@ import { runCables } from "@/db/schema/runs";
 import type { Actor } from "@/lib/auth/actor";
 import { isUsable } from "@/lib/cables/model";
 import type { Cable, CableState } from "@/lib/cables/schema";
-import { listReferredCables } from "@/lib/cables/service";
+import { cableFinder, listReferredCables } from "@/lib/cables/service";
 import { AppError, type FieldErrors } from "@/lib/http/errors";
 import { cableRefsOf, type CableRef } from "@/lib/runs/circuit";
 import type { Circuit, Run } from "@/lib/runs/schema";
@@ -38,16 +38,14 @@ function asked(ref: CableRef, pinned: Pinned): CableRef {
  */
 export function pinCables(actor: Actor, circuit: Circuit, pinned: Pinned): Pinned {
   const refs = cableRefsOf(circuit).map(({ path, ref }) => ({ path, ref: asked(ref, pinned) }));
-  const found = listReferredCables(
+  const find = cableFinder(
     actor,
     refs.map(({ ref }) => ref),
   );
   const fields: FieldErrors = {};
   const pins = new Map<string, Pinned[number]>();
   for (const { path, ref } of refs) {
-    const cable = found.find(
-      (one) => one.id === ref.cableId && (ref.revision === undefined || one.revision === ref.revision),
-    );
+    const cable = find(ref);
     const isPinned = pinned.some((pin) => pin.cableId === cable?.id && pin.revision === cable.revision);
     if (!cable)
       fields[`circuit.${path}.cableId`] = ["There is no such cable, or no such revision of it, in the catalogue."];
