@@ -14,8 +14,6 @@ interface Wish extends PlacedLabel {
   rank: number;
 }
 
-const gapPx = 14;
-
 /** Estimated widths: Commissioner at 13 px semibold, Spline Sans Mono and Commissioner at 11 px. */
 export function nameWidth(text: string): number {
   return text.length * 7.1;
@@ -26,7 +24,7 @@ export function figuresWidth(figures: readonly PieceFigure[] = []): number {
 }
 
 /** Moves wishes apart between two edges, dropping the last in rank until the rest fit. Order along the line is kept. */
-export function spread(wishes: readonly Wish[], fromX: number, toX: number): PlacedLabel[] {
+export function spread(wishes: readonly Wish[], fromX: number, toX: number, gapPx = 14): PlacedLabel[] {
   const kept = [...wishes].sort((a, b) => a.x - b.x);
   const room = toX - fromX;
   const taken = () => kept.reduce((sum, wish) => sum + wish.width + gapPx, -gapPx);

@@ -1,41 +1,71 @@
-/** A range on one log axis with a dot at one value in it: the loss of a cable from 10 MHz to 1 GHz, and at the chosen frequency. */
-import { axisScale } from "@/components/plot/axes";
+import { scaleLog } from "d3-scale";
 
 interface RangeBarProps {
-  domain: readonly [number, number];
-  /** grid lines, values of the axis */
-  marks: readonly number[];
-  from: number;
-  to: number;
-  dot: number | null;
-  width: number;
-  height: number;
+  /** ends of the bar, above 0 */
+  range: readonly [number, number];
+  /** the dot; null without one */
+  at: number | null;
+  /** ends of the axis; the same for every row of a list */
+  domain?: readonly [number, number];
+  /** what a screen reader says */
+  name?: string;
+  width?: number;
+  height?: number;
 }
 
-export function RangeBar({ domain, marks, from, to, dot, width, height }: RangeBarProps) {
-  const x = axisScale("log", domain, [4, width - 4]);
-  const within = (value: number) => x(Math.min(domain[1], Math.max(domain[0], value)));
-  const middle = height / 2;
+const usualDomain = [0.3, 100] as const;
+const ticks = [1, 10, 100];
+
+function placeOn(domain: readonly [number, number], width: number) {
+  return scaleLog([...domain], [0, width]).clamp(true);
+}
+
+/** One bar on a log axis with a dot at the chosen place: how far a quantity reaches, and where it is now. */
+export function RangeBar({ range, at, domain = usualDomain, name, width = 112, height = 34 }: RangeBarProps) {
+  const x = placeOn(domain, width);
+  const y = height / 2;
+  const [from, to] = [x(range[0]), x(range[1])];
   return (
-    <svg width={width} height={height} aria-hidden="true" className="block overflow-visible">
-      {marks.map((mark) => (
-        <path key={mark} d={`M${x(mark).toFixed(1)} 0V${height}`} stroke="var(--line)" />
+    <svg
+      width={width}
+      height={height}
+      role={name ? "img" : undefined}
+      aria-label={name}
+      aria-hidden={name ? undefined : true}
+      className="block overflow-visible"
+    >
+      {ticks.map((tick) => (
+        <path key={tick} d={`M${x(tick).toFixed(1)} 0V${height}`} stroke="var(--line)" />
       ))}
-      <rect
-        x={within(from)}
-        y={middle - 2}
-        width={Math.max(0, within(to) - within(from))}
-        height="4"
-        fill="var(--ghost)"
-      />
+      <path d={`M${from.toFixed(1)} ${y}H${to.toFixed(1)}`} stroke="var(--ghost)" strokeWidth="5" />
       <path
-        d={`M${within(from).toFixed(1)} ${middle - 4}v8M${within(to).toFixed(1)} ${middle - 4}v8`}
+        d={`M${from.toFixed(1)} ${y - 5}v10M${to.toFixed(1)} ${y - 5}v10`}
         stroke="var(--ink-2)"
         strokeWidth="1.2"
       />
-      {dot !== null && (
-        <circle cx={within(dot)} cy={middle} r="4" fill="var(--copper)" stroke="var(--paper)" strokeWidth="1" />
+      {at !== null && at > 0 && (
+        <circle cx={x(at).toFixed(1)} cy={y} r="4" fill="var(--series-1)" stroke="var(--paper)" strokeWidth="1.2" />
       )}
+    </svg>
+  );
+}
+
+/** The figures of the axis, for the head of the column. */
+export function RangeBarScale({
+  domain = usualDomain,
+  width = 112,
+}: {
+  domain?: readonly [number, number];
+  width?: number;
+}) {
+  const x = placeOn(domain, width);
+  return (
+    <svg width={width} height="14" aria-hidden="true" className="block overflow-visible">
+      {ticks.map((tick) => (
+        <text key={tick} x={x(tick)} y="11" textAnchor="middle" className="figures">
+          {tick}
+        </text>
+      ))}
     </svg>
   );
 }

@@ -44,7 +44,7 @@ interface FrameProps extends Labelled {
 export function FieldFrame({ id, label, hint, error, isLabelHidden, className = "", children }: FrameProps) {
   return (
     <div className={`flex flex-col gap-0.5 ${className}`}>
-      <label htmlFor={id} className={isLabelHidden ? "sr-only" : "text-label text-ink-2"}>
+      <label htmlFor={id} className={isLabelHidden ? "sr-only" : "text-note text-ink-2"}>
         {label}
       </label>
       {children}

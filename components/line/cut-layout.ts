@@ -1,0 +1,98 @@
+/**
+ * Where the parts of a match stand in its small drawing. Lengths keep one proportion within a drawing; what would be
+ * too long is cut short with a break mark.
+ */
+import type { Element } from "@/lib/line/element";
+
+export interface CutItem<L> {
+  element: Element<L>;
+  /** px along the line */
+  fromX: number;
+  toX: number;
+}
+
+export interface StubHang {
+  isFolded: boolean;
+  /** px drawn */
+  lengthPx: number;
+  isBroken: boolean;
+}
+
+export interface CutLayout<L> {
+  items: CutItem<L>[];
+  /** px per metre of this drawing */
+  pxPerM: number;
+  /** where the match begins; the run's own cable comes up to here */
+  startX: number;
+}
+
+export const cutFrame = { width: 334, height: 128, axisY: 52, loadX: 294, leadX: 10 };
+
+const mostPxPerM = 390;
+const roomPx = 205;
+const leastCablePx = 26;
+const mostHangPx = 52;
+const gapPx = 10;
+
+function lengthOf<L>(element: Element<L>): number {
+  if (element.kind === "cable" || element.kind === "stub") return element.lengthM;
+  return element.kind === "parallel" ? (element.branches[0]?.lengthM ?? 0) : 0;
+}
+
+const symbolPx: Partial<Record<Element["kind"], number>> = {
+  stub: 12,
+  part: 46,
+  pad: 62,
+  joint: 7,
+  transformer: 44,
+  shunt: 24,
+};
+
+function widthOf<L>(element: Element<L>, pxPerM: number): number {
+  if (element.kind === "cable" || element.kind === "parallel")
+    return Math.max(leastCablePx, lengthOf(element) * pxPerM);
+  if (element.kind === "part" && element.connection === "shunt") return 24;
+  return symbolPx[element.kind] ?? 0;
+}
+
+/** The scale at which cables, parts and the longest stub all fit. */
+function scaleOf<L>(elements: readonly Element<L>[]): number {
+  const along = elements
+    .filter((e) => e.kind === "cable" || e.kind === "parallel")
+    .reduce((sum, e) => sum + lengthOf(e), 0);
+  const symbols = elements.reduce(
+    (sum, e) => sum + (e.kind === "cable" || e.kind === "parallel" ? 0 : widthOf(e, 0) + gapPx),
+    0,
+  );
+  const stub = Math.max(0, ...elements.map((e) => (e.kind === "stub" ? lengthOf(e) : 0)));
+  const room = Math.max(40, roomPx - symbols);
+  return Math.min(mostPxPerM, along > 0 ? room / along : Infinity, stub > 0 ? 150 / stub : Infinity);
+}
+
+/** @param elements - from source to load, as the engine has them */
+export function cutLayout<L>(elements: readonly Element<L>[]): CutLayout<L> {
+  const pxPerM = scaleOf(elements);
+  let x = cutFrame.loadX;
+  const items: CutItem<L>[] = [];
+  for (const element of elements.toReversed()) {
+    const width = widthOf(element, pxPerM);
+    // A part beside the load or beside another part needs a little wire.
+    const needsWire = element.kind === "part" || element.kind === "pad" || element.kind === "transformer";
+    const gap = needsWire ? gapPx : 0;
+    items.unshift({ element, fromX: x - gap / 2 - width, toX: x - gap / 2 });
+    x -= width + gap;
+  }
+  return { items, pxPerM, startX: x };
+}
+
+/** How a stub is drawn: folded back under the line when it is long and has the room, else hanging. */
+export function hangOf<L>(layout: CutLayout<L>, index: number): StubHang {
+  const item = layout.items[index];
+  if (item?.element.kind !== "stub") return { isFolded: false, lengthPx: 0, isBroken: false };
+  const wanted = item.element.lengthM * layout.pxPerM;
+  const isFirst = layout.items.findIndex(({ element }) => element.kind === "stub") === index;
+  const middle = (item.fromX + item.toX) / 2;
+  if (wanted > mostHangPx && isFirst && wanted < middle - 28)
+    return { isFolded: true, lengthPx: wanted, isBroken: false };
+  return { isFolded: false, lengthPx: Math.max(14, Math.min(mostHangPx, wanted)), isBroken: wanted > mostHangPx };
+}
