@@ -63,7 +63,7 @@ function publishedOf(id: string): PublishedL & { rel: number } {
   const base = { rel, frequency: inputs.f_Hz!, target: inputs.Z0_ohm ?? inputs.R_low_ohm! };
   if (id === "D92") {
     const [one, two] = [expected.sol1!, expected.sol2!];
-    const wanted = [
+    const wanted: Record<string, number>[] = [
       { Cp_pF: one.C_pF!, Ls_nH: one.L_nH! },
       { Lp_nH: two.L_nH!, Cs_pF: two.C_pF! },
     ];

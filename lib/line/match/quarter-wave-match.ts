@@ -1,0 +1,103 @@
+import { abs, type Complex } from "@/lib/line/complex";
+import type { Element } from "@/lib/line/element";
+import { lengthNotes, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
+import type { Outcome, Proposal } from "@/lib/line/match/match-request";
+import { realPoints, sectionImpedance } from "@/lib/line/match/quarter-wave";
+import { along, loadPair } from "@/lib/line/match/pair";
+import { trimNotes } from "@/lib/line/match/trim";
+import { decibelText, lengthText, listText, ohmText } from "@/lib/line/match/wording";
+import { portReflection, returnLossDb } from "@/lib/line/reflection";
+
+interface Place {
+  /** metre of feeder, load to section */
+  distance: number;
+  /** the section's ideal impedance here, ohm */
+  neededOhm: number;
+}
+
+interface Try extends Place {
+  line: DesignLine;
+  returnLossDb: number;
+}
+
+/**
+ * A quarter-wave section where the feeder shows a resistance: at the load itself where that is one, else at the extremes
+ * of voltage. The section is a real line, electrically a quarter wave by its own phase; its distance is solved again so
+ * that the loss leaves no reactance, and what it reaches at the design frequency decides whether it is a match.
+ */
+export function quarterWaveMatches(point: DesignPoint): Outcome {
+  const { feeder, lines, request } = point;
+  if (!feeder || lines.length === 0) return { proposals: [], why: "No line was named to cut a section from." };
+  const places = realPoints(point.load, feeder.zc.re).map(({ distance, resistanceOhm }) => ({
+    distance: distance * feeder.wavelengthM,
+    neededOhm: sectionImpedance(request.targetOhm, resistanceOhm),
+  }));
+  if (places.length === 0) places.push({ distance: 0, neededOhm: sectionImpedance(request.targetOhm, point.load.re) });
+  const tries = lines.flatMap((line) => places.map((place) => tryLine(point, feeder, line, place)));
+  const reached = tries.filter((each) => each.returnLossDb >= request.returnLossDb);
+  return {
+    proposals: reached.map((each) => proposal(point, feeder, each)),
+    why: reached.length === 0 ? reason(point, places, tries) : "",
+  };
+}
+
+function tryLine(point: DesignPoint, feeder: DesignLine, line: DesignLine, place: Place): Try {
+  const reflection = (distance: number): Complex => {
+    const { v, i } = along(along(loadPair(point), feeder, distance), line, line.wavelengthM / 4);
+    return portReflection(v, i, { re: point.request.targetOhm, im: 0 });
+  };
+  const halfWave = feeder.wavelengthM / 2;
+  const solved = withoutReactance((distance) => reflection(distance).im, place.distance, halfWave / 50);
+  // Loss can push the place just past the load; the load itself is then the nearest that can be built.
+  const distance = solved < 0 ? (place.distance < halfWave / 50 ? 0 : solved + halfWave) : solved;
+  return { ...place, distance, line, returnLossDb: returnLossDb(abs(reflection(distance))) };
+}
+
+/** The distance near the start at which the reflection's imaginary part is zero, by secants; the start where none is. */
+function withoutReactance(imaginary: (distance: number) => number, start: number, reach: number): number {
+  let [a, b] = [start, start + reach / 100];
+  let [atA, atB] = [imaginary(a), imaginary(b)];
+  for (let iteration = 0; iteration < 40 && Math.abs(atA) > 1e-14 && atA !== atB; iteration++) {
+    const next = a - (atA * (b - a)) / (atB - atA);
+    if (!(Math.abs(next - start) < reach)) return start;
+    [b, atB] = [a, atA];
+    a = next;
+    atA = imaginary(a);
+  }
+  return a;
+}
+
+function proposal(point: DesignPoint, feeder: DesignLine, { line, distance, neededOhm }: Try): Proposal {
+  const length = line.wavelengthM / 4;
+  const build = (lengthM: number): Element[] => [
+    { kind: "cable", name: "Quarter-wave section", line: line.line, lengthM },
+    ...(distance > 0
+      ? [{ kind: "cable" as const, name: "Section to load", line: feeder.line, lengthM: distance }]
+      : []),
+  ];
+  const where = distance > 0 ? `${lengthText(distance)} from the load` : "at the load";
+  return {
+    method: "quarterWave",
+    title: `Quarter-wave section, ${lengthText(length)} of ${line.label} ${where}`,
+    elements: build(length),
+    needs: [
+      "2 joints",
+      `${lengthText(length)} of ${line.label} for the section`,
+      ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to the load`] : []),
+    ],
+    notes: [
+      `An exact section here would be ${ohmText(neededOhm)}; ${line.label} is ${ohmText(line.zc.re)}.`,
+      ...lengthNotes(point, distance > 0 ? [line, feeder] : [line]),
+      ...trimNotes(point, "section", build, length),
+    ],
+  };
+}
+
+function reason(point: DesignPoint, places: Place[], tries: Try[]): string {
+  const needed = places.map(
+    (each) =>
+      `${ohmText(each.neededOhm)} ${each.distance > 0 ? `${lengthText(each.distance)} from the load` : "at the load"}`,
+  );
+  const best = tries.reduce((a, b) => (b.returnLossDb > a.returnLossDb ? b : a));
+  return `A quarter-wave section needs ${listText(needed, "or")}; of the lines given, ${best.line.label} of ${ohmText(best.line.zc.re)} comes nearest and reaches ${decibelText(best.returnLossDb)}, not ${decibelText(point.request.returnLossDb)}.`;
+}

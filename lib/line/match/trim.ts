@@ -1,0 +1,48 @@
+import type { Element } from "@/lib/line/element";
+import { knownRange, type DesignPoint } from "@/lib/line/match/design-point";
+import { reflectionOf } from "@/lib/line/match/response";
+import { figure, lengthText } from "@/lib/line/match/wording";
+
+/** Fraction of the design frequency over which the reflection's slope is taken. */
+const beside = 1e-5;
+
+/**
+ * How the best frequency moves when a length is trimmed, hertz per metre taken off, to first order: with Γ = 0 at the
+ * design frequency, |Γf·δf + Γl·δl| is least at δf = −Re(Γf*·Γl)/|Γf|²·δl.
+ * @param build - the network with its trimmed length, metre, more than 0
+ * @returns undefined where the reflection does not depend on frequency
+ */
+export function trimSlope(
+  point: DesignPoint,
+  build: (length: number) => Element[],
+  length: number,
+): number | undefined {
+  const { designHz } = point.request;
+  const [df, dl] = [beside * designHz, 1e-4 * length];
+  const up = reflectionOf(build(length), point.request, designHz + df);
+  const down = reflectionOf(build(length), point.request, designHz - df);
+  const long = reflectionOf(build(length + dl), point.request, designHz);
+  const short = reflectionOf(build(length - dl), point.request, designHz);
+  const byF = { re: (up.re - down.re) / (2 * df), im: (up.im - down.im) / (2 * df) };
+  const byL = { re: (long.re - short.re) / (2 * dl), im: (long.im - short.im) / (2 * dl) };
+  const size = byF.re * byF.re + byF.im * byF.im;
+  const slope = (byF.re * byL.re + byF.im * byL.im) / size;
+  return Number.isFinite(slope) ? slope : undefined;
+}
+
+/** The note that says which way to trim; none where the load is not known beside the design frequency. */
+export function trimNotes(
+  point: DesignPoint,
+  what: string,
+  build: (length: number) => Element[],
+  length: number,
+): string[] {
+  const { knownHz } = knownRange(point.request);
+  const { designHz } = point.request;
+  if (length === 0 || designHz * (1 - beside) < knownHz[0] || designHz * (1 + beside) > knownHz[1]) return [];
+  const slope = trimSlope(point, build, length);
+  if (slope === undefined || slope === 0) return [];
+  const off = length < 0.5 ? 0.001 : 0.01;
+  const moved = figure(Math.abs(slope) * off, "Hz");
+  return [`${lengthText(off)} off the ${what} moves the best frequency ${slope > 0 ? "up" : "down"} by ${moved}.`];
+}
