@@ -193,7 +193,8 @@ function fillLosses(result: Sweep, k: number, at: Walk, reference: number): void
   for (let n = scales.length - 1; n >= 0; n--) {
     const scale = scales[n]!;
     const entering = powerThrough(planes[n]!, power * Math.exp(-2 * scale), reference);
-    const lossDb = power > 0 ? 10 * Math.log10(entering / power) + scale * DB_PER_NEPER : Infinity;
+    const lossDb =
+      power > 0 && scale < Infinity ? Math.max(0, 10 * Math.log10(entering / power) + scale * DB_PER_NEPER) : Infinity;
     result.elementLossDb[n]![k] = lossDb;
     runLossDb += lossDb;
     power = entering;

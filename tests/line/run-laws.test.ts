@@ -1,0 +1,221 @@
+import fc from "fast-check";
+import { describe, expect, test } from "vitest";
+import { modelFromNominal } from "@/lib/line/cable";
+import type { Circuit, Element, Plane, Termination } from "@/lib/line/element";
+import { sweep, type Sweep } from "@/lib/line/run";
+import { anyElement, anyFrequency, anyRun } from "@/tests/support/arbitrary-run";
+
+const rope = modelFromNominal({ z0: 50, velocityFactor: 0.66, lossTangent: 3e-4, conductors: [{ form: "round", r0OhmPerM: 0.05, skinCornerRadPerS: 2.4e5 }] });
+const cable = (lengthM: number): Element => ({ kind: "cable", line: { model: rope }, lengthM });
+const ohm = (reOhm: number, imOhm = 0): Termination => ({ kind: "constant", reOhm, imOhm });
+const run = (elements: Element[], load: Termination = ohm(22, -35), source: Termination = ohm(50)): Circuit => ({ source: source as Circuit["source"], elements, load });
+
+const numbers = (result: Sweep) => [
+  ...result.inputImpedance.re, ...result.inputImpedance.im, ...result.returnLossDb, ...result.transducerLossDb, ...result.matchedLossDb,
+  ...result.mismatchLossDb, ...result.extraLossDb, ...result.groupDelayS, ...result.loadVoltage.re, ...result.elementLossDb.flatMap((each) => [...each]),
+];
+
+test("a passive run never reflects more than all, and its losses add up", () => {
+  fc.assert(
+    fc.property(anyRun, anyFrequency, (circuit, frequency) => {
+      const got = sweep(circuit, [frequency]);
+      expect(Math.hypot(got.reflection.re[0]!, got.reflection.im[0]!)).toBeLessThanOrEqual(1 + 1e-12);
+      const elements = got.elementLossDb.reduce((sum, [loss]) => sum + loss!, 0);
+      const run = got.transducerLossDb[0]! - got.mismatchLossDb[0]!;
+      expect(Math.abs(elements - run)).toBeLessThanOrEqual(1e-9 * (1 + got.transducerLossDb[0]!));
+      for (const [loss] of got.elementLossDb) expect(loss!).toBeGreaterThanOrEqual(0);
+      expect(got.extraLossDb[0]!).toBeCloseTo(run - got.matchedLossDb[0]!, 8);
+      // mismatch loss and reflection are two ways to one power
+      const magnitude = got.reflection.re[0]! ** 2 + got.reflection.im[0]! ** 2;
+      if (magnitude < 0.999) expect(got.mismatchLossDb[0]!).toBeCloseTo(-10 * Math.log10(1 - magnitude), 6);
+    }),
+    { numRuns: 400 },
+  );
+});
+
+test("a run and its mirror between swapped ends lose the same", () => {
+  fc.assert(
+    fc.property(fc.array(anyElement, { minLength: 1, maxLength: 5 }), fc.double({ min: 10, max: 300, noNaN: true }), fc.double({ min: -100, max: 100, noNaN: true }), anyFrequency, (elements, r, x, frequency) => {
+      const plain = elements.map((element): Element => (element.kind === "joint" ? { ...element, shuntF: 0 } : element));
+      const mirrored = [...plain].reverse().map((element): Element => {
+        if (element.kind === "pad") return { ...element, inputOhm: element.outputOhm, outputOhm: element.inputOhm };
+        if (element.kind === "transformer") return { ...element, turnsRatio: 1 / element.turnsRatio };
+        return element;
+      });
+      const there = sweep(run(plain, ohm(r, x)), [frequency]).transducerLossDb[0]!;
+      const back = sweep({ ...run(mirrored, ohm(50)), source: { kind: "constant", reOhm: r, imOhm: x } }, [frequency]).transducerLossDb[0]!;
+      // a branch near resonance shorts the run but for rounding: a few digits of such a loss are noise
+      expect(Math.abs(there - back)).toBeLessThanOrEqual(1e-6 + 1e-9 * there);
+    }),
+    { numRuns: 300 },
+  );
+});
+
+test("a cable cut anywhere gives the same run", () => {
+  fc.assert(
+    fc.property(fc.double({ min: 0.01, max: 200, noNaN: true }), fc.double({ min: 0, max: 1, noNaN: true }), anyFrequency, (lengthM, part, frequency) => {
+      const whole = sweep(run([cable(lengthM)]), [frequency]);
+      const cut = sweep(run([cable(lengthM * part), cable(lengthM * (1 - part))]), [frequency]);
+      numbers({ ...whole, elementLossDb: [] }).forEach((value, k) => {
+        const other = numbers({ ...cut, elementLossDb: [] })[k]!;
+        expect(Math.abs(value - other)).toBeLessThanOrEqual(1e-9 * (Math.abs(value) + 1));
+      });
+      expect(cut.elementLossDb[0]![0]! + cut.elementLossDb[1]![0]!).toBeCloseTo(whole.elementLossDb[0]![0]!, 8);
+    }),
+  );
+});
+
+describe("planes", () => {
+  test("at any plane the impedance is that of the rest of the run alone", () => {
+    fc.assert(
+      fc.property(fc.array(anyElement, { minLength: 1, maxLength: 5 }), fc.nat(4), anyFrequency, (elements, at, frequency) => {
+        const beforeElement = at % elements.length;
+        const [plane] = sweep(run(elements), [frequency], { planes: [{ beforeElement }] }).atPlanes;
+        const rest = sweep(run(elements.slice(beforeElement)), [frequency]);
+        expect(plane!.impedance.re[0]).toBe(rest.inputImpedance.re[0]);
+        expect(plane!.impedance.im[0]).toBe(rest.inputImpedance.im[0]);
+        expect(plane!.returnLossDb[0]).toBeCloseTo(rest.returnLossDb[0]!, 9);
+      }),
+    );
+  });
+
+  test("are in the order asked, and the source plane and the load plane are the run's own", () => {
+    const planes: Plane[] = [{ at: "load" }, { beforeElement: 1 }, { at: "source" }, { beforeElement: 0 }];
+    const got = sweep(run([cable(3), cable(4)], ohm(75), ohm(50, 20)), [1e6, 2e7], { planes });
+    expect(got.atPlanes.map(({ plane }) => plane)).toEqual(planes);
+    const [load, , source, first] = got.atPlanes;
+    expect(load!.reflection).toEqual(got.loadReflection);
+    expect(load!.impedance.re[0]).toBe(75);
+    // at the source plane the reflection is that of power waves, whichever way the plane is named
+    for (const each of [source!, first!]) {
+      expect(each.reflection).toEqual(got.reflection);
+      expect(each.vswr).toEqual(got.vswr);
+    }
+  });
+
+  test("elsewhere reflect in the circuit's reference, the source's resistance if none is given", () => {
+    const [plane] = sweep(run([cable(0)], ohm(75), ohm(50, 20)), [1e6], { planes: [{ at: "load" }] }).atPlanes;
+    expect(plane!.reflection.re[0]).toBeCloseTo(0.2, 12);
+    const named = sweep({ ...run([cable(0)], ohm(75), ohm(50, 20)), referenceOhm: 75 }, [1e6], { planes: [{ at: "load" }] });
+    expect(named.atPlanes[0]!.returnLossDb[0]).toBe(Infinity);
+    expect(named.loadReflection.re[0]).toBe(0);
+  });
+});
+
+describe("group delay", () => {
+  test("is the derivative of the load voltage's phase, for any run", () => {
+    fc.assert(
+      fc.property(anyRun, fc.double({ min: 5, max: 8, noNaN: true }), (circuit, decade) => {
+        const frequency = 10 ** decade;
+        const steps = [-2e-6, -1e-6, 0, 1e-6, 2e-6];
+        const { groupDelayS, loadVoltage } = sweep(circuit, steps.map((step) => frequency * (1 + step)));
+        const phase = (k: number) => Math.atan2(loadVoltage.im[k]!, loadVoltage.re[k]!);
+        const delayOver = (from: number, to: number) => {
+          const turn = phase(to) - phase(from);
+          return -(turn - 2 * Math.PI * Math.round(turn / (2 * Math.PI))) / (2 * Math.PI * (steps[to]! - steps[from]!));
+        };
+        fc.pre(Math.hypot(loadVoltage.re[2]!, loadVoltage.im[2]!) > 1e-12);
+        const [wide, narrow] = [delayOver(0, 4), delayOver(1, 3)];
+        // what a difference misses is told by halving its step; the rest is the phase's rounding over so small a step
+        const allowed = Math.abs(wide - narrow) + 1e-14 * (1e6 + groupDelayS[2]! ** 2 * frequency ** 2);
+        expect(Math.abs(groupDelayS[2]! * frequency - narrow)).toBeLessThanOrEqual(allowed + 1e-8);
+      }),
+      { numRuns: 300 },
+    );
+  });
+
+  test("of a matched lossless line is its length over its velocity", () => {
+    const model = modelFromNominal({ z0: 50, velocityFactor: 0.66 });
+    const got = sweep(run([{ kind: "cable", line: { model }, lengthM: 100 }], ohm(50)), [1e4, 1e6, 1e9]);
+    for (const delay of got.groupDelayS) expect(delay / (100 / (0.66 * 299_792_458))).toBeCloseTo(1, 12);
+  });
+
+  test("into a short is that of the current", () => {
+    const model = modelFromNominal({ z0: 50, velocityFactor: 0.66 });
+    const got = sweep(run([{ kind: "cable", line: { model }, lengthM: 10 }], { kind: "short" }), [3.3e6]);
+    expect(got.groupDelayS[0]! / (10 / (0.66 * 299_792_458))).toBeCloseTo(1, 12);
+    expect(got.loadVoltage.re[0]).toBe(0);
+  });
+});
+
+describe("limits", () => {
+  test("a run of 500 dB and one of 500 000 dB have finite figures that are the sum of their parts", () => {
+    for (const lengthM of [1000, 1e6]) {
+      const got = sweep(run([cable(lengthM)], ohm(50)), [1e9]);
+      expect(numbers(got).every(Number.isFinite)).toBe(true);
+      expect(got.transducerLossDb[0]!).toBeGreaterThan(500);
+      expect(got.transducerLossDb[0]! / got.matchedLossDb[0]!).toBeCloseTo(1, 3);
+    }
+  });
+
+  test("200 pads of 200 dB do not overflow", () => {
+    const pads = Array.from({ length: 200 }, (): Element => ({ kind: "pad", lossDb: 200, inputOhm: 50, outputOhm: 50 }));
+    const got = sweep(run(pads, ohm(50)), [1e6]);
+    expect(got.transducerLossDb[0]).toBeCloseTo(40_000, 6);
+    expect(got.mismatchLossDb[0]).toBeCloseTo(0, 12);
+  });
+
+  test("many transformers in a row do not overflow", () => {
+    const up = Array.from({ length: 20 }, (): Element => ({ kind: "transformer", turnsRatio: 1e6 }));
+    const down = up.map((): Element => ({ kind: "transformer", turnsRatio: 1e-6 }));
+    const got = sweep(run([...up, ...down], ohm(50)), [1e6]);
+    expect(got.transducerLossDb[0]).toBeCloseTo(0, 9);
+  });
+
+  test("a run without elements is its load", () => {
+    const got = sweep(run([], ohm(100)), [1e6]);
+    expect(got.inputImpedance.re[0]).toBe(100);
+    expect(got.transducerLossDb[0]).toBeCloseTo(0.5115, 4);
+    expect(got.matchedLossDb[0]).toBe(0);
+    expect(got.loadVoltage.re[0]).toBeCloseTo(2 / 3, 14);
+    expect(got.groupDelayS[0]).toBeCloseTo(0, 15);
+  });
+
+  test("a perfect match, an open and a short are their limits, never NaN where there is one", () => {
+    const match = sweep(run([], ohm(50)), [1e6]);
+    expect([match.returnLossDb[0], match.vswr[0], match.mismatchLossDb[0]]).toEqual([Infinity, 1, 0]);
+    for (const kind of ["open", "short"] as const) {
+      const got = sweep(run([{ kind: "cable", line: { model: modelFromNominal({ z0: 50, velocityFactor: 1 }) }, lengthM: 3 }], { kind }), [7e6], { planes: [{ at: "load" }] });
+      expect(got.returnLossDb[0]).toBeCloseTo(0, 12);
+      expect([got.vswr[0], got.transducerLossDb[0], got.mismatchLossDb[0], got.extraLossDb[0], got.elementLossDb[0]![0]]).toEqual(Array(5).fill(Infinity));
+      expect(got.atPlanes[0]!.impedance.re[0]).toBe(kind === "open" ? Infinity : 0);
+      expect(got.loadReflection.re[0]).toBe(kind === "open" ? 1 : -1);
+    }
+  });
+
+  test("a dead short on the way lets nothing through and is seen as a short", () => {
+    const got = sweep(run([{ kind: "shunt", termination: { kind: "short" } }, cable(5)]), [1e6]);
+    expect(got.inputImpedance.re[0]).toBeCloseTo(0, 15);
+    expect(got.inputImpedance.im[0]).toBeCloseTo(0, 15);
+    expect([got.reflection.re[0], got.transducerLossDb[0], got.elementLossDb[0]![0], got.loadVoltage.re[0]]).toEqual([-1, Infinity, Infinity, 0]);
+    expect(got.groupDelayS[0]).toBeNaN();
+  });
+
+  test("a source without resistance has no available power, but a run all the same", () => {
+    const got = sweep({ ...run([cable(10)]), source: { kind: "short" }, referenceOhm: 50 }, [1e7]);
+    expect([got.transducerLossDb[0], got.mismatchLossDb[0]]).toEqual([NaN, NaN]);
+    expect(got.extraLossDb[0]!).toBeGreaterThan(0);
+    expect(got.loadVoltage.re[0]! ** 2 + got.loadVoltage.im[0]! ** 2).toBeGreaterThan(0);
+  });
+});
+
+describe("refusals name function, argument and value", () => {
+  const circuit = run([cable(1)]);
+  test.each([
+    [() => sweep(circuit, [1e6, 0]), "sweep: frequencies must be positive, got 0"],
+    [() => sweep(circuit, [Infinity]), "sweep: frequencies must be positive, got Infinity"],
+    [() => sweep(circuit, [1e6], { planes: [{ beforeElement: 1 }] }), "sweep: beforeElement must be a whole number from 0 to 0, got 1"],
+    [() => sweep(circuit, [1e6], { planes: [{ beforeElement: 0.5 }] }), "sweep: beforeElement must be a whole number from 0 to 0, got 0.5"],
+    [() => sweep({ ...circuit, source: { kind: "short" } }, [1e6]), "sweep: referenceOhm is needed where the source has no resistance, got 0"],
+    [() => sweep({ ...circuit, source: { kind: "open" } }, [1e6]), "prepareRun: source must not be open"],
+    [() => sweep({ ...circuit, referenceOhm: -1 }, [1e6]), "prepareRun: referenceOhm must be positive, got -1"],
+    [() => sweep(run([cable(-1)]), [1e6]), "lineSection: length must be at least 0, got -1"],
+    [() => sweep(run([{ kind: "cable", line: { model: rope }, lengthM: 1, paralleled: 1.5 }]), [1e6]), "lineSection: paralleled must be a whole number of at least 1, got 1.5"],
+    [() => sweep(run([{ kind: "parallel", branches: [] }]), [1e6]), "parallelSections: branches must not be empty"],
+    [() => sweep(run([{ kind: "parallel", branches: [{ line: { model: rope }, lengthM: 0 }] }]), [1e6]), "parallelSections: length must be positive, got 0"],
+    [() => sweep(run([{ kind: "transformer", turnsRatio: 0 }]), [1e6]), "transformerTwoPort: turnsRatio must be positive, got 0"],
+    [() => sweep(circuit, [1e6], { temperatureC: -300 }), "atTemperature: no positive resistivity at temperatureC = -300"],
+  ])("%#", (call, message) => {
+    expect(call).toThrow(new RangeError(message));
+  });
+});
