@@ -1,7 +1,7 @@
 import type { Route } from "next";
 import Link from "next/link";
 import { SectionView } from "@/components/line/section-view";
-import { RangeBar } from "@/components/plot/range-bar";
+import { RangeBar, RangeBarScale } from "@/components/plot/range-bar";
 import { StateMark } from "@/components/ui/state-mark";
 import { Cell, HeadCell, RowHead, Table } from "@/components/ui/table";
 import { buildWords, stateWords } from "@/components/cables/words";
@@ -17,7 +17,6 @@ interface Props {
 /** px per millimetre on a desk: the thickest cable in common use still fits its row. */
 const mmToPx = 2.6;
 const barDomain = [0.1, 200] as const;
-const barMarks = [1, 10, 100];
 const barWidth = 118;
 
 function Scale() {
@@ -48,19 +47,7 @@ function Head({ lossAtHz }: { lossAtHz: number }) {
         </HeadCell>
         <HeadCell className="w-34 pl-5 folded:hidden">
           10 MHz to 1 GHz
-          <svg width={barWidth} height="14" aria-hidden="true" className="block overflow-visible">
-            {barMarks.map((mark) => (
-              <text
-                key={mark}
-                x={4 + ((Math.log10(mark) + 1) / Math.log10(2000)) * (barWidth - 8)}
-                y="11"
-                textAnchor="middle"
-                className="figures"
-              >
-                {mark}
-              </text>
-            ))}
-          </svg>
+          <RangeBarScale domain={barDomain} width={barWidth} />
         </HeadCell>
         <HeadCell isRight className="folded:hidden">
           Delay{unit("ns/m")}
@@ -128,15 +115,7 @@ function CableRow({ item, lossAtHz, canStartRun }: { item: CableItem; lossAtHz: 
         <span className="unit hidden phone:block phone:text-note">dB/100 m at {inWords(frequency(lossAtHz))}</span>
       </Cell>
       <Cell className="pl-5 folded:hidden">
-        <RangeBar
-          domain={barDomain}
-          marks={barMarks}
-          from={low}
-          to={high}
-          dot={item.lossDbPer100m}
-          width={barWidth}
-          height={30}
-        />
+        <RangeBar range={[low, high]} at={item.lossDbPer100m} domain={barDomain} width={barWidth} height={30} />
       </Cell>
       <Cell isRight className="folded:hidden">
         {figure(item.delaySPerM * 1e9, 2)}

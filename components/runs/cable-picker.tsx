@@ -14,10 +14,12 @@ interface Props {
   cableId: string;
   choose: (cableId: string) => void;
   label?: string;
+  /** choosing changes nothing in the run, so readers may */
+  isAlwaysOpen?: boolean;
 }
 
 /** The cable of a piece: its name in a field; opened, a search of the catalogue with each cable drawn end-on. */
-export function CablePicker({ cableId, choose, label = "Cable" }: Props) {
+export function CablePicker({ cableId, choose, label = "Cable", isAlwaysOpen = false }: Props) {
   const { lines, addLine, canEdit } = useRunEditor();
   const [isOpen, setOpen] = useState(false);
   const [trouble, setTrouble] = useState<string | null>(null);
@@ -56,7 +58,7 @@ export function CablePicker({ cableId, choose, label = "Cable" }: Props) {
         aria-labelledby={id}
         aria-describedby={`${id}-value`}
         aria-expanded={isOpen}
-        disabled={!canEdit}
+        disabled={!canEdit && !isAlwaysOpen}
         onClick={() => setOpen(!isOpen)}
         className={`${fieldEdge} ${fieldColours(false)} h-7.25 justify-between px-2 text-body phone:h-11 phone:text-section`}
       >

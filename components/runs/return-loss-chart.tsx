@@ -5,7 +5,7 @@ import { BandConditions } from "@/components/runs/conditions";
 import { useRunEditor } from "@/components/runs/run-editor";
 import { TargetList } from "@/components/runs/target-list";
 import { ChartFrame } from "@/components/plot/chart-frame";
-import { digits, frequency, inWords } from "@/lib/format/quantity";
+import { digits, frequency, inWords, megahertz } from "@/lib/format/quantity";
 import type { Analysis } from "@/lib/runs/analysis";
 import { plotted, returnLossDomain, thinned } from "@/lib/runs/curves";
 import { bandWords } from "@/lib/runs/sentences";
@@ -14,9 +14,6 @@ const SweepPlot = dynamic(() => import("@/components/plot/sweep-plot").then((fil
   ssr: false,
   loading: () => <div className="h-72.5" />,
 });
-
-export const megahertz = (value: number) => digits(value / 1e6, decimalsOf(value / 1e6));
-const decimalsOf = (value: number) => Math.min(3, Number(value.toFixed(3)).toString().split(".")[1]?.length ?? 0);
 
 /** Return loss over the band at both ends of the run, with the target. */
 export function ReturnLossChart({ analysis }: { analysis: Analysis }) {

@@ -127,6 +127,12 @@ export function frequency(value: number | null | undefined): Figure {
   return { digits: digits(short, decimals), unit: unit.symbol, spoken: unit.spoken };
 }
 
+/** Digits of a frequency in MHz, to the kilohertz where it needs them: for axes and tables whose head says MHz. */
+export function megahertz(value: number): string {
+  const short = Number((value / 1e6).toFixed(3));
+  return digits(short, short.toString().split(".")[1]?.length ?? 0);
+}
+
 export function decibels(value: number | null | undefined, decimals = 2): Figure {
   return { digits: digits(value, decimals), unit: "dB", spoken: "decibels" };
 }

@@ -1,0 +1,156 @@
+/** Ways to match a run's load with the team's cables, and keeping one in the run. Pure. */
+import type { CableLine } from "@/lib/cables/line";
+import type { Element as EngineElement, Termination } from "@/lib/line/element";
+import { findMatches } from "@/lib/line/match/find-matches";
+import type { Candidate, MatchLine, Refusal } from "@/lib/line/match/match-request";
+import { rank } from "@/lib/line/match/rank";
+import { sweep } from "@/lib/line/run";
+import type { Element, LineRef } from "@/lib/runs/schema";
+
+export interface MatchAsked {
+  load: Termination;
+  targetOhm: number;
+  designHz: number;
+  bandHz: readonly [number, number];
+  returnLossDb: number;
+  coilQ: number | undefined;
+  capacitorQ: number | undefined;
+  temperatureC: number;
+}
+
+export interface MatchesFound {
+  candidates: Candidate[];
+  refused: Refusal[];
+}
+
+function matchLine({ cableId, revision, designation, model }: CableLine): MatchLine {
+  return { cableId, revision, label: designation, model };
+}
+
+/**
+ * Stubs and paralleled lengths are cut from one cable, sections from whatever cable has the impedance: so stubs do not
+ * come once for every cable there is.
+ * @param feeder - the line between load and network
+ * @param stubLine - what stubs and paralleled lengths are cut from
+ * @param sectionLines - what may serve as a section
+ */
+export function matchesFor(
+  asked: MatchAsked,
+  feeder: CableLine,
+  stubLine: CableLine,
+  sectionLines: readonly CableLine[],
+): MatchesFound {
+  const { coilQ, capacitorQ, ...rest } = asked;
+  const common = { ...rest, feeder: matchLine(feeder), partQ: { coilQ, capacitorQ } };
+  const cut = findMatches({
+    ...common,
+    lines: [matchLine(stubLine)],
+    methods: ["shuntStub", "seriesStub", "parallelCables", "lSection"],
+  });
+  const sections = findMatches({
+    ...common,
+    lines: sectionLines.map(matchLine),
+    methods: ["quarterWave", "seriesSection"],
+  });
+  return {
+    candidates: rank([...cut.candidates, ...sections.candidates], asked.returnLossDb),
+    refused: [...cut.refused, ...sections.refused],
+  };
+}
+
+export interface CandidateCurve {
+  returnLossDb: Float64Array;
+  reflection: { re: Float64Array; im: Float64Array };
+}
+
+/** A candidate over frequency, seen from its target side. Without elements it is the load alone. */
+export function candidateCurve(
+  elements: readonly EngineElement[],
+  asked: MatchAsked,
+  frequencies: ArrayLike<number>,
+): CandidateCurve {
+  const source = { kind: "constant", reOhm: asked.targetOhm, imOhm: 0 } as const;
+  const at = sweep({ source, elements: [...elements], load: asked.load }, frequencies, {
+    temperatureC: asked.temperatureC,
+  });
+  return { returnLossDb: at.returnLossDb, reflection: at.reflection };
+}
+
+/** Reflection at every element of a candidate, from the load to its target side: the steps on the Smith chart. */
+export function candidateSteps(elements: readonly EngineElement[], asked: MatchAsked): { re: number; im: number }[] {
+  const steps: { re: number; im: number }[] = [];
+  const cut = 24;
+  for (let first = elements.length; first >= 0; first--) {
+    const [element, ...behind] = elements.slice(first);
+    const parts = element && partial(element, cut);
+    for (const part of parts ?? [undefined]) {
+      const { reflection } = candidateCurve(part ? [part, ...behind] : behind, asked, [asked.designHz]);
+      steps.push({ re: reflection.re[0]!, im: reflection.im[0]! });
+    }
+  }
+  return steps;
+}
+
+/** An element growing to its full size, so that its step is an arc and not a chord. */
+function partial(element: EngineElement, count: number): EngineElement[] {
+  const shares = Array.from({ length: count }, (_, i) => (i + 1) / count);
+  if (element.kind === "cable") return shares.map((share) => ({ ...element, lengthM: element.lengthM * share }));
+  if (element.kind !== "part") return [element];
+  const { lH, cF, connection } = element;
+  const isSeries = connection === "series";
+  // In series a reactance grows from 0 with L or 1/C; across the line a susceptance grows from 0 with 1/L or C.
+  if (lH !== undefined) return shares.map((share) => ({ ...element, lH: isSeries ? lH * share : lH / share }));
+  if (cF !== undefined) return shares.map((share) => ({ ...element, cF: isSeries ? cF / share : cF * share }));
+  return [element];
+}
+
+/** A candidate's elements as a run stores them: cables by reference. */
+export function storedElements(elements: readonly EngineElement[]): Element[] {
+  const ref = (line: { cableId?: string; model: EngineLineModel }): LineRef =>
+    line.cableId === undefined ? { model: line.model } : { cableId: line.cableId };
+  return elements.map((element): Element => {
+    if (element.kind === "cable" || element.kind === "stub") return { ...element, line: ref(element.line) };
+    if (element.kind !== "parallel") return element;
+    return { ...element, branches: element.branches.map((branch) => ({ ...branch, line: ref(branch.line) })) };
+  });
+}
+type EngineLineModel = Extract<EngineElement, { kind: "cable" }>["line"]["model"];
+
+const alike = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b);
+
+/** Whether the run ends in these elements: the match is in it. */
+export function isKept(elements: readonly Element[], match: readonly Element[]): boolean {
+  return match.length > 0 && elements.length >= match.length && alike(elements.slice(-match.length), match);
+}
+
+const single = (element: Element | undefined) =>
+  element?.kind === "cable" && (element.paralleled ?? 1) === 1 ? element : null;
+
+/** Length of the match that is cut from the feeder itself, metres. */
+function fromFeeder(match: readonly Element[], feeder: LineRef): number {
+  return match.reduce(
+    (sum, element) => sum + (alike(single(element)?.line, feeder) ? (single(element)?.lengthM ?? 0) : 0),
+    0,
+  );
+}
+
+/**
+ * The run with a match at its load. Length of the match on the feeder's own cable is taken from the feeder before it,
+ * where there is enough, so that the load stays where it is.
+ */
+export function withMatch(elements: readonly Element[], match: readonly Element[]): Element[] {
+  const feeder = single(elements.at(-1));
+  const taken = feeder ? fromFeeder(match, feeder.line) : 0;
+  if (!feeder || taken === 0 || taken >= feeder.lengthM) return [...elements, ...match];
+  return [...elements.slice(0, -1), { ...feeder, lengthM: feeder.lengthM - taken }, ...match];
+}
+
+/** The run without a match it ends in; the length goes back to the feeder. */
+export function withoutMatch(elements: readonly Element[], match: readonly Element[]): Element[] {
+  const before = elements.slice(0, -match.length);
+  const feeder = single(before.at(-1));
+  const taken = feeder ? fromFeeder(match, feeder.line) : 0;
+  if (!feeder || taken === 0) return before;
+  const whole = Number((feeder.lengthM + taken).toPrecision(12));
+  return [...before.slice(0, -1), { ...feeder, lengthM: whole }];
+}
