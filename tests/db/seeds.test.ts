@@ -1,0 +1,131 @@
+import { readFileSync, readdirSync } from "node:fs";
+import { eq } from "drizzle-orm";
+import { describe, expect, test } from "vitest";
+import { database } from "@/db/client";
+import { cableRevisions, cables } from "@/db/schema/cables";
+import { people, teams } from "@/db/schema/team";
+import { findSessionActor, signIn } from "@/lib/auth/service";
+import { lossDbPer100m } from "@/lib/cables/model";
+import { cableSchema } from "@/lib/cables/schema";
+import { getCable } from "@/lib/cables/service";
+import { circuitSchema } from "@/lib/runs/schema";
+import { getRun } from "@/lib/runs/service";
+import { refuseMixing, seedDemo } from "@/seeds/index";
+import cableData from "@/seeds/data/cables.json";
+import teamData from "@/seeds/data/team.json";
+import { seedFirstAdmin } from "@/seeds/team";
+import { useDatabase } from "@/tests/support/database";
+
+/** Every row of every table, for telling whether anything changed. */
+function everything(): Record<string, unknown[]> {
+  const { $client: client } = database();
+  const tables = client.prepare("SELECT name FROM sqlite_master WHERE type = 'table' ORDER BY name").all() as {
+    name: string;
+  }[];
+  return Object.fromEntries(tables.map(({ name }) => [name, client.prepare(`SELECT * FROM "${name}"`).all()]));
+}
+
+describe("The demo", () => {
+  useDatabase(seedDemo);
+
+  const signedIn = async (email: string) => {
+    const { key } = await signIn({ email, password: teamData.password }, "test");
+    const found = findSessionActor(key);
+    if (!found) throw new Error(`${email} is not signed in`);
+    return found;
+  };
+
+  test("Seeding it again changes nothing", async () => {
+    const before = everything();
+    await seedDemo();
+    expect(everything()).toEqual(before);
+  });
+
+  test("It holds twelve people, 25 entries and run R1", () => {
+    expect(database().select().from(people).all()).toHaveLength(12);
+    expect(database().select().from(cables).all()).toHaveLength(25);
+  });
+
+  test.each(teamData.people)("$name can sign in as $role", async ({ email, role }) => {
+    expect((await signedIn(email)).role).toBe(role);
+  });
+
+  test.each(cableData.cables)("$designation is an entry the product would accept, whole", async ({ id }) => {
+    const librarian = await signedIn("nils.ferrant@quillhaven.example");
+    expect(cableSchema.parse(getCable(librarian, id))).toMatchObject({ id, revision: 1 });
+  });
+
+  // The table gives three decimals, the model's figures three to five digits: half a last digit and 0.1 %.
+  test.each(cableData.cables)("$designation loses at each frequency what its loss table says", ({ id, figures }) => {
+    const row = database().select().from(cableRevisions).where(eq(cableRevisions.cableId, id)).get();
+    const frequencies = { "1MHz": 1e6, "10MHz": 1e7, "100MHz": 1e8, "1GHz": 1e9 };
+    for (const [at, hz] of Object.entries(frequencies)) {
+      const stated = figures.lossDbPer100m[at as keyof typeof frequencies];
+      if (!row) throw new Error(`no revision of ${id}`);
+      expect(Math.abs(lossDbPer100m(row.model, hz) - stated)).toBeLessThan(0.0005 + stated * 0.001);
+    }
+  });
+
+  test.each(cableData.cables)(
+    "The three of impedance, velocity and capacitance of $designation agree",
+    ({ figures }) => {
+      const expected = 1e12 / (figures.z0Ohm * 299_792_458 * figures.velocityFactor);
+      expect(Math.abs(figures.capacitancePfPerM / expected - 1)).toBeLessThan(0.01);
+    },
+  );
+
+  test("Run R1 is issued to Rhys Colborne, with the cables it pins", async () => {
+    const run = getRun(await signedIn("rhys.colborne@quillhaven.example"), "mast-m2-telemetry");
+    expect(run).toMatchObject({ number: "R1", state: "issued", ownerName: "Ines Hartwell", availablePowerW: 25 });
+    expect(run.pinned).toEqual([
+      { cableId: "c50-f10", revision: 1 },
+      { cableId: "c50-f28", revision: 1 },
+    ]);
+    expect(circuitSchema.safeParse(run.circuit).success).toBe(true);
+  });
+
+  test("A database that holds the demo is not started without it: the demo's passwords are public", () => {
+    expect(() => refuseMixing(false)).toThrow(/DATABASE_FILE/);
+    expect(() => refuseMixing(true)).not.toThrow();
+  });
+});
+
+describe("Without the demo", () => {
+  useDatabase();
+
+  test("Nobody can sign in until the first admin is named", async () => {
+    expect(await seedFirstAdmin({ NODE_ENV: "test" })).toMatch(/ADMIN_EMAIL/);
+    expect(database().select().from(people).all()).toEqual([]);
+  });
+
+  test("A first admin's password that is too short is refused with the reason", async () => {
+    const settings = { NODE_ENV: "test" as const, ADMIN_EMAIL: "a@b.example", ADMIN_PASSWORD: "short" };
+    await expect(seedFirstAdmin(settings)).rejects.toThrow(/at least 10 characters/);
+    expect(database().select().from(teams).all()).toEqual([]);
+  });
+
+  test("The first start makes the admin named in the settings, a later one makes nobody", async () => {
+    const settings = {
+      NODE_ENV: "test" as const,
+      ADMIN_EMAIL: "Ada@Works.example",
+      ADMIN_PASSWORD: "a long enough one",
+    };
+    await seedFirstAdmin({ ...settings, TEAM_NAME: "The works" });
+    const { actor } = await signIn({ email: "ada@works.example", password: "a long enough one" }, "test");
+    expect(actor).toMatchObject({ role: "admin", teamName: "The works" });
+    expect(await seedFirstAdmin({ ...settings, ADMIN_EMAIL: "second@works.example" })).toBeUndefined();
+    expect(database().select().from(people).all()).toHaveLength(1);
+  });
+
+  test("The demo, whose passwords are public, is not put into a team's own database", () => {
+    expect(() => refuseMixing(true)).toThrow(/DEMO=off/);
+  });
+});
+
+test("Every seed file says where its data comes from", () => {
+  const folder = `${process.cwd()}/seeds/data`;
+  for (const name of readdirSync(folder)) {
+    const { source } = JSON.parse(readFileSync(`${folder}/${name}`, "utf8")) as { source?: string };
+    expect(source, name).toMatch(/\w{5}/);
+  }
+});
