@@ -65,7 +65,7 @@ function designLine({ label, ...line }: MatchLine, { designHz, temperatureC = 20
 }
 
 /** The line whose impedance is nearest to a resistance, by ratio; undefined where there is none. */
-export function nearest(lines: readonly DesignLine[], ohms: number): DesignLine | undefined {
+function nearest(lines: readonly DesignLine[], ohms: number): DesignLine | undefined {
   const distance = (each: DesignLine) => Math.abs(Math.log(each.zc.re / ohms));
   return lines.reduce<DesignLine | undefined>(
     (best, each) => (best && distance(best) <= distance(each) ? best : each),

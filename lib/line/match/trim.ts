@@ -12,7 +12,7 @@ const beside = 1e-5;
  * @param build - the network with its trimmed length, metre, more than 0
  * @returns undefined where the reflection does not depend on frequency
  */
-export function trimSlope(
+function trimSlope(
   point: DesignPoint,
   build: (length: number) => Element[],
   length: number,

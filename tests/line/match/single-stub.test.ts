@@ -103,9 +103,10 @@ test("published D71: the shorted stub that takes away a susceptance has the prin
   closeTo((length * 3e8 * 100) / f_Hz, { value: expected.l_cm, ...tolerance });
 });
 
-const resistance = fc.double({ min: 0.5, max: 5000, noNaN: true });
-const reactance = fc.double({ min: -5000, max: 5000, noNaN: true });
-const ohms = fc.double({ min: 10, max: 600, noNaN: true });
+const tenths = (min: number, max: number) => fc.integer({ min: 10 * min, max: 10 * max }).map((each) => each / 10);
+const resistance = tenths(1, 5000);
+const reactance = tenths(-5000, 5000);
+const ohms = tenths(10, 600);
 
 /** The input impedance of the finished match, by the textbook's tangents rather than the solver's angles. */
 function forward(p: StubPlan, distance: number, length: number): Complex {
