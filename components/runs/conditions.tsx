@@ -57,10 +57,14 @@ function useConditions() {
   };
 }
 
-export function SpotConditions() {
-  return <ConditionForm fields={spot} {...useConditions()} />;
+interface Look {
+  isInline?: boolean;
 }
 
-export function BandConditions() {
-  return <ConditionForm fields={band} {...useConditions()} />;
+export function SpotConditions({ isInline }: Look) {
+  return <ConditionForm fields={spot} isInline={isInline} {...useConditions()} />;
+}
+
+export function BandConditions({ isInline }: Look) {
+  return <ConditionForm fields={band} isInline={isInline} {...useConditions()} />;
 }

@@ -20,10 +20,12 @@ interface LeafFormProps<T> {
   /** path on the wire of what is edited, "elements.2" */
   path: string;
   write: (next: T, tag: string) => void;
+  /** small fields in the middle of a heading: labels are for screen readers only */
+  isInline?: boolean;
 }
 
 /** The fields of one piece. What can be read takes effect while typing; what cannot stays, with its sentence. */
-export function LeafForm<T>({ fields, edited, path, write }: LeafFormProps<T>) {
+export function LeafForm<T>({ fields, edited, path, write, isInline = false }: LeafFormProps<T>) {
   const { faults, canEdit } = useRunEditor();
   const texts = Object.fromEntries(fields.map((f) => [f.name, faults[`${path}.${f.name}`]?.text ?? f.text(edited)]));
   const { register, control, reset, setValue } = useForm<Texts>({ defaultValues: texts });
@@ -73,7 +75,7 @@ export function LeafForm<T>({ fields, edited, path, write }: LeafFormProps<T>) {
           return (
             <Typed
               key={field.name}
-              {...{ field, path, register, control, setValue }}
+              {...{ field, path, register, control, setValue, isInline }}
               write={(value) => put(field.write(edited, value), field.name)}
             />
           );
@@ -88,6 +90,7 @@ interface TypedProps<T> {
   register: UseFormRegister<Texts>;
   control: Control<Texts>;
   setValue: UseFormSetValue<Texts>;
+  isInline: boolean;
   write: (value: never) => void;
 }
 
@@ -98,7 +101,7 @@ function understood(kind: TypedField<unknown>["kind"], text: string): string | u
   return read.ok ? `= ${read.understood}` : undefined;
 }
 
-function Typed<T>({ field, path, register, control, setValue, write }: TypedProps<T>) {
+function Typed<T>({ field, path, register, control, setValue, isInline, write }: TypedProps<T>) {
   const { faults, setFault, canEdit } = useRunEditor();
   const at = `${path}.${field.name}`;
   const text = useWatch({ control, name: field.name }) ?? "";
@@ -122,6 +125,8 @@ function Typed<T>({ field, path, register, control, setValue, write }: TypedProp
   return (
     <Field
       label={field.label}
+      isLabelHidden={isInline}
+      controlSize={isInline ? "small" : "normal"}
       unit={/[a-zA-ZΩ°µ]/.test(text.replace(/j/g, "")) ? undefined : field.unit}
       isFigure
       disabled={!canEdit}

@@ -3,7 +3,6 @@
 import { useState } from "react";
 import { Strip } from "@/components/line/strip";
 import { useLineScale } from "@/components/line/use-line-scale";
-import { SpotConditions } from "@/components/runs/conditions";
 import { LeafPanel, nearestLine } from "@/components/runs/leaf-panel";
 import { PowerLedger } from "@/components/runs/power-ledger";
 import { ReturnLossChart } from "@/components/runs/return-loss-chart";
@@ -117,9 +116,6 @@ function LinePanel({ analysis, isBehind }: LinePanelProps) {
       {canEdit && <AddPiece put={put} />}
       <div className={`mt-3 ${isBehind ? "opacity-60" : ""}`}>
         <WaveChart wave={analysis?.wave ?? null} scale={scale} width={width} />
-      </div>
-      <div className="mt-2">
-        <SpotConditions />
       </div>
     </div>
   );

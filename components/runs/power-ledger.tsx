@@ -18,14 +18,14 @@ interface Row {
   lossDb: number;
 }
 
-const barPx = 112;
+const barPx = 100;
 
 function Bar({ lossDb, most, isHatched }: { lossDb: number; most: number; isHatched: boolean }) {
   const width = most > 0 && Number.isFinite(lossDb) ? Math.max(0, (lossDb / most) * barPx) : 0;
   return (
     <svg width={barPx} height="9" aria-hidden="true" className="inline-block">
       {isHatched ? (
-        <rect x=".5" y=".5" width={Math.max(0, width - 1)} height="8" fill="url(#hatch)" stroke="var(--rule)" />
+        <rect x=".5" y=".5" width={Math.max(0, width - 1)} height="8" fill="url(#rw-hatch)" stroke="var(--rule)" />
       ) : (
         <rect width={width} height="9" fill="var(--copper-fill)" />
       )}
@@ -52,7 +52,7 @@ export function PowerLedger({ analysis, names, designHz, sourceName, loadName }:
             <HeadCell isRight>m</HeadCell>
             <HeadCell isRight>ns</HeadCell>
             <HeadCell isRight>dB</HeadCell>
-            <HeadCell aria-label="Share" className="w-31" />
+            <HeadCell aria-label="Share" className="w-28" />
           </tr>
         </thead>
         <tbody>
@@ -74,7 +74,7 @@ export function PowerLedger({ analysis, names, designHz, sourceName, loadName }:
             </tr>
           ))}
           <tr>
-            <RowHead>Mismatch and standing waves</RowHead>
+            <RowHead className="whitespace-nowrap phone:whitespace-normal">Mismatch and standing waves</RowHead>
             <Cell />
             <Cell />
             <Cell isRight className="figures">
@@ -87,8 +87,10 @@ export function PowerLedger({ analysis, names, designHz, sourceName, loadName }:
         </tbody>
         <tfoot>
           <tr className="font-[640]">
-            <RowHead className="border-0 font-[640]">
-              {sourceName} to {loadName}
+            <RowHead className="border-0">
+              <b>
+                {sourceName} to {loadName}
+              </b>
             </RowHead>
             <Cell isRight className="figures border-0">
               {total("lengthM", 1, 2)}

@@ -34,14 +34,14 @@ export function ReturnLossChart({ analysis }: { analysis: Analysis }) {
     <ChartFrame
       level={2}
       title="Return loss over the band"
-      note="dB; higher is better"
+      note={
+        <span className="inline-flex flex-wrap items-center gap-x-2 gap-y-1">
+          dB; higher is better. Band <BandConditions isInline /> <TargetList />
+        </span>
+      }
       summary={summary}
       figures={{ head: ["MHz", `at ${sourceName}, dB`, `at ${loadName}, dB`], rows }}
     >
-      <div className="mt-2 flex flex-wrap items-end gap-3">
-        <BandConditions />
-        <TargetList />
-      </div>
       <SweepPlot
         xs={xs}
         series={[

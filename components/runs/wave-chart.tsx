@@ -4,8 +4,9 @@ import type { LineScale } from "@/components/line/line-scale";
 import { Ruler } from "@/components/line/ruler";
 import { ChartFrame } from "@/components/plot/chart-frame";
 import { StandingWavePlot } from "@/components/plot/standing-wave-plot";
+import { SpotConditions } from "@/components/runs/conditions";
 import { useRunEditor } from "@/components/runs/run-editor";
-import { digits, frequency, inWords, metres, scaled, significantDigits } from "@/lib/format/quantity";
+import { decimalsFor, digits, inWords, metres, scaled, significantDigits } from "@/lib/format/quantity";
 import type { StandingWave } from "@/lib/line/standing-wave";
 import { plotted, thinned } from "@/lib/runs/curves";
 
@@ -23,14 +24,13 @@ function referenceOf(re: number | null): number {
 /** Voltage and current along the line, under the strip, on its own axis. */
 export function WaveChart({ wave, scale, width }: Props) {
   const { draft } = useRunEditor();
-  const { designHz, availablePowerW, sourceName, circuit } = draft;
-  const at = `at ${inWords(frequency(designHz))}`;
+  const { availablePowerW, sourceName, circuit } = draft;
   if (!wave || availablePowerW === null)
     return (
-      <p className="text-label text-ink-2">
-        <b className="text-ink">Standing wave</b> {at}: give the available power of a source with resistance, and the
-        volts along the line stand here.
-      </p>
+      <div className="flex flex-wrap items-center gap-x-2 gap-y-1 text-label text-ink-2">
+        <h3 className="text-ink">Standing wave</h3> at <SpotConditions isInline /> Give the available power of a source
+        with resistance, and the volts along the line stand here.
+      </div>
     );
   const reference = referenceOf(circuit.source.kind === "constant" ? circuit.source.reOhm : null);
   const voltage = plotted(wave.voltageV);
@@ -46,7 +46,11 @@ export function WaveChart({ wave, scale, width }: Props) {
   return (
     <ChartFrame
       title="Standing wave"
-      note={`${at}, ${inWords(scaled("power", availablePowerW, 3))}, rms volts against distance from ${sourceName}`}
+      note={
+        <span className="inline-flex flex-wrap items-center gap-x-2 gap-y-1">
+          at <SpotConditions isInline /> rms volts against distance from {sourceName}
+        </span>
+      }
       summary={`Voltage along the line is greatest, ${greatestVoltage} rms, ${inWords(metres(wave.maxVoltageAtM))} from ${sourceName}; current is greatest, ${greatestCurrent}, at ${inWords(metres(wave.maxCurrentAtM))}`}
       figures={{ head: ["m", "V rms", "A rms"], rows: thinned(rows, 200) }}
     >
@@ -64,7 +68,7 @@ export function WaveChart({ wave, scale, width }: Props) {
           inWords(scaled("voltage", voltage[i], 3)),
           inWords(scaled("current", current[i], 3)),
         ]}
-        format={(value) => significantDigits(value, 3).replace(/\.?0+$/, "") || "0"}
+        format={(value) => digits(value, value !== 0 && Math.abs(value) < 10 ? decimalsFor(value, 2) : 0)}
       />
       <svg width="100%" height="18" viewBox={`0 0 ${width} 18`} aria-hidden="true" className="block overflow-visible">
         <Ruler scale={scale} y={1} />

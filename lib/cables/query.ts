@@ -100,6 +100,13 @@ export const facetsSchema = z
   });
 export type Facets = z.infer<typeof facetsSchema>;
 
+export const looseningSchema = z.strictObject({
+  without: z.string().describe("the words left out, as typed"),
+  q: z.string().describe("the search without them"),
+  count: z.int(),
+});
+export type Loosening = z.infer<typeof looseningSchema>;
+
 export const cablePageSchema = z
   .strictObject({
     items: z.array(cableItemSchema),
@@ -110,6 +117,10 @@ export const cablePageSchema = z
       .array(z.strictObject({ typed: z.string(), read: z.string() }))
       .optional()
       .describe("words of the search that were read as others"),
+    loosenings: z
+      .array(looseningSchema)
+      .optional()
+      .describe("only where nothing is found: nearby searches that do find"),
     facets: facetsSchema.optional(),
   })
   .meta({ id: "CablePage" });

@@ -12,6 +12,7 @@ import { type Candidate, comparePlaces, filters, sortAsked, sortValue } from "@/
 import { unapprovedStates } from "@/lib/cables/model";
 import type { CablePage, CableQuery } from "@/lib/cables/query";
 import type { Cable, CableItem, CableState } from "@/lib/cables/schema";
+import { loosenings } from "@/lib/cables/search/loosen";
 import { listCandidates, readSearchIn } from "@/lib/cables/search/service";
 import { AppError } from "@/lib/http/errors";
 import { defaultLimit, encodeCursor } from "@/lib/http/list";
@@ -159,8 +160,9 @@ export function listCables(actor: Actor, query: CableQuery): CablePage {
   const defaultStates: CableState[] | undefined = may(actor, "cables.readCatalogue") ? ["approved"] : undefined;
   const passes = filters(query, defaultStates);
   const { key, isReversed } = sortAsked(query);
+  const isPassing = (entry: Candidate) => Object.values(passes).every((isPassed) => isPassed(entry));
   const passing = entries
-    .filter((entry) => Object.values(passes).every((isPassed) => isPassed(entry)))
+    .filter(isPassing)
     .map((entry) => ({ entry, place: { key: sortValue(entry, key), id: entry.id } }))
     .sort((a, b) => comparePlaces(a.place, b.place, isReversed));
   const { cursor } = query;
@@ -175,6 +177,10 @@ export function listCables(actor: Actor, query: CableQuery): CablePage {
     nextCursor: last && rest.length > page.length ? encodeCursor(last.place) : null,
     total: passing.length,
     ...(reading && { readAs: reading.text, corrected: reading.corrected }),
+    ...(reading &&
+      passing.length === 0 && {
+        loosenings: loosenings(reading, (less) => listCandidates(actor, less, query.lossAtHz).filter(isPassing).length),
+      }),
     ...(query.facets && { facets: facetsOf(entries, passes) }),
   };
 }

@@ -191,7 +191,7 @@ function waveOf(
   pieces: PieceFigures[],
 ): StandingWave | null {
   const longest = Math.max(0, ...pieces.map(({ electricalLength }) => electricalLength ?? 0));
-  const pointsPerElement = Math.min(4001, Math.max(101, Math.ceil(longest * 2 * 16) + 1));
+  const pointsPerElement = Math.min(4001, Math.max(101, Math.ceil(longest * 2 * 40) + 1));
   const { source } = circuit;
   const hasPower = source.kind === "constant" ? source.reOhm > 0 : source.kind === "network" && (source.rOhm ?? 0) > 0;
   return hasPower ? standingWave(circuit, designHz, powerW, { temperatureC, pointsPerElement }) : null;
