@@ -74,7 +74,7 @@ function Twist({ shape, outer, fromX, toX, y }: { shape: PairShape; outer: numbe
       <path d={paths.second} />
       <path d={paths.first} stroke="var(--filler)" strokeWidth={width * 1.4} />
       <path d={paths.first} />
-      <path d={paths.secondRising} stroke="var(--filler)" strokeWidth={width * 1.4} />
+      <path d={paths.secondGap} stroke="var(--filler)" strokeWidth={width * 1.4} />
       <path d={paths.secondRising} />
     </g>
   );

@@ -55,8 +55,8 @@ function Hanging<L>({ element, x, y, hang, cable, mmToPx }: CutStubProps<L>) {
       </g>
       {element.end === "short" && <path d={`M${x - 9} ${end}h18`} stroke="var(--ink)" strokeWidth="3" />}
       <CutWords
-        x={isByTheEdge ? x - 16 : x + 16}
-        y={Math.max(y + 30, (y + 10 + end) / 2)}
+        x={isByTheEdge ? x + 14 : x + 16}
+        y={isByTheEdge ? end + 16 : Math.max(y + 30, (y + 10 + end) / 2)}
         figure={cutLength(element.lengthM)}
         note={endWords(element.end)}
         anchor={isByTheEdge ? "end" : "start"}

@@ -1,12 +1,9 @@
 "use client";
 
 /** What the product draws over and under the curves of a sweep. Lives inside the chart, on the chart's own scales. */
-import type { PointerEvent } from "react";
 import { usePlotArea, useYAxisScale, useXAxisScale } from "recharts";
-import { axisScale } from "@/components/plot/axes";
-import { useCursor, type CursorAxis } from "@/components/plot/cursor";
-import { nearestIndex, type Values } from "@/components/plot/curve";
-import { Readout } from "@/components/plot/readout";
+import type { CursorAxis } from "@/components/plot/cursor";
+import type { Values } from "@/components/plot/curve";
 import { separate, seriesColour, type SweepSeries } from "@/components/plot/series";
 
 export interface SweepOverlay {
@@ -24,7 +21,7 @@ export interface SweepOverlay {
   cursorAxis?: CursorAxis;
 }
 
-interface Domains {
+export interface Domains {
   xs: readonly number[];
   series: readonly SweepSeries[];
   xDomain: readonly [number, number];
@@ -32,7 +29,7 @@ interface Domains {
 }
 
 /** Scales and frame of the chart around; null while it has none. */
-function usePlot() {
+export function usePlot() {
   const [area, xScale, yScale] = [usePlotArea(), useXAxisScale(), useYAxisScale()];
   if (!area || !xScale || !yScale) return null;
   const [left, top, right, bottom] = [area.x, area.y, area.x + area.width, area.y + area.height];
@@ -196,54 +193,6 @@ export function SweepLabels({ xUnit, ...props }: SweepOverlay & Domains & { xUni
       <text x={plot.right} y={plot.bottom + 30} textAnchor="end">
         {xUnit}
       </text>
-    </g>
-  );
-}
-
-interface CursorProps extends SweepOverlay, Domains {
-  kind: "linear" | "log";
-  width: number;
-}
-
-/** Takes the pointer over the frame, and reads out at the shared cursor. */
-export function SweepCursor(props: CursorProps) {
-  const plot = usePlot();
-  const cursor = useCursor(props.cursorAxis ?? "frequency");
-  if (!plot) return null;
-  const scale = axisScale(props.kind, props.xDomain, [0, 1]);
-  const invert = (share: number) => {
-    const [a, b] = props.xDomain;
-    return props.kind === "log" ? a * (b / a) ** share : a + (b - a) * share;
-  };
-  const point = (event: PointerEvent<SVGRectElement>) => {
-    const frame = event.currentTarget.getBoundingClientRect();
-    if (frame.width > 0) cursor.set(invert(Math.max(0, Math.min(1, (event.clientX - frame.left) / frame.width))));
-  };
-  const at = cursor.value === null ? -1 : nearestIndex(props.xs, cursor.value);
-  const share = cursor.value === null ? -1 : scale(cursor.value);
-  const words = props.series.map(
-    ({ label, values }) => `${values[at] == null ? "–" : props.formatY(values[at] as number)} ${label}`,
-  );
-  return (
-    <g>
-      <rect
-        x={plot.left}
-        y={plot.top}
-        width={plot.right - plot.left}
-        height={plot.bottom - plot.top}
-        fill="transparent"
-        onPointerMove={point}
-        onPointerLeave={() => cursor.set(null)}
-      />
-      {at >= 0 && share >= 0 && share <= 1 && (
-        <Readout
-          x={plot.x(cursor.value ?? 0)}
-          fromY={plot.top}
-          toY={plot.bottom}
-          limits={[plot.left, plot.right]}
-          words={[props.formatX(props.xs[at] ?? 0), ...words]}
-        />
-      )}
     </g>
   );
 }

@@ -3,8 +3,9 @@
 import { Area, CartesianGrid, ComposedChart, Line, XAxis, YAxis, ZIndexLayer } from "recharts";
 import { axisScale, logTicks } from "@/components/plot/axes";
 import { useMeasuredWidth } from "@/components/plot/measured-width";
+import { SweepCursor } from "@/components/plot/sweep-cursor";
 import { seriesColour, seriesDash, type SweepSeries } from "@/components/plot/series";
-import { SweepCursor, SweepLabels, SweepLimit, SweepTarget, type SweepOverlay } from "@/components/plot/sweep-overlay";
+import { SweepLabels, SweepLimit, SweepTarget, type SweepOverlay } from "@/components/plot/sweep-overlay";
 
 export interface SweepPlotProps extends SweepOverlay {
   kind?: "linear" | "log";

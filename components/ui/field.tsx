@@ -9,6 +9,8 @@ export interface Labelled {
   error?: string;
   /** keeps the label for screen readers only */
   isLabelHidden?: boolean;
+  /** the label at 12 px instead of 11 */
+  isLabelLarge?: boolean;
   /** of the whole: label, field, hint */
   className?: string;
 }
@@ -41,10 +43,22 @@ interface FrameProps extends Labelled {
 }
 
 /** Label above, hint and refusal below: the frame that every kind of field stands in. */
-export function FieldFrame({ id, label, hint, error, isLabelHidden, className = "", children }: FrameProps) {
+export function FieldFrame({
+  id,
+  label,
+  hint,
+  error,
+  isLabelHidden,
+  isLabelLarge,
+  className = "",
+  children,
+}: FrameProps) {
   return (
     <div className={`flex flex-col gap-0.5 ${className}`}>
-      <label htmlFor={id} className={isLabelHidden ? "sr-only" : "text-note text-ink-2"}>
+      <label
+        htmlFor={id}
+        className={isLabelHidden ? "sr-only" : `text-ink-2 ${isLabelLarge ? "text-label" : "text-note"}`}
+      >
         {label}
       </label>
       {children}
@@ -86,7 +100,7 @@ export function Field(props: FieldProps) {
   const made = useId();
   const id = given ?? made;
   return (
-    <FieldFrame {...{ id, label, hint, error, isLabelHidden, className }}>
+    <FieldFrame {...{ id, label, hint, error, isLabelHidden, className, isLabelLarge: controlSize === "large" }}>
       <span className={`${fieldEdge} ${fieldColours(!!error)} ${heights[controlSize]} px-2`}>
         <input
           {...input}

@@ -26,7 +26,7 @@ export function Mark({ height = 20, isOneColour = false, ground = "var(--paper)"
       <path d={paths.first} stroke="var(--ink)" strokeWidth="3.6" strokeLinecap="round" />
       <path d={paths.second} stroke={ground} strokeWidth="7" />
       <path d={paths.second} stroke={copper} strokeWidth="3.6" strokeLinecap="round" />
-      <path d={paths.firstRising} stroke={ground} strokeWidth="7" />
+      <path d={paths.firstGap} stroke={ground} strokeWidth="7" />
       <path d={paths.firstRising} stroke="var(--ink)" strokeWidth="3.6" />
     </svg>
   );
@@ -37,7 +37,7 @@ export function Wordmark({ size = "bar" }: { size?: "bar" | "front" }) {
   const isFront = size === "front";
   return (
     <span
-      className={`flared flex items-center tracking-[-0.012em] ${isFront ? "gap-4 text-[2.25rem]" : "gap-2.25 text-[1.1875rem]"}`}
+      className={`flared flex items-center tracking-[-0.012em] ${isFront ? "gap-4 text-[2.125rem] leading-[1.12]" : "gap-2.25 text-[1.1875rem]"}`}
     >
       <Mark height={isFront ? 38 : 20} />
       Ropewalk

@@ -9,6 +9,9 @@ export interface Strands {
   /** rising stretches of each strand, to be drawn again on top of the other */
   firstRising: string;
   secondRising: string;
+  /** the gap to cut in the strand behind first: a little shorter, so that no seam shows */
+  firstGap: string;
+  secondGap: string;
 }
 
 interface Lay {
@@ -22,8 +25,9 @@ interface Lay {
   topAtX?: number;
 }
 
-/** The stretch each side of a crossing that is drawn in front, as a share of the pitch. */
-const frontShare = 0.32;
+/** The stretch each side of a crossing that is drawn in front, and the gap cut for it, as shares of the pitch. */
+const frontShare = 0.4;
+const gapShare = 0.32;
 
 /** Strand number `side` (+1 first, −1 second) as a smooth path. Four cubics a pitch: within 0.1 % of the amplitude. */
 function trace({ middleY, amplitude, pitch, topAtX = 0 }: Lay, side: 1 | -1, fromX: number, toX: number): string {
@@ -41,21 +45,30 @@ function trace({ middleY, amplitude, pitch, topAtX = 0 }: Lay, side: 1 | -1, fro
   return path;
 }
 
+/** Stretches of both strands about the crossings where they rise. */
+function risings(lay: Required<Lay>, share: number): { first: string; second: string } {
+  const { fromX, toX, pitch, topAtX } = lay;
+  let [first, second] = ["", ""];
+  for (let k = Math.ceil((fromX - topAtX) / pitch - 0.5); topAtX + (k + 0.5) * pitch <= toX; k++) {
+    const x = topAtX + (k + 0.5) * pitch;
+    const [from, to] = [Math.max(fromX, x - share * pitch), Math.min(toX, x + share * pitch)];
+    // From its top the first strand falls through even crossings and rises through odd ones.
+    if (k % 2 === 0) second += trace(lay, -1, from, to);
+    else first += trace(lay, 1, from, to);
+  }
+  return { first, second };
+}
+
 /** Paths of two strands between two places; y grows downwards. */
 export function strands(given: Lay): Strands {
   const lay = { ...given, topAtX: given.topAtX ?? given.fromX };
-  const { fromX, toX, pitch, topAtX } = lay;
-  const rising = { 1: "", [-1]: "" };
-  for (let k = Math.ceil((fromX - topAtX) / pitch - 0.5); topAtX + (k + 0.5) * pitch <= toX; k++) {
-    const x = topAtX + (k + 0.5) * pitch;
-    // From its top the first strand falls through even crossings and rises through odd ones.
-    const side = k % 2 === 0 ? -1 : 1;
-    rising[side] += trace(lay, side, Math.max(fromX, x - frontShare * pitch), Math.min(toX, x + frontShare * pitch));
-  }
+  const [rising, gap] = [risings(lay, frontShare), risings(lay, gapShare)];
   return {
-    first: trace(lay, 1, fromX, toX),
-    second: trace(lay, -1, fromX, toX),
-    firstRising: rising[1],
-    secondRising: rising[-1],
+    first: trace(lay, 1, lay.fromX, lay.toX),
+    second: trace(lay, -1, lay.fromX, lay.toX),
+    firstRising: rising.first,
+    secondRising: rising.second,
+    firstGap: gap.first,
+    secondGap: gap.second,
   };
 }
