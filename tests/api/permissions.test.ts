@@ -1,0 +1,99 @@
+/** Walks every operation of every route as every role, as another team's member and as nobody. */
+import { beforeAll, describe, expect, test } from "vitest";
+import type { Role } from "@/lib/auth/actor";
+import type { Handler } from "@/lib/http/handle";
+import { operations } from "@/lib/http/all-operations";
+import type { Run } from "@/lib/runs/schema";
+import { createRun } from "@/lib/runs/service";
+import { addCable, newRun } from "@/tests/support/cables";
+import { useDatabase } from "@/tests/support/database";
+import { actor, addPeople, other, roles } from "@/tests/support/people";
+import { send } from "@/tests/support/requests";
+import { routeFiles } from "@/tests/support/routes";
+
+useDatabase(async () => {
+  await addPeople();
+  addCable({ id: "feeder" });
+});
+
+type Access = "anyone" | Role[];
+
+/** Who may, operation by operation: product and contract in one table. A new operation must be added here. */
+const expected: Record<string, Access> = {
+  readSession: roles,
+  openSession: "anyone",
+  endSession: roles,
+  changeOwnPassword: roles,
+  listCables: roles,
+  readCable: ["designer", "librarian", "admin", "auditor"], // an installer only those in their runs
+  listRuns: roles,
+  createRun: ["designer", "librarian", "admin"],
+  readRun: ["designer", "librarian", "admin", "auditor"], // an installer only issued ones assigned to them
+  changeRun: ["designer", "librarian", "admin"],
+  removeRun: ["designer", "librarian", "admin"],
+  computeLine: roles,
+  computeSweep: roles,
+  computeProfile: roles,
+  computeMatches: roles,
+  readHealth: "anyone",
+  readDescription: "anyone",
+};
+
+/** The refusal an installer gets instead of 403 where the record does not exist for them. */
+const hiddenFromInstallers = ["readCable", "readRun"];
+
+let handlers: Map<string, Handler>;
+beforeAll(async () => {
+  const found = (await routeFiles()).flatMap((file) => Object.values(file.handlers));
+  handlers = new Map(found.flatMap((handler) => (handler.operation ? [[handler.operation.id, handler]] : [])));
+});
+
+test("The table names every operation, and nothing else", () => {
+  expect(Object.keys(expected).sort()).toEqual(operations.map(({ id }) => id).sort());
+  expect([...handlers.keys()].sort()).toEqual(operations.map(({ id }) => id).sort());
+});
+
+/** A fresh run of the team, so that one case's change does not meet another's. */
+function ask(id: string, as: ReturnType<typeof actor> | undefined, run: Run): Promise<Response> {
+  const operation = operations.find((one) => one.id === id);
+  const handler = handlers.get(id);
+  if (!operation || !handler) throw new Error(`no operation ${id}`);
+  return send(handler, operation.method, {
+    as,
+    params: { cableId: "feeder", runId: run.id },
+    headers: operation.needsMatch ? { "if-match": "*" } : {},
+    // An impossible body: whoever may is told so (422), whoever may not never gets that far.
+    body: operation.body ? { impossible: true } : undefined,
+  });
+}
+
+const isAnswer = (status: number) => status < 300 || status === 422;
+
+describe.each(Object.entries(expected))("%s", (id, access) => {
+  test.each(roles)(`as %s`, async (role) => {
+    const run = createRun(actor("designer"), newRun("feeder"));
+    const { status } = await ask(id, actor(role), run);
+    if (access === "anyone" || access.includes(role)) expect(isAnswer(status), `status ${status}`).toBe(true);
+    else expect(status).toBe(hiddenFromInstallers.includes(id) ? 404 : 403);
+  });
+
+  test("as nobody", async () => {
+    const run = createRun(actor("designer"), newRun("feeder"));
+    const { status } = await ask(id, undefined, run);
+    if (access === "anyone") expect(isAnswer(status), `status ${status}`).toBe(true);
+    else expect(status).toBe(401);
+  });
+
+  test("as an admin of another team, who is told that the record does not exist", async () => {
+    const run = createRun(actor("designer"), newRun("feeder"));
+    const { status } = await ask(id, actor("admin", other), run);
+    if (operations.find((one) => one.id === id)?.path.includes("{")) expect(status).toBe(404);
+    else expect(isAnswer(status), `status ${status}`).toBe(true);
+  });
+});
+
+test("An auditor changes nothing: every operation that does is refused to one", () => {
+  const changing = operations.filter(({ method, path }) => method !== "GET" && !/^\/(session|compute)/.test(path));
+  expect(changing.length).toBeGreaterThan(0);
+  for (const { id } of changing) expect(expected[id]).not.toContain("auditor");
+});
