@@ -1,7 +1,7 @@
 /** A save told in a sentence. Pure. */
 import type { Circuit, RunChange } from "@/lib/runs/schema";
 
-type Content = Required<RunChange>;
+type Content = Omit<Required<RunChange>, "circuit"> & { circuit: Circuit };
 
 const named: Record<Exclude<keyof Content, "circuit">, string> = {
   name: "the name",
