@@ -1,8 +1,11 @@
 "use client";
 
 import { useState } from "react";
+import type { LineScale } from "@/components/line/line-scale";
 import { Strip } from "@/components/line/strip";
 import { useLineScale } from "@/components/line/use-line-scale";
+import { EndButtons } from "@/components/runs/end-buttons";
+import { LineDown } from "@/components/runs/line-down";
 import { LeafPanel, nearestLine } from "@/components/runs/leaf-panel";
 import { PowerLedger } from "@/components/runs/power-ledger";
 import { ReturnLossChart } from "@/components/runs/return-loss-chart";
@@ -84,56 +87,45 @@ function LinePanel({ analysis, isBehind }: LinePanelProps) {
   const { draft, lines, faults, selected, select, edit, canEdit } = useRunEditor();
   const { elements } = draft.circuit;
   const pieces = stripPieces(draft, lines, faults, analysis?.pieces);
-  const ends = stripEnds(draft);
   const { ref, width, scale } = useLineScale(pieces);
-  const place = typeof selected === "number" ? scale.places[selected] : undefined;
-  const notchX =
-    selected === "source"
-      ? scale.startX - 24
-      : selected === "load"
-        ? scale.endX + 24
-        : place
-          ? (place.fromX + place.toX) / 2
-          : 0;
   const put = (next: typeof elements) => edit({ ...draft, circuit: { ...draft.circuit, elements: next } });
+  const index = typeof selected === "number" ? selected : null;
+  const strip = {
+    pieces,
+    ...stripEnds(draft),
+    selected: index,
+    onSelect: (next: number | null) => select(next === selected ? null : next),
+    onMove: canEdit ? (from: number, to: number) => put(move(elements, from, to)) : undefined,
+    onOpen: select,
+  };
+  const wave = analysis?.wave ?? null;
   return (
     <div ref={ref}>
-      <div className="relative">
-        <Strip
-          pieces={pieces}
-          {...ends}
-          scale={scale}
-          width={width}
-          selected={typeof selected === "number" ? selected : null}
-          onSelect={(index) => select(index === selected ? null : index)}
-          onMove={canEdit ? (from, to) => put(move(elements, from, to)) : undefined}
-          onOpen={select}
+      <div className="relative phone:hidden">
+        <Strip {...strip} scale={scale} width={width} />
+        <EndButtons
+          source={{ width: scale.startX - 4 }}
+          load={{ left: scale.endX + 8, width: Math.max(24, width - scale.endX - 8) }}
         />
-        <EndButton end="source" from={0} to={scale.startX - 4} />
-        <EndButton end="load" from={scale.endX + 8} to={width} />
       </div>
-      <LeafPanel notchX={notchX} figures={typeof selected === "number" ? analysis?.pieces[selected] : undefined} />
+      <div className="hidden phone:block">
+        <LineDown {...strip} wave={wave} availablePowerW={draft.availablePowerW} />
+      </div>
+      <LeafPanel notchX={notchOf(selected, scale)} figures={index === null ? undefined : analysis?.pieces[index]} />
       {canEdit && <AddPiece put={put} />}
-      <div className={`mt-3 ${isBehind ? "opacity-60" : ""}`}>
-        <WaveChart wave={analysis?.wave ?? null} scale={scale} width={width} />
+      <div className={`mt-3 phone:hidden ${isBehind ? "opacity-60" : ""}`}>
+        <WaveChart wave={wave} scale={scale} width={width} />
       </div>
     </div>
   );
 }
 
-function EndButton({ end, from, to }: { end: Exclude<Selected, number | null>; from: number; to: number }) {
-  const { draft, selected, select } = useRunEditor();
-  const name = end === "source" ? draft.sourceName : draft.loadName;
-  return (
-    <button
-      type="button"
-      aria-pressed={selected === end}
-      aria-label={`${end === "source" ? "Source" : "Load"}: ${name}`}
-      onClick={() => select(selected === end ? null : end)}
-      className="absolute inset-y-0 z-[1] rounded hover:bg-copper-wash/40"
-      style={{ left: from, width: Math.max(24, to - from) }}
-    />
-  );
+/** Where the leaf points: the middle of what is selected. */
+function notchOf(selected: Selected, scale: LineScale): number {
+  if (selected === "source") return scale.startX - 24;
+  if (selected === "load") return scale.endX + 24;
+  const place = selected === null ? undefined : scale.places[selected];
+  return place ? (place.fromX + place.toX) / 2 : 0;
 }
 
 type Elements = ReturnType<typeof useRunEditor>["draft"]["circuit"]["elements"];

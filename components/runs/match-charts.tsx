@@ -54,7 +54,8 @@ export function MatchCharts(props: Props) {
       label: `${loadName} alone`,
       look: 5,
       points: inBand(xs, alone, asked.bandHz),
-      ends: [megahertz(asked.bandHz[0]), megahertz(asked.bandHz[1])],
+      // A load that does not change over the band is one dot: two names on it would hide each other.
+      ends: asked.load.kind === "constant" ? undefined : [megahertz(asked.bandHz[0]), megahertz(asked.bandHz[1])],
     },
     ...candidates.map((curve, i) => ({
       id: letter(i),
@@ -87,7 +88,7 @@ export function MatchCharts(props: Props) {
     120,
   );
   return (
-    <div className="mt-8 grid grid-cols-[420px_minmax(0,1fr)] gap-x-10 gap-y-6 folded:grid-cols-1">
+    <div className="mt-8 grid grid-cols-[460px_minmax(0,1fr)] gap-x-10 gap-y-6 folded:grid-cols-1">
       <ChartFrame
         level={2}
         title="Centre of the Smith chart"

@@ -21,6 +21,10 @@ function referenceOf(re: number | null): number {
   return re !== null && re > 0 ? re : 50;
 }
 
+/** Volts of an axis: whole from 10 up. */
+export const voltTick = (value: number) =>
+  digits(value, value !== 0 && Math.abs(value) < 10 ? decimalsFor(value, 2) : 0);
+
 /** Voltage and current along the line, under the strip, on its own axis. */
 export function WaveChart({ wave, scale, width }: Props) {
   const { draft } = useRunEditor();
@@ -68,7 +72,7 @@ export function WaveChart({ wave, scale, width }: Props) {
           inWords(scaled("voltage", voltage[i], 3)),
           inWords(scaled("current", current[i], 3)),
         ]}
-        format={(value) => digits(value, value !== 0 && Math.abs(value) < 10 ? decimalsFor(value, 2) : 0)}
+        format={voltTick}
       />
       <svg width="100%" height="18" viewBox={`0 0 ${width} 18`} aria-hidden="true" className="block overflow-visible">
         <Ruler scale={scale} y={1} />

@@ -22,6 +22,8 @@ const places: { href: Route; label: string }[] = [
 /** Ends the session and leaves nothing of the team's in the browser's memory: the door is loaded afresh. */
 async function signOut() {
   await call("/session", { method: "DELETE" });
+  // A full load on purpose: nothing of the team stays in memory.
+  // eslint-disable-next-line @next/next/no-location-assign-relative-destination
   window.location.assign("/sign-in");
 }
 
