@@ -21,19 +21,9 @@ function refusal(error: unknown): string {
   return "That did not work. Try again in a moment.";
 }
 
-/** Address, password, and the answer when they are not taken. */
-export function SignInForm({ form, next }: SignInFormProps) {
+/** The password, with a switch to see it. */
+function PasswordField({ form }: Pick<SignInFormProps, "form">) {
   const [isShown, setShown] = useState(false);
-  const { errors, isSubmitting } = form.formState;
-  async function submit(fields: SignInFields) {
-    try {
-      await call("/session", { method: "POST", body: fields });
-      // A whole new page, so that nothing of an earlier sign-in stays in memory.
-      window.location.assign(next);
-    } catch (error) {
-      form.setError("root", { message: refusal(error) });
-    }
-  }
   const show = (
     <button
       type="button"
@@ -45,26 +35,37 @@ export function SignInForm({ form, next }: SignInFormProps) {
     </button>
   );
   return (
+    <Field
+      label="Password"
+      type={isShown ? "text" : "password"}
+      autoComplete="current-password"
+      controlSize="large"
+      trailing={show}
+      error={form.formState.errors.password?.message}
+      {...form.register("password")}
+    />
+  );
+}
+
+/** Address, password, and the answer when they are not taken. */
+export function SignInForm({ form, next }: SignInFormProps) {
+  const { errors, isSubmitting } = form.formState;
+  async function submit(fields: SignInFields) {
+    try {
+      await call("/session", { method: "POST", body: fields });
+      // A whole new page, so that nothing of an earlier sign-in stays in memory.
+      window.location.assign(next);
+    } catch (error) {
+      form.setError("root", { message: refusal(error) });
+    }
+  }
+  const email = { type: "email", autoComplete: "username", ...form.register("email") };
+  return (
     <form onSubmit={form.handleSubmit(submit)} noValidate className="self-start border-t-[1.5px] border-ink pt-3.5">
       <h2 className="mb-4.5 text-[1.3125rem]">Sign in</h2>
       <div className="flex flex-col gap-3.75">
-        <Field
-          label="Work email"
-          type="email"
-          autoComplete="username"
-          controlSize="large"
-          error={errors.email?.message}
-          {...form.register("email")}
-        />
-        <Field
-          label="Password"
-          type={isShown ? "text" : "password"}
-          autoComplete="current-password"
-          controlSize="large"
-          trailing={show}
-          error={errors.password?.message}
-          {...form.register("password")}
-        />
+        <Field label="Work email" controlSize="large" error={errors.email?.message} {...email} />
+        <PasswordField form={form} />
         <div role="status" className="empty:-mt-3.75">
           {errors.root && <StateNote state="fail">{errors.root.message}</StateNote>}
         </div>

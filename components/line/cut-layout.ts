@@ -31,6 +31,8 @@ export const cutFrame = { width: 334, height: 128, axisY: 52, loadX: 294, leadX:
 const mostPxPerM = 390;
 const roomPx = 205;
 const leastCablePx = 26;
+/** next to another cable, so that the figures of both dimensions find room */
+const leastBesideCablePx = 58;
 const mostHangPx = 52;
 const gapPx = 10;
 
@@ -48,9 +50,9 @@ const symbolPx: Partial<Record<Element["kind"], number>> = {
   shunt: 24,
 };
 
-function widthOf<L>(element: Element<L>, pxPerM: number): number {
+function widthOf<L>(element: Element<L>, pxPerM: number, isBesideCable = false): number {
   if (element.kind === "cable" || element.kind === "parallel")
-    return Math.max(leastCablePx, lengthOf(element) * pxPerM);
+    return Math.max(isBesideCable ? leastBesideCablePx : leastCablePx, lengthOf(element) * pxPerM);
   if (element.kind === "part" && element.connection === "shunt") return 24;
   return symbolPx[element.kind] ?? 0;
 }
@@ -69,18 +71,27 @@ function scaleOf<L>(elements: readonly Element<L>[]): number {
   return Math.min(mostPxPerM, along > 0 ? room / along : Infinity, stub > 0 ? 150 / stub : Infinity);
 }
 
+/** Drawings are laid out on tenths of a px: finer differences between two machines' arithmetic must not show. */
+function rounded(px: number): number {
+  return Math.round(px * 10) / 10;
+}
+
+function isBesideCable<L>(elements: readonly Element<L>[], index: number): boolean {
+  return elements[index - 1]?.kind === "cable" || elements[index + 1]?.kind === "cable";
+}
+
 /** @param elements - from source to load, as the engine has them */
 export function cutLayout<L>(elements: readonly Element<L>[]): CutLayout<L> {
   const pxPerM = scaleOf(elements);
   let x = cutFrame.loadX;
   const items: CutItem<L>[] = [];
-  for (const element of elements.toReversed()) {
-    const width = widthOf(element, pxPerM);
+  for (const [index, element] of [...elements.entries()].toReversed()) {
+    const width = widthOf(element, pxPerM, isBesideCable(elements, index));
     // A part beside the load or beside another part needs a little wire.
     const needsWire = element.kind === "part" || element.kind === "pad" || element.kind === "transformer";
     const gap = needsWire ? gapPx : 0;
-    items.unshift({ element, fromX: x - gap / 2 - width, toX: x - gap / 2 });
-    x -= width + gap;
+    items.unshift({ element, fromX: rounded(x - gap / 2 - width), toX: rounded(x - gap / 2) });
+    x = rounded(x - width - gap);
   }
   return { items, pxPerM, startX: x };
 }
@@ -93,6 +104,10 @@ export function hangOf<L>(layout: CutLayout<L>, index: number): StubHang {
   const isFirst = layout.items.findIndex(({ element }) => element.kind === "stub") === index;
   const middle = (item.fromX + item.toX) / 2;
   if (wanted > mostHangPx && isFirst && wanted < middle - 28)
-    return { isFolded: true, lengthPx: wanted, isBroken: false };
-  return { isFolded: false, lengthPx: Math.max(14, Math.min(mostHangPx, wanted)), isBroken: wanted > mostHangPx };
+    return { isFolded: true, lengthPx: rounded(wanted), isBroken: false };
+  return {
+    isFolded: false,
+    lengthPx: rounded(Math.max(14, Math.min(mostHangPx, wanted))),
+    isBroken: wanted > mostHangPx,
+  };
 }

@@ -79,47 +79,47 @@ function Fault({ place, y, half }: { place: Place; y: number; half: number }) {
   );
 }
 
+/** Cable or cables between two places; with a break mark where they are drawn longer than to scale. */
+function Laid({ piece, place, y, mmToPx }: PieceProps) {
+  const cable = piece.cable ?? unknownCable;
+  const isGroup = piece.kind === "parallel" || (piece.count ?? 1) > 1;
+  return (
+    <g>
+      {isGroup ? (
+        <Group piece={piece} place={place} y={y} mmToPx={mmToPx} />
+      ) : (
+        <CableLengthwise {...cable} fromX={place.fromX} toX={place.toX} y={y} mmToPx={mmToPx} />
+      )}
+      {place.isBroken && <BreakMark x={(place.fromX + place.toX) / 2} y={y} half={thickness(cable, mmToPx) / 2} />}
+    </g>
+  );
+}
+
 /** One piece on the line. */
-export function PieceDrawing({ piece, place, y, mmToPx, besideHalf = 8 }: PieceProps) {
-  const middle = (place.fromX + place.toX) / 2;
-  const half = piece.cable ? thickness(piece.cable, mmToPx) / 2 : 13;
+export function PieceDrawing(props: PieceProps) {
+  const { piece, place, y, mmToPx, besideHalf = 8 } = props;
+  const x = (place.fromX + place.toX) / 2;
+  const width = place.toX - place.fromX;
   if (piece.fault && piece.kind !== "joint" && piece.kind !== "stub")
-    return <Fault place={place} y={y} half={Math.max(10, half)} />;
+    return <Fault place={place} y={y} half={piece.cable ? Math.max(10, thickness(piece.cable, mmToPx) / 2) : 13} />;
   switch (piece.kind) {
     case "cable":
     case "parallel":
-      return (
-        <g>
-          {piece.kind === "parallel" || (piece.count ?? 1) > 1 ? (
-            <Group piece={piece} place={place} y={y} mmToPx={mmToPx} />
-          ) : (
-            <CableLengthwise
-              {...(piece.cable ?? unknownCable)}
-              fromX={place.fromX}
-              toX={place.toX}
-              y={y}
-              mmToPx={mmToPx}
-            />
-          )}
-          {place.isBroken && <BreakMark x={middle} y={y} half={half} />}
-        </g>
-      );
+      return <Laid {...props} />;
     case "joint":
-      return <Joint x={middle} y={y} half={Math.max(17, besideHalf + 4)} />;
+      return <Joint x={x} y={y} half={Math.max(17, besideHalf + 4)} />;
     case "stub":
       return <Stub piece={piece} place={place} y={y} mmToPx={mmToPx} />;
     case "part":
-      return piece.connection === "shunt" ? (
-        <ShuntPart x={middle} y={y} part={piece.part ?? "capacitor"} half={besideHalf} />
-      ) : (
-        <SeriesPart x={middle} y={y} part={piece.part ?? "coil"} reach={(place.toX - place.fromX) / 2} />
-      );
+      if (piece.connection === "shunt")
+        return <ShuntPart x={x} y={y} part={piece.part ?? "capacitor"} half={besideHalf} />;
+      return <SeriesPart x={x} y={y} part={piece.part ?? "coil"} reach={width / 2} />;
     case "shunt":
-      return <ShuntPart x={middle} y={y} part="resistor" half={besideHalf} />;
+      return <ShuntPart x={x} y={y} part="resistor" half={besideHalf} />;
     case "pad":
-      return <Box x={middle} y={y} inside={piece.inside ?? ""} width={place.toX - place.fromX} />;
+      return <Box x={x} y={y} inside={piece.inside ?? ""} width={width} />;
     case "transformer":
-      return <Transformer x={middle} y={y} />;
+      return <Transformer x={x} y={y} />;
   }
 }
 

@@ -88,10 +88,40 @@ function WordsDown({ pieces, scale, selected }: Pick<StripDownProps, "pieces" | 
   });
 }
 
+/** From what stands at a place to its words. */
+function Leaders({ pieces, scale }: Pick<StripDownProps, "pieces" | "scale">) {
+  return pieces.map((piece, index) => {
+    const place = scale.places[index];
+    if (isLaid(piece) || !place) return null;
+    const d = `M${axisX + 26} ${(place.fromX + place.toX) / 2}H${wordsX + 22}`;
+    return <path key={piece.id} d={d} stroke="var(--rule)" strokeDasharray="2 3" />;
+  });
+}
+
+/** Source over the line, load under it, and their words. */
+function Ends({ source, load, scale, width }: Pick<StripDownProps, "source" | "load" | "scale" | "width">) {
+  const loadY = scale.endX + 36;
+  return (
+    <g>
+      <SourceAbove x={axisX} y={scale.startX} />
+      <LoadBelow x={axisX} y={scale.endX} kind={load.kind} />
+      <text x={wordsX + 26} y="20" className="key" style={{ fontSize: 13 }}>
+        {source.label}
+      </text>
+      <FigureText x={wordsX + 26} y={35} figures={source.figures ?? []} />
+      <text x={wordsX} y={loadY} className="key" style={{ fontSize: 13 }}>
+        {load.label}
+      </text>
+      <FigureText x={width} y={loadY} figures={load.figures ?? []} anchor="end" />
+    </g>
+  );
+}
+
 /** A run drawn down the page, for a phone: source at the top, distance downwards. */
 export function StripDown({ pieces, source, load, scale, width, height, children, ...actions }: StripDownProps) {
-  const mmToPx = thicknessScale(pieces) * 1.1;
-  const place = actions.selected === null ? undefined : scale.places[actions.selected];
+  const { selected } = actions;
+  const place = selected === null ? undefined : scale.places[selected];
+  const line = { pieces, scale, selected, y: 0, mmToPx: thicknessScale(pieces) * 1.1 };
   return (
     <div className="relative" style={{ height }}>
       <svg
@@ -107,36 +137,15 @@ export function StripDown({ pieces, source, load, scale, width, height, children
         )}
         <RulerDown scale={scale} />
         {children}
-        {pieces.map((piece, index) => {
-          const y = scale.places[index];
-          return isLaid(piece) || !y ? null : (
-            <path
-              key={piece.id}
-              d={`M${axisX + 26} ${(y.fromX + y.toX) / 2}H${wordsX + 22}`}
-              stroke="var(--rule)"
-              strokeDasharray="2 3"
-            />
-          );
-        })}
+        <Leaders pieces={pieces} scale={scale} />
         <g transform={`translate(${axisX} 0) rotate(90)`}>
-          <LinePieces pieces={pieces} scale={scale} selected={actions.selected} y={0} mmToPx={mmToPx} />
+          <LinePieces {...line} />
         </g>
-        <SourceAbove x={axisX} y={scale.startX} />
-        <LoadBelow x={axisX} y={scale.endX} kind={load.kind} />
-        <text x={wordsX + 26} y="20" className="key" style={{ fontSize: 13 }}>
-          {source.label}
-        </text>
-        <FigureText x={wordsX + 26} y={35} figures={source.figures ?? []} />
-        <text x={wordsX} y={scale.endX + 36} className="key" style={{ fontSize: 13 }}>
-          {load.label}
-        </text>
-        <FigureText x={width} y={scale.endX + 36} figures={load.figures ?? []} anchor="end" />
-        <WordsDown pieces={pieces} scale={scale} selected={actions.selected} />
+        <Ends source={source} load={load} scale={scale} width={width} />
+        <WordsDown pieces={pieces} scale={scale} selected={selected} />
       </svg>
       <StripList
-        {...actions}
-        pieces={pieces}
-        scale={scale}
+        {...{ ...actions, pieces, scale }}
         isDown
         name={`The line from ${source.label} to ${load.label}`}
         band={{ from: 0, size: 88 }}

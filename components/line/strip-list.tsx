@@ -1,7 +1,7 @@
 "use client";
 
 import { useRef, type KeyboardEvent } from "react";
-import type { LineScale } from "@/components/line/line-scale";
+import type { LineScale, Place } from "@/components/line/line-scale";
 import { isLaid, type StripPiece } from "@/components/line/strip-piece";
 
 export interface StripActions {
@@ -31,64 +31,83 @@ function step(key: string): number {
   return 0;
 }
 
-/** The pieces as a list of buttons laid over the drawing: to press, to reach by arrow keys, to hear. */
-export function StripList({
-  pieces,
-  scale,
+interface PieceButtonProps extends Pick<StripListProps, "band" | "isDown"> {
+  piece: StripPiece;
+  place: Place;
+  name: string;
+  isSelected: boolean;
+  isInTabOrder: boolean;
+  onPress: () => void;
+  onKeyDown: (event: KeyboardEvent) => void;
+}
+
+function PieceButton({
+  piece,
+  place,
   name,
   band,
-  isDown = false,
-  selected,
-  onSelect,
-  onMove,
-  onOpen,
-}: StripListProps) {
+  isDown,
+  isSelected,
+  isInTabOrder,
+  onPress,
+  onKeyDown,
+}: PieceButtonProps) {
+  const size = Math.max(leastTarget, place.toX - place.fromX);
+  const at = (place.fromX + place.toX - size) / 2;
+  const along = isDown ? { top: at, height: size } : { left: at, width: size };
+  const across = isDown ? { left: band.from, width: band.size } : { top: band.from, height: band.size };
+  return (
+    <button
+      type="button"
+      aria-pressed={isSelected}
+      aria-label={name}
+      tabIndex={isInTabOrder ? 0 : -1}
+      onClick={onPress}
+      onKeyDown={onKeyDown}
+      className={`absolute rounded ${isLaid(piece) ? "z-[1]" : "z-[2]"}`}
+      style={{ ...along, ...across }}
+    />
+  );
+}
+
+/** Which piece a key leads to from piece `index`; null for keys that lead nowhere. */
+function keyTarget(key: string, index: number, count: number): number | null {
+  const to = index + step(key);
+  return to !== index && to >= 0 && to < count ? to : null;
+}
+
+/** The pieces as a list of buttons laid over the drawing: to press, to reach by arrow keys, to hear. */
+export function StripList({ pieces, scale, name, band, isDown, selected, onSelect, onMove, onOpen }: StripListProps) {
   const list = useRef<HTMLOListElement>(null);
-  const focus = (index: number) => list.current?.querySelectorAll("button")[index]?.focus();
-
-  function press(event: KeyboardEvent, index: number) {
-    const by = step(event.key);
-    const to = index + by;
-    if (event.key === "Enter" && onOpen) {
-      event.preventDefault();
-      onSelect(index);
-      onOpen(index);
-    } else if (by !== 0 && to >= 0 && to < pieces.length) {
-      event.preventDefault();
-      if (event.altKey) onMove?.(index, to);
-      if (!event.altKey || onMove) {
-        onSelect(to);
-        focus(to);
-      }
-    }
+  function go(to: number) {
+    onSelect(to);
+    list.current?.querySelectorAll("button")[to]?.focus();
   }
-
+  function press(event: KeyboardEvent, index: number) {
+    const to = keyTarget(event.key, index, pieces.length);
+    const opens = event.key === "Enter" && onOpen !== undefined;
+    if (to === null && !opens) return;
+    event.preventDefault();
+    if (opens) onSelect(index);
+    if (opens) onOpen(index);
+    if (to !== null && event.altKey) onMove?.(index, to);
+    if (to !== null && (onMove || !event.altKey)) go(to);
+  }
   return (
     <ol ref={list} aria-label={name} className="absolute inset-0">
-      {pieces.map((piece, index) => {
-        const place = scale.places[index] ?? { fromX: 0, toX: 0 };
-        const size = Math.max(leastTarget, place.toX - place.fromX);
-        const at = (place.fromX + place.toX - size) / 2;
-        const isOver = !isLaid(piece);
-        return (
-          <li key={piece.id}>
-            <button
-              type="button"
-              aria-pressed={index === selected}
-              aria-label={`${index + 1} of ${pieces.length}, ${piece.spoken}${piece.fault ? `, ${piece.fault}` : ""}`}
-              tabIndex={index === (selected ?? 0) ? 0 : -1}
-              onClick={() => onSelect(index)}
-              onKeyDown={(event) => press(event, index)}
-              className={`absolute rounded ${isOver ? "z-[2]" : "z-[1]"}`}
-              style={
-                isDown
-                  ? { top: at, height: size, left: band.from, width: band.size }
-                  : { left: at, width: size, top: band.from, height: band.size }
-              }
-            />
-          </li>
-        );
-      })}
+      {pieces.map((piece, index) => (
+        <li key={piece.id}>
+          <PieceButton
+            {...{ piece, band, isDown }}
+            place={scale.places[index] ?? { fromX: 0, toX: 0, isBroken: false }}
+            name={`${index + 1} of ${pieces.length}, ${piece.spoken}${piece.fault ? `, ${piece.fault}` : ""}`}
+            isSelected={index === selected}
+            isInTabOrder={index === (selected ?? 0)}
+            onPress={() => onSelect(index)}
+            onKeyDown={(event) => press(event, index)}
+          />
+        </li>
+      ))}
     </ol>
   );
 }

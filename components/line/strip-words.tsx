@@ -10,8 +10,6 @@ interface WordsProps {
   selected: number | null;
   mmToPx: number;
   width: number;
-  /** of the line's axis */
-  y: number;
 }
 
 const nameStyle = { fontSize: 13 };
@@ -73,14 +71,14 @@ export function WordsBelow({
   scale,
   selected,
   width,
-  y,
+  belowY,
   hangsTo,
-}: Omit<WordsProps, "mmToPx"> & { hangsTo: number }) {
+}: Omit<WordsProps, "mmToPx"> & { belowY: number; hangsTo: number }) {
   return labelsBelow(pieces, scale, selected, 0, width).map((label) => {
     const piece = pieces[label.index];
     if (!piece) return null;
     const x = label.x + label.width / 2;
-    const at = hangs(piece) ? hangsTo + 13 : y + 31;
+    const at = hangs(piece) ? hangsTo + 13 : belowY;
     return (
       <g key={piece.id}>
         <text

@@ -1,11 +1,12 @@
 "use client";
 
+import { thickness } from "@/components/line/cable-lengthwise";
 import { LoadSymbol, SourceSymbol } from "@/components/line/end-symbols";
 import { LinePieces } from "@/components/line/line-pieces";
 import type { LineScale } from "@/components/line/line-scale";
 import { stubDropPx } from "@/components/line/piece-drawing";
 import { StripList, type StripActions } from "@/components/line/strip-list";
-import { hangs, thicknessScale, type StripEnd, type StripPiece } from "@/components/line/strip-piece";
+import { hangs, isLaid, thicknessScale, type StripEnd, type StripPiece } from "@/components/line/strip-piece";
 import { WordsAbove, WordsBelow } from "@/components/line/strip-words";
 import { useCursor } from "@/components/plot/cursor";
 
@@ -49,13 +50,20 @@ function EmptyLine({ scale }: { scale: LineScale }) {
   );
 }
 
+/** y of the words under the line, of the ends of what hangs there, and of the foot, px. */
+function heights(pieces: readonly StripPiece[], mmToPx: number) {
+  const halves = pieces.map((piece) => (piece.cable && isLaid(piece) ? thickness(piece.cable, mmToPx) / 2 : 0));
+  const belowY = axisY + Math.max(31, Math.max(0, ...halves) + 18);
+  const hangsTo = axisY + stubDropPx + (pieces.some((piece) => piece.end === "load") ? 12 : 2);
+  return { belowY, hangsTo, height: pieces.some(hangs) ? hangsTo + 34 : belowY + 13 };
+}
+
 /** A run as a strip drawn to scale from source to load. */
 export function Strip({ pieces, source, load, scale, width, ...actions }: StripProps) {
   const mmToPx = thicknessScale(pieces);
-  const hangsTo = axisY + stubDropPx + (pieces.some((piece) => piece.end === "load") ? 12 : 2);
-  const height = pieces.some(hangs) ? hangsTo + 34 : 114;
+  const { belowY, hangsTo, height } = heights(pieces, mmToPx);
   const place = actions.selected === null ? undefined : scale.places[actions.selected];
-  const common = { pieces, scale, selected: actions.selected, width, y: axisY };
+  const common = { pieces, scale, selected: actions.selected, width };
   return (
     <div className="relative" style={{ height }}>
       <svg
@@ -74,7 +82,7 @@ export function Strip({ pieces, source, load, scale, width, ...actions }: StripP
         <LinePieces pieces={pieces} scale={scale} selected={actions.selected} y={axisY} mmToPx={mmToPx} />
         <LoadSymbol x={scale.endX} y={axisY} kind={load.kind} />
         <WordsAbove {...common} mmToPx={mmToPx} source={source} load={load} />
-        <WordsBelow {...common} hangsTo={hangsTo} />
+        <WordsBelow {...common} belowY={belowY} hangsTo={hangsTo} />
         <CursorPlace scale={scale} height={height} />
       </svg>
       <StripList

@@ -7,13 +7,18 @@ export interface AxisScale {
   domain: () => number[];
 }
 
-/** A scale whose ends are what they are told to be. A log scale takes only positive ends. */
+/**
+ * A scale whose ends are what they are told to be. A log scale takes only positive ends. Places are rounded to
+ * hundredths of a px, so that the server and the browser, whose logarithms differ in the last digit, draw the same.
+ */
 export function axisScale(
   kind: "linear" | "log",
   domain: readonly [number, number],
   range: readonly [number, number],
 ): AxisScale {
-  return kind === "log" ? scaleLog([...domain], [...range]) : scaleLinear([...domain], [...range]);
+  const scale = kind === "log" ? scaleLog([...domain], [...range]) : scaleLinear([...domain], [...range]);
+  const place = (value: number) => Math.round(scale(value) * 100) / 100;
+  return Object.assign(place, { ticks: (count?: number) => scale.ticks(count), domain: () => scale.domain() });
 }
 
 /** From 0 to a round figure at or above the greatest of the values that are there. */

@@ -17,7 +17,8 @@ const usualDomain = [0.3, 100] as const;
 const ticks = [1, 10, 100];
 
 function placeOn(domain: readonly [number, number], width: number) {
-  return scaleLog([...domain], [0, width]).clamp(true);
+  const scale = scaleLog([...domain], [0, width]).clamp(true);
+  return (value: number) => Math.round(scale(value) * 10) / 10;
 }
 
 /** One bar on a log axis with a dot at the chosen place: how far a quantity reaches, and where it is now. */
@@ -35,16 +36,12 @@ export function RangeBar({ range, at, domain = usualDomain, name, width = 112, h
       className="block overflow-visible"
     >
       {ticks.map((tick) => (
-        <path key={tick} d={`M${x(tick).toFixed(1)} 0V${height}`} stroke="var(--line)" />
+        <path key={tick} d={`M${x(tick)} 0V${height}`} stroke="var(--line)" />
       ))}
-      <path d={`M${from.toFixed(1)} ${y}H${to.toFixed(1)}`} stroke="var(--ghost)" strokeWidth="5" />
-      <path
-        d={`M${from.toFixed(1)} ${y - 5}v10M${to.toFixed(1)} ${y - 5}v10`}
-        stroke="var(--ink-2)"
-        strokeWidth="1.2"
-      />
+      <path d={`M${from} ${y}H${to}`} stroke="var(--ghost)" strokeWidth="5" />
+      <path d={`M${from} ${y - 5}v10M${to} ${y - 5}v10`} stroke="var(--ink-2)" strokeWidth="1.2" />
       {at !== null && at > 0 && (
-        <circle cx={x(at).toFixed(1)} cy={y} r="4" fill="var(--series-1)" stroke="var(--paper)" strokeWidth="1.2" />
+        <circle cx={x(at)} cy={y} r="4" fill="var(--series-1)" stroke="var(--paper)" strokeWidth="1.2" />
       )}
     </svg>
   );

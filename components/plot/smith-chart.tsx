@@ -41,6 +41,11 @@ export function fittingEdge(points: readonly (Reflection | null)[], target = 0):
   return Math.max(0.1, Math.min(1, fits));
 }
 
+/** px from the centre, y downwards, on tenths. */
+function placeOf(point: Reflection, r: number): [number, number] {
+  return [Math.round(point.re * r * 10) / 10, Math.round(-point.im * r * 10) / 10];
+}
+
 function pathOf(points: readonly (Reflection | null)[], r: number): string {
   let path = "";
   let isDrawing = false;
@@ -58,7 +63,7 @@ function Ends({ trace, r }: { trace: SmithTrace; r: number }) {
   if (!trace.ends) return null;
   return ends.map((point, i) => {
     if (!point) return null;
-    const [x, y] = [point.re * r, -point.im * r];
+    const [x, y] = placeOf(point, r);
     const isRight = i === 1;
     return (
       <g key={i}>
@@ -98,64 +103,65 @@ function Traces({ traces, steps, r }: Pick<SmithChartProps, "traces" | "steps"> 
 function StepNote({ steps, r, frame }: Pick<SmithChartProps, "steps"> & { r: number; frame: number }) {
   const at = steps?.note ? steps.points[steps.note.at] : undefined;
   if (!at || Math.hypot(at.re, at.im) * r > frame) return null;
-  const y = -at.im * r;
+  const [x, y] = placeOf(at, r);
   return (
-    <text x={at.re * r} y={y < -frame + 26 ? y + 16 : y - 8} textAnchor="middle" className="key">
+    <text x={x} y={y < -frame + 26 ? y + 16 : y - 8} textAnchor="middle" className="key">
       {steps?.note?.words}
     </text>
   );
 }
 
-/** Reflections in the plane: the centre enlarged, with a switch to the whole chart. */
-export function SmithChart({ traces, steps, target, edge, size = 266 }: SmithChartProps) {
+interface PlaneProps extends SmithChartProps {
+  size: number;
+  /** |Γ| at the frame */
+  shown: number;
+}
+
+function Plane({ traces, steps, target, size, shown }: PlaneProps) {
   const clip = useId();
-  const [isFull, setFull] = useState(false);
-  const fitted =
-    edge ?? fittingEdge([...traces.flatMap((trace) => trace.points), ...(steps?.points ?? [])], target?.magnitude);
-  const shown = isFull ? 1 : fitted;
   const frame = size / 2 - 2;
   const r = frame / shown;
+  const half = size / 2;
+  return (
+    <svg width={size} height={size} viewBox={`${-half} ${-half} ${size} ${size}`} className="max-w-full shrink-0">
+      <defs>
+        <clipPath id={clip}>
+          <circle r={frame} />
+        </clipPath>
+      </defs>
+      <g clipPath={`url(#${clip})`}>
+        <SmithGrid r={r} edge={shown} />
+        {target && (
+          <circle
+            r={target.magnitude * r}
+            fill="var(--pass-wash)"
+            fillOpacity="0.7"
+            stroke="var(--pass)"
+            strokeWidth="1.25"
+          />
+        )}
+        <Traces traces={traces} steps={steps} r={r} />
+      </g>
+      <circle r={frame} fill="none" stroke="var(--ink)" strokeWidth="1.5" />
+      <StepNote steps={steps} r={r} frame={frame} />
+      {traces.map((trace) => (
+        <Ends key={trace.id} trace={trace} r={r} />
+      ))}
+    </svg>
+  );
+}
+
+/** Reflections in the plane: the centre enlarged, with a switch to the whole chart. */
+export function SmithChart(props: SmithChartProps) {
+  const { traces, steps, target, edge, size = 266 } = props;
+  const [isFull, setFull] = useState(false);
+  const drawn = [...traces.flatMap((trace) => trace.points), ...(steps?.points ?? [])];
+  const fitted = edge ?? fittingEdge(drawn, target?.magnitude);
+  const shown = isFull ? 1 : fitted;
   return (
     <div className="flex flex-wrap items-start gap-x-4 gap-y-2">
-      <svg
-        width={size}
-        height={size}
-        viewBox={`${-size / 2} ${-size / 2} ${size} ${size}`}
-        className="max-w-full shrink-0"
-      >
-        <defs>
-          <clipPath id={clip}>
-            <circle r={frame} />
-          </clipPath>
-        </defs>
-        <g clipPath={`url(#${clip})`}>
-          <SmithGrid r={r} edge={shown} />
-          {target && (
-            <circle
-              r={target.magnitude * r}
-              fill="var(--pass-wash)"
-              fillOpacity="0.7"
-              stroke="var(--pass)"
-              strokeWidth="1.25"
-            />
-          )}
-          <Traces traces={traces} steps={steps} r={r} />
-        </g>
-        <circle r={frame} fill="none" stroke="var(--ink)" strokeWidth="1.5" />
-        <StepNote steps={steps} r={r} frame={frame} />
-        {traces.map((trace) => (
-          <Ends key={trace.id} trace={trace} r={r} />
-        ))}
-      </svg>
-      <SmithKey
-        traces={traces}
-        steps={steps}
-        target={target}
-        shown={shown}
-        isFull={isFull}
-        fitted={fitted}
-        onToggle={() => setFull(!isFull)}
-      />
+      <Plane {...props} size={size} shown={shown} />
+      <SmithKey {...{ traces, steps, target, shown, isFull, fitted }} onToggle={() => setFull(!isFull)} />
     </div>
   );
 }

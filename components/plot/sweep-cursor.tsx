@@ -1,56 +1,40 @@
 "use client";
 
 import type { PointerEvent } from "react";
-import { axisScale } from "@/components/plot/axes";
 import { useCursor } from "@/components/plot/cursor";
 import { nearestIndex } from "@/components/plot/curve";
 import { Readout } from "@/components/plot/readout";
-import { usePlot, type Domains, type SweepOverlay } from "@/components/plot/sweep-overlay";
+import { useFrame, type Domains, type SweepOverlay } from "@/components/plot/sweep-frame";
 
 interface CursorProps extends SweepOverlay, Domains {
   kind: "linear" | "log";
-  width: number;
+}
+
+/** Value of the x-axis at a share of its length. */
+function valueAt(kind: "linear" | "log", [from, to]: readonly [number, number], share: number): number {
+  return kind === "log" ? from * (to / from) ** share : from + (to - from) * share;
 }
 
 /** Takes the pointer over the frame, and reads out at the shared cursor. */
-export function SweepCursor(props: CursorProps) {
-  const plot = usePlot();
-  const cursor = useCursor(props.cursorAxis ?? "frequency");
-  if (!plot) return null;
-  const scale = axisScale(props.kind, props.xDomain, [0, 1]);
-  const invert = (share: number) => {
-    const [a, b] = props.xDomain;
-    return props.kind === "log" ? a * (b / a) ** share : a + (b - a) * share;
-  };
+export function SweepCursor({ kind, xs, series, xDomain, formatX, formatY, cursorAxis = "frequency" }: CursorProps) {
+  const frame = useFrame();
+  const cursor = useCursor(cursorAxis);
+  if (!frame) return null;
+  const { left, top, right, bottom } = frame;
   const point = (event: PointerEvent<SVGRectElement>) => {
-    const frame = event.currentTarget.getBoundingClientRect();
-    if (frame.width > 0) cursor.set(invert(Math.max(0, Math.min(1, (event.clientX - frame.left) / frame.width))));
+    const box = event.currentTarget.getBoundingClientRect();
+    const share = box.width > 0 ? (event.clientX - box.left) / box.width : 0;
+    cursor.set(valueAt(kind, xDomain, Math.max(0, Math.min(1, share))));
   };
-  const at = cursor.value === null ? -1 : nearestIndex(props.xs, cursor.value);
-  const share = cursor.value === null ? -1 : scale(cursor.value);
-  const words = props.series.map(
-    ({ label, values }) => `${values[at] == null ? "–" : props.formatY(values[at] as number)} ${label}`,
-  );
+  const isInside = cursor.value !== null && cursor.value >= xDomain[0] && cursor.value <= xDomain[1];
+  const at = isInside ? nearestIndex(xs, cursor.value ?? 0) : -1;
+  const said = (value: number | null | undefined) => (value == null ? "–" : formatY(value));
+  const words = [formatX(xs[at] ?? 0), ...series.map(({ label, values }) => `${said(values[at])} ${label}`)];
+  const size = { x: left, y: top, width: right - left, height: bottom - top };
   return (
     <g>
-      <rect
-        x={plot.left}
-        y={plot.top}
-        width={plot.right - plot.left}
-        height={plot.bottom - plot.top}
-        fill="transparent"
-        onPointerMove={point}
-        onPointerLeave={() => cursor.set(null)}
-      />
-      {at >= 0 && share >= 0 && share <= 1 && (
-        <Readout
-          x={plot.x(cursor.value ?? 0)}
-          fromY={plot.top}
-          toY={plot.bottom}
-          limits={[plot.left, plot.right]}
-          words={[props.formatX(props.xs[at] ?? 0), ...words]}
-        />
-      )}
+      <rect {...size} fill="transparent" onPointerMove={point} onPointerLeave={() => cursor.set(null)} />
+      {at >= 0 && <Readout x={frame.x(xs[at] ?? 0)} fromY={top} toY={bottom} limits={[left, right]} words={words} />}
     </g>
   );
 }
