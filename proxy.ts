@@ -1,7 +1,8 @@
 /**
  * Runs before every page: gives it a content security policy with a nonce of its own, which Next puts on its tags, and
- * tells it its own path, so that whoever must sign in first comes back to it.
+ * tells it its own path, so that whoever must sign in first comes back to it. Unreadable addresses end here.
  */
+import { AppError, problem } from "@/lib/http/errors";
 import { type NextRequest, NextResponse } from "next/server";
 
 const isDevelopment = process.env.NODE_ENV === "development";
@@ -30,7 +31,20 @@ function policy(nonce: string): string {
     .join("; ");
 }
 
-export function proxy(request: NextRequest): NextResponse {
+function isDecodable(path: string): boolean {
+  try {
+    decodeURIComponent(path);
+    return true;
+  } catch {
+    return false;
+  }
+}
+
+export function proxy(request: NextRequest): NextResponse | Response {
+  // A path whose % signs stand for no text would be a 500 further on.
+  if (!isDecodable(new URL(request.url).pathname))
+    return problem(new AppError("malformed", "This address cannot be read."));
+  if (request.nextUrl.pathname.startsWith("/api/")) return NextResponse.next();
   const nonce = Buffer.from(crypto.getRandomValues(new Uint8Array(16))).toString("base64");
   const value = policy(nonce);
   const headers = new Headers(request.headers);
@@ -42,5 +56,8 @@ export function proxy(request: NextRequest): NextResponse {
   return response;
 }
 
-// Pages only: the API answers no markup, and files of the build need no nonce.
-export const config = { matcher: ["/((?!api/|_next/static|_next/image|icon.svg|favicon.ico).*)"] };
+// Pages: the API answers no markup and files of the build need no nonce. Of the API only addresses with a % in them, so
+// that bodies do not pass through here, which would cut them at 10 MB.
+export const config = {
+  matcher: ["/((?!api/|_next/static|_next/image|icon.svg|favicon.ico).*)", "/api/(.*%.*)"],
+};
