@@ -41,9 +41,41 @@ export function product(a: Analytic, b: Analytic): Analytic {
   };
 }
 
+/** a·x + b·y in one step: what every chain matrix does, so it makes no numbers on the way. */
+export function sumOfProducts(a: Analytic, x: Analytic, b: Analytic, y: Analytic): Analytic {
+  return {
+    re: a.re * x.re - a.im * x.im + b.re * y.re - b.im * y.im,
+    im: a.re * x.im + a.im * x.re + b.re * y.im + b.im * y.re,
+    slopeRe:
+      a.slopeRe * x.re -
+      a.slopeIm * x.im +
+      a.re * x.slopeRe -
+      a.im * x.slopeIm +
+      (b.slopeRe * y.re - b.slopeIm * y.im + b.re * y.slopeRe - b.im * y.slopeIm),
+    slopeIm:
+      a.slopeRe * x.im +
+      a.slopeIm * x.re +
+      a.re * x.slopeIm +
+      a.im * x.slopeRe +
+      (b.slopeRe * y.im + b.slopeIm * y.re + b.re * y.slopeIm + b.im * y.slopeRe),
+  };
+}
+
 /** A real multiple. */
 export function times(a: Analytic, factor: number): Analytic {
   return { re: a.re * factor, im: a.im * factor, slopeRe: a.slopeRe * factor, slopeIm: a.slopeIm * factor };
+}
+
+/** A real multiple of a product. */
+export function timesProduct(factor: number, a: Analytic, b: Analytic): Analytic {
+  const re = a.re * factor;
+  const im = a.im * factor;
+  return {
+    re: re * b.re - im * b.im,
+    im: re * b.im + im * b.re,
+    slopeRe: (a.slopeRe * b.re - a.slopeIm * b.im) * factor + (re * b.slopeRe - im * b.slopeIm),
+    slopeIm: (a.slopeRe * b.im + a.slopeIm * b.re) * factor + (re * b.slopeIm + im * b.slopeRe),
+  };
 }
 
 /** a / b; the derivative is (a' − (a/b)·b') / b. */

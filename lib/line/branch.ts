@@ -67,7 +67,8 @@ function variable(s: Complex): Analytic {
 
 function requirePart({ rOhm, lH, cF, q, qAtHz }: PartElement): void {
   const given = [rOhm, lH, cF].filter((value) => value !== undefined);
-  if (given.length !== 1) throw new RangeError(`partBranch: exactly one of rOhm, lH and cF is needed, got ${given.length}`);
+  if (given.length !== 1)
+    throw new RangeError(`partBranch: exactly one of rOhm, lH and cF is needed, got ${given.length}`);
   if (!(given[0]! >= 0)) throw new RangeError(`partBranch: the part's value must be at least 0, got ${given[0]}`);
   if (q !== undefined && !(q > 0)) throw new RangeError(`partBranch: q must be positive, got ${q}`);
   if (qAtHz !== undefined && !(qAtHz > 0)) throw new RangeError(`partBranch: qAtHz must be positive, got ${qAtHz}`);

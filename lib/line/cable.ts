@@ -7,65 +7,93 @@ import type { LineModel } from "@/lib/line/element";
 /** Frequency at which a model's capacitance is stated, rad/s. */
 const CAPACITANCE_CORNER = 2e6 * Math.PI;
 
-/** Series impedance (ohm per metre) and shunt admittance (siemens per metre), with their derivatives by s. */
+/** What a metre of cable is at one complex frequency, with derivatives by s. */
 export interface PerMetre {
+  /** series impedance, ohm per metre */
   z: Analytic;
+  /** shunt admittance, siemens per metre */
   y: Analytic;
+  /** γ² = z·y, 1/m² */
+  gammaSquared: Analytic;
+  /** propagation constant, 1/m, real part at least 0 */
+  gamma: Analytic;
 }
 
+/** A cable as a function of complex frequency, its constants worked out once. */
+export type LineAt = (s: Complex) => PerMetre;
+
 export interface Propagation extends PerMetre {
-  /** propagation constant, 1/m, real part at least 0, with its derivative by s */
-  gamma: Analytic;
   /** characteristic impedance, ohm, real part at least 0; not finite at s = 0 without leakage */
   zc: Complex;
 }
 
 /**
- * Series impedance and shunt admittance of a metre of cable.
- * Z(s) = Σ conductor terms + s·L∞; Y(s) = G0 + s·(C/cos δ)·(s/ωr)^(−2δ/π), δ = atan(tan δ), ωr = 2π·1 MHz.
+ * Series impedance, shunt admittance and propagation constant of a metre of cable as a function of s.
+ * Z(s) = Σ conductor terms + s·L∞; Y(s) = G0 + s·(C/cos δ)·(s/ωr)^(−2δ/π), δ = atan(tan δ), ωr = 2π·1 MHz; γ = √(ZY).
+ * The principal root is √Z·√Y wherever Re s is at least 0; taken of the product, a lossless line has no loss at all.
+ * The last answer is kept, so elements that share a cable work it out once for each s (the same object).
  * @param model - as it is, no temperature applied
- * @param s - complex frequency, rad/s; real part at least 0, 0 itself included
- * Source: constant-loss-angle permittivity that is causal, J. C. Curie and E. von Schweidler's law as a power of s;
- * telegrapher's equations, D. M. Pozar, Microwave Engineering, 4th ed., section 2.1.
+ * @returns a function of s, rad/s, real part at least 0, 0 itself included
+ * Source: telegrapher's equations, D. M. Pozar, Microwave Engineering, 4th ed., section 2.1; a dielectric of constant
+ * loss angle as a power of s, which is causal, A. K. Jonscher, Dielectric Relaxation in Solids, chapter 3.
  */
-export function perMetre(model: LineModel, s: Complex): PerMetre {
-  let z: Analytic = { re: s.re * model.lInfHPerM, im: s.im * model.lInfHPerM, slopeRe: model.lInfHPerM, slopeIm: 0 };
-  for (const term of model.conductors) z = sum(z, conductorImpedance(term, s));
-  return { z, y: shuntAdmittance(model, s) };
-}
-
-function shuntAdmittance(model: LineModel, s: Complex): Analytic {
-  const leakage = model.g0SPerM ?? 0;
-  const lossTangent = model.lossTangent ?? 0;
-  const c = model.cFPerM;
-  const size = Math.hypot(s.re, s.im);
-  if (lossTangent === 0 || size === 0)
-    return { re: leakage + s.re * c, im: s.im * c, slopeRe: size === 0 && lossTangent > 0 ? Infinity : c, slopeIm: 0 };
-  const delta = Math.atan(lossTangent);
-  const exponent = (2 * delta) / Math.PI;
-  const magnitude = c * Math.sqrt(1 + lossTangent * lossTangent) * Math.pow(size / CAPACITANCE_CORNER, -exponent);
-  const angle = -exponent * Math.atan2(s.im, s.re);
-  // capacitance at s, complex; Y' = (1 − exponent)·capacitance
-  const re = magnitude * Math.cos(angle);
-  const im = magnitude * Math.sin(angle);
-  return {
-    re: leakage + s.re * re - s.im * im,
-    im: s.re * im + s.im * re,
-    slopeRe: (1 - exponent) * re,
-    slopeIm: (1 - exponent) * im,
+export function prepareLine(model: LineModel): LineAt {
+  const { conductors, lInfHPerM } = model;
+  const admittance = prepareAdmittance(model);
+  let lastS: Complex | undefined;
+  let last: PerMetre | undefined;
+  return (s) => {
+    if (last !== undefined && s === lastS) return last;
+    let z: Analytic = { re: s.re * lInfHPerM, im: s.im * lInfHPerM, slopeRe: lInfHPerM, slopeIm: 0 };
+    for (const term of conductors) z = sum(z, conductorImpedance(term, s));
+    const y = admittance(s);
+    const gammaSquared = product(z, y);
+    lastS = s;
+    last = { z, y, gammaSquared, gamma: root(gammaSquared) };
+    return last;
   };
 }
 
+function prepareAdmittance({ cFPerM, lossTangent = 0, g0SPerM = 0 }: LineModel): (s: Complex) => Analytic {
+  if (lossTangent === 0)
+    return (s) => ({ re: g0SPerM + s.re * cFPerM, im: s.im * cFPerM, slopeRe: cFPerM, slopeIm: 0 });
+  const exponent = (2 * Math.atan(lossTangent)) / Math.PI;
+  const magnitudeAtCorner = cFPerM * Math.sqrt(1 + lossTangent * lossTangent);
+  return (s) => {
+    const size = Math.sqrt(s.re * s.re + s.im * s.im);
+    // the capacitance grows without bound toward dc, though its admittance does not
+    if (size === 0) return { re: g0SPerM, im: 0, slopeRe: Infinity, slopeIm: 0 };
+    const growth = Math.exp(-exponent * Math.log(size / CAPACITANCE_CORNER));
+    let re = cFPerM * growth;
+    let im = s.im > 0 ? -re * lossTangent : re * lossTangent;
+    // on the imaginary axis the angle is ∓δ, and that is all there is to it
+    if (s.re !== 0) {
+      const angle = -exponent * Math.atan2(s.im, s.re);
+      re = magnitudeAtCorner * growth * Math.cos(angle);
+      im = magnitudeAtCorner * growth * Math.sin(angle);
+    }
+    return {
+      re: g0SPerM + s.re * re - s.im * im,
+      im: s.re * im + s.im * re,
+      slopeRe: (1 - exponent) * re,
+      slopeIm: (1 - exponent) * im,
+    };
+  };
+}
+
+/** `prepareLine` at one s. */
+export function perMetre(model: LineModel, s: Complex): PerMetre {
+  return prepareLine(model)(s);
+}
+
 /**
- * Propagation constant and characteristic impedance: γ = √(ZY), Zc = Z/γ. The principal root has a real part of at
- * least 0 and is √Z·√Y wherever Re s is at least 0; taken of the product, a lossless line has no loss at all.
+ * What a metre of cable is at one s, and its characteristic impedance Zc = Z/γ.
  * @param model - as it is, no temperature applied
  * @param s - complex frequency, rad/s; real part at least 0
  */
 export function propagation(model: LineModel, s: Complex): Propagation {
-  const { z, y } = perMetre(model, s);
-  const gamma = root(product(z, y));
-  return { z, y, gamma, zc: divide(z, gamma) };
+  const line = perMetre(model, s);
+  return { ...line, zc: divide(line.z, line.gamma) };
 }
 
 export interface NominalFigures {
@@ -85,7 +113,13 @@ export interface NominalFigures {
 export function nominalFigures(model: LineModel): NominalFigures {
   const { lInfHPerM: inductance, cFPerM: capacitance } = model;
   const delay = Math.sqrt(inductance * capacitance);
-  return { z0: Math.sqrt(inductance / capacitance), velocityFactor: 1 / (delay * SPEED_OF_LIGHT), delay, capacitance, inductance };
+  return {
+    z0: Math.sqrt(inductance / capacitance),
+    velocityFactor: 1 / (delay * SPEED_OF_LIGHT),
+    delay,
+    capacitance,
+    inductance,
+  };
 }
 
 /**
@@ -99,7 +133,8 @@ export function modelFromNominal(
 ): LineModel {
   const { z0, velocityFactor, ...rest } = nominal;
   if (!(z0 > 0)) throw new RangeError(`modelFromNominal: z0 must be positive, got ${z0}`);
-  if (!(velocityFactor > 0)) throw new RangeError(`modelFromNominal: velocityFactor must be positive, got ${velocityFactor}`);
+  if (!(velocityFactor > 0))
+    throw new RangeError(`modelFromNominal: velocityFactor must be positive, got ${velocityFactor}`);
   const velocity = SPEED_OF_LIGHT * velocityFactor;
   return {
     conductors: [{ form: "constant", r0OhmPerM: 0 }],

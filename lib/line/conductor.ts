@@ -22,15 +22,14 @@ export function conductorImpedance(term: Conductor, s: Complex): Analytic {
   if (corner === undefined || !(corner > 0))
     throw new RangeError(`conductorImpedance: skinCornerRadPerS must be positive for ${term.form}, got ${corner}`);
   const p: Analytic = { re: s.re / corner, im: s.im / corner, slopeRe: 1 / corner, slopeIm: 0 };
-  return times(relativeImpedance[term.form](p), term.r0OhmPerM);
+  return times(relativeImpedance(term.form, p), term.r0OhmPerM);
 }
 
 /** Impedance over dc resistance, as a function of p = s/ωs. */
-const relativeImpedance = {
-  sqrt: (p: Analytic) => root(onePlus(p)),
-  sheet,
-  round,
-};
+function relativeImpedance(form: "round" | "sheet" | "sqrt", p: Analytic): Analytic {
+  if (form === "sqrt") return root(onePlus(p));
+  return form === "round" ? round(p) : sheet(p);
+}
 
 function onePlus(p: Analytic): Analytic {
   return { re: 1 + p.re, im: p.im, slopeRe: p.slopeRe, slopeIm: p.slopeIm };
@@ -45,6 +44,7 @@ function round(p: Analytic): Analytic {
 
 /** q·coth q with q = √p. */
 function sheet(p: Analytic): Analytic {
-  const { cosh, sinhc } = evenHyperbolic(p);
+  const q = root(p);
+  const { cosh, sinhc } = evenHyperbolic(p, q.re, q.im);
   return quotient(cosh, sinhc);
 }

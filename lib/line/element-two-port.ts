@@ -1,7 +1,8 @@
+import { prepareLine, type LineAt } from "@/lib/line/cable";
 import { partBranch, shuntBranch, stubBranch } from "@/lib/line/branch";
 import type { Complex } from "@/lib/line/complex";
 import { steady } from "@/lib/line/analytic";
-import type { Circuit, Element, LineModel, StubElement, Termination } from "@/lib/line/element";
+import type { CableElement, Circuit, Element, LineModel, StubElement, Termination } from "@/lib/line/element";
 import { jointReference, jointTwoPort } from "@/lib/line/joint";
 import { padTwoPort } from "@/lib/line/pad";
 import { lineSection, parallelSections } from "@/lib/line/section";
@@ -13,7 +14,23 @@ export interface ElementOptions {
   /** °C, where the element has no temperature of its own; default 20 */
   temperatureC?: number;
   /** impedance of a joint that names none, ohm */
-  jointReferenceOhm?: number;
+  jointReferenceOhm?: number | undefined;
+  /** where the lines of a run are looked up, so that elements of one cable and temperature share it */
+  lines?: LinesAtTemperature;
+}
+
+/** A line of a model at a temperature, the same one for the same model (by identity) and temperature. */
+type LinesAtTemperature = (model: LineModel, temperatureC: number) => LineAt;
+
+function linesAtTemperature(): LinesAtTemperature {
+  const known = new Map<LineModel, Map<number, LineAt>>();
+  return (model, temperatureC) => {
+    const ofModel = known.get(model) ?? new Map<number, LineAt>();
+    known.set(model, ofModel);
+    const line = ofModel.get(temperatureC) ?? prepareLine(atTemperature(model, temperatureC).model);
+    ofModel.set(temperatureC, line);
+    return line;
+  };
 }
 
 /**
@@ -23,14 +40,18 @@ export interface ElementOptions {
  */
 export function prepareElement(element: Element, options: ElementOptions = {}): TwoPortAt {
   const temperatureC = ("temperatureC" in element ? element.temperatureC : undefined) ?? options.temperatureC ?? 20;
-  const warm = (model: LineModel) => atTemperature(model, temperatureC).model;
+  const lineOf = options.lines ?? linesAtTemperature();
+  const section = ({ line, lengthM, paralleled }: CableElement | StubElement) =>
+    lineSection(lineOf(line.model, temperatureC), lengthM, paralleled);
   switch (element.kind) {
     case "cable":
-      return lineSection(warm(element.line.model), element.lengthM, element.paralleled);
+      return section(element);
     case "parallel":
-      return parallelSections(element.branches.map(({ line, lengthM }) => ({ model: warm(line.model), length: lengthM })));
+      return parallelSections(
+        element.branches.map(({ line, lengthM }) => ({ line: lineOf(line.model, temperatureC), length: lengthM })),
+      );
     case "stub":
-      return stubBranch(element.connection, lineSection(warm(element.line.model), element.lengthM, element.paralleled), stubEnd(element));
+      return stubBranch(element.connection, section(element), stubEnd(element));
     case "shunt":
       return (s) => shuntBranch(terminationPort(element.termination, s));
     case "part":
@@ -49,15 +70,36 @@ export function elementTwoPort(element: Element, s: Complex, options?: ElementOp
   return prepareElement(element, options)(s);
 }
 
+/** An element ready for a walk; a cable carries its parts too, for the step that makes no objects. */
+export interface PreparedElement {
+  twoPort: TwoPortAt;
+  cable?: { line: LineAt; length: number; paralleled: number };
+}
+
+/** A run, of which only the elements need be known; a joint without any cable about takes the reference or the source's resistance. */
+type Chain = Pick<Circuit, "elements"> & Partial<Circuit>;
+
+function constantResistance(source: Termination | undefined): number | undefined {
+  return source?.kind === "constant" && source.reOhm > 0 ? source.reOhm : undefined;
+}
+
 /** Every element of a run, source side first; joints find their impedance beside them. Throws as `prepareElement`. */
-export function prepareElements(circuit: Pick<Circuit, "elements" | "referenceOhm">, temperatureC = 20): TwoPortAt[] {
-  const { elements, referenceOhm } = circuit;
-  return elements.map((element, index) =>
-    prepareElement(element, {
-      temperatureC,
-      ...(element.kind === "joint" ? { jointReferenceOhm: jointReference(elements, index) ?? referenceOhm } : {}),
-    }),
-  );
+export function prepareSteps(circuit: Chain, temperatureC = 20): PreparedElement[] {
+  const { elements } = circuit;
+  const referenceOhm = circuit.referenceOhm ?? constantResistance(circuit.source);
+  const lines = linesAtTemperature();
+  return elements.map((element, index) => {
+    const jointReferenceOhm = element.kind === "joint" ? (jointReference(elements, index) ?? referenceOhm) : undefined;
+    const twoPort = prepareElement(element, { temperatureC, lines, jointReferenceOhm });
+    if (element.kind !== "cable") return { twoPort };
+    const line = lines(element.line.model, element.temperatureC ?? temperatureC);
+    return { twoPort, cable: { line, length: element.lengthM, paralleled: element.paralleled ?? 1 } };
+  });
+}
+
+/** The same as two-ports alone. Throws as `prepareElement`. */
+export function prepareElements(circuit: Chain, temperatureC = 20): TwoPortAt[] {
+  return prepareSteps(circuit, temperatureC).map(({ twoPort }) => twoPort);
 }
 
 function stubEnd({ end }: StubElement): Termination {

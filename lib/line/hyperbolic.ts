@@ -2,7 +2,8 @@
  * cosh √P and (sinh √P)/√P: the two even functions every uniform line is made of. Both are analytic in P, so nothing
  * is lost at P = 0, and both are divided by e^{Re √P}, so nothing overflows on a run of any loss.
  */
-import { product, root, type Analytic } from "@/lib/line/analytic";
+import type { Analytic } from "@/lib/line/analytic";
+import type { Complex } from "@/lib/line/complex";
 
 export interface EvenHyperbolic {
   /** e^{−logScale}·cosh √P */
@@ -13,30 +14,24 @@ export interface EvenHyperbolic {
   logScale: number;
 }
 
-/** Below this |P| the derivative of sinhc is summed as a series; at it both ways agree to 3·10⁻¹⁴. */
-const seriesLimit = 1e-2;
-
 /**
  * The scaled even hyperbolic functions with their derivatives by s.
  * @param square - P, the square of the argument (γ²·length² of a line), with its derivative by s
- * @param argument - √P with real part at least 0, where the caller has it at hand from better conditioned factors
+ * @param x - real part of √P, at least 0
+ * @param phase - imaginary part of √P
  * Source: d cosh√P/dP = sinhc/2, d sinhc/dP = (cosh − sinhc)/2P; the scaling constant is not differentiated.
  */
-export function evenHyperbolic(square: Analytic, argument: { re: number; im: number } = root(square)): EvenHyperbolic {
-  const x = argument.re;
-  const sine = Math.sin(argument.im);
-  const cosine = Math.cos(argument.im);
+export function evenHyperbolic(square: Analytic, x: number, phase: number): EvenHyperbolic {
+  const size = x * x + phase * phase;
+  const sine = Math.sin(phase);
+  const cosine = Math.cos(phase);
   const sinhScaled = -Math.expm1(-2 * x) / 2;
   const coshScaled = 1 - sinhScaled;
   const coshRe = coshScaled * cosine;
   const coshIm = sinhScaled * sine;
-  const size = x * x + argument.im * argument.im;
-  if (size === 0) return atZero(square);
-  const sinhRe = sinhScaled * cosine;
-  const sinhIm = coshScaled * sine;
-  const re = (sinhRe * x + sinhIm * argument.im) / size;
-  const im = (sinhIm * x - sinhRe * argument.im) / size;
-  const slope = size < seriesLimit ? sinhcSlopeSeries(square, Math.exp(-x)) : sinhcSlope(coshRe - re, coshIm - im, square);
+  const re = size === 0 ? 1 : (sinhScaled * cosine * x + coshScaled * sine * phase) / size;
+  const im = size === 0 ? 0 : (coshScaled * sine * x - sinhScaled * cosine * phase) / size;
+  const slope = sinhcSlope(square.re, square.im, coshRe - re, coshIm - im, x);
   return {
     cosh: {
       re: coshRe,
@@ -54,28 +49,28 @@ export function evenHyperbolic(square: Analytic, argument: { re: number; im: num
   };
 }
 
-function atZero(square: Analytic): EvenHyperbolic {
-  return {
-    cosh: { re: 1, im: 0, slopeRe: square.slopeRe / 2, slopeIm: square.slopeIm / 2 },
-    sinhc: { re: 1, im: 0, slopeRe: square.slopeRe / 6, slopeIm: square.slopeIm / 6 },
-    logScale: 0,
-  };
-}
+/** Below this |P|² the derivative of sinhc is summed as a series; at it both ways agree to 3·10⁻¹⁴. */
+const seriesLimit = 1e-4;
 
-/** (cosh − sinhc) / 2P. */
-function sinhcSlope(differenceRe: number, differenceIm: number, square: Analytic): { re: number; im: number } {
-  const size = 2 * (square.re * square.re + square.im * square.im);
-  return {
-    re: (differenceRe * square.re + differenceIm * square.im) / size,
-    im: (differenceIm * square.re - differenceRe * square.im) / size,
-  };
-}
-
-/** The same by its power series 1/6 + P/60 + P²/1680 + P³/90720, times the scale factor. */
-function sinhcSlopeSeries(square: Analytic, factor: number): { re: number; im: number } {
-  const p = { re: square.re, im: square.im, slopeRe: 0, slopeIm: 0 };
-  const third = { re: 1 / 1680 + p.re / 90720, im: p.im / 90720, slopeRe: 0, slopeIm: 0 };
-  const second = product(p, third);
-  const first = product(p, { re: 1 / 60 + second.re, im: second.im, slopeRe: 0, slopeIm: 0 });
-  return { re: (1 / 6 + first.re) * factor, im: first.im * factor };
+/**
+ * d sinhc/dP, scaled: (cosh − sinhc)/2P, which cancels near P = 0 and is there e^{−x}·(1/6 + P/60 + P²/1680 + P³/90720).
+ * @param re - real part of P
+ * @param im - imaginary part of P
+ * @param differenceRe - real part of cosh − sinhc, scaled
+ * @param differenceIm - its imaginary part
+ * @param x - Re √P
+ */
+export function sinhcSlope(re: number, im: number, differenceRe: number, differenceIm: number, x: number): Complex {
+  const size = re * re + im * im;
+  if (size >= seriesLimit)
+    return {
+      re: (differenceRe * re + differenceIm * im) / (2 * size),
+      im: (differenceIm * re - differenceRe * im) / (2 * size),
+    };
+  const factor = Math.exp(-x);
+  const thirdRe = 1 / 1680 + re / 90720;
+  const thirdIm = im / 90720;
+  const secondRe = 1 / 60 + re * thirdRe - im * thirdIm;
+  const secondIm = re * thirdIm + im * thirdRe;
+  return { re: (1 / 6 + re * secondRe - im * secondIm) * factor, im: (re * secondIm + im * secondRe) * factor };
 }

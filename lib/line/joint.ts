@@ -17,7 +17,8 @@ const ONE_GHZ = 2e9 * Math.PI;
 export function jointTwoPort(joint: JointElement, referenceOhm: number): TwoPortAt {
   const { lossDb = 0, lossDbAtOneGhz = 0, shuntF = 0 } = joint;
   for (const [name, value] of Object.entries({ lossDb, lossDbAtOneGhz, shuntF }))
-    if (!(value >= 0 && value < Infinity)) throw new RangeError(`jointTwoPort: ${name} must be at least 0, got ${value}`);
+    if (!(value >= 0 && value < Infinity))
+      throw new RangeError(`jointTwoPort: ${name} must be at least 0, got ${value}`);
   if (!(referenceOhm > 0)) throw new RangeError(`jointTwoPort: referenceOhm must be positive, got ${referenceOhm}`);
   const flat = steady(lossDb / DB_PER_NEPER);
   return (s) => {
@@ -31,7 +32,7 @@ export function jointTwoPort(joint: JointElement, referenceOhm: number): TwoPort
 }
 
 function lossySection(theta: Analytic, referenceOhm: number): TwoPort {
-  const { cosh, sinhc, logScale } = evenHyperbolic(product(theta, theta), theta);
+  const { cosh, sinhc, logScale } = evenHyperbolic(product(theta, theta), theta.re, theta.im);
   const sinh = product(theta, sinhc);
   const b = times(sinh, referenceOhm);
   const c = times(sinh, 1 / referenceOhm);

@@ -32,7 +32,14 @@ export interface LineWave {
  * @param near - at the source end
  * @param far - at the load end
  */
-export function lineWave(model: LineModel, length: number, paralleled: number, s: Complex, near: Phasors, far: Phasors): LineWave {
+export function lineWave(
+  model: LineModel,
+  length: number,
+  paralleled: number,
+  s: Complex,
+  near: Phasors,
+  far: Phasors,
+): LineWave {
   const line = propagation(model, s);
   const zc = scale(line.zc, 1 / paralleled);
   return {
@@ -71,12 +78,20 @@ export interface Peak {
  * wavelength at each end.
  */
 export function peakVoltage(wave: LineWave): Peak {
-  return peak(wave, (at) => at.v, ({ v, i }) => -inner(v, multiply(wave.z, i)));
+  return peak(
+    wave,
+    (at) => at.v,
+    ({ v, i }) => -inner(v, multiply(wave.z, i)),
+  );
 }
 
 /** The true largest current on the line; see `peakVoltage`. */
 export function peakCurrent(wave: LineWave): Peak {
-  return peak(wave, (at) => at.i, ({ v, i }) => -inner(i, multiply(wave.y, v)));
+  return peak(
+    wave,
+    (at) => at.i,
+    ({ v, i }) => -inner(i, multiply(wave.y, v)),
+  );
 }
 
 /** Re(a*·b). */

@@ -22,7 +22,9 @@ function requirePad(where: string, { lossDb, inputOhm, outputOhm }: PadElement):
   if (!(outputOhm > 0)) throw new RangeError(`${where}: outputOhm must be positive, got ${outputOhm}`);
   const least = minimumPadLossDb(inputOhm, outputOhm);
   if (!(lossDb >= least - lossSlackDb && lossDb < Infinity))
-    throw new RangeError(`${where}: lossDb must be at least ${least} between ${inputOhm} and ${outputOhm} ohm, got ${lossDb}`);
+    throw new RangeError(
+      `${where}: lossDb must be at least ${least} between ${inputOhm} and ${outputOhm} ohm, got ${lossDb}`,
+    );
 }
 
 /**

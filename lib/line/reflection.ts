@@ -1,4 +1,4 @@
-import { abs, add, conjugate, divide, multiply, ONE, scale, subtract, type Complex } from "@/lib/line/complex";
+import { abs, add, conjugate, divide, ONE, scale, subtract, type Complex } from "@/lib/line/complex";
 
 /**
  * Power-wave reflection coefficient of a load seen by a source, (Z − Zs*) / (Z + Zs).
@@ -23,7 +23,8 @@ export function reflection(load: Complex, source: Complex): Complex {
  * @throws RangeError when referenceOhm is not positive
  */
 export function impedanceOfReflection(gamma: Complex, referenceOhm: number): Complex {
-  if (!(referenceOhm > 0)) throw new RangeError(`impedanceOfReflection: referenceOhm must be positive, got ${referenceOhm}`);
+  if (!(referenceOhm > 0))
+    throw new RangeError(`impedanceOfReflection: referenceOhm must be positive, got ${referenceOhm}`);
   const under = subtract(ONE, gamma);
   if (under.re === 0 && under.im === 0) return { re: Infinity, im: NaN };
   return scale(divide(add(ONE, gamma), under), referenceOhm);
@@ -110,6 +111,10 @@ export function mismatchedLineLossDb(magnitude: number, lossDb: number): number 
  * @returns NaN where neither side carries anything (a short on a 0 Ω source)
  */
 export function portReflection(v: Complex, i: Complex, source: Complex): Complex {
-  const risen = multiply(source, i);
-  return divide(subtract(v, multiply(conjugate(source), i)), add(v, risen));
+  // with u = v + jX·i the two sides are u ∓ R·i
+  const re = v.re - source.im * i.im;
+  const im = v.im + source.im * i.re;
+  const dropRe = source.re * i.re;
+  const dropIm = source.re * i.im;
+  return divide({ re: re - dropRe, im: im - dropIm }, { re: re + dropRe, im: im + dropIm });
 }

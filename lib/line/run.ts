@@ -1,11 +1,7 @@
-import { slopeOf, type Analytic } from "@/lib/line/analytic";
-import { abs, divide, type Complex } from "@/lib/line/complex";
-import { DB_PER_NEPER } from "@/lib/line/constants";
 import type { Circuit, Plane } from "@/lib/line/element";
 import { complexArray, type ComplexArray } from "@/lib/line/line-figures";
-import { portReflection, returnLossDb, vswr } from "@/lib/line/reflection";
-import { portImpedance } from "@/lib/line/termination";
-import { powerThrough, prepareRun, sourceImpedance, walk, type PreparedRun, type Walk } from "@/lib/line/walk";
+import { fillLoad, fillLosses, fillPlane, fillSourcePlane, type PlaneIndex } from "@/lib/line/run-figures";
+import { prepareRun, walk, type PreparedRun, type Walk } from "@/lib/line/walk";
 
 /** What stands at one plane over frequency, looking toward the load. */
 export interface PlaneFigures {
@@ -65,18 +61,20 @@ export interface SweepOptions {
  */
 export function sweep(circuit: Circuit, frequencies: ArrayLike<number>, options: SweepOptions = {}): Sweep {
   const run = prepareRun(circuit, options.temperatureC);
-  const result = emptySweep(frequencies, circuit.elements.length, options.planes ?? []);
-  const planes = result.atPlanes.map(({ plane }) => planeIndex(plane, circuit.elements.length));
+  const count = circuit.elements.length;
+  const result = emptySweep(frequencies, count, options.planes ?? []);
+  const planes = result.atPlanes.map(({ plane }) => planeIndex(plane, count));
+  let at: Walk | undefined;
   for (let k = 0; k < result.frequencies.length; k++) {
     const frequency = result.frequencies[k]!;
     if (!(frequency > 0 && frequency < Infinity))
       throw new RangeError(`sweep: frequencies must be positive, got ${frequency}`);
-    const at = walk(run, { re: 0, im: 2 * Math.PI * frequency });
+    at = walk(run, { re: 0, im: 2 * Math.PI * frequency }, at);
     const reference = planeReference(run, at);
     fillSourcePlane(result, k, at);
     fillLoad(result, k, at, reference);
     fillLosses(result, k, at, reference);
-    result.atPlanes.forEach((figures, index) => fillPlane(figures, k, at, planes[index]!, reference));
+    for (let n = 0; n < planes.length; n++) fillPlane(result.atPlanes[n]!, k, at, planes[n]!, reference);
   }
   return result;
 }
@@ -108,12 +106,6 @@ function emptySweep(frequencies: ArrayLike<number>, elements: number, planes: re
   };
 }
 
-/** Plane n is before element n; the source is plane 0, the load plane N. A load plane of an empty run is the load's. */
-interface PlaneIndex {
-  index: number;
-  isSource: boolean;
-}
-
 function planeIndex(plane: Plane, elements: number): PlaneIndex {
   if ("at" in plane) return plane.at === "source" ? { index: 0, isSource: true } : { index: elements, isSource: false };
   const index = plane.beforeElement;
@@ -127,93 +119,8 @@ function planeIndex(plane: Plane, elements: number): PlaneIndex {
  * @throws RangeError when the source has no resistance and the circuit names no reference
  */
 function planeReference(run: PreparedRun, at: Walk): number {
-  const reference = run.referenceOhm ?? sourceImpedance(at).re;
+  const reference = run.referenceOhm ?? at.sourceImpedance.re;
   if (!(reference > 0 && reference < Infinity))
     throw new RangeError(`sweep: referenceOhm is needed where the source has no resistance, got ${reference}`);
   return reference;
-}
-
-function put(array: ComplexArray, k: number, value: Complex): void {
-  array.re[k] = value.re;
-  array.im[k] = value.im;
-}
-
-function fillSourcePlane(result: Sweep, k: number, at: Walk): void {
-  const { v, i } = at.planes[0]!;
-  put(result.inputImpedance, k, portImpedance({ v, i }));
-  const gamma = portReflection(v, i, sourceImpedance(at));
-  put(result.reflection, k, gamma);
-  const magnitude = abs(gamma);
-  result.returnLossDb[k] = returnLossDb(magnitude);
-  result.vswr[k] = vswr(magnitude);
-}
-
-function fillPlane(figures: PlaneFigures, k: number, at: Walk, { index, isSource }: PlaneIndex, reference: number): void {
-  const { v, i } = at.planes[index]!;
-  put(figures.impedance, k, portImpedance({ v, i }));
-  const gamma = portReflection(v, i, isSource ? sourceImpedance(at) : { re: reference, im: 0 });
-  put(figures.reflection, k, gamma);
-  const magnitude = abs(gamma);
-  figures.returnLossDb[k] = returnLossDb(magnitude);
-  figures.vswr[k] = vswr(magnitude);
-}
-
-function fillLoad(result: Sweep, k: number, at: Walk, reference: number): void {
-  const load = at.planes[at.scales.length]!;
-  put(result.loadReflection, k, portReflection(load.v, load.i, { re: reference, im: 0 }));
-  let scale = 0;
-  for (const each of at.scales) scale += each;
-  put(result.loadVoltage, k, loadVoltage(at, load.v, scale));
-  result.groupDelayS[k] = scale === Infinity ? NaN : groupDelay(at, load.v.re === 0 && load.v.im === 0 ? load.i : load.v);
-}
-
-function loadVoltage(at: Walk, v: Analytic, scale: number): Complex {
-  const factor = Math.exp(-scale);
-  if (factor === 0) return { re: 0, im: 0 };
-  const { i } = at.source;
-  const ratio = divide({ re: v.re * i.re - v.im * i.im, im: v.re * i.im + v.im * i.re }, at.drive);
-  return { re: ratio.re * factor, im: ratio.im * factor };
-}
-
-/** −Re d ln(quantity·source.i / drive)/ds; on the imaginary axis that is −dφ/dω. */
-function groupDelay(at: Walk, quantity: Analytic): number {
-  return logSlope(at.drive) - logSlope(quantity) - logSlope(at.source.i);
-}
-
-function logSlope(a: Analytic): number {
-  return divide(slopeOf(a), a).re;
-}
-
-function fillLosses(result: Sweep, k: number, at: Walk, reference: number): void {
-  const { planes, scales } = at;
-  const load = planes[scales.length]!;
-  const inLoad = Math.max(0, load.v.re * load.i.re + load.v.im * load.i.im);
-  let power = inLoad;
-  let runLossDb = 0;
-  for (let n = scales.length - 1; n >= 0; n--) {
-    const scale = scales[n]!;
-    const entering = powerThrough(planes[n]!, power * Math.exp(-2 * scale), reference);
-    const lossDb =
-      power > 0 && scale < Infinity ? Math.max(0, 10 * Math.log10(entering / power) + scale * DB_PER_NEPER) : Infinity;
-    result.elementLossDb[n]![k] = lossDb;
-    runLossDb += lossDb;
-    power = entering;
-  }
-  if (!(inLoad > 0)) runLossDb = Infinity;
-  const matchedLossDb = at.matchedLoss * DB_PER_NEPER;
-  const mismatchDb = mismatchDbOf(at, power);
-  result.matchedLossDb[k] = matchedLossDb;
-  result.mismatchLossDb[k] = mismatchDb;
-  result.transducerLossDb[k] = mismatchDb + runLossDb;
-  result.extraLossDb[k] = runLossDb - matchedLossDb;
-}
-
-/** Available source power over power into the run, dB: |drive|² / (4·Re(Zs)·|source.i|²·P). */
-function mismatchDbOf(at: Walk, power: number): number {
-  const { v, i } = at.source;
-  const resistive = 4 * (v.re * i.re + v.im * i.im);
-  if (!(resistive > 0)) return NaN;
-  if (!(power > 0)) return Infinity;
-  const { re, im } = at.drive;
-  return Math.max(0, 10 * Math.log10((re * re + im * im) / (resistive * power)));
 }

@@ -1,29 +1,26 @@
-import { product, quotient, steady, sum, times, type Analytic } from "@/lib/line/analytic";
-import { perMetre } from "@/lib/line/cable";
-import type { Complex } from "@/lib/line/complex";
-import type { LineModel } from "@/lib/line/element";
+import { product, quotient, steady, sum, times, timesProduct, type Analytic } from "@/lib/line/analytic";
+import type { LineAt, PerMetre } from "@/lib/line/cable";
 import { evenHyperbolic } from "@/lib/line/hyperbolic";
 import type { TwoPort, TwoPortAt } from "@/lib/line/two-port";
 
 /**
  * A length of uniform line: a = d = cosh γl, b = Zl·sinhc γl, c = Yl·sinhc γl. Written with sinhc instead of Zc it is
  * exact at zero length and at dc.
- * @param model - at its temperature
+ * @param line - at its temperature
  * @param length - metre, at least 0
  * @param paralleled - identical cables side by side, a whole number of at least 1
  * @throws RangeError when length or paralleled is out of range
  */
-export function lineSection(model: LineModel, length: number, paralleled = 1): TwoPortAt {
+export function lineSection(line: LineAt, length: number, paralleled = 1): TwoPortAt {
   requireLength("lineSection", length);
   if (!(paralleled >= 1 && Number.isInteger(paralleled)))
     throw new RangeError(`lineSection: paralleled must be a whole number of at least 1, got ${paralleled}`);
+  const square = length * length;
   return (s) => {
-    const { z, y } = perMetre(model, s);
-    const series = times(z, length);
-    const shunt = times(y, length);
-    const { cosh, sinhc, logScale } = evenHyperbolic(product(series, shunt));
-    const b = times(product(series, sinhc), 1 / paralleled);
-    const c = times(product(shunt, sinhc), paralleled);
+    const { z, y, gammaSquared, gamma } = line(s);
+    const { cosh, sinhc, logScale } = evenHyperbolic(times(gammaSquared, square), gamma.re * length, gamma.im * length);
+    const b = timesProduct(length / paralleled, z, sinhc);
+    const c = timesProduct(length * paralleled, y, sinhc);
     return { a: cosh, b, c, d: cosh, logScale, matchedLoss: logScale };
   };
 }
@@ -32,15 +29,16 @@ export function lineSection(model: LineModel, length: number, paralleled = 1): T
  * Different cables side by side, joined at both ends: their admittance matrices add. Each is symmetrical, so the sum is
  * found by bisection: with both ends alike half a length sees an open middle (`even`), with opposite ends a shorted
  * one (`odd`), and nothing cancels whether the cables are short, long or resonant.
- * @param branches - models at their temperature and lengths in metre, above 0; at least one
+ * @param branches - lines at their temperature and lengths in metre, above 0; at least one
  * @throws RangeError when there is no branch or a length is not positive
  * Source: A. C. Bartlett's bisection theorem.
  */
-export function parallelSections(branches: { model: LineModel; length: number }[]): TwoPortAt {
+export function parallelSections(branches: { line: LineAt; length: number }[]): TwoPortAt {
   if (branches.length === 0) throw new RangeError("parallelSections: branches must not be empty");
   for (const { length } of branches)
-    if (!(length > 0 && length < Infinity)) throw new RangeError(`parallelSections: length must be positive, got ${length}`);
-  return (s) => joined(branches.map(({ model, length }) => bisected(model, length, s)));
+    if (!(length > 0 && length < Infinity))
+      throw new RangeError(`parallelSections: length must be positive, got ${length}`);
+  return (s) => joined(branches.map(({ line, length }) => bisected(line(s), length)));
 }
 
 interface Bisected {
@@ -52,17 +50,14 @@ interface Bisected {
   logScale: number;
 }
 
-function bisected(model: LineModel, length: number, s: Complex): Bisected {
-  const { z, y } = perMetre(model, s);
-  const series = times(z, length);
-  const shunt = times(y, length);
-  const square = product(series, shunt);
-  const half = evenHyperbolic(times(square, 0.25));
-  const whole = evenHyperbolic(square);
+function bisected({ z, y, gammaSquared, gamma }: PerMetre, length: number): Bisected {
+  const [re, im] = [gamma.re * length, gamma.im * length];
+  const half = evenHyperbolic(times(gammaSquared, (length * length) / 4), re / 2, im / 2);
+  const whole = evenHyperbolic(times(gammaSquared, length * length), re, im);
   return {
-    even: quotient(product(times(shunt, 0.5), half.sinhc), half.cosh),
-    odd: quotient(half.cosh, product(times(series, 0.5), half.sinhc)),
-    transfer: quotient(steady(1), product(series, whole.sinhc)),
+    even: quotient(product(times(y, length / 2), half.sinhc), half.cosh),
+    odd: quotient(half.cosh, product(times(z, length / 2), half.sinhc)),
+    transfer: quotient(steady(1), product(times(z, length), whole.sinhc)),
     logScale: whole.logScale,
   };
 }
@@ -78,7 +73,14 @@ function joined(branches: Bisected[]): TwoPort {
     transfer = sum(transfer, times(branch.transfer, Math.exp(logScale - branch.logScale)));
   }
   const a = quotient(times(sum(even, odd), 0.5), transfer);
-  return { a, b: quotient(steady(1), transfer), c: quotient(product(even, odd), transfer), d: a, logScale, matchedLoss: 0 };
+  return {
+    a,
+    b: quotient(steady(1), transfer),
+    c: quotient(product(even, odd), transfer),
+    d: a,
+    logScale,
+    matchedLoss: 0,
+  };
 }
 
 function requireLength(where: string, length: number): void {

@@ -2,7 +2,7 @@ import { abs, divide, multiply, scale, type Complex } from "@/lib/line/complex";
 import type { Circuit } from "@/lib/line/element";
 import type { Peak, Phasors } from "@/lib/line/line-wave";
 import { stretchOf, type Stretch } from "@/lib/line/stretch";
-import { powerThrough, prepareRun, sourceImpedance, walk, type Walk } from "@/lib/line/walk";
+import { portAt, powerThrough, prepareRun, walk, type Walk } from "@/lib/line/walk";
 
 /**
  * Voltage and current along the main path of a run at one frequency, rms. Arrays have one value per point, from source
@@ -50,17 +50,23 @@ export function standingWave(
   availablePower: number,
   { temperatureC = 20, pointsPerElement = 101 }: StandingWaveOptions = {},
 ): StandingWave {
-  if (!(frequency > 0 && frequency < Infinity)) throw new RangeError(`standingWave: frequency must be positive, got ${frequency}`);
+  if (!(frequency > 0 && frequency < Infinity))
+    throw new RangeError(`standingWave: frequency must be positive, got ${frequency}`);
   if (!(availablePower >= 0 && availablePower < Infinity))
     throw new RangeError(`standingWave: availablePower must be at least 0, got ${availablePower}`);
   if (!(Number.isInteger(pointsPerElement) && pointsPerElement >= 2))
-    throw new RangeError(`standingWave: pointsPerElement must be a whole number of at least 2, got ${pointsPerElement}`);
+    throw new RangeError(
+      `standingWave: pointsPerElement must be a whole number of at least 2, got ${pointsPerElement}`,
+    );
   const s = { re: 0, im: 2 * Math.PI * frequency };
   const at = walk(prepareRun(circuit, temperatureC), s);
-  const resistance = sourceImpedance(at).re;
-  if (!(resistance > 0)) throw new RangeError(`standingWave: the source's resistance must be positive, got ${resistance}`);
+  const resistance = at.sourceImpedance.re;
+  if (!(resistance > 0))
+    throw new RangeError(`standingWave: the source's resistance must be positive, got ${resistance}`);
   const planes = phasorsAtPlanes(at, Math.sqrt(4 * resistance * availablePower));
-  const stretches = circuit.elements.map((element, k) => stretchOf(element, planes[k]!, planes[k + 1]!, s, temperatureC));
+  const stretches = circuit.elements.map((element, k) =>
+    stretchOf(element, planes[k]!, planes[k + 1]!, s, temperatureC),
+  );
   return {
     ...pointsAlong(stretches, planes, pointsPerElement),
     ...peaksAlong(stretches, planes),
@@ -72,8 +78,9 @@ export function standingWave(
 function phasorsAtPlanes(at: Walk, emf: number): Phasors[] {
   const unit: Complex = divide(scale(at.source.i, emf), at.drive);
   let passed = 0;
-  return at.planes.map(({ v, i }, k) => {
+  return Array.from({ length: at.scales.length + 1 }, (_, k) => {
     if (k > 0) passed += at.scales[k - 1]!;
+    const { v, i } = portAt(at, k);
     const here = scale(unit, Math.exp(-passed));
     return { v: multiply(v, here), i: multiply(i, here) };
   });
@@ -131,7 +138,12 @@ function peaksAlong(stretches: (Stretch | null)[], planes: Phasors[]): Peaks {
     current = higher(current, stretch.peakCurrent.value, start + stretch.peakCurrent.at);
     start += stretch.length;
   });
-  return { maxVoltageV: voltage.value, maxVoltageAtM: voltage.at, maxCurrentA: current.value, maxCurrentAtM: current.at };
+  return {
+    maxVoltageV: voltage.value,
+    maxVoltageAtM: voltage.at,
+    maxCurrentA: current.value,
+    maxCurrentAtM: current.at,
+  };
 }
 
 type Powers = Pick<StandingWave, "elements" | "loadPowerW" | "inputPowerW">;
@@ -142,7 +154,8 @@ function powers(planes: Phasors[], reference: number): Powers {
   const elements = new Array<{ dissipatedW: number }>(planes.length - 1);
   let leaving = loadPowerW;
   for (let k = planes.length - 2; k >= 0; k--) {
-    const entering = powerThrough(planes[k]!, leaving, reference);
+    const { v, i } = planes[k]!;
+    const entering = powerThrough(v.re, v.im, i.re, i.im, leaving, reference);
     elements[k] = { dissipatedW: entering - leaving };
     leaving = entering;
   }

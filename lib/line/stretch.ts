@@ -1,6 +1,15 @@
+import { prepareLine } from "@/lib/line/cable";
 import { abs, add, divide, multiply, scale, subtract, type Complex } from "@/lib/line/complex";
 import { lengthAlongPath, type Element, type ParallelElement } from "@/lib/line/element";
-import { lineWave, peakCurrent, peakVoltage, phasorsAt, type LineWave, type Peak, type Phasors } from "@/lib/line/line-wave";
+import {
+  lineWave,
+  peakCurrent,
+  peakVoltage,
+  phasorsAt,
+  type LineWave,
+  type Peak,
+  type Phasors,
+} from "@/lib/line/line-wave";
 import { lineSection } from "@/lib/line/section";
 import { atTemperature } from "@/lib/line/temperature";
 
@@ -19,7 +28,13 @@ export interface Stretch {
  * @param s - on the imaginary axis, not 0
  * @param temperatureC - °C, where the element has none of its own
  */
-export function stretchOf(element: Element, near: Phasors, far: Phasors, s: Complex, temperatureC: number): Stretch | null {
+export function stretchOf(
+  element: Element,
+  near: Phasors,
+  far: Phasors,
+  s: Complex,
+  temperatureC: number,
+): Stretch | null {
   if (lengthAlongPath(element) === 0) return null;
   if (element.kind === "cable") {
     const model = atTemperature(element.line.model, element.temperatureC ?? temperatureC).model;
@@ -43,10 +58,16 @@ function alongLine(wave: LineWave): Stretch {
 }
 
 /** Each branch carries the current its own two-port asks for between the common voltages. */
-function bundleWaves(element: ParallelElement, near: Phasors, far: Phasors, s: Complex, temperatureC: number): LineWave[] {
+function bundleWaves(
+  element: ParallelElement,
+  near: Phasors,
+  far: Phasors,
+  s: Complex,
+  temperatureC: number,
+): LineWave[] {
   return element.branches.map(({ line, lengthM }) => {
     const model = atTemperature(line.model, element.temperatureC ?? temperatureC).model;
-    const { a, b, logScale } = lineSection(model, lengthM)(s);
+    const { a, b, logScale } = lineSection(prepareLine(model), lengthM)(s);
     const through = Math.exp(-logScale);
     const entering = divide(subtract(multiply(a, near.v), scale(far.v, through)), b);
     const leaving = divide(subtract(scale(near.v, through), multiply(a, far.v)), b);
@@ -89,7 +110,11 @@ function largestOf(value: (distance: number) => number, length: number, halfWave
     const isCrest = each >= (samples[n - 1] ?? -Infinity) && each >= (samples[n + 1] ?? -Infinity);
     if (!isCrest || each < mayWin * highest) return;
     if (each > best.value) best = { value: each, at: (length * n) / count };
-    const crest = goldenSection(value, (length * Math.max(0, n - 1)) / count, (length * Math.min(count, n + 1)) / count);
+    const crest = goldenSection(
+      value,
+      (length * Math.max(0, n - 1)) / count,
+      (length * Math.min(count, n + 1)) / count,
+    );
     if (crest.value > best.value) best = crest;
   });
   return best;

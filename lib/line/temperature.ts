@@ -41,7 +41,8 @@ export function atTemperature(model: LineModel, temperatureC: number): ModelAtTe
 /** 1 + Σ perK·ΔT from 20 °C to the temperature, over the parts of the way that lie in a range; 1 outside them all. */
 function declaredLossRatio(slopes: LossSlope[], temperatureC: number): number {
   let ratio = 1;
-  for (const { fromC, toC, perK } of slopes) ratio += perK * (inRange(temperatureC, fromC, toC) - inRange(20, fromC, toC));
+  for (const { fromC, toC, perK } of slopes)
+    ratio += perK * (inRange(temperatureC, fromC, toC) - inRange(20, fromC, toC));
   return ratio;
 }
 

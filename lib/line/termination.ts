@@ -72,7 +72,10 @@ type Sampled = Extract<Termination, { kind: "sampled" }>;
  * derivative is that of the interval above it.
  */
 function sampledPort({ referenceOhm, frequenciesHz, reflection }: Sampled, s: Complex): Port {
-  if (s.re !== 0) throw new RangeError(`terminationPort: a sampled termination is known on the imaginary axis only, got Re s = ${s.re}`);
+  if (s.re !== 0)
+    throw new RangeError(
+      `terminationPort: a sampled termination is known on the imaginary axis only, got Re s = ${s.re}`,
+    );
   const frequency = s.im / (2 * Math.PI);
   const last = frequenciesHz.length - 1;
   const low = frequenciesHz[0] ?? NaN;
@@ -98,7 +101,12 @@ function intervalOf(frequencies: number[], frequency: number): number {
   return low;
 }
 
-function interpolated(frequencies: number[], { re, im }: Sampled["reflection"], k: number, frequency: number): Analytic {
+function interpolated(
+  frequencies: number[],
+  { re, im }: Sampled["reflection"],
+  k: number,
+  frequency: number,
+): Analytic {
   if (frequencies.length === 1) return steady(re[0]!, im[0]!);
   const span = frequencies[k + 1]! - frequencies[k]!;
   const part = (frequency - frequencies[k]!) / span;

@@ -3,7 +3,7 @@
  * kept divided by e^{logScale}, a real number, so a run of any loss multiplies without overflow.
  * Source: D. M. Pozar, Microwave Engineering, 4th ed., section 4.4.
  */
-import { difference, product, quotient, steady, sum, times, type Analytic } from "@/lib/line/analytic";
+import { difference, quotient, steady, sum, sumOfProducts, times, type Analytic } from "@/lib/line/analytic";
 import { scale, type Complex } from "@/lib/line/complex";
 import type { Port } from "@/lib/line/termination";
 
@@ -33,10 +33,10 @@ export const THROUGH: TwoPort = { a: ONE, b: NONE, c: NONE, d: ONE, logScale: 0,
 /** The two-port of one after the other, source side first. */
 export function cascade(first: TwoPort, second: TwoPort): TwoPort {
   return {
-    a: sum(product(first.a, second.a), product(first.b, second.c)),
-    b: sum(product(first.a, second.b), product(first.b, second.d)),
-    c: sum(product(first.c, second.a), product(first.d, second.c)),
-    d: sum(product(first.c, second.b), product(first.d, second.d)),
+    a: sumOfProducts(first.a, second.a, first.b, second.c),
+    b: sumOfProducts(first.a, second.b, first.b, second.d),
+    c: sumOfProducts(first.c, second.a, first.d, second.c),
+    d: sumOfProducts(first.c, second.b, first.d, second.d),
     logScale: first.logScale + second.logScale,
     matchedLoss: first.matchedLoss + second.matchedLoss,
   };
@@ -47,8 +47,8 @@ export function cascade(first: TwoPort, second: TwoPort): TwoPort {
  * What lets nothing through shows its own short or open even where it has nothing to work on.
  */
 export function throughTwoPort(twoPort: TwoPort, port: Port): Port {
-  const v = sum(product(twoPort.a, port.v), product(twoPort.b, port.i));
-  const i = sum(product(twoPort.c, port.v), product(twoPort.d, port.i));
+  const v = sumOfProducts(twoPort.a, port.v, twoPort.b, port.i);
+  const i = sumOfProducts(twoPort.c, port.v, twoPort.d, port.i);
   if (twoPort.logScale < Infinity || v.re !== 0 || v.im !== 0 || i.re !== 0 || i.im !== 0) return { v, i };
   return twoPort.c.re !== 0 ? { v, i: ONE } : { v: ONE, i };
 }

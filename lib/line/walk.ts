@@ -1,14 +1,15 @@
 /** Voltage and current at every plane of a run at one complex frequency: the load is set, the rest follows toward the source. */
-import { product, quotient, sum, times, type Analytic } from "@/lib/line/analytic";
+import { sumOfProducts, type Analytic } from "@/lib/line/analytic";
 import type { Complex } from "@/lib/line/complex";
 import type { Circuit, Termination } from "@/lib/line/element";
-import { prepareElements } from "@/lib/line/element-two-port";
-import { terminationPort, type Port } from "@/lib/line/termination";
-import { throughTwoPort, type TwoPort, type TwoPortAt } from "@/lib/line/two-port";
+import { prepareSteps, type PreparedElement } from "@/lib/line/element-two-port";
+import { PLANE, put, stepThroughLine, take, VALUE } from "@/lib/line/packed";
+import { portImpedance, terminationPort, type Port } from "@/lib/line/termination";
+import { throughTwoPort } from "@/lib/line/two-port";
 
 export interface PreparedRun {
   source: Termination;
-  elements: TwoPortAt[];
+  elements: PreparedElement[];
   load: Termination;
   referenceOhm: number | undefined;
 }
@@ -25,67 +26,111 @@ export function prepareRun(circuit: Circuit, temperatureC = 20): PreparedRun {
     throw new RangeError(`prepareRun: source must not be ${source.kind}`);
   if (referenceOhm !== undefined && !(referenceOhm > 0))
     throw new RangeError(`prepareRun: referenceOhm must be positive, got ${referenceOhm}`);
-  return { source, elements: prepareElements(circuit, temperatureC), load, referenceOhm };
+  return { source, elements: prepareSteps(circuit, temperatureC), load, referenceOhm };
 }
 
-/** One frequency of a run. Plane k is before element k, plane N (N elements) is the load. */
+/** One frequency of a run of N elements. Plane k is before element k, plane N is the load. */
 export interface Walk {
-  /** length N + 1; at plane k in a unit e^{scale[k] + … + scale[N−1]} times smaller than the load's */
-  planes: Port[];
-  /** length N, neper at least 0; Infinity where an element lets nothing through */
-  scales: number[];
+  /** packed, N + 1 planes; plane k is in a unit e^{scales[k] + … + scales[N−1]} times smaller than the load's */
+  planes: Float64Array;
+  /** length N, neper; Infinity where an element lets nothing through */
+  scales: Float64Array;
   /** Σ nominal loss of cables, pads and joints, neper */
   matchedLoss: number;
+  /** plane 0 */
+  input: Port;
+  /** plane N */
+  load: Port;
   /** the source's impedance as a pair, v : i */
   source: Port;
+  /** the same in ohm; infinite for a source that passes no current */
+  sourceImpedance: Complex;
   /** what the source's e.m.f. times source.i must be for the planes to be as they are, before scales */
   drive: Analytic;
+}
+
+/** Voltage and current at a plane, in its own unit. */
+export function portAt(walk: Pick<Walk, "planes">, plane: number): Port {
+  return { v: take(walk.planes, plane * PLANE), i: take(walk.planes, plane * PLANE + VALUE) };
+}
+
+/**
+ * Walks a run from load to source at s.
+ * @param into - an earlier walk of the same run whose arrays may be written over
+ * @throws RangeError where the load or an end is sampled and s lies outside it
+ */
+export function walk(run: PreparedRun, s: Complex, into?: Walk): Walk {
+  const count = run.elements.length;
+  const planes = into?.planes ?? new Float64Array((count + 1) * PLANE);
+  const scales = into?.scales ?? new Float64Array(count);
+  const load = terminationPort(run.load, s);
+  put(planes, count * PLANE, load.v);
+  put(planes, count * PLANE + VALUE, load.i);
+  let matchedLoss = 0;
+  for (let k = count - 1; k >= 0; k--) matchedLoss += step(run.elements[k]!, s, planes, scales, k);
+  const source = terminationPort(run.source, s);
+  const sourceImpedance = portImpedance(source);
+  const input = portAt({ planes }, 0);
+  const drive = sumOfProducts(source.i, input.v, source.v, input.i);
+  return { planes, scales, matchedLoss, input, load, source, sourceImpedance, drive };
+}
+
+/** From plane k + 1 to plane k. Returns the element's nominal loss, neper. */
+function step(
+  { cable, twoPort }: PreparedElement,
+  s: Complex,
+  planes: Float64Array,
+  scales: Float64Array,
+  k: number,
+): number {
+  const to = k * PLANE;
+  let matchedLoss: number;
+  if (cable !== undefined) {
+    matchedLoss = stepThroughLine(cable.line(s), cable.length, cable.paralleled, planes, to + PLANE, to);
+    scales[k] = matchedLoss;
+  } else {
+    const element = twoPort(s);
+    const { v, i } = throughTwoPort(element, portAt({ planes }, k + 1));
+    put(planes, to, v);
+    put(planes, to + VALUE, i);
+    matchedLoss = element.matchedLoss;
+    scales[k] = element.logScale;
+  }
+  scales[k]! += normalise(planes, to);
+  return matchedLoss;
 }
 
 /** Beyond this a voltage or current is brought back to about 1, and the scale remembers by how much. */
 const largest = 1e100;
 
-/**
- * Walks a run from load to source at s.
- * @throws RangeError where the load or an end is sampled and s lies outside it
- */
-export function walk(run: PreparedRun, s: Complex): Walk {
-  const count = run.elements.length;
-  const planes = new Array<Port>(count + 1);
-  const scales = new Array<number>(count);
-  let port = terminationPort(run.load, s);
-  let matchedLoss = 0;
-  planes[count] = port;
-  for (let k = count - 1; k >= 0; k--) {
-    const twoPort: TwoPort = run.elements[k]!(s);
-    port = throughTwoPort(twoPort, port);
-    const size = Math.max(Math.abs(port.v.re), Math.abs(port.v.im), Math.abs(port.i.re), Math.abs(port.i.im));
-    scales[k] = twoPort.logScale;
-    if (size > largest || size < 1 / largest) {
-      port = { v: times(port.v, 1 / size), i: times(port.i, 1 / size) };
-      scales[k]! += Math.log(size);
-    }
-    planes[k] = port;
-    matchedLoss += twoPort.matchedLoss;
-  }
-  const source = terminationPort(run.source, s);
-  return { planes, scales, matchedLoss, source, drive: sum(product(source.i, port.v), product(source.v, port.i)) };
-}
-
-/** Impedance of the source, ohm; infinite for one that passes no current. */
-export function sourceImpedance({ source }: Walk): Complex {
-  return source.i.re === 0 && source.i.im === 0 ? { re: Infinity, im: NaN } : quotient(source.v, source.i);
+function normalise(planes: Float64Array, at: number): number {
+  const size = Math.max(
+    Math.abs(planes[at]!),
+    Math.abs(planes[at + 1]!),
+    Math.abs(planes[at + 4]!),
+    Math.abs(planes[at + 5]!),
+  );
+  if (size <= largest && size >= 1 / largest) return 0;
+  for (let n = at; n < at + PLANE; n++) planes[n]! /= size;
+  return Math.log(size);
 }
 
 /**
- * Power through a plane toward the load, in the unit of that plane.
+ * Power through a plane toward the load.
  * @param behind - power leaving the next element, in the same unit: a passive run never takes less, which keeps
  * rounding from making it so
  * @param reference - ohm, to tell power from the rounding of a wave reflected whole
  */
-export function powerThrough({ v, i }: { v: Complex; i: Complex }, behind: number, reference: number): number {
-  const power = v.re * i.re + v.im * i.im;
+export function powerThrough(
+  vRe: number,
+  vIm: number,
+  iRe: number,
+  iIm: number,
+  behind: number,
+  reference: number,
+): number {
+  const power = vRe * iRe + vIm * iIm;
   if (behind > 0) return Math.max(power, behind);
-  const waves = (v.re * v.re + v.im * v.im) / reference + (i.re * i.re + i.im * i.im) * reference;
+  const waves = (vRe * vRe + vIm * vIm) / reference + (iRe * iRe + iIm * iIm) * reference;
   return power > 1e-14 * waves ? power : 0;
 }

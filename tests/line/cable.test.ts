@@ -13,21 +13,24 @@ interface Limits {
   low_frequency_hz: number;
 }
 
-test.each(bothForms<Limits>("model-limits"))("the model meets its low and high frequency limits: $name", ({ inputs, expected }) => {
-  const model = modelOf(inputs.cable);
-  const high = lineFigures(model, [inputs.high_frequency_hz]);
-  const low = lineFigures(model, [inputs.low_frequency_hz]);
-  const got: Record<string, number> = {
-    high_frequency_r_ohm_per_m: high.rOhmPerM[0]!,
-    high_frequency_r_asymptote_ohm_per_m: high.rOhmPerM[0]!,
-    low_frequency_r_ohm_per_m: low.rOhmPerM[0]!,
-    low_frequency_l_h_per_m: low.lHPerM[0]!,
-    low_frequency_internal_l_h_per_m: low.lHPerM[0]! - model.lInfHPerM,
-    low_frequency_zc_re_ohm: low.zcOhm.re[0]!,
-    low_frequency_zc_im_ohm: low.zcOhm.im[0]!,
-  };
-  for (const [key, value] of Object.entries(expected)) closeTo(got[key]!, value, key);
-});
+test.each(bothForms<Limits>("model-limits"))(
+  "the model meets its low and high frequency limits: $name",
+  ({ inputs, expected }) => {
+    const model = modelOf(inputs.cable);
+    const high = lineFigures(model, [inputs.high_frequency_hz]);
+    const low = lineFigures(model, [inputs.low_frequency_hz]);
+    const got: Record<string, number> = {
+      high_frequency_r_ohm_per_m: high.rOhmPerM[0]!,
+      high_frequency_r_asymptote_ohm_per_m: high.rOhmPerM[0]!,
+      low_frequency_r_ohm_per_m: low.rOhmPerM[0]!,
+      low_frequency_l_h_per_m: low.lHPerM[0]!,
+      low_frequency_internal_l_h_per_m: low.lHPerM[0]! - model.lInfHPerM,
+      low_frequency_zc_re_ohm: low.zcOhm.re[0]!,
+      low_frequency_zc_im_ohm: low.zcOhm.im[0]!,
+    };
+    for (const [key, value] of Object.entries(expected)) closeTo(got[key]!, value, key);
+  },
+);
 
 const lossy: LineModel = {
   conductors: [
@@ -42,25 +45,34 @@ const lossy: LineModel = {
 
 test("γ² is Z·Y and Zc·γ is Z all over the right half plane, with real parts of at least 0", () => {
   fc.assert(
-    fc.property(fc.double({ min: 0, max: 9, noNaN: true }), fc.double({ min: -9.9, max: 9.9, noNaN: true }), (damping, order) => {
-      const s = { re: damping === 0 ? 0 : 10 ** damping, im: Math.sign(order) * 10 ** Math.abs(order) };
-      const { z, y, gamma, zc } = propagation(lossy, s);
-      const square = multiply(gamma, gamma);
-      const zy = multiply(z, y);
-      expect(abs({ re: square.re - zy.re, im: square.im - zy.im })).toBeLessThanOrEqual(1e-13 * abs(zy));
-      const back = multiply(zc, gamma);
-      expect(abs({ re: back.re - z.re, im: back.im - z.im })).toBeLessThanOrEqual(1e-13 * abs(z));
-      expect(gamma.re).toBeGreaterThanOrEqual(0);
-      expect(zc.re).toBeGreaterThanOrEqual(0);
-      // the root of the product is the product of the roots
-      const roots = multiply(sqrt(z), sqrt(y));
-      expect(abs({ re: roots.re - gamma.re, im: roots.im - gamma.im })).toBeLessThanOrEqual(1e-13 * abs(gamma));
-    }),
+    fc.property(
+      fc.double({ min: 0, max: 9, noNaN: true }),
+      fc.double({ min: -9.9, max: 9.9, noNaN: true }),
+      (damping, order) => {
+        const s = { re: damping === 0 ? 0 : 10 ** damping, im: Math.sign(order) * 10 ** Math.abs(order) };
+        const { z, y, gamma, zc } = propagation(lossy, s);
+        const square = multiply(gamma, gamma);
+        const zy = multiply(z, y);
+        expect(abs({ re: square.re - zy.re, im: square.im - zy.im })).toBeLessThanOrEqual(1e-13 * abs(zy));
+        const back = multiply(zc, gamma);
+        expect(abs({ re: back.re - z.re, im: back.im - z.im })).toBeLessThanOrEqual(1e-13 * abs(z));
+        expect(gamma.re).toBeGreaterThanOrEqual(0);
+        expect(zc.re).toBeGreaterThanOrEqual(0);
+        // the root of the product is the product of the roots
+        const roots = multiply(sqrt(z), sqrt(y));
+        expect(abs({ re: roots.re - gamma.re, im: roots.im - gamma.im })).toBeLessThanOrEqual(1e-13 * abs(gamma));
+      },
+    ),
   );
 });
 
 test("impedance and admittance per metre carry the derivative that a difference shows", () => {
-  for (const s of [{ re: 0, im: 1e5 }, { re: 1e6, im: 2e6 }, { re: 0, im: 6e9 }, { re: 1e4, im: -1e7 }]) {
+  for (const s of [
+    { re: 0, im: 1e5 },
+    { re: 1e6, im: 2e6 },
+    { re: 0, im: 6e9 },
+    { re: 1e4, im: -1e7 },
+  ]) {
     const h = 1e-5 * abs(s);
     const up = perMetre(lossy, { re: s.re, im: s.im + h });
     const down = perMetre(lossy, { re: s.re, im: s.im - h });
@@ -92,19 +104,27 @@ test("a lossless line has no attenuation at all and a real impedance", () => {
 
 test("a model from nominal figures gives those figures back, and keeps what else is known", () => {
   fc.assert(
-    fc.property(fc.double({ min: 1, max: 1000, noNaN: true }), fc.double({ min: 0.05, max: 1.2, noNaN: true }), (z0, velocityFactor) => {
-      const model = modelFromNominal({ z0, velocityFactor, lossTangent: 0.002, conductors: lossy.conductors });
-      const figures = nominalFigures(model);
-      expect(figures.z0 / z0).toBeCloseTo(1, 13);
-      expect(figures.velocityFactor / velocityFactor).toBeCloseTo(1, 13);
-      expect(figures.delay * 299_792_458 * velocityFactor).toBeCloseTo(1, 13);
-      expect(model.lossTangent).toBe(0.002);
-      expect(model.conductors).toBe(lossy.conductors);
-    }),
+    fc.property(
+      fc.double({ min: 1, max: 1000, noNaN: true }),
+      fc.double({ min: 0.05, max: 1.2, noNaN: true }),
+      (z0, velocityFactor) => {
+        const model = modelFromNominal({ z0, velocityFactor, lossTangent: 0.002, conductors: lossy.conductors });
+        const figures = nominalFigures(model);
+        expect(figures.z0 / z0).toBeCloseTo(1, 13);
+        expect(figures.velocityFactor / velocityFactor).toBeCloseTo(1, 13);
+        expect(figures.delay * 299_792_458 * velocityFactor).toBeCloseTo(1, 13);
+        expect(model.lossTangent).toBe(0.002);
+        expect(model.conductors).toBe(lossy.conductors);
+      },
+    ),
   );
 });
 
 test("nominal figures that are not positive are refused by name", () => {
-  expect(() => modelFromNominal({ z0: 0, velocityFactor: 0.66 })).toThrow("modelFromNominal: z0 must be positive, got 0");
-  expect(() => modelFromNominal({ z0: 50, velocityFactor: NaN })).toThrow("modelFromNominal: velocityFactor must be positive, got NaN");
+  expect(() => modelFromNominal({ z0: 0, velocityFactor: 0.66 })).toThrow(
+    "modelFromNominal: z0 must be positive, got 0",
+  );
+  expect(() => modelFromNominal({ z0: 50, velocityFactor: NaN })).toThrow(
+    "modelFromNominal: velocityFactor must be positive, got NaN",
+  );
 });

@@ -7,14 +7,21 @@ import type { Complex } from "@/lib/line/complex";
 /** Both parts from 1e-3 to 1e3 of either sign, zero included. */
 const part = fc.oneof(
   fc.constant(0),
-  fc.tuple(fc.double({ min: -3, max: 3, noNaN: true }), fc.boolean()).map(([power, negative]) => (negative ? -1 : 1) * 10 ** power),
+  fc
+    .tuple(fc.double({ min: -3, max: 3, noNaN: true }), fc.boolean())
+    .map(([power, negative]) => (negative ? -1 : 1) * 10 ** power),
 );
 const any = fc.record({ re: part, im: part });
 const nonzero = any.filter(({ re, im }) => re !== 0 || im !== 0);
 
 const witness = ({ re, im }: Complex) => math.complex(re, im);
 
-function close(got: Complex, wanted: { re: number; im: number }, scale = Math.hypot(wanted.re, wanted.im), digits = 1e-14) {
+function close(
+  got: Complex,
+  wanted: { re: number; im: number },
+  scale = Math.hypot(wanted.re, wanted.im),
+  digits = 1e-14,
+) {
   expect(Math.hypot(got.re - wanted.re, got.im - wanted.im)).toBeLessThanOrEqual(digits * Math.max(scale, 1e-300));
 }
 
@@ -67,12 +74,16 @@ test("exp, log, abs and arg agree with mathjs", () => {
 
 test("tanh agrees with mathjs where that is finite, and tends to ±1 where it is not", () => {
   fc.assert(
-    fc.property(fc.double({ min: -5, max: 5, noNaN: true }), fc.double({ min: -50, max: 50, noNaN: true }), (re, im) => {
-      const wanted = math.tanh(math.complex(re, im));
-      // near a pole or a zero the angle's own rounding tells
-      const size = Math.hypot(wanted.re, wanted.im);
-      close(own.tanh({ re, im }), wanted, Math.max(1, size, size * size) * Math.max(1, Math.abs(im)), 1e-13);
-    }),
+    fc.property(
+      fc.double({ min: -5, max: 5, noNaN: true }),
+      fc.double({ min: -50, max: 50, noNaN: true }),
+      (re, im) => {
+        const wanted = math.tanh(math.complex(re, im));
+        // near a pole or a zero the angle's own rounding tells
+        const size = Math.hypot(wanted.re, wanted.im);
+        close(own.tanh({ re, im }), wanted, Math.max(1, size, size * size) * Math.max(1, Math.abs(im)), 1e-13);
+      },
+    ),
   );
   expect(own.tanh({ re: 1e4, im: 3 }).re).toBe(1);
   expect(own.tanh({ re: 1e4, im: 3 }).im).toBeCloseTo(0, 300);

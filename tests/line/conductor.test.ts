@@ -26,22 +26,25 @@ interface Wire {
   frequency_hz: number[];
 }
 
-test.each(checks<Wire>("internal-impedance"))("a round wire's forms agree with outside, and the exact solution within bounds: $name", ({ inputs, expected, bounds }) => {
-  const radius = inputs.wire_diameter_m / 2;
-  const r0OhmPerM = inputs.resistivity_ohm_m / (Math.PI * radius * radius);
-  const skinCornerRadPerS = (4 * inputs.resistivity_ohm_m) / (MU0 * radius * radius);
-  closeTo(r0OhmPerM, expected.r0_ohm_per_m!, "r0");
-  closeTo(skinCornerRadPerS, expected.skin_corner_rad_per_s!, "corner");
-  for (const form of ["round", "sqrt"] as const) {
-    const got = swept([{ form, r0OhmPerM, skinCornerRadPerS }], inputs.frequency_hz);
-    closeTo(got.r, expected[`${form}_form_r_ohm_per_m`]!, form);
-    closeTo(got.l, expected[`${form}_form_internal_l_h_per_m`]!, form);
-    const exactR = expected.exact_r_ohm_per_m!.value as number[];
-    const exactL = expected.exact_internal_l_h_per_m!.value as number[];
-    expect(worst(got.r, exactR)).toBeLessThanOrEqual(bounds![`${form}_form_max_rel_error_r`]!);
-    expect(worst(got.l, exactL)).toBeLessThanOrEqual(bounds![`${form}_form_max_rel_error_l`]!);
-  }
-});
+test.each(checks<Wire>("internal-impedance"))(
+  "a round wire's forms agree with outside, and the exact solution within bounds: $name",
+  ({ inputs, expected, bounds }) => {
+    const radius = inputs.wire_diameter_m / 2;
+    const r0OhmPerM = inputs.resistivity_ohm_m / (Math.PI * radius * radius);
+    const skinCornerRadPerS = (4 * inputs.resistivity_ohm_m) / (MU0 * radius * radius);
+    closeTo(r0OhmPerM, expected.r0_ohm_per_m!, "r0");
+    closeTo(skinCornerRadPerS, expected.skin_corner_rad_per_s!, "corner");
+    for (const form of ["round", "sqrt"] as const) {
+      const got = swept([{ form, r0OhmPerM, skinCornerRadPerS }], inputs.frequency_hz);
+      closeTo(got.r, expected[`${form}_form_r_ohm_per_m`]!, form);
+      closeTo(got.l, expected[`${form}_form_internal_l_h_per_m`]!, form);
+      const exactR = expected.exact_r_ohm_per_m!.value as number[];
+      const exactL = expected.exact_internal_l_h_per_m!.value as number[];
+      expect(worst(got.r, exactR)).toBeLessThanOrEqual(bounds![`${form}_form_max_rel_error_r`]!);
+      expect(worst(got.l, exactL)).toBeLessThanOrEqual(bounds![`${form}_form_max_rel_error_l`]!);
+    }
+  },
+);
 
 interface Coax {
   inner_diameter_m: number;
@@ -51,25 +54,38 @@ interface Coax {
   frequency_hz: number[];
 }
 
-test.each(checks<Coax>("coax-conductor-impedance"))("a coax of round and sheet agrees with outside, and the exact tube within bounds: $name", ({ inputs, expected, bounds }) => {
-  const rho = inputs.resistivity_ohm_m;
-  const a = inputs.inner_diameter_m / 2;
-  const b = inputs.outer_bore_diameter_m / 2;
-  const outerR0 = rho / (Math.PI * ((b + inputs.shield_wall_m) ** 2 - b * b));
-  const inner: Conductor = { form: "round", r0OhmPerM: rho / (Math.PI * a * a), skinCornerRadPerS: (4 * rho) / (MU0 * a * a) };
-  const outer: Conductor = { form: "sheet", r0OhmPerM: outerR0, skinCornerRadPerS: (outerR0 * 2 * Math.PI * b) ** 2 / (MU0 * rho) };
-  closeTo(inner.r0OhmPerM, expected.inner_r0_ohm_per_m!);
-  closeTo(outer.r0OhmPerM, expected.outer_r0_ohm_per_m!);
-  closeTo(inner.skinCornerRadPerS!, expected.inner_skin_corner_rad_per_s!);
-  closeTo(outer.skinCornerRadPerS!, expected.outer_skin_corner_rad_per_s!);
-  const got = swept([inner, outer], inputs.frequency_hz);
-  closeTo(got.r, expected.two_conductor_r_ohm_per_m!, "r");
-  closeTo(got.l, expected.two_conductor_internal_l_h_per_m!, "l");
-  expect(worst(got.r, expected.exact_r_ohm_per_m!.value as number[])).toBeLessThanOrEqual(bounds!.two_conductor_max_rel_error_r!);
-  expect(worst(got.l, expected.exact_internal_l_h_per_m!.value as number[])).toBeLessThanOrEqual(
-    bounds!.two_conductor_max_rel_error_internal_l!,
-  );
-});
+test.each(checks<Coax>("coax-conductor-impedance"))(
+  "a coax of round and sheet agrees with outside, and the exact tube within bounds: $name",
+  ({ inputs, expected, bounds }) => {
+    const rho = inputs.resistivity_ohm_m;
+    const a = inputs.inner_diameter_m / 2;
+    const b = inputs.outer_bore_diameter_m / 2;
+    const outerR0 = rho / (Math.PI * ((b + inputs.shield_wall_m) ** 2 - b * b));
+    const inner: Conductor = {
+      form: "round",
+      r0OhmPerM: rho / (Math.PI * a * a),
+      skinCornerRadPerS: (4 * rho) / (MU0 * a * a),
+    };
+    const outer: Conductor = {
+      form: "sheet",
+      r0OhmPerM: outerR0,
+      skinCornerRadPerS: (outerR0 * 2 * Math.PI * b) ** 2 / (MU0 * rho),
+    };
+    closeTo(inner.r0OhmPerM, expected.inner_r0_ohm_per_m!);
+    closeTo(outer.r0OhmPerM, expected.outer_r0_ohm_per_m!);
+    closeTo(inner.skinCornerRadPerS!, expected.inner_skin_corner_rad_per_s!);
+    closeTo(outer.skinCornerRadPerS!, expected.outer_skin_corner_rad_per_s!);
+    const got = swept([inner, outer], inputs.frequency_hz);
+    closeTo(got.r, expected.two_conductor_r_ohm_per_m!, "r");
+    closeTo(got.l, expected.two_conductor_internal_l_h_per_m!, "l");
+    expect(worst(got.r, expected.exact_r_ohm_per_m!.value as number[])).toBeLessThanOrEqual(
+      bounds!.two_conductor_max_rel_error_r!,
+    );
+    expect(worst(got.l, expected.exact_internal_l_h_per_m!.value as number[])).toBeLessThanOrEqual(
+      bounds!.two_conductor_max_rel_error_internal_l!,
+    );
+  },
+);
 
 const forms: ConductorForm[] = ["round", "sheet", "sqrt", "constant"];
 const term = (form: ConductorForm): Conductor => ({ form, r0OhmPerM: 0.05, skinCornerRadPerS: 4e5 });
@@ -97,13 +113,21 @@ describe.each(forms)("the form %s", (form) => {
   });
 
   test("has the derivative that a difference shows, on the axis and off it", () => {
-    for (const s of [{ re: 0, im: 1e3 }, { re: 0, im: 4e5 }, { re: 2e5, im: 1e6 }, { re: 1e4, im: -3e8 }, { re: 3e4, im: 0 }]) {
+    for (const s of [
+      { re: 0, im: 1e3 },
+      { re: 0, im: 4e5 },
+      { re: 2e5, im: 1e6 },
+      { re: 1e4, im: -3e8 },
+      { re: 3e4, im: 0 },
+    ]) {
       const h = 1e-5 * Math.hypot(s.re, s.im);
       const up = conductorImpedance(term(form), { re: s.re + h, im: s.im });
       const down = conductorImpedance(term(form), { re: s.re - h, im: s.im });
       const { slopeRe, slopeIm } = conductorImpedance(term(form), s);
       const size = Math.hypot(slopeRe, slopeIm);
-      expect(Math.hypot((up.re - down.re) / (2 * h) - slopeRe, (up.im - down.im) / (2 * h) - slopeIm)).toBeLessThanOrEqual(2e-6 * size);
+      expect(
+        Math.hypot((up.re - down.re) / (2 * h) - slopeRe, (up.im - down.im) / (2 * h) - slopeIm),
+      ).toBeLessThanOrEqual(2e-6 * size);
     }
   });
 });
@@ -121,6 +145,10 @@ test("a conductor without resistance is no impedance, whatever its form", () => 
 });
 
 test("a form that needs a skin corner is refused without one", () => {
-  expect(() => conductorImpedance({ form: "round", r0OhmPerM: 1 }, { re: 0, im: 1 })).toThrow(/conductorImpedance: skinCornerRadPerS.*undefined/);
-  expect(() => conductorImpedance({ form: "sqrt", r0OhmPerM: 1, skinCornerRadPerS: NaN }, { re: 0, im: 1 })).toThrow(RangeError);
+  expect(() => conductorImpedance({ form: "round", r0OhmPerM: 1 }, { re: 0, im: 1 })).toThrow(
+    /conductorImpedance: skinCornerRadPerS.*undefined/,
+  );
+  expect(() => conductorImpedance({ form: "sqrt", r0OhmPerM: 1, skinCornerRadPerS: NaN }, { re: 0, im: 1 })).toThrow(
+    RangeError,
+  );
 });

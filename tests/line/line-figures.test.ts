@@ -28,21 +28,31 @@ function compare(inputs: Inputs, expected: Record<string, Expected>) {
   for (const [key, value] of Object.entries(expected)) closeTo(got[key]!, value, key);
 }
 
-test.each(bothForms<Inputs>("secondary-parameters"))("secondary parameters agree with the outside values: $name", ({ inputs, expected }) => {
-  compare(inputs, expected);
-});
+test.each(bothForms<Inputs>("secondary-parameters"))(
+  "secondary parameters agree with the outside values: $name",
+  ({ inputs, expected }) => {
+    compare(inputs, expected);
+  },
+);
 
-test.each(bothForms<Inputs>("temperature"))("temperature moves resistance, inductance, loss and impedance as outside: $name", ({ inputs, expected }) => {
-  const { resistivity_ratio, ...figures } = expected;
-  closeTo(atTemperature(modelOf(inputs.cable), inputs.cable.temperature_c).resistivityRatio, resistivity_ratio!);
-  compare(inputs, figures);
-});
+test.each(bothForms<Inputs>("temperature"))(
+  "temperature moves resistance, inductance, loss and impedance as outside: $name",
+  ({ inputs, expected }) => {
+    const { resistivity_ratio, ...figures } = expected;
+    closeTo(atTemperature(modelOf(inputs.cable), inputs.cable.temperature_c).resistivityRatio, resistivity_ratio!);
+    compare(inputs, figures);
+  },
+);
 
 test("group delay per metre is the derivative of the phase constant", () => {
   for (const { inputs } of bothForms<Inputs>("secondary-parameters")) {
     const step = 1e-4;
     for (const frequency of [1e4, 1e6, 1e8]) {
-      const { phaseRadPerM, groupDelaySPerM } = lineFigures(modelOf(inputs.cable), [frequency * (1 - step), frequency, frequency * (1 + step)]);
+      const { phaseRadPerM, groupDelaySPerM } = lineFigures(modelOf(inputs.cable), [
+        frequency * (1 - step),
+        frequency,
+        frequency * (1 + step),
+      ]);
       const difference = (phaseRadPerM[2]! - phaseRadPerM[0]!) / (4 * Math.PI * frequency * step);
       // a central difference of relative step 1e-4 is itself off by about its square
       expect(groupDelaySPerM[1]! / difference).toBeCloseTo(1, 7);
@@ -52,5 +62,6 @@ test("group delay per metre is the derivative of the phase constant", () => {
 
 test("a frequency that is not positive is refused by name", () => {
   const model = modelOf(bothForms<Inputs>("temperature")[0]!.inputs.cable);
-  for (const frequency of [0, -1, NaN]) expect(() => lineFigures(model, [1e6, frequency])).toThrow(/lineFigures: frequencies.*positive/);
+  for (const frequency of [0, -1, NaN])
+    expect(() => lineFigures(model, [1e6, frequency])).toThrow(/lineFigures: frequencies.*positive/);
 });

@@ -7,51 +7,95 @@ import { cascade, chainMatrix, THROUGH, type TwoPort } from "@/lib/line/two-port
 import { agrees, number, published, type PublishedCheck } from "@/tests/support/published";
 
 const s = { re: 0, im: 1e7 };
-const named = (topic: string) => published((_id, each) => each === topic).map((check) => [`${check.id}: ${check.source}`, check] as [string, PublishedCheck]);
+const named = (topic: string) =>
+  published((_id, each) => each === topic).map(
+    (check) => [`${check.id}: ${check.source}`, check] as [string, PublishedCheck],
+  );
 const part = (connection: "shunt" | "series", rOhm: number): Element => ({ kind: "part", connection, rOhm });
 const inARow = (elements: Element[]) => elements.map((element) => elementTwoPort(element, s)).reduce(cascade, THROUGH);
 
 /** A pad as the three resistors that `padResistors` names. */
 function soldered(pad: PadElement): TwoPort {
   const [first, second, third] = padResistors(pad);
-  const arms = pad.topology === "pi" ? (["shunt", "series", "shunt"] as const) : (["series", "shunt", "series"] as const);
-  return inARow([part(arms[0], first), part(arms[1], second), part(arms[2], third)].filter((each) => !("rOhm" in each && each.rOhm === Infinity)));
+  const arms =
+    pad.topology === "pi" ? (["shunt", "series", "shunt"] as const) : (["series", "shunt", "series"] as const);
+  return inARow(
+    [part(arms[0], first), part(arms[1], second), part(arms[2], third)].filter(
+      (each) => !("rOhm" in each && each.rOhm === Infinity),
+    ),
+  );
 }
 
-test.each(named("minimum-loss pad"))("the least loss of a pad and its two resistors agree with print: %s", (_name, check) => {
-  const [inputOhm, outputOhm] = [number(check.inputs, "R_high_ohm"), number(check.inputs, "R_low_ohm")];
-  const lossDb = minimumPadLossDb(inputOhm, outputOhm);
-  const [series, shunt, gone] = padResistors({ kind: "pad", lossDb, inputOhm, outputOhm });
-  // the arm at the lower side vanishes but for rounding
-  expect(gone).toBeLessThan(1e-6 * outputOhm);
-  agrees(check, { series_ohm: series, shunt_ohm: shunt, loss_dB: lossDb });
-});
+test.each(named("minimum-loss pad"))(
+  "the least loss of a pad and its two resistors agree with print: %s",
+  (_name, check) => {
+    const [inputOhm, outputOhm] = [number(check.inputs, "R_high_ohm"), number(check.inputs, "R_low_ohm")];
+    const lossDb = minimumPadLossDb(inputOhm, outputOhm);
+    const [series, shunt, gone] = padResistors({ kind: "pad", lossDb, inputOhm, outputOhm });
+    // the arm at the lower side vanishes but for rounding
+    expect(gone).toBeLessThan(1e-6 * outputOhm);
+    agrees(check, { series_ohm: series, shunt_ohm: shunt, loss_dB: lossDb });
+  },
+);
 
 test.each(named("T pad"))("a T pad's resistors agree with print: %s", (_name, check) => {
   const ohm = number(check.inputs, "R0_ohm");
-  const [series, shunt] = padResistors({ kind: "pad", topology: "T", lossDb: number(check.inputs, "loss_dB"), inputOhm: ohm, outputOhm: ohm });
+  const [series, shunt] = padResistors({
+    kind: "pad",
+    topology: "T",
+    lossDb: number(check.inputs, "loss_dB"),
+    inputOhm: ohm,
+    outputOhm: ohm,
+  });
   agrees(check, { series_ohm: series, shunt_ohm: shunt });
 });
 
 test.each(named("pi pad"))("a pi pad's resistors agree with print: %s", (_name, check) => {
   const ohm = number(check.inputs, "R0_ohm");
-  const [shunt, series] = padResistors({ kind: "pad", topology: "pi", lossDb: number(check.inputs, "loss_dB"), inputOhm: ohm, outputOhm: ohm });
+  const [shunt, series] = padResistors({
+    kind: "pad",
+    topology: "pi",
+    lossDb: number(check.inputs, "loss_dB"),
+    inputOhm: ohm,
+    outputOhm: ohm,
+  });
   agrees(check, { series_ohm: series, shunt_ohm: shunt });
 });
 
-test.each(named("image and iterative impedance"))("image and iterative impedances of three resistors agree with print: %s", (_name, check) => {
-  const { inputs } = check;
-  const { a, b, c, d } = chainMatrix(inARow([part("series", number(inputs, "T_series1_ohm")), part("shunt", number(inputs, "T_shunt_ohm")), part("series", number(inputs, "T_series2_ohm"))]));
-  const iterative = (first: number, second: number) => (first - second + Math.sqrt((first - second) ** 2 + 4 * b.re * c.re)) / (2 * c.re);
-  agrees(check, {
-    image_ohm: [Math.sqrt((a.re * b.re) / (c.re * d.re)), Math.sqrt((d.re * b.re) / (c.re * a.re))],
-    iterative_ohm: [iterative(a.re, d.re), iterative(d.re, a.re)],
-  });
-});
+test.each(named("image and iterative impedance"))(
+  "image and iterative impedances of three resistors agree with print: %s",
+  (_name, check) => {
+    const { inputs } = check;
+    const { a, b, c, d } = chainMatrix(
+      inARow([
+        part("series", number(inputs, "T_series1_ohm")),
+        part("shunt", number(inputs, "T_shunt_ohm")),
+        part("series", number(inputs, "T_series2_ohm")),
+      ]),
+    );
+    const iterative = (first: number, second: number) =>
+      (first - second + Math.sqrt((first - second) ** 2 + 4 * b.re * c.re)) / (2 * c.re);
+    agrees(check, {
+      image_ohm: [Math.sqrt((a.re * b.re) / (c.re * d.re)), Math.sqrt((d.re * b.re) / (c.re * a.re))],
+      iterative_ohm: [iterative(a.re, d.re), iterative(d.re, a.re)],
+    });
+  },
+);
 
 const anyPad = fc
-  .record({ inputOhm: fc.double({ min: 5, max: 600, noNaN: true }), outputOhm: fc.double({ min: 5, max: 600, noNaN: true }), more: fc.double({ min: 0.01, max: 60, noNaN: true }), topology: fc.constantFrom("T" as const, "pi" as const) })
-  .map(({ inputOhm, outputOhm, more, topology }): PadElement => ({ kind: "pad", topology, inputOhm, outputOhm, lossDb: minimumPadLossDb(inputOhm, outputOhm) + more }));
+  .record({
+    inputOhm: fc.double({ min: 5, max: 600, noNaN: true }),
+    outputOhm: fc.double({ min: 5, max: 600, noNaN: true }),
+    more: fc.double({ min: 0.01, max: 60, noNaN: true }),
+    topology: fc.constantFrom("T" as const, "pi" as const),
+  })
+  .map(({ inputOhm, outputOhm, more, topology }): PadElement => ({
+    kind: "pad",
+    topology,
+    inputOhm,
+    outputOhm,
+    lossDb: minimumPadLossDb(inputOhm, outputOhm) + more,
+  }));
 
 test("a pad is the three resistors it is made of, T or pi", () => {
   fc.assert(
@@ -83,10 +127,16 @@ test("a pad of no loss needs no resistors", () => {
 
 test("a pad below its least loss, or without impedance, is refused by name", () => {
   const pad = { kind: "pad", inputOhm: 75, outputOhm: 50 } as const;
-  expect(() => padTwoPort({ ...pad, lossDb: 5.7 })).toThrow(/^padTwoPort: lossDb must be at least 5\.71947\d* between 75 and 50 ohm, got 5\.7$/);
+  expect(() => padTwoPort({ ...pad, lossDb: 5.7 })).toThrow(
+    /^padTwoPort: lossDb must be at least 5\.71947\d* between 75 and 50 ohm, got 5\.7$/,
+  );
   expect(() => padTwoPort({ ...pad, lossDb: NaN })).toThrow(RangeError);
-  expect(() => padResistors({ ...pad, lossDb: 10, inputOhm: 0 })).toThrow("padResistors: inputOhm must be positive, got 0");
-  expect(() => padTwoPort({ ...pad, lossDb: 10, outputOhm: -50 })).toThrow("padTwoPort: outputOhm must be positive, got -50");
+  expect(() => padResistors({ ...pad, lossDb: 10, inputOhm: 0 })).toThrow(
+    "padResistors: inputOhm must be positive, got 0",
+  );
+  expect(() => padTwoPort({ ...pad, lossDb: 10, outputOhm: -50 })).toThrow(
+    "padTwoPort: outputOhm must be positive, got -50",
+  );
   // at the least loss itself it is not refused for rounding
   expect(() => padTwoPort({ ...pad, lossDb: minimumPadLossDb(75, 50) })).not.toThrow();
 });

@@ -20,19 +20,30 @@ function at(model: LineModel, frequency: number) {
 const each = (choose: (id: string, topic: string) => boolean) =>
   published(choose).map((check) => [`${check.id}: ${check.source}`, check] as [string, PublishedCheck]);
 
-test.each(each((_id, topic) => topic === "RLGC to Zc and gamma"))("R, L, G, C give impedance and propagation constant as printed: %s", (_name, check) => {
-  const { inputs, expected } = check;
-  const { gamma, zc } = at(constantLine(number(inputs, "R"), number(inputs, "L"), number(inputs, "G"), number(inputs, "C")), number(inputs, "f_Hz"));
-  const got = { Zc: zc, Zc_rect: zc, gamma, alpha_Np: gamma.re, beta_rad: gamma.im };
-  agrees(check, Object.fromEntries(Object.entries(got).filter(([key]) => key in expected)));
-});
+test.each(each((_id, topic) => topic === "RLGC to Zc and gamma"))(
+  "R, L, G, C give impedance and propagation constant as printed: %s",
+  (_name, check) => {
+    const { inputs, expected } = check;
+    const { gamma, zc } = at(
+      constantLine(number(inputs, "R"), number(inputs, "L"), number(inputs, "G"), number(inputs, "C")),
+      number(inputs, "f_Hz"),
+    );
+    const got = { Zc: zc, Zc_rect: zc, gamma, alpha_Np: gamma.re, beta_rad: gamma.im };
+    agrees(check, Object.fromEntries(Object.entries(got).filter(([key]) => key in expected)));
+  },
+);
 
 test.each(each((_id, topic) => topic === "parametric pair model" || topic.startsWith("24 AWG PIC")))(
   "a telephone pair's primary constants give its impedance and loss: %s",
   (_name, check) => {
     const values = { ...check.inputs, ...check.expected };
     const { gamma, zc } = at(
-      constantLine(number(values, "R_ohm_per_km"), number(values, "L_uH_per_km") * 1e-6, number(values, "G_uS_per_km") * 1e-6, number(values, "C_nF_per_km") * 1e-9),
+      constantLine(
+        number(values, "R_ohm_per_km"),
+        number(values, "L_uH_per_km") * 1e-6,
+        number(values, "G_uS_per_km") * 1e-6,
+        number(values, "C_nF_per_km") * 1e-9,
+      ),
       number(values, "f_Hz"),
     );
     const { Zc, atten_dB_per_km, beta_rad_per_km } = check.expected;
@@ -41,16 +52,25 @@ test.each(each((_id, topic) => topic === "parametric pair model" || topic.starts
   },
 );
 
-test.each(each((_id, topic) => topic === "G.9701-type pair model"))("a data pair's constants give its impedance and loss: %s", (_name, check) => {
-  const { inputs, expected } = check;
-  const frequency = number(inputs, "f_Hz");
-  const c = number(expected, "C_pF_per_m") * 1e-12;
-  // the form's dielectric has the constant loss angle phi
-  const g = 2 * Math.PI * frequency * c * Math.tan((inputs.params as Record<string, number>).phi!);
-  const { gamma, zc } = at(constantLine(number(expected, "R_ohm_per_m"), number(expected, "L_nH_per_m") * 1e-9, g, c), frequency);
-  const { Zc, atten_dB_per_100m } = expected;
-  agrees({ ...check, expected: { Zc: Zc!, atten_dB_per_100m: atten_dB_per_100m! } }, { Zc: zc, atten_dB_per_100m: gamma.re * DB_PER_NEPER * 100 });
-});
+test.each(each((_id, topic) => topic === "G.9701-type pair model"))(
+  "a data pair's constants give its impedance and loss: %s",
+  (_name, check) => {
+    const { inputs, expected } = check;
+    const frequency = number(inputs, "f_Hz");
+    const c = number(expected, "C_pF_per_m") * 1e-12;
+    // the form's dielectric has the constant loss angle phi
+    const g = 2 * Math.PI * frequency * c * Math.tan((inputs.params as Record<string, number>).phi!);
+    const { gamma, zc } = at(
+      constantLine(number(expected, "R_ohm_per_m"), number(expected, "L_nH_per_m") * 1e-9, g, c),
+      frequency,
+    );
+    const { Zc, atten_dB_per_100m } = expected;
+    agrees(
+      { ...check, expected: { Zc: Zc!, atten_dB_per_100m: atten_dB_per_100m! } },
+      { Zc: zc, atten_dB_per_100m: gamma.re * DB_PER_NEPER * 100 },
+    );
+  },
+);
 
 test.each(each((_id, topic) => topic.startsWith("Z0 consistency") || topic === "Z0 from velocity and capacitance"))(
   "velocity factor and capacitance give the nominal impedance: %s",
@@ -79,20 +99,33 @@ const single: Record<string, (inputs: PublishedCheck["inputs"]) => Parameters<ty
     return { Z0_ohm: z0, v_m_per_s: 1 / delay };
   },
   "D09-beasley-12.1": (inputs) => ({
-    Z0_ohm: nominalFigures(constantLine(0, number(inputs, "L_nH_per_ft") * 1e-9, 0, number(inputs, "C_pF_per_ft") * 1e-12)).z0,
+    Z0_ohm: nominalFigures(
+      constantLine(0, number(inputs, "L_nH_per_ft") * 1e-9, 0, number(inputs, "C_pF_per_ft") * 1e-12),
+    ).z0,
   }),
   "D27-bird-44.8": (inputs) => {
     const model = constantLine(0, number(inputs, "L_H_per_km"), 0, number(inputs, "C_F_per_km"));
     const { gamma, zc } = at(model, number(inputs, "f_Hz"));
     const wavelength = (2 * Math.PI) / gamma.im;
-    return { Z0_ohm: zc.re, beta_rad_per_km: gamma.im, lambda_m: wavelength * 1000, v_km_per_s: wavelength * number(inputs, "f_Hz") };
+    return {
+      Z0_ohm: zc.re,
+      beta_rad_per_km: gamma.im,
+      lambda_m: wavelength * 1000,
+      v_km_per_s: wavelength * number(inputs, "f_Hz"),
+    };
   },
   "D31-bird-44.12": (inputs) => {
     const [r, g, c] = [number(inputs, "R"), number(inputs, "G"), number(inputs, "C")];
     const l = (r * c) / g;
     const { gamma } = at(constantLine(r, l, g, c), number(inputs, "f_Hz"));
     const wavelength = (2 * Math.PI) / gamma.im;
-    return { L_H: l, alpha_Np: gamma.re, beta_rad: gamma.im, v_km_per_s: wavelength * number(inputs, "f_Hz"), lambda_km: wavelength };
+    return {
+      L_H: l,
+      alpha_Np: gamma.re,
+      beta_rad: gamma.im,
+      v_km_per_s: wavelength * number(inputs, "f_Hz"),
+      lambda_km: wavelength,
+    };
   },
   "D32-bird-44.6": (inputs) => ({ Zc: sqrt(multiply(complexOf(inputs.Zoc), complexOf(inputs.Zsc))) }),
   "D33-misra-3.9": (inputs) => {
@@ -119,7 +152,12 @@ test.each(each((_id, topic) => topic === "distortionless line").filter(([name]) 
   "printed constants of a distortionless line give back its attenuation, impedance and velocity: %s",
   (_name, { inputs, expected, tolerance }) => {
     const c = "C_pF_per_m" in expected ? number(expected, "C_pF_per_m") * 1e-12 : number(inputs, "C_F_per_m");
-    const model = constantLine(number(expected, "R_ohm_per_m"), number(expected, "L_nH_per_m") * 1e-9, number(expected, "G_uS_per_m") * 1e-6, c);
+    const model = constantLine(
+      number(expected, "R_ohm_per_m"),
+      number(expected, "L_nH_per_m") * 1e-9,
+      number(expected, "G_uS_per_m") * 1e-6,
+      c,
+    );
     for (const frequency of [1e6, 1e8]) {
       const { gamma, zc } = at(model, frequency);
       expect(Math.abs(gamma.re / number(inputs, "alpha_Np_per_m") - 1)).toBeLessThan(tolerance.rel!);
@@ -130,32 +168,51 @@ test.each(each((_id, topic) => topic === "distortionless line").filter(([name]) 
   },
 );
 
-test.each(each((_id, topic) => topic === "loading for minimum distortion"))("with the printed loading a line loses √(RG) at every frequency: %s", (_name, { inputs, expected, tolerance }) => {
-  const [r, g] = [number(inputs, "R_ohm_per_km"), number(inputs, "G_uS_per_km") * 1e-6];
-  const l = (number(inputs, "L_mH_per_km") + number(expected, "added_L_mH_per_km")) * 1e-3;
-  const model = constantLine(r, l, g, number(inputs, "C_uF_per_km") * 1e-6);
-  for (const frequency of [300, 3400]) expect(Math.abs(at(model, frequency).gamma.re / Math.sqrt(r * g) - 1)).toBeLessThan(tolerance.rel!);
-});
+test.each(each((_id, topic) => topic === "loading for minimum distortion"))(
+  "with the printed loading a line loses √(RG) at every frequency: %s",
+  (_name, { inputs, expected, tolerance }) => {
+    const [r, g] = [number(inputs, "R_ohm_per_km"), number(inputs, "G_uS_per_km") * 1e-6];
+    const l = (number(inputs, "L_mH_per_km") + number(expected, "added_L_mH_per_km")) * 1e-3;
+    const model = constantLine(r, l, g, number(inputs, "C_uF_per_km") * 1e-6);
+    for (const frequency of [300, 3400])
+      expect(Math.abs(at(model, frequency).gamma.re / Math.sqrt(r * g) - 1)).toBeLessThan(tolerance.rel!);
+  },
+);
 
-test.each(each((id) => id === "C-round-wire"))("the √ form is off from the exact round wire by what is published: %s", (_name, { inputs, expected, tolerance }) => {
-  const relative = (ratio: number) => conductorImpedance({ form: "sqrt", r0OhmPerM: 1, skinCornerRadPerS: 1 }, { re: 0, im: ratio ** 2 / 2 });
-  (inputs.a_over_delta as number[]).forEach((ratio, k) => {
-    const published = (expected.R_over_R0_sqrt_model as number[])[k]!;
-    expect(Math.abs(relative(ratio).re / published - 1)).toBeLessThan(tolerance.rel!);
-    // and the round form stays within its own bounds of the exact values
-    const round = conductorImpedance({ form: "round", r0OhmPerM: 1, skinCornerRadPerS: 1 }, { re: 0, im: ratio ** 2 / 2 });
-    expect(Math.abs(round.re / (expected.R_over_R0_exact as number[])[k]! - 1)).toBeLessThan(0.0131);
-    expect(Math.abs(round.im / (expected.Xint_over_R0_exact as number[])[k]! - 1)).toBeLessThan(0.0197);
-  });
-});
+test.each(each((id) => id === "C-round-wire"))(
+  "the √ form is off from the exact round wire by what is published: %s",
+  (_name, { inputs, expected, tolerance }) => {
+    const relative = (ratio: number) =>
+      conductorImpedance({ form: "sqrt", r0OhmPerM: 1, skinCornerRadPerS: 1 }, { re: 0, im: ratio ** 2 / 2 });
+    (inputs.a_over_delta as number[]).forEach((ratio, k) => {
+      const published = (expected.R_over_R0_sqrt_model as number[])[k]!;
+      expect(Math.abs(relative(ratio).re / published - 1)).toBeLessThan(tolerance.rel!);
+      // and the round form stays within its own bounds of the exact values
+      const round = conductorImpedance(
+        { form: "round", r0OhmPerM: 1, skinCornerRadPerS: 1 },
+        { re: 0, im: ratio ** 2 / 2 },
+      );
+      expect(Math.abs(round.re / (expected.R_over_R0_exact as number[])[k]! - 1)).toBeLessThan(0.0131);
+      expect(Math.abs(round.im / (expected.Xint_over_R0_exact as number[])[k]! - 1)).toBeLessThan(0.0197);
+    });
+  },
+);
 
-test.each(each((id) => id === "C-model-gap"))("the √ form lies above the fourth-root form by what is published: %s", (_name, { expected, tolerance }) => {
-  const corner = number(expected, "ws_rad_per_s");
-  const { re } = conductorImpedance({ form: "sqrt", r0OhmPerM: 1, skinCornerRadPerS: corner }, { re: 0, im: 2 * Math.PI * number(expected, "at_f_Hz") });
-  // R = (R0⁴ + a·f²)^¼ with the same limits has a·f² = (ω/2ωs)²
-  const fourthRoot = (1 + ((2 * Math.PI * number(expected, "at_f_Hz")) / (2 * corner)) ** 2) ** 0.25;
-  expect(Math.abs((re / fourthRoot - 1) * 100 - number(expected, "max_excess_percent"))).toBeLessThan(tolerance.rel! * 100);
-});
+test.each(each((id) => id === "C-model-gap"))(
+  "the √ form lies above the fourth-root form by what is published: %s",
+  (_name, { expected, tolerance }) => {
+    const corner = number(expected, "ws_rad_per_s");
+    const { re } = conductorImpedance(
+      { form: "sqrt", r0OhmPerM: 1, skinCornerRadPerS: corner },
+      { re: 0, im: 2 * Math.PI * number(expected, "at_f_Hz") },
+    );
+    // R = (R0⁴ + a·f²)^¼ with the same limits has a·f² = (ω/2ωs)²
+    const fourthRoot = (1 + ((2 * Math.PI * number(expected, "at_f_Hz")) / (2 * corner)) ** 2) ** 0.25;
+    expect(Math.abs((re / fourthRoot - 1) * 100 - number(expected, "max_excess_percent"))).toBeLessThan(
+      tolerance.rel! * 100,
+    );
+  },
+);
 
 test("the copper constants are the published ones at every temperature", () => {
   const check = published((id) => id === "B-copper")[0]!;

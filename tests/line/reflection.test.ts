@@ -71,19 +71,29 @@ function computed(name: string, inputs: Inputs): Record<string, number | number[
   if (name === "from return loss") return ofMagnitudes(inputs.return_loss_db.map(magnitudeOfReturnLoss));
   if (name.startsWith("mismatched load through")) return throughLine(inputs);
   const load = complex(inputs.load_re_ohm, inputs.load_im_ohm);
-  return ofLoad(load, name === "load on line" ? complex(inputs.z0_ohm) : complex(inputs.source_re_ohm, inputs.source_im_ohm));
+  return ofLoad(
+    load,
+    name === "load on line" ? complex(inputs.z0_ohm) : complex(inputs.source_re_ohm, inputs.source_im_ohm),
+  );
 }
 
-const numbered = checks<Inputs>("reflection-identities").map((check, k) => ({ ...check, label: `${k + 1}, ${check.name}` }));
+const numbered = checks<Inputs>("reflection-identities").map((check, k) => ({
+  ...check,
+  label: `${k + 1}, ${check.name}`,
+}));
 
-test.each(numbered)("reflection, VSWR, return loss and mismatch loss agree with the closed forms: $label", ({ name, inputs, expected }) => {
-  const got = computed(name, inputs);
-  for (const [key, value] of Object.entries(expected)) {
-    // the file holds a loss of exactly nothing; power and reflection round differently there
-    const allowed: Expected = value.value === 0 ? { ...value, abs_tolerance: Math.max(value.abs_tolerance, 1e-15) } : value;
-    closeTo(got[key]!, allowed, key);
-  }
-});
+test.each(numbered)(
+  "reflection, VSWR, return loss and mismatch loss agree with the closed forms: $label",
+  ({ name, inputs, expected }) => {
+    const got = computed(name, inputs);
+    for (const [key, value] of Object.entries(expected)) {
+      // the file holds a loss of exactly nothing; power and reflection round differently there
+      const allowed: Expected =
+        value.value === 0 ? { ...value, abs_tolerance: Math.max(value.abs_tolerance, 1e-15) } : value;
+      closeTo(got[key]!, allowed, key);
+    }
+  },
+);
 
 const ohm = fc.double({ min: -3, max: 4, noNaN: true }).map((decade) => 10 ** decade);
 const reactance = fc.double({ min: -1e4, max: 1e4, noNaN: true });
@@ -131,8 +141,12 @@ test("an open, a short and a match have their limits, without NaN", () => {
 });
 
 test("what reflection cannot be asked is refused by name", () => {
-  expect(() => reflection(complex(50), complex(0, 10))).toThrow("reflection: source resistance must be positive, got 0");
-  expect(() => impedanceOfReflection(complex(0), -50)).toThrow("impedanceOfReflection: referenceOhm must be positive, got -50");
+  expect(() => reflection(complex(50), complex(0, 10))).toThrow(
+    "reflection: source resistance must be positive, got 0",
+  );
+  expect(() => impedanceOfReflection(complex(0), -50)).toThrow(
+    "impedanceOfReflection: referenceOhm must be positive, got -50",
+  );
   expect(() => magnitudeOfVswr(0.9)).toThrow("magnitudeOfVswr: ratio must be at least 1, got 0.9");
   expect(() => magnitudeOfReturnLoss(-1)).toThrow("magnitudeOfReturnLoss: lossDb must be at least 0, got -1");
 });

@@ -5,14 +5,31 @@ import type { Circuit, Element, Plane, Termination } from "@/lib/line/element";
 import { sweep, type Sweep } from "@/lib/line/run";
 import { anyElement, anyFrequency, anyRun } from "@/tests/support/arbitrary-run";
 
-const rope = modelFromNominal({ z0: 50, velocityFactor: 0.66, lossTangent: 3e-4, conductors: [{ form: "round", r0OhmPerM: 0.05, skinCornerRadPerS: 2.4e5 }] });
+const rope = modelFromNominal({
+  z0: 50,
+  velocityFactor: 0.66,
+  lossTangent: 3e-4,
+  conductors: [{ form: "round", r0OhmPerM: 0.05, skinCornerRadPerS: 2.4e5 }],
+});
 const cable = (lengthM: number): Element => ({ kind: "cable", line: { model: rope }, lengthM });
 const ohm = (reOhm: number, imOhm = 0): Termination => ({ kind: "constant", reOhm, imOhm });
-const run = (elements: Element[], load: Termination = ohm(22, -35), source: Termination = ohm(50)): Circuit => ({ source: source as Circuit["source"], elements, load });
+const run = (elements: Element[], load: Termination = ohm(22, -35), source: Termination = ohm(50)): Circuit => ({
+  source: source as Circuit["source"],
+  elements,
+  load,
+});
 
 const numbers = (result: Sweep) => [
-  ...result.inputImpedance.re, ...result.inputImpedance.im, ...result.returnLossDb, ...result.transducerLossDb, ...result.matchedLossDb,
-  ...result.mismatchLossDb, ...result.extraLossDb, ...result.groupDelayS, ...result.loadVoltage.re, ...result.elementLossDb.flatMap((each) => [...each]),
+  ...result.inputImpedance.re,
+  ...result.inputImpedance.im,
+  ...result.returnLossDb,
+  ...result.transducerLossDb,
+  ...result.matchedLossDb,
+  ...result.mismatchLossDb,
+  ...result.extraLossDb,
+  ...result.groupDelayS,
+  ...result.loadVoltage.re,
+  ...result.elementLossDb.flatMap((each) => [...each]),
 ];
 
 test("a passive run never reflects more than all, and its losses add up", () => {
@@ -35,47 +52,66 @@ test("a passive run never reflects more than all, and its losses add up", () => 
 
 test("a run and its mirror between swapped ends lose the same", () => {
   fc.assert(
-    fc.property(fc.array(anyElement, { minLength: 1, maxLength: 5 }), fc.double({ min: 10, max: 300, noNaN: true }), fc.double({ min: -100, max: 100, noNaN: true }), anyFrequency, (elements, r, x, frequency) => {
-      const plain = elements.map((element): Element => (element.kind === "joint" ? { ...element, shuntF: 0 } : element));
-      const mirrored = [...plain].reverse().map((element): Element => {
-        if (element.kind === "pad") return { ...element, inputOhm: element.outputOhm, outputOhm: element.inputOhm };
-        if (element.kind === "transformer") return { ...element, turnsRatio: 1 / element.turnsRatio };
-        return element;
-      });
-      const there = sweep(run(plain, ohm(r, x)), [frequency]).transducerLossDb[0]!;
-      const back = sweep({ ...run(mirrored, ohm(50)), source: { kind: "constant", reOhm: r, imOhm: x } }, [frequency]).transducerLossDb[0]!;
-      // a branch near resonance shorts the run but for rounding: a few digits of such a loss are noise
-      expect(Math.abs(there - back)).toBeLessThanOrEqual(1e-6 + 1e-9 * there);
-    }),
+    fc.property(
+      fc.array(anyElement, { minLength: 1, maxLength: 5 }),
+      fc.double({ min: 10, max: 300, noNaN: true }),
+      fc.double({ min: -100, max: 100, noNaN: true }),
+      anyFrequency,
+      (elements, r, x, frequency) => {
+        const plain = elements.map((element): Element =>
+          element.kind === "joint" ? { ...element, shuntF: 0 } : element,
+        );
+        const mirrored = [...plain].reverse().map((element): Element => {
+          if (element.kind === "pad") return { ...element, inputOhm: element.outputOhm, outputOhm: element.inputOhm };
+          if (element.kind === "transformer") return { ...element, turnsRatio: 1 / element.turnsRatio };
+          return element;
+        });
+        const there = sweep(run(plain, ohm(r, x)), [frequency]).transducerLossDb[0]!;
+        const back = sweep({ ...run(mirrored, ohm(50)), source: { kind: "constant", reOhm: r, imOhm: x } }, [frequency])
+          .transducerLossDb[0]!;
+        // a branch near resonance shorts the run but for rounding: a few digits of such a loss are noise
+        expect(Math.abs(there - back)).toBeLessThanOrEqual(1e-6 + 1e-9 * there);
+      },
+    ),
     { numRuns: 300 },
   );
 });
 
 test("a cable cut anywhere gives the same run", () => {
   fc.assert(
-    fc.property(fc.double({ min: 0.01, max: 200, noNaN: true }), fc.double({ min: 0, max: 1, noNaN: true }), anyFrequency, (lengthM, part, frequency) => {
-      const whole = sweep(run([cable(lengthM)]), [frequency]);
-      const cut = sweep(run([cable(lengthM * part), cable(lengthM * (1 - part))]), [frequency]);
-      numbers({ ...whole, elementLossDb: [] }).forEach((value, k) => {
-        const other = numbers({ ...cut, elementLossDb: [] })[k]!;
-        expect(Math.abs(value - other)).toBeLessThanOrEqual(1e-9 * (Math.abs(value) + 1));
-      });
-      expect(cut.elementLossDb[0]![0]! + cut.elementLossDb[1]![0]!).toBeCloseTo(whole.elementLossDb[0]![0]!, 8);
-    }),
+    fc.property(
+      fc.double({ min: 0.01, max: 200, noNaN: true }),
+      fc.double({ min: 0, max: 1, noNaN: true }),
+      anyFrequency,
+      (lengthM, part, frequency) => {
+        const whole = sweep(run([cable(lengthM)]), [frequency]);
+        const cut = sweep(run([cable(lengthM * part), cable(lengthM * (1 - part))]), [frequency]);
+        numbers({ ...whole, elementLossDb: [] }).forEach((value, k) => {
+          const other = numbers({ ...cut, elementLossDb: [] })[k]!;
+          expect(Math.abs(value - other)).toBeLessThanOrEqual(1e-9 * (Math.abs(value) + 1));
+        });
+        expect(cut.elementLossDb[0]![0]! + cut.elementLossDb[1]![0]!).toBeCloseTo(whole.elementLossDb[0]![0]!, 8);
+      },
+    ),
   );
 });
 
 describe("planes", () => {
   test("at any plane the impedance is that of the rest of the run alone", () => {
     fc.assert(
-      fc.property(fc.array(anyElement, { minLength: 1, maxLength: 5 }), fc.nat(4), anyFrequency, (elements, at, frequency) => {
-        const beforeElement = at % elements.length;
-        const [plane] = sweep(run(elements), [frequency], { planes: [{ beforeElement }] }).atPlanes;
-        const rest = sweep(run(elements.slice(beforeElement)), [frequency]);
-        expect(plane!.impedance.re[0]).toBe(rest.inputImpedance.re[0]);
-        expect(plane!.impedance.im[0]).toBe(rest.inputImpedance.im[0]);
-        expect(plane!.returnLossDb[0]).toBeCloseTo(rest.returnLossDb[0]!, 9);
-      }),
+      fc.property(
+        fc.array(anyElement, { minLength: 1, maxLength: 5 }),
+        fc.nat(4),
+        anyFrequency,
+        (elements, at, frequency) => {
+          const beforeElement = at % elements.length;
+          const [plane] = sweep(run(elements), [frequency], { planes: [{ beforeElement }] }).atPlanes;
+          const rest = sweep(run(elements.slice(beforeElement)), [frequency]);
+          expect(plane!.impedance.re[0]).toBe(rest.inputImpedance.re[0]);
+          expect(plane!.impedance.im[0]).toBe(rest.inputImpedance.im[0]);
+          expect(plane!.returnLossDb[0]).toBeCloseTo(rest.returnLossDb[0]!, 9);
+        },
+      ),
     );
   });
 
@@ -96,7 +132,9 @@ describe("planes", () => {
   test("elsewhere reflect in the circuit's reference, the source's resistance if none is given", () => {
     const [plane] = sweep(run([cable(0)], ohm(75), ohm(50, 20)), [1e6], { planes: [{ at: "load" }] }).atPlanes;
     expect(plane!.reflection.re[0]).toBeCloseTo(0.2, 12);
-    const named = sweep({ ...run([cable(0)], ohm(75), ohm(50, 20)), referenceOhm: 75 }, [1e6], { planes: [{ at: "load" }] });
+    const named = sweep({ ...run([cable(0)], ohm(75), ohm(50, 20)), referenceOhm: 75 }, [1e6], {
+      planes: [{ at: "load" }],
+    });
     expect(named.atPlanes[0]!.returnLossDb[0]).toBe(Infinity);
     expect(named.loadReflection.re[0]).toBe(0);
   });
@@ -108,7 +146,10 @@ describe("group delay", () => {
       fc.property(anyRun, fc.double({ min: 5, max: 8, noNaN: true }), (circuit, decade) => {
         const frequency = 10 ** decade;
         const steps = [-2e-6, -1e-6, 0, 1e-6, 2e-6];
-        const { groupDelayS, loadVoltage } = sweep(circuit, steps.map((step) => frequency * (1 + step)));
+        const { groupDelayS, loadVoltage } = sweep(
+          circuit,
+          steps.map((step) => frequency * (1 + step)),
+        );
         const phase = (k: number) => Math.atan2(loadVoltage.im[k]!, loadVoltage.re[k]!);
         const delayOver = (from: number, to: number) => {
           const turn = phase(to) - phase(from);
@@ -149,7 +190,12 @@ describe("limits", () => {
   });
 
   test("200 pads of 200 dB do not overflow", () => {
-    const pads = Array.from({ length: 200 }, (): Element => ({ kind: "pad", lossDb: 200, inputOhm: 50, outputOhm: 50 }));
+    const pads = Array.from({ length: 200 }, (): Element => ({
+      kind: "pad",
+      lossDb: 200,
+      inputOhm: 50,
+      outputOhm: 50,
+    }));
     const got = sweep(run(pads, ohm(50)), [1e6]);
     expect(got.transducerLossDb[0]).toBeCloseTo(40_000, 6);
     expect(got.mismatchLossDb[0]).toBeCloseTo(0, 12);
@@ -175,9 +221,21 @@ describe("limits", () => {
     const match = sweep(run([], ohm(50)), [1e6]);
     expect([match.returnLossDb[0], match.vswr[0], match.mismatchLossDb[0]]).toEqual([Infinity, 1, 0]);
     for (const kind of ["open", "short"] as const) {
-      const got = sweep(run([{ kind: "cable", line: { model: modelFromNominal({ z0: 50, velocityFactor: 1 }) }, lengthM: 3 }], { kind }), [7e6], { planes: [{ at: "load" }] });
+      const got = sweep(
+        run([{ kind: "cable", line: { model: modelFromNominal({ z0: 50, velocityFactor: 1 }) }, lengthM: 3 }], {
+          kind,
+        }),
+        [7e6],
+        { planes: [{ at: "load" }] },
+      );
       expect(got.returnLossDb[0]).toBeCloseTo(0, 12);
-      expect([got.vswr[0], got.transducerLossDb[0], got.mismatchLossDb[0], got.extraLossDb[0], got.elementLossDb[0]![0]]).toEqual(Array(5).fill(Infinity));
+      expect([
+        got.vswr[0],
+        got.transducerLossDb[0],
+        got.mismatchLossDb[0],
+        got.extraLossDb[0],
+        got.elementLossDb[0]![0],
+      ]).toEqual(Array(5).fill(Infinity));
       expect(got.atPlanes[0]!.impedance.re[0]).toBe(kind === "open" ? Infinity : 0);
       expect(got.loadReflection.re[0]).toBe(kind === "open" ? 1 : -1);
     }
@@ -187,7 +245,12 @@ describe("limits", () => {
     const got = sweep(run([{ kind: "shunt", termination: { kind: "short" } }, cable(5)]), [1e6]);
     expect(got.inputImpedance.re[0]).toBeCloseTo(0, 15);
     expect(got.inputImpedance.im[0]).toBeCloseTo(0, 15);
-    expect([got.reflection.re[0], got.transducerLossDb[0], got.elementLossDb[0]![0], got.loadVoltage.re[0]]).toEqual([-1, Infinity, Infinity, 0]);
+    expect([got.reflection.re[0], got.transducerLossDb[0], got.elementLossDb[0]![0], got.loadVoltage.re[0]]).toEqual([
+      -1,
+      Infinity,
+      Infinity,
+      0,
+    ]);
     expect(got.groupDelayS[0]).toBeNaN();
   });
 
@@ -204,17 +267,38 @@ describe("refusals name function, argument and value", () => {
   test.each([
     [() => sweep(circuit, [1e6, 0]), "sweep: frequencies must be positive, got 0"],
     [() => sweep(circuit, [Infinity]), "sweep: frequencies must be positive, got Infinity"],
-    [() => sweep(circuit, [1e6], { planes: [{ beforeElement: 1 }] }), "sweep: beforeElement must be a whole number from 0 to 0, got 1"],
-    [() => sweep(circuit, [1e6], { planes: [{ beforeElement: 0.5 }] }), "sweep: beforeElement must be a whole number from 0 to 0, got 0.5"],
-    [() => sweep({ ...circuit, source: { kind: "short" } }, [1e6]), "sweep: referenceOhm is needed where the source has no resistance, got 0"],
+    [
+      () => sweep(circuit, [1e6], { planes: [{ beforeElement: 1 }] }),
+      "sweep: beforeElement must be a whole number from 0 to 0, got 1",
+    ],
+    [
+      () => sweep(circuit, [1e6], { planes: [{ beforeElement: 0.5 }] }),
+      "sweep: beforeElement must be a whole number from 0 to 0, got 0.5",
+    ],
+    [
+      () => sweep({ ...circuit, source: { kind: "short" } }, [1e6]),
+      "sweep: referenceOhm is needed where the source has no resistance, got 0",
+    ],
     [() => sweep({ ...circuit, source: { kind: "open" } }, [1e6]), "prepareRun: source must not be open"],
     [() => sweep({ ...circuit, referenceOhm: -1 }, [1e6]), "prepareRun: referenceOhm must be positive, got -1"],
     [() => sweep(run([cable(-1)]), [1e6]), "lineSection: length must be at least 0, got -1"],
-    [() => sweep(run([{ kind: "cable", line: { model: rope }, lengthM: 1, paralleled: 1.5 }]), [1e6]), "lineSection: paralleled must be a whole number of at least 1, got 1.5"],
+    [
+      () => sweep(run([{ kind: "cable", line: { model: rope }, lengthM: 1, paralleled: 1.5 }]), [1e6]),
+      "lineSection: paralleled must be a whole number of at least 1, got 1.5",
+    ],
     [() => sweep(run([{ kind: "parallel", branches: [] }]), [1e6]), "parallelSections: branches must not be empty"],
-    [() => sweep(run([{ kind: "parallel", branches: [{ line: { model: rope }, lengthM: 0 }] }]), [1e6]), "parallelSections: length must be positive, got 0"],
-    [() => sweep(run([{ kind: "transformer", turnsRatio: 0 }]), [1e6]), "transformerTwoPort: turnsRatio must be positive, got 0"],
-    [() => sweep(circuit, [1e6], { temperatureC: -300 }), "atTemperature: no positive resistivity at temperatureC = -300"],
+    [
+      () => sweep(run([{ kind: "parallel", branches: [{ line: { model: rope }, lengthM: 0 }] }]), [1e6]),
+      "parallelSections: length must be positive, got 0",
+    ],
+    [
+      () => sweep(run([{ kind: "transformer", turnsRatio: 0 }]), [1e6]),
+      "transformerTwoPort: turnsRatio must be positive, got 0",
+    ],
+    [
+      () => sweep(circuit, [1e6], { temperatureC: -300 }),
+      "atTemperature: no positive resistivity at temperatureC = -300",
+    ],
   ])("%#", (call, message) => {
     expect(call).toThrow(new RangeError(message));
   });

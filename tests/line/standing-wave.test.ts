@@ -25,27 +25,48 @@ function magnitude(re: Expected, im: Expected): Expected {
   return { value, rel_tolerance: re.rel_tolerance * 2, abs_tolerance: re.abs_tolerance * 2 };
 }
 
-test.each(bothForms<Inputs>("standing-wave-profile"))("voltage and current along a cable agree with outside: $name", ({ inputs, expected }) => {
-  const circuit: Circuit = {
-    source: terminationOf(inputs.source),
-    elements: [{ kind: "cable", line: { model: modelOf(inputs.cable) }, lengthM: inputs.length_m, temperatureC: inputs.cable.temperature_c }],
-    load: terminationOf(inputs.load),
-  };
-  const available = inputs.source_emf_v_rms ** 2 / (4 * inputs.source.re_ohm!);
-  const got = standingWave(circuit, inputs.frequency_hz, available, { pointsPerElement: inputs.position_from_source_m.length });
-  closeTo(got.positionM, { value: inputs.position_from_source_m, rel_tolerance: 1e-12, abs_tolerance: 1e-12 }, "position");
-  closeTo(got.voltageV, magnitude(expected.voltage_re_v!, expected.voltage_im_v!), "voltage");
-  closeTo(got.currentA, magnitude(expected.current_re_a!, expected.current_im_a!), "current");
-  closeTo(got.maxVoltageV, expected.voltage_peak_v!, "highest voltage");
-  closeTo(got.maxVoltageAtM, expected.voltage_peak_position_m!, "where");
-  closeTo(got.maxCurrentA, expected.current_peak_a!, "highest current");
-  closeTo(got.inputPowerW, expected.power_into_cable_w!, "power into the cable");
-  closeTo(got.loadPowerW, expected.power_into_load_w!, "power into the load");
-  const dense = standingWave(circuit, inputs.frequency_hz, available, { pointsPerElement: 4001 });
-  closeTo(Math.min(...dense.voltageV), expected.voltage_trough_v!, "lowest voltage");
-});
+test.each(bothForms<Inputs>("standing-wave-profile"))(
+  "voltage and current along a cable agree with outside: $name",
+  ({ inputs, expected }) => {
+    const circuit: Circuit = {
+      source: terminationOf(inputs.source),
+      elements: [
+        {
+          kind: "cable",
+          line: { model: modelOf(inputs.cable) },
+          lengthM: inputs.length_m,
+          temperatureC: inputs.cable.temperature_c,
+        },
+      ],
+      load: terminationOf(inputs.load),
+    };
+    const available = inputs.source_emf_v_rms ** 2 / (4 * inputs.source.re_ohm!);
+    const got = standingWave(circuit, inputs.frequency_hz, available, {
+      pointsPerElement: inputs.position_from_source_m.length,
+    });
+    closeTo(
+      got.positionM,
+      { value: inputs.position_from_source_m, rel_tolerance: 1e-12, abs_tolerance: 1e-12 },
+      "position",
+    );
+    closeTo(got.voltageV, magnitude(expected.voltage_re_v!, expected.voltage_im_v!), "voltage");
+    closeTo(got.currentA, magnitude(expected.current_re_a!, expected.current_im_a!), "current");
+    closeTo(got.maxVoltageV, expected.voltage_peak_v!, "highest voltage");
+    closeTo(got.maxVoltageAtM, expected.voltage_peak_position_m!, "where");
+    closeTo(got.maxCurrentA, expected.current_peak_a!, "highest current");
+    closeTo(got.inputPowerW, expected.power_into_cable_w!, "power into the cable");
+    closeTo(got.loadPowerW, expected.power_into_load_w!, "power into the load");
+    const dense = standingWave(circuit, inputs.frequency_hz, available, { pointsPerElement: 4001 });
+    closeTo(Math.min(...dense.voltageV), expected.voltage_trough_v!, "lowest voltage");
+  },
+);
 
-const rope = modelFromNominal({ z0: 50, velocityFactor: 0.66, lossTangent: 3e-4, conductors: [{ form: "round", r0OhmPerM: 0.05, skinCornerRadPerS: 2.4e5 }] });
+const rope = modelFromNominal({
+  z0: 50,
+  velocityFactor: 0.66,
+  lossTangent: 3e-4,
+  conductors: [{ form: "round", r0OhmPerM: 0.05, skinCornerRadPerS: 2.4e5 }],
+});
 
 function run(elements: Circuit["elements"], reOhm = 22, imOhm = -35): Circuit {
   return { source: { kind: "constant", reOhm: 50, imOhm: 0 }, elements, load: { kind: "constant", reOhm, imOhm } };
@@ -74,7 +95,9 @@ describe("energy", () => {
         const swept = sweep(circuit, [frequency]);
         const relative = (power: number, lossDb: number) => Math.abs(power - 10 * 10 ** (-lossDb / 10));
         expect(relative(wave.inputPowerW, swept.mismatchLossDb[0]!)).toBeLessThanOrEqual(1e-9 * 10);
-        expect(relative(wave.loadPowerW, swept.transducerLossDb[0]!)).toBeLessThanOrEqual(1e-9 * wave.loadPowerW + 1e-300);
+        expect(relative(wave.loadPowerW, swept.transducerLossDb[0]!)).toBeLessThanOrEqual(
+          1e-9 * wave.loadPowerW + 1e-300,
+        );
       }),
       { numRuns: 200 },
     );
@@ -101,7 +124,10 @@ describe("maxima", () => {
     fc.assert(
       fc.property(anyRun, anyFrequency, (circuit, frequency) => {
         const got = standingWave(circuit, frequency, 1, { pointsPerElement: 300 });
-        for (const [max, at, values] of [[got.maxVoltageV, got.maxVoltageAtM, got.voltageV], [got.maxCurrentA, got.maxCurrentAtM, got.currentA]] as const) {
+        for (const [max, at, values] of [
+          [got.maxVoltageV, got.maxVoltageAtM, got.voltageV],
+          [got.maxCurrentA, got.maxCurrentAtM, got.currentA],
+        ] as const) {
           expect(Math.max(...values)).toBeLessThanOrEqual(max * (1 + 1e-9));
           expect(at).toBeGreaterThanOrEqual(0);
           expect(at).toBeLessThanOrEqual(got.positionM[got.positionM.length - 1]! * (1 + 1e-12));
@@ -122,7 +148,15 @@ describe("maxima", () => {
   });
 
   test("are found in a moment on a line of a million wavelengths", () => {
-    const got = standingWave({ ...run([{ kind: "cable", line: { model: modelFromNominal({ z0: 50, velocityFactor: 1 }) }, lengthM: 1e6 }]), load: { kind: "constant", reOhm: 100, imOhm: 0 } }, 299_792_458, 50, { pointsPerElement: 3 });
+    const got = standingWave(
+      {
+        ...run([{ kind: "cable", line: { model: modelFromNominal({ z0: 50, velocityFactor: 1 }) }, lengthM: 1e6 }]),
+        load: { kind: "constant", reOhm: 100, imOhm: 0 },
+      },
+      299_792_458,
+      50,
+      { pointsPerElement: 3 },
+    );
     // Z0 = 50, VSWR 2: √(P·Z0·S) of the delivered 44.4 W
     expect(got.maxVoltageV).toBeCloseTo(Math.sqrt(50 * (8 / 9) * 100), 4);
   });
@@ -130,7 +164,16 @@ describe("maxima", () => {
 
 describe("points", () => {
   test("count both ends of each element, say which element they lie in, and join without a step", () => {
-    const got = standingWave(run([cable(3), { kind: "stub", connection: "shunt", end: "open", line: { model: rope }, lengthM: 0.5 }, cable(5)]), 3e7, 1, { pointsPerElement: 4 });
+    const got = standingWave(
+      run([
+        cable(3),
+        { kind: "stub", connection: "shunt", end: "open", line: { model: rope }, lengthM: 0.5 },
+        cable(5),
+      ]),
+      3e7,
+      1,
+      { pointsPerElement: 4 },
+    );
     expect([...got.positionM]).toEqual([0, 1, 2, 3, 3, 3, 3, 3 + 5 / 3, 3 + 10 / 3, 8]);
     expect([...got.elementIndex]).toEqual([0, 0, 0, 0, 1, 1, 2, 2, 2, 2]);
     // across a shunt stub the voltage goes through and the current does not
@@ -148,7 +191,20 @@ describe("points", () => {
 
   test("of paralleled cables are the same whether the cables are counted or listed", () => {
     const counted = standingWave(run([{ ...cable(7), paralleled: 2 }]), 5e7, 1, { pointsPerElement: 30 });
-    const listed = standingWave(run([{ kind: "parallel", branches: [{ line: { model: rope }, lengthM: 7 }, { line: { model: rope }, lengthM: 7 }] }]), 5e7, 1, { pointsPerElement: 30 });
+    const listed = standingWave(
+      run([
+        {
+          kind: "parallel",
+          branches: [
+            { line: { model: rope }, lengthM: 7 },
+            { line: { model: rope }, lengthM: 7 },
+          ],
+        },
+      ]),
+      5e7,
+      1,
+      { pointsPerElement: 30 },
+    );
     counted.voltageV.forEach((voltage, k) => expect(listed.voltageV[k]! / voltage).toBeCloseTo(1, 9));
     counted.currentA.forEach((current, k) => expect(listed.currentA[k]! / current).toBeCloseTo(1, 9));
     expect(listed.maxVoltageV / counted.maxVoltageV).toBeCloseTo(1, 9);
@@ -156,7 +212,9 @@ describe("points", () => {
   });
 
   test("behind a short carry nothing, and in front of it all is finite", () => {
-    const got = standingWave(run([cable(2), { kind: "shunt", termination: { kind: "short" } }, cable(2)]), 1e7, 1, { pointsPerElement: 5 });
+    const got = standingWave(run([cable(2), { kind: "shunt", termination: { kind: "short" } }, cable(2)]), 1e7, 1, {
+      pointsPerElement: 5,
+    });
     expect(got.loadPowerW).toBe(0);
     expect([...got.voltageV.slice(7)].every((voltage) => voltage === 0)).toBe(true);
     expect([...got.voltageV, ...got.currentA, got.maxVoltageV, got.maxCurrentA].every(Number.isFinite)).toBe(true);
@@ -181,8 +239,14 @@ describe("refusals name function, argument and value", () => {
     [() => standingWave(circuit, 0, 1), "standingWave: frequency must be positive, got 0"],
     [() => standingWave(circuit, NaN, 1), "standingWave: frequency must be positive, got NaN"],
     [() => standingWave(circuit, 1e6, -1), "standingWave: availablePower must be at least 0, got -1"],
-    [() => standingWave(circuit, 1e6, 1, { pointsPerElement: 1 }), "standingWave: pointsPerElement must be a whole number of at least 2, got 1"],
-    [() => standingWave({ ...circuit, source: { kind: "short" } }, 1e6, 1), "standingWave: the source's resistance must be positive, got 0"],
+    [
+      () => standingWave(circuit, 1e6, 1, { pointsPerElement: 1 }),
+      "standingWave: pointsPerElement must be a whole number of at least 2, got 1",
+    ],
+    [
+      () => standingWave({ ...circuit, source: { kind: "short" } }, 1e6, 1),
+      "standingWave: the source's resistance must be positive, got 0",
+    ],
   ])("%#", (call, message) => {
     expect(call).toThrow(new RangeError(message));
   });

@@ -42,13 +42,16 @@ const standard = (key: string) => slopes.expected[key] as number[];
 test.each([
   ["unscreened", unscreened, standard("UTP_dB")],
   ["screened", screened, standard("screened_dB")],
-] as const)("declared slopes of a %s pair give the standard's loss at each temperature", (_name, lossSlopes, expected) => {
-  (slopes.inputs.T_C as number[]).forEach((temperatureC, k) => {
-    const { lossRatio, slope } = atTemperature({ ...pair, lossSlopes: [...lossSlopes] }, temperatureC);
-    expect(slope).toBe("declared");
-    expect(lossRatio * (slopes.inputs.base_dB_at_20C as number)).toBeCloseTo(expected[k]!, 9);
-  });
-});
+] as const)(
+  "declared slopes of a %s pair give the standard's loss at each temperature",
+  (_name, lossSlopes, expected) => {
+    (slopes.inputs.T_C as number[]).forEach((temperatureC, k) => {
+      const { lossRatio, slope } = atTemperature({ ...pair, lossSlopes: [...lossSlopes] }, temperatureC);
+      expect(slope).toBe("declared");
+      expect(lossRatio * (slopes.inputs.base_dB_at_20C as number)).toBeCloseTo(expected[k]!, 9);
+    });
+  },
+);
 
 test("a declared slope scales high-frequency loss, dielectric included, while dc resistance follows resistivity", () => {
   const model = { ...pair, lossSlopes: unscreened };
@@ -56,7 +59,8 @@ test("a declared slope scales high-frequency loss, dielectric included, while dc
   expect(warm.resistivityRatio).toBeCloseTo(1.1572, 12);
   expect(warm.model.conductors[0]!.r0OhmPerM).toBeCloseTo(0.17 * 1.1572, 12);
   expect(warm.model.lossTangent).toBeCloseTo(6e-4 * 1.2, 15);
-  const ratio = lineFigures(model, [1e9], 60).attenuationDbPerM[0]! / lineFigures(model, [1e9], 20).attenuationDbPerM[0]!;
+  const ratio =
+    lineFigures(model, [1e9], 60).attenuationDbPerM[0]! / lineFigures(model, [1e9], 20).attenuationDbPerM[0]!;
   // at 1 GHz R0/4 and what is left of internal inductance still tell by less than 0.1 %
   expect(Math.abs(ratio / 1.2 - 1)).toBeLessThan(1e-3);
 });
@@ -67,7 +71,10 @@ test("outside its declared ranges a cable's loss does not move", () => {
 });
 
 test("a range below 20 °C takes loss away on the way down", () => {
-  expect(atTemperature({ ...pair, lossSlopes: [{ fromC: -20, toC: 20, perK: 0.002 }] }, 0).lossRatio).toBeCloseTo(0.96, 12);
+  expect(atTemperature({ ...pair, lossSlopes: [{ fromC: -20, toC: 20, perK: 0.002 }] }, 0).lossRatio).toBeCloseTo(
+    0.96,
+    12,
+  );
 });
 
 test("a model at its temperature is not moved again", () => {
@@ -80,5 +87,7 @@ test("a model at its temperature is not moved again", () => {
 test("a temperature without positive resistivity or loss is refused", () => {
   expect(() => atTemperature(pair, -300)).toThrow("atTemperature: no positive resistivity at temperatureC = -300");
   expect(() => atTemperature(pair, NaN)).toThrow(RangeError);
-  expect(() => atTemperature({ ...pair, lossSlopes: [{ fromC: 20, toC: 60, perK: -0.1 }] }, 60)).toThrow(/no positive loss/);
+  expect(() => atTemperature({ ...pair, lossSlopes: [{ fromC: 20, toC: 60, perK: -0.1 }] }, 60)).toThrow(
+    /no positive loss/,
+  );
 });

@@ -6,11 +6,15 @@ import { impedanceOfReflection } from "@/lib/line/reflection";
 import { terminationAdmittance, terminationImpedance, terminationPort } from "@/lib/line/termination";
 
 const s = { re: 0, im: 2 * Math.PI * 1e6 };
-const near = (got: Complex, wanted: Complex) => expect(abs(subtract(got, wanted))).toBeLessThanOrEqual(1e-13 * abs(wanted));
+const near = (got: Complex, wanted: Complex) =>
+  expect(abs(subtract(got, wanted))).toBeLessThanOrEqual(1e-13 * abs(wanted));
 
 test("a constant termination is its impedance at every s", () => {
   near(terminationImpedance({ kind: "constant", reOhm: 22, imOhm: -35 }, s), complex(22, -35));
-  near(terminationAdmittance({ kind: "constant", reOhm: 22, imOhm: -35 }, { re: 1e6, im: 5 }), reciprocal(complex(22, -35)));
+  near(
+    terminationAdmittance({ kind: "constant", reOhm: 22, imOhm: -35 }, { re: 1e6, im: 5 }),
+    reciprocal(complex(22, -35)),
+  );
 });
 
 const [r, l, c] = [75, 2e-6, 330e-12];
@@ -62,7 +66,12 @@ describe("at dc and at the edges nothing becomes NaN", () => {
 });
 
 describe("a sampled termination", () => {
-  const sampled: Termination = { kind: "sampled", referenceOhm: 75, frequenciesHz: [1e6, 2e6, 4e6], reflection: { re: [0.1, 0.3, -0.1], im: [0, 0.2, 0.4] } };
+  const sampled: Termination = {
+    kind: "sampled",
+    referenceOhm: 75,
+    frequenciesHz: [1e6, 2e6, 4e6],
+    reflection: { re: [0.1, 0.3, -0.1], im: [0, 0.2, 0.4] },
+  };
   const at = (frequency: number) => terminationImpedance(sampled, { re: 0, im: 2 * Math.PI * frequency });
 
   test("is its samples at the samples, both ends included", () => {
@@ -83,8 +92,13 @@ describe("a sampled termination", () => {
         // reflection that is linear in frequency comes back exactly whatever the interval
         const reflection = { re: frequenciesHz.map((f) => f * 1e-9), im: frequenciesHz.map((f) => -f * 2e-9) };
         const frequency = frequenciesHz[0]! + part * (frequenciesHz[count - 1]! - frequenciesHz[0]!);
-        const got = terminationImpedance({ kind: "sampled", referenceOhm: 50, frequenciesHz, reflection }, { re: 0, im: 2 * Math.PI * frequency });
-        expect(abs(subtract(got, impedanceOfReflection(complex(frequency * 1e-9, -frequency * 2e-9), 50)))).toBeLessThan(1e-10);
+        const got = terminationImpedance(
+          { kind: "sampled", referenceOhm: 50, frequenciesHz, reflection },
+          { re: 0, im: 2 * Math.PI * frequency },
+        );
+        expect(
+          abs(subtract(got, impedanceOfReflection(complex(frequency * 1e-9, -frequency * 2e-9), 50))),
+        ).toBeLessThan(1e-10);
       }),
     );
   });
@@ -99,13 +113,20 @@ describe("a sampled termination", () => {
   });
 
   test("is never extrapolated, nor known off the imaginary axis", () => {
-    expect(() => at(0.99e6)).toThrow(/terminationPort: frequency 990000.* Hz is outside the samples, 1000000 to 4000000 Hz/);
+    expect(() => at(0.99e6)).toThrow(
+      /terminationPort: frequency 990000.* Hz is outside the samples, 1000000 to 4000000 Hz/,
+    );
     expect(() => at(4.01e6)).toThrow(RangeError);
     expect(() => terminationPort(sampled, { re: 1, im: w })).toThrow(/imaginary axis/);
   });
 
   test("of one sample is known at that frequency alone", () => {
-    const one: Termination = { kind: "sampled", referenceOhm: 50, frequenciesHz: [1e6], reflection: { re: [0.5], im: [0] } };
+    const one: Termination = {
+      kind: "sampled",
+      referenceOhm: 50,
+      frequenciesHz: [1e6],
+      reflection: { re: [0.5], im: [0] },
+    };
     near(terminationImpedance(one, s), complex(150));
     expect(() => terminationImpedance(one, { re: 0, im: 1.01 * w })).toThrow(RangeError);
   });

@@ -25,30 +25,40 @@ function distance(one: TwoPort, other: TwoPort): number {
   const size = Math.max(abs(one.a), abs(one.b) / 50, abs(one.c) * 50, abs(one.d));
   const weights = [1, 1 / 50, 50, 1];
   const factor = Math.exp(other.logScale - one.logScale);
-  return Math.max(...parts(one).map((part, k) => {
-    const there = parts(other)[k]!;
-    return (abs(subtract(part, { re: there.re * factor, im: there.im * factor })) * weights[k]!) / size;
-  }));
+  return Math.max(
+    ...parts(one).map((part, k) => {
+      const there = parts(other)[k]!;
+      return (abs(subtract(part, { re: there.re * factor, im: there.im * factor })) * weights[k]!) / size;
+    }),
+  );
 }
 
-test.each(bothForms<Inputs>("two-port-s-parameters"))("scattering parameters and group delay of a cable agree with outside: $name", ({ inputs, expected }) => {
-  const element: Element = { kind: "cable", line: { model: modelOf(inputs.cable) }, lengthM: inputs.length_m };
-  const s = inputs.frequency_hz.map((frequency) => scattering(elementTwoPort(element, axis(frequency), { temperatureC: inputs.cable.temperature_c }), inputs.reference_ohm));
-  const got: Record<string, number[]> = {
-    s11_re: s.map(({ s11 }) => s11.re),
-    s11_im: s.map(({ s11 }) => s11.im),
-    s21_re: s.map(({ s21 }) => s21.re),
-    s21_im: s.map(({ s21 }) => s21.im),
-    s21_db: s.map(({ s21 }) => 20 * Math.log10(abs(s21))),
-    // −Re of the logarithmic derivative
-    group_delay_s: s.map(({ s21 }) => -(s21.slopeRe * s21.re + s21.slopeIm * s21.im) / (s21.re ** 2 + s21.im ** 2)),
-  };
-  for (const [key, value] of Object.entries(expected)) closeTo(got[key]!, value, key);
-  for (const { s11, s22, s12, s21 } of s) {
-    expect(abs(subtract(s11, s22))).toBeLessThan(1e-12);
-    expect(s12).toEqual(s21);
-  }
-});
+test.each(bothForms<Inputs>("two-port-s-parameters"))(
+  "scattering parameters and group delay of a cable agree with outside: $name",
+  ({ inputs, expected }) => {
+    const element: Element = { kind: "cable", line: { model: modelOf(inputs.cable) }, lengthM: inputs.length_m };
+    const s = inputs.frequency_hz.map((frequency) =>
+      scattering(
+        elementTwoPort(element, axis(frequency), { temperatureC: inputs.cable.temperature_c }),
+        inputs.reference_ohm,
+      ),
+    );
+    const got: Record<string, number[]> = {
+      s11_re: s.map(({ s11 }) => s11.re),
+      s11_im: s.map(({ s11 }) => s11.im),
+      s21_re: s.map(({ s21 }) => s21.re),
+      s21_im: s.map(({ s21 }) => s21.im),
+      s21_db: s.map(({ s21 }) => 20 * Math.log10(abs(s21))),
+      // −Re of the logarithmic derivative
+      group_delay_s: s.map(({ s21 }) => -(s21.slopeRe * s21.re + s21.slopeIm * s21.im) / (s21.re ** 2 + s21.im ** 2)),
+    };
+    for (const [key, value] of Object.entries(expected)) closeTo(got[key]!, value, key);
+    for (const { s11, s22, s12, s21 } of s) {
+      expect(abs(subtract(s11, s22))).toBeLessThan(1e-12);
+      expect(s12).toEqual(s21);
+    }
+  },
+);
 
 test("every element is reciprocal: a·d − b·c = 1", () => {
   fc.assert(
@@ -84,11 +94,16 @@ test("a cable cut anywhere is the product of its two pieces", () => {
 test("the product of elements does not depend on which are multiplied first", () => {
   fc.assert(
     fc.property(anyElement, anyElement, anyElement, anyFrequency, (first, second, third, frequency) => {
-      const [one, two, three] = [first, second, third].map((element) => elementTwoPort(element, axis(frequency), { jointReferenceOhm: 50 })) as [TwoPort, TwoPort, TwoPort];
+      const [one, two, three] = [first, second, third].map((element) =>
+        elementTwoPort(element, axis(frequency), { jointReferenceOhm: 50 }),
+      ) as [TwoPort, TwoPort, TwoPort];
       const left = cascade(cascade(one, two), three);
       const right = cascade(one, cascade(two, three));
       // products may cancel: what is compared is held against the product of the sizes
-      const size = [one, two, three].reduce((product, each) => product * Math.max(abs(each.a), abs(each.b) / 50, abs(each.c) * 50, abs(each.d), 1), 1);
+      const size = [one, two, three].reduce(
+        (product, each) => product * Math.max(abs(each.a), abs(each.b) / 50, abs(each.c) * 50, abs(each.d), 1),
+        1,
+      );
       const own = Math.max(abs(left.a), abs(left.b) / 50, abs(left.c) * 50, abs(left.d));
       expect(distance(left, right) * own).toBeLessThanOrEqual(1e-13 * size * 16);
     }),
@@ -97,7 +112,12 @@ test("the product of elements does not depend on which are multiplied first", ()
 });
 
 test("what changes nothing is exactly the identity: no length, no loss, no turns ratio", () => {
-  const model = modelFromNominal({ z0: 50, velocityFactor: 0.66, lossTangent: 0.01, conductors: [{ form: "round", r0OhmPerM: 0.1, skinCornerRadPerS: 1e5 }] });
+  const model = modelFromNominal({
+    z0: 50,
+    velocityFactor: 0.66,
+    lossTangent: 0.01,
+    conductors: [{ form: "round", r0OhmPerM: 0.1, skinCornerRadPerS: 1e5 }],
+  });
   const nothing: Element[] = [
     { kind: "cable", line: { model }, lengthM: 0 },
     { kind: "joint", referenceOhm: 50 },
@@ -109,7 +129,12 @@ test("what changes nothing is exactly the identity: no length, no loss, no turns
   ];
   for (const element of nothing) {
     const { a, b, c, d } = chainMatrix(elementTwoPort(element, axis(1e9)));
-    for (const [got, value] of [[a, 1], [b, 0], [c, 0], [d, 1]] as const) {
+    for (const [got, value] of [
+      [a, 1],
+      [b, 0],
+      [c, 0],
+      [d, 1],
+    ] as const) {
       expect(got.re, element.kind).toBe(value);
       expect(got.im, element.kind).toBeCloseTo(0, 15);
     }
@@ -131,11 +156,16 @@ test("a lossless line repeats every half wavelength, and turns every sign at a q
   fc.assert(
     fc.property(fc.double({ min: 0, max: 5, noNaN: true }), fc.integer({ min: 1, max: 20 }), (lengthM, halves) => {
       const short = elementTwoPort({ kind: "cable", line: { model }, lengthM }, axis(frequency));
-      const long = elementTwoPort({ kind: "cable", line: { model }, lengthM: lengthM + halves * half }, axis(frequency));
+      const long = elementTwoPort(
+        { kind: "cable", line: { model }, lengthM: lengthM + halves * half },
+        axis(frequency),
+      );
       const sign = halves % 2 === 0 ? 1 : -1;
       for (const key of ["a", "b", "c", "d"] as const) {
         const weight = { a: 1, b: 1 / 60, c: 60, d: 1 }[key];
-        expect(abs(subtract(long[key], { re: sign * short[key].re, im: sign * short[key].im })) * weight).toBeLessThan(1e-11);
+        expect(abs(subtract(long[key], { re: sign * short[key].re, im: sign * short[key].im })) * weight).toBeLessThan(
+          1e-11,
+        );
       }
     }),
   );
@@ -143,12 +173,21 @@ test("a lossless line repeats every half wavelength, and turns every sign at a q
 
 test("any number of identical cables in parallel is the same whether counted or listed side by side", () => {
   fc.assert(
-    fc.property(anyModel, fc.integer({ min: 1, max: 4 }), fc.double({ min: 0.1, max: 30, noNaN: true }), anyFrequency, (model, count, lengthM, frequency) => {
-      const counted = elementTwoPort({ kind: "cable", line: { model }, lengthM, paralleled: count }, axis(frequency));
-      const listed = elementTwoPort({ kind: "parallel", branches: Array.from({ length: count }, () => ({ line: { model }, lengthM })) }, axis(frequency));
-      // a listed line is the quotient of two admittances; at resonance both are large
-      expect(distance(counted, listed)).toBeLessThan(1e-9);
-    }),
+    fc.property(
+      anyModel,
+      fc.integer({ min: 1, max: 4 }),
+      fc.double({ min: 0.1, max: 30, noNaN: true }),
+      anyFrequency,
+      (model, count, lengthM, frequency) => {
+        const counted = elementTwoPort({ kind: "cable", line: { model }, lengthM, paralleled: count }, axis(frequency));
+        const listed = elementTwoPort(
+          { kind: "parallel", branches: Array.from({ length: count }, () => ({ line: { model }, lengthM })) },
+          axis(frequency),
+        );
+        // a listed line is the quotient of two admittances; at resonance both are large
+        expect(distance(counted, listed)).toBeLessThan(1e-9);
+      },
+    ),
     { numRuns: 300 },
   );
 });
@@ -158,12 +197,19 @@ test("derivatives by s are those a difference shows, for every kind of element",
     fc.property(anyElement, fc.double({ min: 5, max: 7, noNaN: true }), (element, decade) => {
       const s = axis(10 ** decade);
       const h = s.im * 1e-5;
-      const [up, at, down] = [s.im + h, s.im, s.im - h].map((im) => elementTwoPort(element, { re: 0, im })) as [TwoPort, TwoPort, TwoPort];
+      const [up, at, down] = [s.im + h, s.im, s.im - h].map((im) => elementTwoPort(element, { re: 0, im })) as [
+        TwoPort,
+        TwoPort,
+        TwoPort,
+      ];
       const weight = { a: 1, b: 1 / 50, c: 50, d: 1 };
       for (const key of ["a", "b", "c", "d"] as const) {
         const plus = Math.exp(up.logScale - at.logScale);
         const minus = Math.exp(down.logScale - at.logScale);
-        const difference = { re: (up[key].im * plus - down[key].im * minus) / (2 * h), im: -(up[key].re * plus - down[key].re * minus) / (2 * h) };
+        const difference = {
+          re: (up[key].im * plus - down[key].im * minus) / (2 * h),
+          im: -(up[key].re * plus - down[key].re * minus) / (2 * h),
+        };
         const error = Math.hypot(difference.re - at[key].slopeRe, difference.im - at[key].slopeIm) * weight[key] * s.im;
         // second order: what a difference of this step misses grows with the cube of the electrical length
         const turns = Math.hypot(at[key].slopeRe, at[key].slopeIm) * weight[key] * s.im;
@@ -184,7 +230,9 @@ test("what lets nothing through still shows its own short or open toward the sou
     const behindOpen = throughTwoPort(open, terminationPort({ kind: load }, axis(1e6)));
     expect([abs(behindOpen.v), abs(behindOpen.i)]).toEqual([1, 0]);
   }
-  expect(throughTwoPort(THROUGH, terminationPort({ kind: "open" }, axis(1e6)))).toEqual(terminationPort({ kind: "open" }, axis(1e6)));
+  expect(throughTwoPort(THROUGH, terminationPort({ kind: "open" }, axis(1e6)))).toEqual(
+    terminationPort({ kind: "open" }, axis(1e6)),
+  );
 });
 
 test("scattering in a reference that is not positive is refused", () => {

@@ -35,8 +35,18 @@ const length = fc.oneof(fc.constant(0), decades(1e-3, 300));
 /** Loads, tap nodes and stub ends, open and short among them. */
 export const anyTermination: fc.Arbitrary<Termination> = fc.oneof(
   fc.record({ kind: fc.constant("constant" as const), reOhm: decades(0.1, 1e4), imOhm: between(-500, 500) }),
-  fc.record({ kind: fc.constant("network" as const), topology: fc.constantFrom("series" as const, "parallel" as const), rOhm: decades(1, 1e4), cF: decades(1e-12, 1e-8) }),
-  fc.record({ kind: fc.constant("network" as const), topology: fc.constantFrom("series" as const, "parallel" as const), rOhm: decades(1, 1e4), lH: decades(1e-9, 1e-4) }),
+  fc.record({
+    kind: fc.constant("network" as const),
+    topology: fc.constantFrom("series" as const, "parallel" as const),
+    rOhm: decades(1, 1e4),
+    cF: decades(1e-12, 1e-8),
+  }),
+  fc.record({
+    kind: fc.constant("network" as const),
+    topology: fc.constantFrom("series" as const, "parallel" as const),
+    rOhm: decades(1, 1e4),
+    lH: decades(1e-9, 1e-4),
+  }),
   fc.constant<Termination>({ kind: "open" }),
   fc.constant<Termination>({ kind: "short" }),
 );
@@ -72,7 +82,15 @@ const stub: fc.Arbitrary<Element> = fc.record({
 });
 
 const part: fc.Arbitrary<Element> = fc
-  .record({ connection, value: fc.constantFrom("rOhm", "lH", "cF"), r: decades(0.1, 1e4), l: decades(1e-9, 1e-5), c: decades(1e-12, 1e-8), q: decades(5, 1e3), fixed: fc.boolean() })
+  .record({
+    connection,
+    value: fc.constantFrom("rOhm", "lH", "cF"),
+    r: decades(0.1, 1e4),
+    l: decades(1e-9, 1e-5),
+    c: decades(1e-12, 1e-8),
+    q: decades(5, 1e3),
+    fixed: fc.boolean(),
+  })
   .map(({ connection, value, r, l, c, q, fixed }) => {
     const loss = fixed ? { q, qAtHz: 1e7 } : { q };
     if (value === "rOhm") return { kind: "part", connection, rOhm: r };
@@ -80,8 +98,19 @@ const part: fc.Arbitrary<Element> = fc
   });
 
 const pad: fc.Arbitrary<Element> = fc
-  .record({ inputOhm: between(25, 300), outputOhm: between(25, 300), more: between(0, 30), topology: fc.constantFrom("T" as const, "pi" as const) })
-  .map(({ inputOhm, outputOhm, more, topology }) => ({ kind: "pad", topology, inputOhm, outputOhm, lossDb: minimumPadLossDb(inputOhm, outputOhm) + more }));
+  .record({
+    inputOhm: between(25, 300),
+    outputOhm: between(25, 300),
+    more: between(0, 30),
+    topology: fc.constantFrom("T" as const, "pi" as const),
+  })
+  .map(({ inputOhm, outputOhm, more, topology }) => ({
+    kind: "pad",
+    topology,
+    inputOhm,
+    outputOhm,
+    lossDb: minimumPadLossDb(inputOhm, outputOhm) + more,
+  }));
 
 const joint: fc.Arbitrary<Element> = fc.record({
   kind: fc.constant("joint" as const),
@@ -91,7 +120,10 @@ const joint: fc.Arbitrary<Element> = fc.record({
   shuntF: decades(1e-14, 1e-11),
 });
 
-const transformer: fc.Arbitrary<Element> = fc.record({ kind: fc.constant("transformer" as const), turnsRatio: decades(0.1, 10) });
+const transformer: fc.Arbitrary<Element> = fc.record({
+  kind: fc.constant("transformer" as const),
+  turnsRatio: decades(0.1, 10),
+});
 
 /** Any element but a shunt termination, which may be a dead short. */
 export const anyElement: fc.Arbitrary<Element> = fc.oneof(anyCable, bundle, stub, part, pad, joint, transformer);

@@ -107,7 +107,11 @@ export function circuitOf({ source, elements, load }: CheckCircuit): Circuit {
 }
 
 function elementOf(element: CheckElement): Element {
-  const line = () => ({ line: { model: modelOf(element.cable) }, lengthM: element.length_m, temperatureC: element.cable.temperature_c });
+  const line = () => ({
+    line: { model: modelOf(element.cable) },
+    lengthM: element.length_m,
+    temperatureC: element.cable.temperature_c,
+  });
   switch (element.type) {
     case "cable":
       return { kind: "cable", ...line() };
@@ -118,20 +122,37 @@ function elementOf(element: CheckElement): Element {
     case "parallel_cables":
       return {
         kind: "parallel",
-        branches: element.branches.map(({ cable, length_m }) => ({ line: { model: modelOf(cable) }, lengthM: length_m })),
+        branches: element.branches.map(({ cable, length_m }) => ({
+          line: { model: modelOf(cable) },
+          lengthM: length_m,
+        })),
       };
     case "pad":
-      return { kind: "pad", topology: element.form, lossDb: element.loss_db, inputOhm: element.z_ohm, outputOhm: element.z_out_ohm ?? element.z_ohm };
+      return {
+        kind: "pad",
+        topology: element.form,
+        lossDb: element.loss_db,
+        inputOhm: element.z_ohm,
+        outputOhm: element.z_out_ohm ?? element.z_ohm,
+      };
     case "connector":
-      return { kind: "joint", lossDb: element.a_db, lossDbAtOneGhz: element.b_db_per_sqrt_ghz, referenceOhm: element.z_ohm };
+      return {
+        kind: "joint",
+        lossDb: element.a_db,
+        lossDbAtOneGhz: element.b_db_per_sqrt_ghz,
+        referenceOhm: element.z_ohm,
+      };
     case "lumped":
       return partOf(element);
   }
 }
 
 function partOf(element: CheckElement): Element {
-  const value = { R: { rOhm: element.value_ohm }, L: { lH: element.value_h }, C: { cF: element.value_f } }[element.part];
+  const value = { R: { rOhm: element.value_ohm }, L: { lH: element.value_h }, C: { cF: element.value_f } }[
+    element.part
+  ];
   const q = element.q === undefined || element.q === null ? {} : { q: element.q };
-  const qAtHz = element.q_frequency_hz === null || element.q_frequency_hz === undefined ? {} : { qAtHz: element.q_frequency_hz };
+  const qAtHz =
+    element.q_frequency_hz === null || element.q_frequency_hz === undefined ? {} : { qAtHz: element.q_frequency_hz };
   return { kind: "part", connection: element.connection, ...value, ...q, ...qAtHz };
 }

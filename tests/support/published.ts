@@ -48,7 +48,8 @@ export function agrees({ expected, tolerance }: PublishedCheck, got: Record<stri
 }
 
 function within(got: Got, value: Value, tolerance: PublishedCheck["tolerance"], key: string): void {
-  if (Array.isArray(value)) return value.forEach((each, k) => near((got as ArrayLike<number>)[k]!, each, each, tolerance, `${key}[${k}]`));
+  if (Array.isArray(value))
+    return value.forEach((each, k) => near((got as ArrayLike<number>)[k]!, each, each, tolerance, `${key}[${k}]`));
   if (typeof value === "number") return near(got as number, value, value, tolerance, key);
   const complexGot = got as Complex;
   const printed = value as Printed;
@@ -58,10 +59,17 @@ function within(got: Got, value: Value, tolerance: PublishedCheck["tolerance"], 
     return near(complexGot.im, printed.im, abs(printed), tolerance, `${key}.im`);
   }
   near(abs(complexGot), printed.mag, printed.mag, tolerance, `${key}.mag`);
-  if (printed.deg !== undefined) near((arg(complexGot) * 180) / Math.PI, printed.deg, printed.deg, tolerance, `${key}.deg`);
+  if (printed.deg !== undefined)
+    near((arg(complexGot) * 180) / Math.PI, printed.deg, printed.deg, tolerance, `${key}.deg`);
 }
 
-function near(got: number, value: number, size: number, { rel = 0, abs: absolute = 0 }: PublishedCheck["tolerance"], key: string): void {
+function near(
+  got: number,
+  value: number,
+  size: number,
+  { rel = 0, abs: absolute = 0 }: PublishedCheck["tolerance"],
+  key: string,
+): void {
   const allowed = absolute + rel * Math.abs(size);
   expect(Math.abs(got - value) <= allowed, `${key}: got ${got}, published ${value} ± ${allowed}`).toBe(true);
 }

@@ -25,5 +25,7 @@ export function closeTo(got: Got, expected: Expected, where = "value"): void {
   }
   const list = got as ArrayLike<Got>;
   expect(list.length, `${where}: number of values`).toBe(value.length);
-  value.forEach((each, index) => closeTo(list[index]!, { value: each, rel_tolerance, abs_tolerance }, `${where}[${index}]`));
+  value.forEach((each, index) =>
+    closeTo(list[index]!, { value: each, rel_tolerance, abs_tolerance }, `${where}[${index}]`),
+  );
 }
