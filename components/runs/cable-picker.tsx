@@ -50,7 +50,7 @@ export function CablePicker({ cableId, choose, label = "Cable", isAlwaysOpen = f
       className="relative flex w-38 flex-col gap-0.5 phone:w-full"
       onKeyDown={(event) => event.key === "Escape" && isOpen && (event.stopPropagation(), setOpen(false))}
     >
-      <span id={id} className="text-label text-ink-2">
+      <span id={id} className="text-note text-ink-2">
         {label}
       </span>
       <button

@@ -42,12 +42,18 @@ export function CandidateList({ found, compared, toggle, refusal, returnLossDb }
           <Table className="mt-1">
             <thead>
               <tr>
-                <HeadCell>Compare</HeadCell>
+                <HeadCell>
+                  <span className="phone:sr-only">Compare</span>
+                </HeadCell>
                 <HeadCell>Match</HeadCell>
                 <HeadCell isRight>Worst, dB</HeadCell>
-                <HeadCell isRight>Bandwidth</HeadCell>
+                <HeadCell isRight className="phone:hidden">
+                  Bandwidth
+                </HeadCell>
                 <HeadCell isRight>Lost, dB</HeadCell>
-                <HeadCell isRight>Cable, m</HeadCell>
+                <HeadCell isRight className="phone:hidden">
+                  Cable, m
+                </HeadCell>
               </tr>
             </thead>
             <tbody>
@@ -102,7 +108,7 @@ function Row({ candidate, isCompared, toggle, returnLossDb }: RowProps) {
       </Cell>
       <RowHead>
         {candidate.title}
-        <span className="ml-2 text-note text-ink-3">{methodWords[candidate.method]}</span>
+        <span className="ml-2 text-note text-ink-3 phone:hidden">{methodWords[candidate.method]}</span>
       </RowHead>
       <Cell isRight className="figures whitespace-nowrap">
         <span className="mr-1.5 inline-block align-[-2px]">
@@ -111,13 +117,13 @@ function Row({ candidate, isCompared, toggle, returnLossDb }: RowProps) {
         <span className="sr-only">{isMet ? "met: " : "missed: "}</span>
         {candidate.worstReturnLossDb === null ? "over 180" : digits(candidate.worstReturnLossDb, 1)}
       </Cell>
-      <Cell isRight className="figures whitespace-nowrap">
+      <Cell isRight className="figures whitespace-nowrap phone:hidden">
         {inWords(scaled("frequency", candidate.bandwidthHz, 3))}
       </Cell>
       <Cell isRight className="figures">
         {digits(candidate.worstTransducerLossDb, 3)}
       </Cell>
-      <Cell isRight className="figures">
+      <Cell isRight className="figures phone:hidden">
         {candidate.totalLengthM > 0 ? digits(candidate.totalLengthM, 3) : ""}
       </Cell>
     </tr>

@@ -61,6 +61,10 @@ interface Look {
   isInline?: boolean;
 }
 
+export function FrequencyCondition() {
+  return <ConditionForm fields={spot.slice(0, 1)} {...useConditions()} />;
+}
+
 export function SpotConditions({ isInline }: Look) {
   return <ConditionForm fields={spot} isInline={isInline} {...useConditions()} />;
 }

@@ -159,7 +159,7 @@ function Derived({ figures }: { figures: PieceFigures }) {
     <dl className="flex flex-wrap gap-x-4 gap-y-1 border-l border-rule pl-3 phone:border-0 phone:pl-0">
       {rows.map(([label, figure]) => (
         <div key={label}>
-          <dt className="text-label text-ink-2">{label}</dt>
+          <dt className="text-note text-ink-2">{label}</dt>
           <dd className="mt-1 text-body">
             <Figure {...figure} />
           </dd>

@@ -2,7 +2,7 @@
 
 import { useState } from "react";
 import { CablePicker } from "@/components/runs/cable-picker";
-import { SpotConditions, BandConditions } from "@/components/runs/conditions";
+import { BandConditions, FrequencyCondition } from "@/components/runs/conditions";
 import type { Matching } from "@/components/runs/use-matches";
 import { Field } from "@/components/ui/field";
 import { asTyped, readQuantity } from "@/lib/format/read-quantity";
@@ -80,7 +80,7 @@ export function MatchConditions({ matching }: { matching: Matching }) {
         canBeEmpty
         set={(capacitorQ) => choose({ capacitorQ })}
       />
-      <SpotConditions />
+      <FrequencyCondition />
       <BandConditions />
     </div>
   );

@@ -8,6 +8,7 @@ import { MatchConditions } from "@/components/runs/match-conditions";
 import { useRunEditor } from "@/components/runs/run-editor";
 import { RunFrame } from "@/components/runs/run-frame";
 import { useMatches, type Matching } from "@/components/runs/use-matches";
+import { Figure } from "@/components/ui/figure";
 import { StateNote } from "@/components/ui/state-mark";
 import type { Candidate } from "@/lib/line/match/match-request";
 import { frequency, impedance, inWords, significantDigits } from "@/lib/format/quantity";
@@ -71,7 +72,9 @@ function Asked({ matching }: { matching: Matching }) {
     <p className="max-w-140 pt-3.5 text-row text-ink-2 folded:pt-0">
       {loadName}{" "}
       {load.kind === "constant" && (
-        <b className="figures text-ink">{inWords(impedance({ re: load.reOhm, im: load.imOhm }))}</b>
+        <b className="text-ink">
+          <Figure {...impedance({ re: load.reOhm, im: load.imOhm })} />
+        </b>
       )}{" "}
       at {inWords(frequency(designHz))}. {count} {count === 1 ? "way" : "ways"} to bring it to{" "}
       {significantDigits(asked.targetOhm, 3)} Ω; {meets} {meets === 1 ? "keeps" : "keep"}{" "}

@@ -52,7 +52,7 @@ export function PowerLedger({ analysis, names, designHz, sourceName, loadName }:
             <HeadCell isRight>m</HeadCell>
             <HeadCell isRight>ns</HeadCell>
             <HeadCell isRight>dB</HeadCell>
-            <HeadCell aria-label="Share" className="w-28" />
+            <HeadCell aria-label="Share" className="w-28 phone:hidden" />
           </tr>
         </thead>
         <tbody>
@@ -68,7 +68,7 @@ export function PowerLedger({ analysis, names, designHz, sourceName, loadName }:
               <Cell isRight className="figures">
                 {digits(row.lossDb, 3)}
               </Cell>
-              <Cell className="pl-3 text-left">
+              <Cell className="pl-3 text-left phone:hidden">
                 <Bar lossDb={row.lossDb} most={most} isHatched={false} />
               </Cell>
             </tr>
@@ -80,7 +80,7 @@ export function PowerLedger({ analysis, names, designHz, sourceName, loadName }:
             <Cell isRight className="figures">
               {digits(added, 3)}
             </Cell>
-            <Cell className="pl-3 text-left">
+            <Cell className="pl-3 text-left phone:hidden">
               <Bar lossDb={added} most={most} isHatched />
             </Cell>
           </tr>
@@ -101,7 +101,7 @@ export function PowerLedger({ analysis, names, designHz, sourceName, loadName }:
             <Cell isRight className="figures border-0">
               {digits(spot.transducerLossDb, 3)}
             </Cell>
-            <Cell className="border-0" />
+            <Cell className="border-0 phone:hidden" />
           </tr>
         </tfoot>
       </Table>

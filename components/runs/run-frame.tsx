@@ -29,7 +29,7 @@ export function RunFrame({ head, children }: Props) {
     <>
       <div className="flex min-h-14.5 items-start gap-8 folded:flex-col folded:gap-2">
         <div className="w-128 min-w-0 folded:w-full">
-          <p className="truncate text-label text-ink-3">
+          <p className="truncate text-label text-ink-3 phone:hidden">
             <Link href="/runs" className="hover:text-copper">
               Runs
             </Link>{" "}
@@ -58,7 +58,7 @@ export function RunFrame({ head, children }: Props) {
                 </>
               )}
               {path === base && (
-                <ButtonLink href={`${base}/match` as Route} kind="main" size="small">
+                <ButtonLink href={`${base}/match` as Route} kind="main" size="small" className="phone:hidden">
                   Compare matches
                 </ButtonLink>
               )}

@@ -56,7 +56,7 @@ export function RunReadings({ analysis }: { analysis: Analysis | null }) {
     voltage: availablePowerW === null ? "give a power" : `at ${inWords(scaled("power", availablePowerW, 3))}`,
   };
   return (
-    <Readings className="min-w-0 flex-1 phone:flex-wrap">
+    <Readings className="min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
       {shown.map((reading) => {
         const target = targetFor(targets, reading);
         const figure = analysis ? reading.figure(analysis) : { digits: "–", unit: "", spoken: "" };
