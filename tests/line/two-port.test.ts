@@ -4,18 +4,9 @@ import { abs, subtract, type Complex } from "@/lib/line/complex";
 import { modelFromNominal } from "@/lib/line/cable";
 import { elementTwoPort } from "@/lib/line/element-two-port";
 import type { Element } from "@/lib/line/element";
-import { cascade, chainMatrix, scattering, THROUGH, throughTwoPort, type TwoPort } from "@/lib/line/two-port";
+import { cascade, chainMatrix, THROUGH, throughTwoPort, type TwoPort } from "@/lib/line/two-port";
 import { terminationPort } from "@/lib/line/termination";
 import { anyCable, anyElement, anyFrequency, anyModel } from "@/tests/support/arbitrary-run";
-import { bothForms, modelOf, type CheckCable } from "@/tests/support/line-checks";
-import { closeTo } from "@/tests/support/tolerance";
-
-interface Inputs {
-  cable: CheckCable;
-  length_m: number;
-  reference_ohm: number;
-  frequency_hz: number[];
-}
 
 const axis = (frequency: number): Complex => ({ re: 0, im: 2 * Math.PI * frequency });
 const parts = (twoPort: TwoPort) => [twoPort.a, twoPort.b, twoPort.c, twoPort.d] as const;
@@ -32,33 +23,6 @@ function distance(one: TwoPort, other: TwoPort): number {
     }),
   );
 }
-
-test.each(bothForms<Inputs>("two-port-s-parameters"))(
-  "scattering parameters and group delay of a cable agree with outside: $name",
-  ({ inputs, expected }) => {
-    const element: Element = { kind: "cable", line: { model: modelOf(inputs.cable) }, lengthM: inputs.length_m };
-    const s = inputs.frequency_hz.map((frequency) =>
-      scattering(
-        elementTwoPort(element, axis(frequency), { temperatureC: inputs.cable.temperature_c }),
-        inputs.reference_ohm,
-      ),
-    );
-    const got: Record<string, number[]> = {
-      s11_re: s.map(({ s11 }) => s11.re),
-      s11_im: s.map(({ s11 }) => s11.im),
-      s21_re: s.map(({ s21 }) => s21.re),
-      s21_im: s.map(({ s21 }) => s21.im),
-      s21_db: s.map(({ s21 }) => 20 * Math.log10(abs(s21))),
-      // −Re of the logarithmic derivative
-      group_delay_s: s.map(({ s21 }) => -(s21.slopeRe * s21.re + s21.slopeIm * s21.im) / (s21.re ** 2 + s21.im ** 2)),
-    };
-    for (const [key, value] of Object.entries(expected)) closeTo(got[key]!, value, key);
-    for (const { s11, s22, s12, s21 } of s) {
-      expect(abs(subtract(s11, s22))).toBeLessThan(1e-12);
-      expect(s12).toEqual(s21);
-    }
-  },
-);
 
 test("every element is reciprocal: a·d − b·c = 1", () => {
   fc.assert(
@@ -233,8 +197,4 @@ test("what lets nothing through still shows its own short or open toward the sou
   expect(throughTwoPort(THROUGH, terminationPort({ kind: "open" }, axis(1e6)))).toEqual(
     terminationPort({ kind: "open" }, axis(1e6)),
   );
-});
-
-test("scattering in a reference that is not positive is refused", () => {
-  expect(() => scattering(THROUGH, 0)).toThrow("scattering: referenceOhm must be positive, got 0");
 });
