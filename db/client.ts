@@ -21,6 +21,9 @@ export function openDatabase(file: string): Database {
   client.pragma("journal_mode = WAL");
   client.pragma("foreign_keys = ON");
   client.pragma("busy_timeout = 5000");
+  client.pragma("cache_size = -32000"); // 32 MB
+  // Counts the rows where nobody has counted them: without the counts SQLite overlooks the index made for searching.
+  client.pragma("optimize = 0x10002");
   return drizzle(client);
 }
 

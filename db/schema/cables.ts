@@ -85,6 +85,20 @@ export const cableRevisions = sqliteTable(
     primaryKey({ columns: [table.cableId, table.revision] }),
     index("cable_revisions_by_state").on(table.state, table.family),
     index("cable_revisions_by_author").on(table.authorId),
+    // Holds all that a search filters and sorts by, so that it need not read past the long values of each row.
+    index("cable_revisions_facts").on(
+      table.cableId,
+      table.revision,
+      table.state,
+      table.authorId,
+      table.family,
+      table.z0Ohm,
+      table.velocityFactor,
+      table.capacitanceFPerM,
+      table.outerDiameterMm,
+      table.maxFrequencyHz,
+      table.model,
+    ),
   ],
 );
 

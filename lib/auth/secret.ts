@@ -27,5 +27,7 @@ export function sessionSecret(): string {
   }
   const database = process.env.DATABASE_FILE || path.join(process.cwd(), "data", "ropewalk.db");
   if (database === ":memory:") return (made ??= randomBytes(32).toString("base64url"));
-  return (made ??= readOrMake(path.join(path.dirname(path.resolve(/* turbopackIgnore: true */ database)), "session-secret")));
+  return (made ??= readOrMake(
+    path.join(path.dirname(path.resolve(/* turbopackIgnore: true */ database)), "session-secret"),
+  ));
 }

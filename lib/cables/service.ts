@@ -97,6 +97,7 @@ export function cableFinder(
   actor: Actor,
   references: CableReference[],
 ): (reference: CableReference) => Cable | undefined {
+  if (references.length === 0) return () => undefined;
   const ids = [...new Set(references.map((reference) => reference.cableId))];
   const rows = selectWhole()
     .innerJoin(cableRevisions, eq(cableRevisions.cableId, cables.id))
@@ -128,6 +129,7 @@ function countUses(actor: Actor, ids: string[]): Map<string, number> {
 }
 
 function listItems(actor: Actor, entries: Candidate[]): CableItem[] {
+  if (entries.length === 0) return []; // SQLite would walk the whole catalogue to find none of it
   const ids = entries.map((entry) => entry.id);
   const uses = countUses(actor, ids);
   const rows = selectWhole().innerJoin(cableRevisions, currentRevision).where(inArray(cables.id, ids)).all();

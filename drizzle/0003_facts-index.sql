@@ -1,0 +1,1 @@
+CREATE INDEX `cable_revisions_facts` ON `cable_revisions` (`cable_id`,`revision`,`state`,`author_id`,`family`,`z0_ohm`,`velocity_factor`,`capacitance_f_per_m`,`outer_diameter_mm`,`max_frequency_hz`,`model`);
