@@ -1,5 +1,5 @@
 import { propagation } from "@/lib/line/cable";
-import { abs2, add, divide, multiply, scale, subtract, type Complex } from "@/lib/line/complex";
+import { abs2, add, multiply, reciprocal, scale, subtract, type Complex } from "@/lib/line/complex";
 import type { LineModel } from "@/lib/line/element";
 
 /** Voltage and current at one place, rms phasors. */
@@ -16,8 +16,8 @@ export interface LineWave {
   length: number;
   /** 1/m */
   gamma: Complex;
-  /** of all paralleled cables together, ohm */
-  zc: Complex;
+  /** 1/Zc of all paralleled cables together, siemens */
+  yc: Complex;
   /** series impedance and shunt admittance per metre, of all paralleled cables together */
   z: Complex;
   y: Complex;
@@ -45,7 +45,7 @@ export function lineWave(
   return {
     length,
     gamma: line.gamma,
-    zc,
+    yc: reciprocal(zc),
     z: scale(line.z, 1 / paralleled),
     y: scale(line.y, paralleled),
     forward: scale(add(near.v, multiply(zc, near.i)), 0.5),
@@ -57,7 +57,13 @@ export function lineWave(
 export function phasorsAt(wave: LineWave, distance: number): Phasors {
   const onward = multiply(wave.forward, decay(wave.gamma, distance));
   const returning = multiply(wave.backward, decay(wave.gamma, wave.length - distance));
-  return { v: add(onward, returning), i: divide(subtract(onward, returning), wave.zc) };
+  return { v: add(onward, returning), i: multiply(subtract(onward, returning), wave.yc) };
+}
+
+/** |V| and |I| at a distance from the source end. */
+export function magnitudesAt(wave: LineWave, distance: number): { voltage: number; current: number } {
+  const { v, i } = phasorsAt(wave, distance);
+  return { voltage: Math.sqrt(abs2(v)), current: Math.sqrt(abs2(i)) };
 }
 
 function decay(gamma: Complex, distance: number): Complex {

@@ -60,10 +60,14 @@ export interface SweepOptions {
  * not cover a frequency, or the source has no resistance and the circuit no referenceOhm
  */
 export function sweep(circuit: Circuit, frequencies: ArrayLike<number>, options: SweepOptions = {}): Sweep {
-  const run = prepareRun(circuit, options.temperatureC);
-  const count = circuit.elements.length;
-  const result = emptySweep(frequencies, count, options.planes ?? []);
-  const planes = result.atPlanes.map(({ plane }) => planeIndex(plane, count));
+  return sweepPrepared(prepareRun(circuit, options.temperatureC), frequencies, options.planes);
+}
+
+/** `sweep` of a run whose constants are worked out already: for asking one run again and again, as a search does. */
+export function sweepPrepared(run: PreparedRun, frequencies: ArrayLike<number>, asked: readonly Plane[] = []): Sweep {
+  const count = run.elements.length;
+  const result = emptySweep(frequencies, count, asked);
+  const planes = asked.map((plane) => planeIndex(plane, count));
   let at: Walk | undefined;
   for (let k = 0; k < result.frequencies.length; k++) {
     const frequency = result.frequencies[k]!;

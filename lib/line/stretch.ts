@@ -3,6 +3,7 @@ import { abs, add, divide, multiply, scale, subtract, type Complex } from "@/lib
 import { lengthAlongPath, type Element, type ParallelElement } from "@/lib/line/element";
 import {
   lineWave,
+  magnitudesAt,
   peakCurrent,
   peakVoltage,
   phasorsAt,
@@ -44,14 +45,10 @@ export function stretchOf(
   return null;
 }
 
-function magnitudes({ v, i }: Phasors): { voltage: number; current: number } {
-  return { voltage: abs(v), current: abs(i) };
-}
-
 function alongLine(wave: LineWave): Stretch {
   return {
     length: wave.length,
-    at: (distance) => magnitudes(phasorsAt(wave, distance)),
+    at: (distance) => magnitudesAt(wave, distance),
     peakVoltage: peakVoltage(wave),
     peakCurrent: peakCurrent(wave),
   };

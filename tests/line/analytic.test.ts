@@ -1,4 +1,4 @@
-import fc from "fast-check";
+import fc from "@/tests/support/property";
 import { expect, test } from "vitest";
 import {
   analytic,

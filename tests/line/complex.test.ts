@@ -1,4 +1,4 @@
-import fc from "fast-check";
+import fc from "@/tests/support/property";
 import * as math from "mathjs";
 import { expect, test } from "vitest";
 import * as own from "@/lib/line/complex";

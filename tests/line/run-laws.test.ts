@@ -1,4 +1,4 @@
-import fc from "fast-check";
+import fc from "@/tests/support/property";
 import { describe, expect, test } from "vitest";
 import { modelFromNominal } from "@/lib/line/cable";
 import type { Circuit, Element, Plane, Termination } from "@/lib/line/element";

@@ -1,4 +1,4 @@
-import fc from "fast-check";
+import fc from "@/tests/support/property";
 import { describe, expect, test } from "vitest";
 import { abs, complex, reciprocal, subtract, type Complex } from "@/lib/line/complex";
 import type { Termination } from "@/lib/line/element";

@@ -1,4 +1,4 @@
-import fc from "fast-check";
+import fc from "@/tests/support/property";
 import { expect, test } from "vitest";
 import { abs, subtract, type Complex } from "@/lib/line/complex";
 import { modelFromNominal } from "@/lib/line/cable";

@@ -1,5 +1,5 @@
 /** Random cables, terminations, elements and runs for property tests, all physical. */
-import fc from "fast-check";
+import fc from "@/tests/support/property";
 import type { Circuit, Conductor, Element, LineModel, Termination } from "@/lib/line/element";
 import { minimumPadLossDb } from "@/lib/line/pad";
 
