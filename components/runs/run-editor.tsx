@@ -28,6 +28,7 @@ export interface RunEditor {
   lines: ReadonlyMap<string, CableLine>;
   addLine: (line: CableLine) => void;
   saving: Saving;
+  isChanged: boolean;
   retry: () => void;
   settle: (keep: "mine" | "theirs") => void;
 }
@@ -57,7 +58,7 @@ export function RunEditorProvider({ run, lines: given, cannotEditBecause, childr
   const [lines, setLines] = useState(() => new Map(given.map((line) => [line.cableId, line])));
   const draft = steps.present;
   const isReadable = Object.keys(faults).length === 0;
-  const { saved, saving, retry, settle } = useSaving(run, draft, canEdit && isReadable, (theirs) =>
+  const { saved, saving, isChanged, retry, settle } = useSaving(run, draft, canEdit && isReadable, (theirs) =>
     setSteps((before) => edited(before, draftOf(theirs), null)),
   );
 
@@ -94,6 +95,7 @@ export function RunEditorProvider({ run, lines: given, cannotEditBecause, childr
         lines,
         addLine: (line) => setLines((before) => new Map(before).set(line.cableId, line)),
         saving,
+        isChanged,
         retry,
         settle,
       }}

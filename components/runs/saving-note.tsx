@@ -3,16 +3,15 @@
 import { useRunEditor } from "@/components/runs/run-editor";
 import { Button } from "@/components/ui/button";
 import { StateMark } from "@/components/ui/state-mark";
-import { changeBetween, draftOf } from "@/lib/runs/edit";
+import { draftOf } from "@/lib/runs/edit";
 import { changedFields } from "@/lib/runs/changed";
 
 const clock = (date: Date) => date.toLocaleTimeString(undefined, { hour: "2-digit", minute: "2-digit" });
 
 /** Where the work stands: saved, being saved, or not and why. */
 export function SavingNote() {
-  const { saved, draft, saving, retry, faults, cannotEditBecause } = useRunEditor();
+  const { saved, saving, isChanged, retry, faults, cannotEditBecause } = useRunEditor();
   if (cannotEditBecause) return <span>{cannotEditBecause}</span>;
-  const isChanged = Object.keys(changeBetween(draftOf(saved), draft)).length > 0;
   if (Object.keys(faults).length > 0)
     return <StateMark state="warn">A field cannot be read; saving waits for it</StateMark>;
   if (saving.kind === "unsaved")

@@ -18,6 +18,8 @@ const pause = 700;
 interface UseSaving {
   saved: Run;
   saving: Saving;
+  /** there is something not yet sent */
+  isChanged: boolean;
   /** save now, for example after trouble */
   retry: () => void;
   /** end a conflict: mine over theirs, or theirs in place of mine */
@@ -34,10 +36,12 @@ interface UseSaving {
  */
 export function useSaving(opened: Run, draft: RunDraft, canSave: boolean, take: (run: Run) => void): UseSaving {
   const [saved, setSaved] = useState(opened);
+  // What the server last took, as it was sent: how the server spells it back never counts as a change.
+  const [sent, setSent] = useState(() => draftOf(opened));
   const [saving, setSaving] = useState<Saving>({ kind: "saved" });
   const [attempt, setAttempt] = useState(0);
   const isUnderWay = useRef(false);
-  const change = changeBetween(draftOf(saved), draft);
+  const change = changeBetween(sent, draft);
   const isChanged = Object.keys(change).length > 0;
   const isWaiting = canSave && isChanged && saving.kind !== "conflict" && (saving.kind !== "unsaved" || attempt > 0);
 
@@ -56,6 +60,7 @@ export function useSaving(opened: Run, draft: RunDraft, canSave: boolean, take: 
           ifMatch: `"${saved.version}"`,
         });
         setSaved(run);
+        setSent(draft);
         setSaving({ kind: "saved" });
       } catch (error) {
         setSaving(trouble(error));
@@ -66,7 +71,7 @@ export function useSaving(opened: Run, draft: RunDraft, canSave: boolean, take: 
     }
     // The draft and what it is compared with are the two things a save depends on.
     // eslint-disable-next-line react-hooks/exhaustive-deps
-  }, [draft, saved, isWaiting, attempt]);
+  }, [draft, sent, isWaiting, attempt]);
 
   useEffect(() => {
     if (!isChanged) return;
@@ -78,11 +83,12 @@ export function useSaving(opened: Run, draft: RunDraft, canSave: boolean, take: 
   function settle(keep: "mine" | "theirs") {
     if (saving.kind !== "conflict") return;
     setSaved(saving.theirs);
+    setSent(draftOf(saving.theirs));
     if (keep === "theirs") take(saving.theirs);
     setSaving({ kind: "saved" });
   }
 
-  return { saved, saving, retry: () => setAttempt((n) => n + 1), settle };
+  return { saved, saving, isChanged, retry: () => setAttempt((n) => n + 1), settle };
 }
 
 function trouble(error: unknown): Saving {

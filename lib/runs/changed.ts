@@ -1,5 +1,6 @@
 /** Two versions of a run, field by field, in words. Pure. */
 import { frequency, impedance, inWords, metres, scaled } from "@/lib/format/quantity";
+import { alike } from "@/lib/runs/alike";
 import type { RunDraft } from "@/lib/runs/edit";
 import { terminationWords } from "@/lib/runs/leaf/termination-fields";
 import type { Element, Termination } from "@/lib/runs/schema";
@@ -53,15 +54,13 @@ const simple: { key: Simple; what: string; text: (draft: RunDraft) => string }[]
   { key: "loadName", what: "Load's name", text: (d) => d.loadName },
 ];
 
-const same = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b);
-
 /** Every field in which two drafts differ. */
 export function changedFields(before: RunDraft, after: RunDraft): ChangedField[] {
   const rows = simple
-    .filter(({ key }) => !same(before[key], after[key]))
+    .filter(({ key }) => !alike(before[key], after[key]))
     .map(({ what, text }) => ({ what, before: text(before), after: text(after) }));
   for (const end of ["source", "load"] as const)
-    if (!same(before.circuit[end], after.circuit[end]))
+    if (!alike(before.circuit[end], after.circuit[end]))
       rows.push({
         what: end === "source" ? "Source" : "Load",
         before: terminationText(before.circuit[end]),
@@ -70,7 +69,7 @@ export function changedFields(before: RunDraft, after: RunDraft): ChangedField[]
   const count = Math.max(before.circuit.elements.length, after.circuit.elements.length);
   for (let i = 0; i < count; i++) {
     const [a, b] = [before.circuit.elements[i], after.circuit.elements[i]];
-    if (!same(a, b)) rows.push({ what: `Piece ${i + 1}`, before: elementText(a), after: elementText(b) });
+    if (!alike(a, b)) rows.push({ what: `Piece ${i + 1}`, before: elementText(a), after: elementText(b) });
   }
   return rows;
 }

@@ -2,6 +2,7 @@
  * What can be done to the line of a run: pure functions from one list of elements to the next, and the history that
  * makes any of it undoable. The screen calls these; nothing here knows the screen.
  */
+import { alike } from "@/lib/runs/alike";
 import type { Element, LineRef, Run, RunChange } from "@/lib/runs/schema";
 
 export type NewKind = Element["kind"];
@@ -100,9 +101,7 @@ export function draftOf(run: Run): RunDraft {
 /** The fields in which two drafts differ, with the value of the second: the body of a PATCH. */
 export function changeBetween(saved: RunDraft, next: RunDraft): RunChange {
   const keys = Object.keys(next) as (keyof RunDraft)[];
-  const changed = keys.filter(
-    (key) => saved[key] !== next[key] && JSON.stringify(saved[key]) !== JSON.stringify(next[key]),
-  );
+  const changed = keys.filter((key) => !alike(saved[key], next[key]));
   return Object.fromEntries(changed.map((key) => [key, next[key]]));
 }
 

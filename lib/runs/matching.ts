@@ -5,6 +5,7 @@ import { findMatches } from "@/lib/line/match/find-matches";
 import type { Candidate, MatchLine, Refusal } from "@/lib/line/match/match-request";
 import { rank } from "@/lib/line/match/rank";
 import { sweep } from "@/lib/line/run";
+import { alike } from "@/lib/runs/alike";
 import type { Element, LineRef } from "@/lib/runs/schema";
 
 export interface MatchAsked {
@@ -115,8 +116,6 @@ export function storedElements(elements: readonly EngineElement[]): Element[] {
   });
 }
 type EngineLineModel = Extract<EngineElement, { kind: "cable" }>["line"]["model"];
-
-const alike = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b);
 
 /** Whether the run ends in these elements: the match is in it. */
 export function isKept(elements: readonly Element[], match: readonly Element[]): boolean {

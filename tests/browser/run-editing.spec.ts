@@ -1,0 +1,84 @@
+import { expect, makeRun, signedIn, storedRun, test } from "@/tests/browser/support";
+
+test("A length that cannot be read says so where it was typed, is kept, and is not saved until it can be", async ({
+  page,
+}) => {
+  await signedIn(page, "ines.hartwell");
+  const address = await makeRun(page, "Bad length");
+  await page.goto(address);
+  await page.getByRole("button", { name: /1 of 1/ }).click();
+  const length = page.getByLabel("Length", { exact: true });
+  await length.fill("36 parsnips");
+  await expect(page.getByText("“parsnips” is not a unit of length").first()).toBeVisible();
+  await expect(page.getByText("A field cannot be read; saving waits for it")).toBeVisible();
+  await expect(page.locator("body")).not.toContainText(/NaN|Infinity|undefined/);
+  await page.keyboard.press("Escape");
+  await page
+    .getByRole("button", { name: /Load: Load/ })
+    .first()
+    .click();
+  await page.getByRole("button", { name: /1 of 1/ }).click();
+  await expect(page.getByLabel("Length", { exact: true })).toHaveValue("36 parsnips");
+  await page.getByLabel("Length", { exact: true }).fill("40 m");
+  await expect(page.getByText("Saved, revision 2")).toBeVisible();
+  expect((await storedRun(page, address)).circuit.elements).toMatchObject([{ lengthM: 40 }]);
+});
+
+test("Two people change one run: the second sees both versions and nothing is lost", async ({ page, browser }) => {
+  await signedIn(page, "ines.hartwell");
+  const address = await makeRun(page, "Two at once");
+  const context = await browser.newContext({ baseURL: test.info().project.use.baseURL });
+  const other = await context.newPage();
+  await signedIn(other, "tomas.averill");
+  await page.goto(address);
+  await other.goto(address);
+
+  await other.getByLabel("Name of the run").fill("Two at once, by Tomas");
+  await expect(other.getByText("Saved, revision 2")).toBeVisible();
+
+  await page.getByRole("button", { name: /1 of 1/ }).click();
+  await page.getByLabel("Length", { exact: true }).fill("37 m");
+  const conflict = page.getByRole("alertdialog");
+  await expect(conflict).toContainText("Tomas Averill saved this run while you were changing it");
+  await expect(conflict.getByRole("row", { name: /Name/ })).toContainText("Two at once, by Tomas");
+  expect(await storedRun(page, address)).toMatchObject({
+    name: "Two at once, by Tomas",
+    circuit: { elements: [{ lengthM: 36 }] },
+  });
+  await conflict.getByRole("button", { name: /Take theirs/ }).click();
+  await expect(page.getByLabel("Name of the run")).toHaveValue("Two at once, by Tomas");
+  await page.getByRole("button", { name: "Undo" }).click();
+  await expect(page.getByText("Saved, revision 3")).toBeVisible();
+  expect(await storedRun(page, address)).toMatchObject({ circuit: { elements: [{ lengthM: 37 }] } });
+  await context.close();
+});
+
+test("Undo and redo reach back over every edit of a run", async ({ page }) => {
+  await signedIn(page, "gwen.ostrander");
+  const address = await makeRun(page, "Undo");
+  await page.goto(address);
+  await page.getByRole("button", { name: /1 of 1/ }).click();
+  await page.getByRole("button", { name: "Split" }).click();
+  await expect(page.getByRole("button", { name: /2 of 2/ })).toBeVisible();
+  await page.getByRole("button", { name: "Insert before" }).click();
+  await page.getByRole("button", { name: "Pad", exact: true }).click();
+  await expect(page.getByRole("button", { name: /3 of 3/ })).toBeVisible();
+  await page.getByRole("button", { name: "Undo" }).click();
+  await page.getByRole("button", { name: "Undo" }).click();
+  await expect(page.getByRole("button", { name: /1 of 1/ })).toBeVisible();
+  await page.getByRole("button", { name: "Redo" }).click();
+  await expect(page.getByRole("button", { name: /2 of 2/ })).toBeVisible();
+});
+
+test("When the server is away the work stays, says since when, and is saved on a second try", async ({ page }) => {
+  await signedIn(page, "ines.hartwell");
+  const address = await makeRun(page, "Server away");
+  await page.goto(address);
+  await page.route("**/api/v1/runs/*", (route) => route.abort());
+  await page.getByLabel("Name of the run").fill("Server away and back");
+  await expect(page.getByText(/Not saved since/)).toBeVisible();
+  await page.unroute("**/api/v1/runs/*");
+  await page.getByRole("button", { name: "Try again" }).click();
+  await expect(page.getByText("Saved, revision 2")).toBeVisible();
+  expect(await storedRun(page, address)).toMatchObject({ name: "Server away and back" });
+});
