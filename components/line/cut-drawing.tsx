@@ -12,7 +12,7 @@ interface CutDrawingProps<L> {
   load: StripEnd["kind"];
   /** how a line is drawn; without it a plain coaxial cable */
   cableOf?: (line: L) => DrawnCable | undefined;
-  /** the run's own cable, that comes up to the match; without it a plain coaxial cable */
+  /** the run's own cable, that comes up to the match; without it the first cable of the match */
   lead?: DrawnCable;
   /** the cut in one sentence, for a screen reader */
   name: string;
@@ -69,10 +69,12 @@ function drawingOrder<L>(items: readonly CutItem<L>[]): number[] {
 }
 
 /** The small drawing of a match: what to cut, how it is joined, in one proportion. */
-export function CutDrawing<L>({ elements, load, cableOf, lead = plainCoax, name }: CutDrawingProps<L>) {
+export function CutDrawing<L>({ elements, load, cableOf, lead, name }: CutDrawingProps<L>) {
   const layout = cutLayout(elements);
   const draw = (line: L) => cableOf?.(line) ?? plainCoax;
-  const cables = [lead, ...elements.flatMap(linesOf).map(draw)];
+  const own = elements.flatMap(linesOf).map(draw);
+  const leading = lead ?? own[0] ?? plainCoax;
+  const cables = [leading, ...own];
   const mmToPx = thickestPx / Math.max(...cables.map((cable) => cableShape(cable)?.outerMm ?? 5));
   const { width, height, leadX, loadX } = cutFrame;
   return (
@@ -83,7 +85,7 @@ export function CutDrawing<L>({ elements, load, cableOf, lead = plainCoax, name 
       aria-label={name}
       className="block max-w-full overflow-visible"
     >
-      <CableLengthwise {...lead} fromX={leadX} toX={layout.startX} y={y} mmToPx={mmToPx} />
+      <CableLengthwise {...leading} fromX={leadX} toX={layout.startX} y={y} mmToPx={mmToPx} />
       <path d={`M${leadX - 2} ${y - 12}q6 6 0 12t0 12`} fill="none" stroke="var(--ink)" strokeWidth="1.2" />
       {drawingOrder(layout.items).map((index) => {
         const item = layout.items[index];

@@ -29,8 +29,11 @@ export function LinePieces({ pieces, scale, selected, y, mmToPx }: LinePiecesPro
     });
   const chosen = selected === null ? undefined : pieces[selected];
   const place = selected === null ? undefined : scale.places[selected];
+  // Parts alone do not reach the load; a wire does.
+  const wireX = pieces.some(isLaid) ? scale.endX : Math.max(scale.startX, ...scale.places.map(({ toX }) => toX));
   return (
     <g>
+      {pieces.length > 0 && <path d={`M${wireX} ${y}H${scale.endX}`} stroke="var(--ink)" strokeWidth="1.6" />}
       {drawing(false)}
       {chosen && place && <SelectedOutline piece={chosen} place={place} y={y} mmToPx={mmToPx} />}
       {drawing(true)}

@@ -46,36 +46,46 @@ const leastPx = 20;
 const unknownPx = 110;
 const symbolGapPx = 3;
 
+/** Px of parts that take room of their own: their symbols, never more than half of the line together. */
+function symbolShare(extents: readonly Extent[], fullPx: number): number {
+  const wanted = extents.reduce((sum, e) => sum + (e.lengthM === undefined && takesRoom(e) ? e.symbolPx : 0), 0);
+  return Math.min(1, (0.5 * fullPx) / Math.max(1, wanted));
+}
+
+/**
+ * Which of some lengths are too short to be seen at the scale that the others leave, and that scale.
+ * Widening one takes room from the others, so it is asked again until nothing changes.
+ */
+function shortOnes(lengths: readonly number[], roomPx: number, least: number) {
+  const isShort = lengths.map(() => false);
+  for (;;) {
+    const shorts = isShort.filter(Boolean).length;
+    const metres = lengths.reduce((sum, length, i) => sum + (isShort[i] ? 0 : length), 0);
+    const pxPerM = metres > 0 ? (roomPx - shorts * least) / metres : 0;
+    const more = lengths.flatMap((length, i) => (!isShort[i] && length * pxPerM < least ? [i] : []));
+    if (more.length === 0) return { isShort, pxPerM, shortPx: shorts === lengths.length ? roomPx / shorts : least };
+    more.forEach((i) => (isShort[i] = true));
+  }
+}
+
 /** Widths in px of the pieces that take room along the line; others get 0. */
 function widths(extents: readonly Extent[], fullPx: number): { px: number; isBroken: boolean }[] {
-  const laid = extents.filter((extent) => extent.lengthM !== undefined);
-  const unknowns = laid.filter((extent) => extent.lengthM === null).length;
-  const symbols = extents.filter((extent) => extent.lengthM === undefined && takesRoom(extent));
-  const wanted = symbols.reduce((sum, extent) => sum + extent.symbolPx, 0);
-  // Parts never take more than half of the line.
-  const shrink = Math.min(1, (0.5 * fullPx) / Math.max(1, wanted));
-  const roomPx = fullPx - wanted * shrink;
-  const unknown = unknowns === 0 ? 0 : Math.min(unknownPx, (0.5 * roomPx) / unknowns);
-  const least = Math.min(leastPx, (0.7 * roomPx) / Math.max(1, laid.length));
-  const isShort = new Set<Extent>();
-  const known = laid.filter((extent) => extent.lengthM !== null);
-  let pxPerM = 0;
-  for (let changed = true; changed;) {
-    const free = known.filter((extent) => !isShort.has(extent));
-    const metres = free.reduce((sum, extent) => sum + (extent.lengthM ?? 0), 0);
-    pxPerM = metres > 0 ? (roomPx - unknowns * unknown - isShort.size * least) / metres : 0;
-    const shorter = free.filter((extent) => (extent.lengthM ?? 0) * pxPerM < least);
-    shorter.forEach((extent) => isShort.add(extent));
-    changed = shorter.length > 0;
-  }
-  // Where every piece is short of the least width they share the room there is.
-  const share =
-    isShort.size === known.length && isShort.size > 0 ? (roomPx - unknowns * unknown) / isShort.size : least;
+  const shrink = symbolShare(extents, fullPx);
+  const symbolPx = (e: Extent) => (e.lengthM === undefined && takesRoom(e) ? e.symbolPx * shrink : 0);
+  const roomPx = fullPx - extents.reduce((sum, e) => sum + symbolPx(e), 0);
+  const lengths = extents.flatMap((e) => (typeof e.lengthM === "number" ? [e.lengthM] : []));
+  const unknowns = extents.filter((e) => e.lengthM === null).length;
+  const share = (lengths.length > 0 ? 0.5 : 1) * (roomPx / Math.max(1, unknowns));
+  const unknown = lengths.length > 0 ? Math.min(unknownPx, share) : share;
+  const least = Math.min(leastPx, (0.7 * roomPx) / Math.max(1, lengths.length + unknowns));
+  const { isShort, pxPerM, shortPx } = shortOnes(lengths, roomPx - unknowns * unknown, least);
+  let k = -1;
   return extents.map((extent) => {
-    if (extent.lengthM === undefined) return { px: takesRoom(extent) ? extent.symbolPx * shrink : 0, isBroken: false };
+    if (extent.lengthM === undefined) return { px: symbolPx(extent), isBroken: false };
     if (extent.lengthM === null) return { px: unknown, isBroken: false };
-    if (isShort.has(extent)) return { px: share, isBroken: extent.lengthM * pxPerM < 0.95 * share };
-    return { px: extent.lengthM * pxPerM, isBroken: false };
+    k++;
+    const toScale = extent.lengthM * pxPerM;
+    return isShort[k] ? { px: shortPx, isBroken: toScale < 0.95 * shortPx } : { px: toScale, isBroken: false };
   });
 }
 

@@ -11,7 +11,8 @@ function turns(values: Values, least: number): { highs: number[]; lows: number[]
     const extreme = values[best] ?? value;
     if (isRising ? value >= extreme : value <= extreme) best = i;
     else if (Math.abs(value - extreme) > least) {
-      (isRising ? highs : lows).push(best);
+      // The first sample is where the line begins, not a crest.
+      if (best > 0) (isRising ? highs : lows).push(best);
       isRising = !isRising;
       best = i;
     }

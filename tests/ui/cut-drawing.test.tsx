@@ -1,0 +1,60 @@
+import { cleanup, render, screen } from "@testing-library/react";
+import fc from "fast-check";
+import { afterEach, expect, test } from "vitest";
+import { CutDrawing } from "@/components/line/cut-drawing";
+import { cutFrame, cutLayout } from "@/components/line/cut-layout";
+import type { Element } from "@/lib/line/element";
+
+afterEach(cleanup);
+
+const line = "C50-S5";
+type Piece = Element<string>;
+
+test("a shorted stub and its distance from the load are drawn with their lengths to cut", () => {
+  const elements: Piece[] = [
+    { kind: "stub", connection: "shunt", end: "short", line, lengthM: 0.4051 },
+    { kind: "cable", line, lengthM: 0.1923 },
+  ];
+  render(<CutDrawing elements={elements} load="antenna" name="Shorted stub" />);
+  const words = screen.getByRole("img", { name: "Shorted stub" }).textContent;
+  expect(words).toContain("405mm, shorted");
+  expect(words).toContain("192mm");
+});
+
+test("a coil and a capacitor are drawn with their values", () => {
+  const elements: Piece[] = [
+    { kind: "part", connection: "shunt", cF: 14.9e-12 },
+    { kind: "part", connection: "series", lH: 33.7e-9 },
+  ];
+  render(<CutDrawing elements={elements} load="resistor" name="L" />);
+  const words = screen.getByRole("img").textContent;
+  expect(words).toContain("14.9pF");
+  expect(words).toContain("33.7nH");
+});
+
+test("cables in parallel say for how many of them the length holds", () => {
+  const elements: Piece[] = [{ kind: "cable", paralleled: 2, line, lengthM: 0.21 }];
+  render(<CutDrawing elements={elements} load="antenna" name="Two" />);
+  expect(screen.getByRole("img").textContent).toContain("210mm, both");
+});
+
+const anyElement: fc.Arbitrary<Piece> = fc.oneof(
+  fc.double({ min: 1e-3, max: 200, noNaN: true }).map((lengthM): Piece => ({ kind: "cable", line, lengthM })),
+  fc
+    .double({ min: 1e-3, max: 200, noNaN: true })
+    .map((lengthM): Piece => ({ kind: "stub", connection: "shunt", end: "open", line, lengthM })),
+  fc.constant<Piece>({ kind: "part", connection: "series", lH: 1e-7 }),
+);
+
+test("whatever a match is made of, its parts follow one another from source to load inside the drawing", () => {
+  fc.assert(
+    fc.property(fc.array(anyElement, { minLength: 1, maxLength: 4 }), (elements) => {
+      const { items, startX } = cutLayout(elements);
+      expect(startX).toBeGreaterThan(cutFrame.leadX);
+      items.forEach((item, i) => {
+        expect(item.toX).toBeGreaterThan(item.fromX);
+        expect(item.toX).toBeLessThanOrEqual((items[i + 1]?.fromX ?? cutFrame.loadX) + 0.2);
+      });
+    }),
+  );
+});
