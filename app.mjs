@@ -70,6 +70,11 @@ const server = spawn(
   ["node_modules/next/dist/bin/next", "start", "-H", "127.0.0.1", "-p", String(port)],
   { cwd: root, env: environment, stdio: "inherit" },
 );
-for (const signal of ["SIGINT", "SIGTERM"]) process.on(signal, () => server.kill(signal));
-server.on("exit", (code, signal) => process.exit(signal ? 0 : (code ?? 1)));
+let isStopping = false;
+for (const signal of ["SIGINT", "SIGTERM"])
+  process.on(signal, () => {
+    isStopping = true;
+    server.kill(signal);
+  });
+server.on("exit", (code) => process.exit(isStopping ? 0 : (code ?? 1)));
 await announce(server);

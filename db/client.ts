@@ -1,5 +1,5 @@
 import "server-only";
-import { mkdirSync } from "node:fs";
+import { closeSync, mkdirSync, openSync } from "node:fs";
 import path from "node:path";
 import Sqlite from "better-sqlite3";
 import { drizzle, type BetterSQLite3Database } from "drizzle-orm/better-sqlite3";
@@ -14,9 +14,15 @@ export function databaseFile(): string {
   return process.env.DATABASE_FILE || path.join(process.cwd(), "data", "ropewalk.db");
 }
 
+/** An empty file that only its owner may read, if there is none yet; SQLite's side files take after it. */
+function makeFile(file: string): void {
+  mkdirSync(path.dirname(file), { recursive: true });
+  closeSync(openSync(file, "a", 0o600));
+}
+
 /** Opens a database file (`:memory:` for one in memory), making its folder when missing. Does not migrate it. */
 export function openDatabase(file: string): Database {
-  if (file !== ":memory:") mkdirSync(path.dirname(path.resolve(file)), { recursive: true });
+  if (file !== ":memory:") makeFile(path.resolve(file));
   const client = new Sqlite(file);
   client.pragma("journal_mode = WAL");
   client.pragma("foreign_keys = ON");

@@ -111,13 +111,13 @@ test("Migrating twice changes nothing", () => {
   expect(schema()).toEqual(before);
 });
 
-test("A database file is opened with its folder made, write-ahead logging and foreign keys", () => {
+test("A database file is made for its owner alone, and opened with write-ahead logging and foreign keys", () => {
   const file = path.join(folder, "deep/er/ropewalk.db");
   const { $client: client } = openDatabase(file);
   expect(client.pragma("journal_mode", { simple: true })).toBe("wal");
   expect(client.pragma("foreign_keys", { simple: true })).toBe(1);
   client.close();
-  expect(statSync(file).isFile()).toBe(true);
+  expect(statSync(file).mode & 0o777).toBe(0o600);
 });
 
 test("DATABASE_FILE says where the data lives; without it, a folder of the project", () => {
