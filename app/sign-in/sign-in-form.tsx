@@ -1,7 +1,7 @@
 "use client";
 
 import { useState } from "react";
-import type { UseFormReturn } from "react-hook-form";
+import { useFormState, type UseFormReturn } from "react-hook-form";
 import type { SignInFields } from "@/app/sign-in/sign-in";
 import { Button } from "@/components/ui/button";
 import { Field } from "@/components/ui/field";
@@ -23,6 +23,7 @@ function refusal(error: unknown): string {
 
 /** The password, with a switch to see it. */
 function PasswordField({ form }: Pick<SignInFormProps, "form">) {
+  const { errors } = useFormState({ control: form.control });
   const [isShown, setShown] = useState(false);
   const show = (
     <button
@@ -41,7 +42,7 @@ function PasswordField({ form }: Pick<SignInFormProps, "form">) {
       autoComplete="current-password"
       controlSize="large"
       trailing={show}
-      error={form.formState.errors.password?.message}
+      error={errors.password?.message}
       {...form.register("password")}
     />
   );
@@ -49,7 +50,8 @@ function PasswordField({ form }: Pick<SignInFormProps, "form">) {
 
 /** Address, password, and the answer when they are not taken. */
 export function SignInForm({ form, next }: SignInFormProps) {
-  const { errors, isSubmitting } = form.formState;
+  // The form object never changes, so its state is subscribed to here.
+  const { errors, isSubmitting } = useFormState({ control: form.control });
   async function submit(fields: SignInFields) {
     try {
       await call("/session", { method: "POST", body: fields });

@@ -6,7 +6,8 @@ import { DB_PER_NEPER } from "@/lib/line/constants";
 import { prepareElements } from "@/lib/line/element-two-port";
 import type { Circuit, Element, Plane } from "@/lib/line/element";
 import { lineFigures } from "@/lib/line/line-figures";
-import { sweep, type Sweep } from "@/lib/line/run";
+import { sweep, sweepPrepared, type Sweep } from "@/lib/line/run";
+import { prepareRun } from "@/lib/line/walk";
 import { standingWave, type StandingWave } from "@/lib/line/standing-wave";
 
 export interface Conditions {
@@ -152,8 +153,9 @@ type Curve = (at: Sweep) => Float64Array;
 function worstValues(circuit: Circuit, conditions: Conditions, shown: Sweep): Analysis["worst"] {
   const { designHz, temperatureC } = conditions;
   const band = conditions.bandHz ?? [designHz, designHz];
+  const run = prepareRun(circuit, temperatureC);
   const least = (curve: Curve, sign: 1 | -1): Worst => {
-    const valueAt = (f: number) => sign * curve(sweep(circuit, [f], { temperatureC, planes: [loadPlane] }))[0]!;
+    const valueAt = (f: number) => sign * curve(sweepPrepared(run, [f], [loadPlane]))[0]!;
     const found = worstIn(
       shown.frequencies,
       curve(shown).map((v) => sign * v),

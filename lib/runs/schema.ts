@@ -8,6 +8,7 @@ import type {
   Element as EngineElement,
   Termination as EngineTermination,
 } from "@/lib/line/element";
+import { minimumPadLossDb } from "@/lib/line/pad";
 import { lineModelSchema, notNegative, positive, temperature } from "@/lib/cables/schema";
 
 export const maxFrequencies = 10_001;
@@ -110,12 +111,6 @@ const partSchema = z
   })
   .refine((p) => p.q === undefined || p.rOhm === undefined, { path: ["q"], error: "A resistor has no Q." })
   .refine((p) => p.qAtHz === undefined || p.q !== undefined, { path: ["q"], error: "A frequency of Q needs a Q." });
-
-/** Least loss of a resistive pad between two resistances, dB. */
-function minimumPadLossDb(inputOhm: number, outputOhm: number): number {
-  const ratio = Math.max(inputOhm, outputOhm) / Math.min(inputOhm, outputOhm);
-  return 20 * Math.log10(Math.sqrt(ratio) + Math.sqrt(ratio - 1));
-}
 
 const padSchema = z
   .strictObject({

@@ -6,9 +6,9 @@ import { runRevisions, runs } from "@/db/schema/runs";
 import { people, teams } from "@/db/schema/team";
 import type { Actor } from "@/lib/auth/actor";
 import { requirePermission } from "@/lib/auth/permission";
+import { visibleRuns } from "@/lib/auth/visibility/service";
 import { AppError } from "@/lib/http/errors";
 import { entityTag } from "@/lib/http/etag";
-import { visible } from "@/lib/runs/access/service";
 import { listPinned, pinCables, replacePinned } from "@/lib/runs/cables/service";
 import { saveSentence } from "@/lib/runs/revision";
 import type { NewRun, Run, RunChange } from "@/lib/runs/schema";
@@ -27,7 +27,7 @@ export function getRun(actor: Actor, runId: string): Run {
     .from(runs)
     .innerJoin(owners, eq(owners.id, runs.ownerId))
     .innerJoin(changers, eq(changers.id, runs.changedById))
-    .where(and(visible(actor), eq(runs.id, runId)))
+    .where(and(visibleRuns(actor), eq(runs.id, runId)))
     .get();
   if (!row) throw new AppError("not_found", "There is no such run.");
   const { ownerName, changedByName } = row;

@@ -1,13 +1,13 @@
 /** The list of runs, a page at a time. */
 import { and, count, desc, eq, inArray, lt, or, sql, type SQL } from "drizzle-orm";
 import { database } from "@/db/client";
-import { cables } from "@/db/schema/cables";
 import { runs } from "@/db/schema/runs";
 import { people } from "@/db/schema/team";
 import type { Actor } from "@/lib/auth/actor";
 import { requirePermission } from "@/lib/auth/permission";
+import { visibleRuns } from "@/lib/auth/visibility/service";
+import { listDesignations } from "@/lib/cables/service";
 import { type Cursor, defaultLimit, encodeCursor } from "@/lib/http/list";
-import { visible } from "@/lib/runs/access/service";
 import { cableIdsOf, totalLength } from "@/lib/runs/circuit";
 import type { RunPage, RunQuery } from "@/lib/runs/query";
 import type { RunItem } from "@/lib/runs/schema";
@@ -26,15 +26,6 @@ function after(cursor: Cursor | undefined): SQL | undefined {
   return or(lt(runs.changedAt, changedAt), and(eq(runs.changedAt, changedAt), lt(runs.id, cursor.id)));
 }
 
-function designations(ids: string[]): Map<string, string> {
-  const rows = database()
-    .select({ id: cables.id, designation: cables.designation })
-    .from(cables)
-    .where(inArray(cables.id, ids))
-    .all();
-  return new Map(rows.map((row) => [row.id, row.designation]));
-}
-
 function toItem(row: typeof runs.$inferSelect, ownerName: string, names: Map<string, string>): RunItem {
   const { id, number, name, site, folder, state, condition, ownerId, version, changedAt, designHz, bandHz, circuit } =
     row;
@@ -49,7 +40,7 @@ function toItem(row: typeof runs.$inferSelect, ownerName: string, names: Map<str
 export function listRuns(actor: Actor, query: RunQuery = {}): RunPage {
   requirePermission(actor, "runs.read");
   const db = database();
-  const matching = and(visible(actor), found(query.q), query.state ? inArray(runs.state, query.state) : undefined);
+  const matching = and(visibleRuns(actor), found(query.q), query.state ? inArray(runs.state, query.state) : undefined);
   const limit = query.limit ?? defaultLimit;
   const rows = db
     .select({ run: runs, ownerName: people.name })
@@ -60,7 +51,10 @@ export function listRuns(actor: Actor, query: RunQuery = {}): RunPage {
     .limit(limit + 1)
     .all();
   const page = rows.slice(0, limit);
-  const names = designations(page.flatMap(({ run }) => cableIdsOf(run.circuit)));
+  const names = listDesignations(
+    actor,
+    page.flatMap(({ run }) => cableIdsOf(run.circuit)),
+  );
   const last = page.at(-1)?.run;
   return {
     items: page.map(({ run, ownerName }) => toItem(run, ownerName, names)),
