@@ -3,6 +3,8 @@ import type { Candidate, FilterName } from "@/lib/cables/filter";
 import type { Facets } from "@/lib/cables/query";
 
 const mostBins = 12;
+/** Narrowest span a histogram resolves, as a share of the values. */
+const finestShare = 0.01;
 
 /** The smallest of 1, 2 and 5 times a power of ten that covers a span in at most `mostBins` steps. */
 function binWidth(span: number): number {
@@ -11,26 +13,32 @@ function binWidth(span: number): number {
   return power * ([1, 2, 5, 10].find((step) => step * power >= rough) ?? 10);
 }
 
+/** Edges lie a quarter of a bin beside the round numbers: nominal values are round, and real ones a hair to either side. */
+const edgeShift = 0.25;
+
 /**
- * Counts values in bins of equal, round width. The bins cover `range`, not only what is counted, so that they stay where
- * they are while other filters move.
- * @param range - every value there is; the lowest and the highest give the ends
+ * Counts values in bins of equal width. The bins cover `range`, not only what is counted, so that they stay where they
+ * are while other filters move.
+ * @param range - every value there is, none below 0; the lowest and the highest give the ends
  * @param counted - the values to count
  */
 export function histogram(range: number[], counted: number[]): { from: number; to: number; count: number }[] {
   if (range.length === 0) return [];
   const low = range.reduce((a, b) => Math.min(a, b));
   const high = range.reduce((a, b) => Math.max(a, b));
-  const width = binWidth(high - low || Math.abs(low) || 1);
-  const first = Math.floor(low / width);
-  const bins = Array.from({ length: Math.floor(high / width) - first + 1 }, (_, i) => ({
-    // Through a whole number, so that an edge is 0.7 and not 0.7000000000000001.
-    from: Number(((first + i) * width).toPrecision(12)),
-    to: Number(((first + i + 1) * width).toPrecision(12)),
+  // Values that differ by rounding only are one value: bins much finer than that would say nothing.
+  const width = binWidth(Math.max(high - low, high * finestShare) || 1);
+  const place = (value: number) => Math.floor(value / width - edgeShift);
+  // Twelve digits, so that an edge is 0.705 and not 0.7050000000000001.
+  const edge = (k: number) => Math.max(0, Number(((k + edgeShift) * width).toPrecision(12)));
+  const first = place(low);
+  const bins = Array.from({ length: place(high) - first + 1 }, (_, i) => ({
+    from: edge(first + i),
+    to: edge(first + i + 1),
     count: 0,
   }));
   for (const value of counted) {
-    const bin = bins[Math.floor(value / width) - first];
+    const bin = bins[place(value) - first];
     if (bin) bin.count += 1;
   }
   return bins;

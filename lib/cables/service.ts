@@ -1,59 +1,20 @@
 /** The catalogue as its reader may see it. */
-import { and, countDistinct, eq, inArray, isNull } from "drizzle-orm";
-import { alias } from "drizzle-orm/sqlite-core";
+import { and, eq, inArray } from "drizzle-orm";
 import { database } from "@/db/client";
 import { cableRevisions, cables } from "@/db/schema/cables";
-import { runCables, runs } from "@/db/schema/runs";
 import type { Actor } from "@/lib/auth/actor";
 import { may, requirePermission } from "@/lib/auth/permission";
-import { currentRevision, known, readable } from "@/lib/cables/access/service";
+import { knownCables, readableCables } from "@/lib/auth/visibility/service";
 import { facetsOf } from "@/lib/cables/facets";
 import { type Candidate, comparePlaces, filters, sortAsked, sortValue } from "@/lib/cables/filter";
 import { unapprovedStates } from "@/lib/cables/model";
 import type { CablePage, CableQuery } from "@/lib/cables/query";
-import type { Cable, CableItem, CableState } from "@/lib/cables/schema";
+import { currentRevision, listItems, selectWhole, toCable } from "@/lib/cables/rows/service";
+import type { Cable, CableState } from "@/lib/cables/schema";
 import { loosenings } from "@/lib/cables/search/loosen";
 import { listCandidates, readSearchIn } from "@/lib/cables/search/service";
 import { AppError } from "@/lib/http/errors";
 import { defaultLimit, encodeCursor } from "@/lib/http/list";
-
-const successors = alias(cables, "successors");
-
-function selectWhole() {
-  return database()
-    .select({ cable: cables, revision: cableRevisions, successorDesignation: successors.designation })
-    .from(cables)
-    .leftJoin(successors, eq(successors.id, cables.successorId));
-}
-type WholeRow = {
-  cable: typeof cables.$inferSelect;
-  revision: typeof cableRevisions.$inferSelect;
-  successorDesignation: string | null;
-};
-
-function toCable({ cable, revision, successorDesignation }: WholeRow): Cable {
-  const { successorId, equivalence } = cable;
-  return {
-    id: cable.id,
-    designation: cable.designation,
-    aliases: cable.aliases,
-    name: revision.name,
-    family: revision.family,
-    state: revision.state,
-    condition: revision.condition,
-    preferred: cable.preferred,
-    revision: revision.revision,
-    model: revision.model,
-    construction: revision.construction,
-    build: revision.build,
-    figures: revision.figures,
-    limits: revision.limits,
-    successor:
-      successorId !== null && equivalence !== null && successorDesignation !== null
-        ? { cableId: successorId, designation: successorDesignation, equivalence }
-        : null,
-  };
-}
 
 /**
  * One entry, its current revision whole.
@@ -63,7 +24,7 @@ export function getCable(actor: Actor, cableId: string): Cable {
   requirePermission(actor, "cables.read");
   const row = selectWhole()
     .innerJoin(cableRevisions, currentRevision)
-    .where(and(known(actor), eq(cables.id, cableId)))
+    .where(and(knownCables(actor), eq(cables.id, cableId)))
     .get();
   if (!row) throw new AppError("not_found", "There is no such cable.");
   const isOpen = may(actor, "cables.readUnapproved") || row.revision.authorId === actor.personId;
@@ -77,7 +38,7 @@ export function listUsableCables(actor: Actor): Cable[] {
   requirePermission(actor, "cables.read");
   return selectWhole()
     .innerJoin(cableRevisions, currentRevision)
-    .where(and(known(actor), inArray(cableRevisions.state, ["approved", "restricted"])))
+    .where(and(knownCables(actor), inArray(cableRevisions.state, ["approved", "restricted"])))
     .orderBy(cables.designation)
     .all()
     .map(toCable);
@@ -101,7 +62,7 @@ export function cableFinder(
   const ids = [...new Set(references.map((reference) => reference.cableId))];
   const rows = selectWhole()
     .innerJoin(cableRevisions, eq(cableRevisions.cableId, cables.id))
-    .where(and(readable(actor), inArray(cables.id, ids)))
+    .where(and(readableCables(actor), inArray(cables.id, ids)))
     .all();
   const byRevision = new Map(rows.map((row) => [`${row.cable.id} ${row.revision.revision}`, row]));
   const currentRevisions = new Map(rows.map(({ cable }) => [cable.id, cable.currentRevision]));
@@ -117,40 +78,14 @@ export function listReferredCables(actor: Actor, references: CableReference[]): 
   return references.flatMap((reference) => find(reference) ?? []);
 }
 
-function countUses(actor: Actor, ids: string[]): Map<string, number> {
+/** The designations of cables by id. Call with the ids in a run the actor may see. */
+export function listDesignations(actor: Actor, ids: string[]): Map<string, string> {
   const rows = database()
-    .select({ cableId: runCables.cableId, uses: countDistinct(runCables.runId) })
-    .from(runCables)
-    .innerJoin(runs, eq(runs.id, runCables.runId))
-    .where(and(inArray(runCables.cableId, ids), eq(runs.teamId, actor.teamId), isNull(runs.removedAt)))
-    .groupBy(runCables.cableId)
+    .select({ id: cables.id, designation: cables.designation })
+    .from(cables)
+    .where(and(eq(cables.teamId, actor.teamId), inArray(cables.id, ids)))
     .all();
-  return new Map(rows.map((row) => [row.cableId, row.uses]));
-}
-
-function listItems(actor: Actor, entries: Candidate[]): CableItem[] {
-  if (entries.length === 0) return []; // SQLite would walk the whole catalogue to find none of it
-  const ids = entries.map((entry) => entry.id);
-  const uses = countUses(actor, ids);
-  const rows = selectWhole().innerJoin(cableRevisions, currentRevision).where(inArray(cables.id, ids)).all();
-  const byId = new Map(rows.map((row) => [row.cable.id, row]));
-  return entries.flatMap(({ id, lossDbPer100m }) => {
-    const row = byId.get(id);
-    if (!row) return [];
-    const { model: _model, figures: _figures, limits: _limits, successor: _successor, ...cable } = toCable(row);
-    const { z0Ohm, velocityFactor, capacitanceFPerM, delaySPerM, outerDiameterMm } = row.revision;
-    const lossRangeDbPer100m: [number, number] = [row.revision.lossLowDbPer100m, row.revision.lossHighDbPer100m];
-    const figures = {
-      z0Ohm,
-      velocityFactor,
-      capacitanceFPerM,
-      delaySPerM,
-      outerDiameterMm,
-      lossDbPer100m,
-      lossRangeDbPer100m,
-    };
-    return [{ ...cable, ...figures, usedInRuns: uses.get(id) ?? 0 }];
-  });
+  return new Map(rows.map((row) => [row.id, row.designation]));
 }
 
 /** A page of the catalogue: what the query finds of what the actor may read. */

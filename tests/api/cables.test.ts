@@ -9,14 +9,14 @@ import { type CablePage, cablePageSchema } from "@/lib/cables/query";
 import { cableSchema } from "@/lib/cables/schema";
 import { createRun } from "@/lib/runs/service";
 import { addCable, coaxModel, newRun } from "@/tests/support/cables";
-import { useDatabase } from "@/tests/support/database";
+import { withDatabase } from "@/tests/support/database";
 import { actor, addPeople, other } from "@/tests/support/people";
 import { jsonOf, pathsOf, send } from "@/tests/support/requests";
 
 /** Z0 and velocity factor of a model change with its inductance. */
 const withImpedance = (z0: number) => ({ ...coaxModel, lInfHPerM: z0 * z0 * coaxModel.cFPerM });
 
-useDatabase(async () => {
+withDatabase(async () => {
   await addPeople();
   addCable({ id: "a50", name: "mast feeder low-loss", outerDiameterMm: 10.3, preferred: true, maxFrequencyHz: 3e9 });
   addCable({ id: "b75", name: "studio trunk", model: withImpedance(75), outerDiameterMm: 6.9, maxFrequencyHz: 6e9 });

@@ -6,15 +6,15 @@ import { POST as sweep } from "@/app/api/v1/compute/sweep/route";
 import type { z } from "zod";
 import { lineAnswerSchema, matchesAnswerSchema, profileAnswerSchema, sweepAnswerSchema } from "@/lib/compute/schema";
 import type { Handler } from "@/lib/http/handle";
-import { circuitSchema } from "@/lib/runs/schema";
+import { circuitSchema } from "@/lib/runs/circuit-schema";
 import { addCable, coaxModel } from "@/tests/support/cables";
-import { useDatabase } from "@/tests/support/database";
+import { withDatabase } from "@/tests/support/database";
 import { actor, addPeople, other } from "@/tests/support/people";
 import { jsonOf, pathsOf, send } from "@/tests/support/requests";
 
 const lossless = { conductors: [{ form: "constant", r0OhmPerM: 0 }], lInfHPerM: 250e-9, cFPerM: 100e-12 }; // 50 Ω, 5 ns/m
 
-useDatabase(async () => {
+withDatabase(async () => {
   await addPeople();
   addCable({ id: "feeder" });
   addCable({ id: "draft", state: "draft" });

@@ -9,12 +9,12 @@ import { POST as createRun } from "@/app/api/v1/runs/route";
 import { POST as signIn } from "@/app/api/v1/session/route";
 import type { Method } from "@/lib/http/operation";
 import { addCable, newRun } from "@/tests/support/cables";
-import { useDatabase } from "@/tests/support/database";
+import { withDatabase } from "@/tests/support/database";
 import { actor, addPeople, password } from "@/tests/support/people";
 import { cookieOf, jsonOf, send } from "@/tests/support/requests";
 import { routeFiles } from "@/tests/support/routes";
 
-useDatabase(async () => {
+withDatabase(async () => {
   await addPeople();
   addCable({ id: "feeder" });
 });

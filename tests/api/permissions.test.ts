@@ -6,12 +6,12 @@ import { operations } from "@/lib/http/all-operations";
 import type { Run } from "@/lib/runs/schema";
 import { createRun } from "@/lib/runs/service";
 import { addCable, newRun } from "@/tests/support/cables";
-import { useDatabase } from "@/tests/support/database";
+import { withDatabase } from "@/tests/support/database";
 import { actor, addPeople, other, roles } from "@/tests/support/people";
 import { send } from "@/tests/support/requests";
 import { routeFiles } from "@/tests/support/routes";
 
-useDatabase(async () => {
+withDatabase(async () => {
   await addPeople();
   addCable({ id: "feeder" });
 });

@@ -11,14 +11,14 @@ import type { RunPage } from "@/lib/runs/query";
 import { type NewRun, type Run, runSchema } from "@/lib/runs/schema";
 import { createRun } from "@/lib/runs/service";
 import { addCable, newRun } from "@/tests/support/cables";
-import { useDatabase } from "@/tests/support/database";
+import { withDatabase } from "@/tests/support/database";
 import { actor, addPeople, other } from "@/tests/support/people";
 import { jsonOf, pathsOf, send } from "@/tests/support/requests";
 
 const designer = actor("designer");
 const states: CableState[] = ["draft", "inReview", "approved", "restricted", "quarantined", "superseded", "withdrawn"];
 
-useDatabase(async () => {
+withDatabase(async () => {
   await addPeople();
   addCable({ id: "feeder", designation: "FEEDER" });
   addCable({ id: "jumper", designation: "JUMPER" });

@@ -4,13 +4,13 @@ import { database } from "@/db/client";
 import { tokens } from "@/db/schema/team";
 import { requestActor } from "@/lib/auth/actor";
 import { hashOfSecret } from "@/lib/auth/service";
-import { useDatabase } from "@/tests/support/database";
+import { withDatabase } from "@/tests/support/database";
 import { actor, addPeople, home } from "@/tests/support/people";
 import { cookieOf } from "@/tests/support/requests";
 
 const token = "a-random-token-of-some-length";
 
-useDatabase(async () => {
+withDatabase(async () => {
   await addPeople();
   const { personId, teamId } = actor("librarian");
   const row = { id: "t1", teamId, personId, name: "nightly export", hash: hashOfSecret(token), createdAt: "2026" };

@@ -6,11 +6,11 @@ import { mostPerAccount, mostPerAddress } from "@/lib/auth/attempts/service";
 import { clearedCookie, cookieName, sealedCookie, sentCookie, unsealedKey } from "@/lib/auth/cookie";
 import { changePassword, findSessionActor, hashOfSecret, signIn, signOut } from "@/lib/auth/service";
 import type { AppError } from "@/lib/http/errors";
-import { useDatabase } from "@/tests/support/database";
+import { withDatabase } from "@/tests/support/database";
 import { actor, addPeople, home, password } from "@/tests/support/people";
 import { insertSession } from "@/tests/support/sessions";
 
-useDatabase(addPeople);
+withDatabase(addPeople);
 
 beforeEach(() => {
   database().delete(signInAttempts).run();

@@ -2,17 +2,22 @@ import fc from "fast-check";
 import { expect, test } from "vitest";
 import { histogram } from "@/lib/cables/facets";
 
-test("histogram(range, counted) has round edges that follow one another", () => {
-  expect(histogram([50, 75, 120], [50, 75, 120]).map(({ from, to, count }) => [from, to, count])).toEqual([
-    [50, 60, 1],
-    [60, 70, 0],
-    [70, 80, 1],
-    [80, 90, 0],
-    [90, 100, 0],
-    [100, 110, 0],
-    [110, 120, 0],
-    [120, 130, 1],
+test("histogram(range, counted) has edges beside the round numbers, so that what is nominally one value stays together", () => {
+  const impedances = [49.99, 50.01, 74.96, 75.03, 119.99, 120.02];
+  expect(histogram(impedances, impedances).map(({ from, to, count }) => [from, to, count])).toEqual([
+    [42.5, 52.5, 2],
+    [52.5, 62.5, 0],
+    [62.5, 72.5, 0],
+    [72.5, 82.5, 2],
+    [82.5, 92.5, 0],
+    [92.5, 102.5, 0],
+    [102.5, 112.5, 0],
+    [112.5, 122.5, 2],
   ]);
+});
+
+test("histogram(range, counted) has no edge below 0", () => {
+  expect(histogram([0.1, 100], [])[0]).toMatchObject({ from: 0, to: 2.5 });
 });
 
 test("histogram(range, counted) keeps its bins while fewer values are counted", () => {
@@ -20,9 +25,10 @@ test("histogram(range, counted) keeps its bins while fewer values are counted", 
   expect(edges(histogram([0.66, 0.85], [0.7]))).toEqual(edges(histogram([0.66, 0.85], [])));
 });
 
-test("histogram of one value has one bin with it inside", () => {
-  expect(histogram([50], [50])).toEqual([{ from: 50, to: 55, count: 1 }]);
-  expect(histogram([0], [0])).toHaveLength(1);
+test("histogram of one value, or of values that differ by rounding only, has one bin with all inside", () => {
+  expect(histogram([50], [50])).toMatchObject([{ count: 1 }]);
+  expect(histogram([50, 50.00000000000001], [50, 50.00000000000001])).toMatchObject([{ count: 2 }]);
+  expect(histogram([0], [0])).toMatchObject([{ from: 0, count: 1 }]);
 });
 
 test("histogram of nothing is empty", () => {

@@ -3,10 +3,10 @@ import { expect, test } from "vitest";
 import { database } from "@/db/client";
 import { cableRevisions } from "@/db/schema/cables";
 import { addCable } from "@/tests/support/cables";
-import { useDatabase } from "@/tests/support/database";
+import { withDatabase } from "@/tests/support/database";
 import { addPeople } from "@/tests/support/people";
 
-useDatabase(async () => {
+withDatabase(async () => {
   await addPeople();
   addCable({ id: "approved" });
   addCable({ id: "draft", state: "draft" });

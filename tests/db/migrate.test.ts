@@ -5,7 +5,7 @@ import { afterEach, beforeEach, describe, expect, test } from "vitest";
 import { type Database, database, databaseFile, openDatabase } from "@/db/client";
 import { migrateDatabase } from "@/db/migrate";
 import { seedDemo } from "@/seeds/index";
-import { useDatabase } from "@/tests/support/database";
+import { withDatabase } from "@/tests/support/database";
 
 let folder: string;
 beforeEach(() => {
@@ -86,7 +86,7 @@ function rebuildOf({ $client: client }: Database, table: string): string {
 }
 
 describe("The real schema, filled with the demo", () => {
-  useDatabase(seedDemo);
+  withDatabase(seedDemo);
 
   test("keeps every row of every table when any one of its tables is rebuilt", () => {
     const tables = tablesOf(database());

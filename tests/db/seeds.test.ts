@@ -8,13 +8,13 @@ import { findSessionActor, signIn } from "@/lib/auth/service";
 import { lossDbPer100m } from "@/lib/cables/model";
 import { cableSchema } from "@/lib/cables/schema";
 import { getCable } from "@/lib/cables/service";
-import { circuitSchema } from "@/lib/runs/schema";
+import { circuitSchema } from "@/lib/runs/circuit-schema";
 import { getRun } from "@/lib/runs/service";
 import { refuseMixing, seedDemo } from "@/seeds/index";
 import cableData from "@/seeds/data/cables.json";
 import teamData from "@/seeds/data/team.json";
 import { seedFirstAdmin } from "@/seeds/team";
-import { useDatabase } from "@/tests/support/database";
+import { withDatabase } from "@/tests/support/database";
 
 /** Every row of every table, for telling whether anything changed. */
 function everything(): Record<string, unknown[]> {
@@ -26,7 +26,7 @@ function everything(): Record<string, unknown[]> {
 }
 
 describe("The demo", () => {
-  useDatabase(seedDemo);
+  withDatabase(seedDemo);
 
   const signedIn = async (email: string) => {
     const { key } = await signIn({ email, password: teamData.password }, "test");
@@ -91,7 +91,7 @@ describe("The demo", () => {
 });
 
 describe("Without the demo", () => {
-  useDatabase();
+  withDatabase();
 
   test("Nobody can sign in until the first admin is named", async () => {
     expect(await seedFirstAdmin({ NODE_ENV: "test" })).toMatch(/ADMIN_EMAIL/);

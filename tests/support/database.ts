@@ -7,7 +7,7 @@ import { migrateDatabase } from "@/db/migrate";
  * Gives the tests of a file an empty database in memory; call at the top of the file or of a describe.
  * @param fill - puts in what every test there needs
  */
-export function useDatabase(fill?: (database: Database) => void | Promise<void>): void {
+export function withDatabase(fill?: (database: Database) => void | Promise<void>): void {
   let database: Database | undefined;
   beforeAll(async () => {
     process.env.DATABASE_FILE = ":memory:";

@@ -4,10 +4,11 @@ import { database } from "@/db/client";
 import { cableRevisions, cables } from "@/db/schema/cables";
 import { teams } from "@/db/schema/team";
 import type { Actor } from "@/lib/auth/actor";
-import { currentRevision, readable } from "@/lib/cables/access/service";
+import { readableCables } from "@/lib/auth/visibility/service";
 import type { Candidate } from "@/lib/cables/filter";
 import { lossDbPer100m } from "@/lib/cables/model";
 import { matchExpression, readSearch, type SearchReading, type Vocabulary, vocabulary } from "@/lib/cables/read-search";
+import { currentRevision } from "@/lib/cables/rows/service";
 import type { LineModel } from "@/lib/line/element";
 
 // The vocabulary of each team, good as long as no word of its catalogue has changed.
@@ -78,7 +79,7 @@ export function listCandidates(
   const query = database().select(columns).from(cables).innerJoin(cableRevisions, currentRevision).$dynamic();
   if (match !== null) query.innerJoin(sql`cable_search`, onItsRevision);
   const matches = match === null ? undefined : sql`cable_search match ${match}`;
-  const rows = query.where(and(matches, readable(actor), withinRanges(reading))).all();
+  const rows = query.where(and(matches, readableCables(actor), withinRanges(reading))).all();
   return (rows as (Omit<Candidate, "lossDbPer100m"> & { model?: LineModel })[]).map(({ model, ...row }) => ({
     ...row,
     lossDbPer100m: model && lossAtHz !== undefined ? lossDbPer100m(model, lossAtHz) : null,
