@@ -11,9 +11,11 @@ import { Figure } from "@/components/ui/figure";
 import { decibels, impedance, nanoseconds, significantDigits, type Figure as Shown } from "@/lib/format/quantity";
 import type { PieceFigures } from "@/lib/runs/analysis";
 import { insertAt, newElement, removeAt, replaceAt, split } from "@/lib/runs/edit";
-import { elementFields, elementKinds } from "@/lib/runs/leaf/element-fields";
+import { elementFields } from "@/lib/runs/leaf/element-fields";
+import { elementKinds } from "@/lib/runs/leaf/element-kinds";
 import { terminationFields } from "@/lib/runs/leaf/termination-fields";
-import type { Element, LineRef, Termination } from "@/lib/runs/schema";
+import type { Termination } from "@/lib/line/element";
+import type { Element, LineRef } from "@/lib/runs/circuit-schema";
 
 interface Props {
   notchX: number;

@@ -14,7 +14,8 @@ import {
 import type { PieceFigures } from "@/lib/runs/analysis";
 import type { Faults, RunDraft } from "@/lib/runs/edit";
 import { terminationWords } from "@/lib/runs/leaf/termination-fields";
-import type { Element, LineRef, Termination } from "@/lib/runs/schema";
+import type { Termination } from "@/lib/line/element";
+import type { Element, LineRef } from "@/lib/runs/circuit-schema";
 
 type Lines = ReadonlyMap<string, CableLine>;
 

@@ -1,7 +1,7 @@
 /** What the schema cannot see: whether the parts of a request go together. Each fault at its path. Pure. */
 import type { Plane, Termination } from "@/lib/line/element";
 import type { CircuitFault } from "@/lib/runs/circuit";
-import type { Circuit } from "@/lib/runs/schema";
+import type { Circuit } from "@/lib/runs/circuit-schema";
 
 /** Whether a source has a resistance at every frequency. */
 function hasResistance(source: Termination): boolean {

@@ -1,7 +1,7 @@
 /** The frequencies of a request: a list of them, or a span. Pure. */
 import { z } from "zod";
 import { positive } from "@/lib/cables/schema";
-import { maxFrequencies } from "@/lib/runs/schema";
+import { maxFrequencies } from "@/lib/runs/termination-schema";
 
 const most = maxFrequencies.toLocaleString("en").replaceAll(",", " ");
 

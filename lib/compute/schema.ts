@@ -3,15 +3,9 @@ import { z } from "zod";
 import { notNegative, positive, temperature } from "@/lib/cables/schema";
 import { checkFrequencies, frequencyFields } from "@/lib/compute/frequencies";
 import { matchMethods } from "@/lib/line/match/match-request";
-import {
-  bandSchema,
-  circuitSchema,
-  elementSchema,
-  lineRefSchema,
-  maxElements,
-  planeSchema,
-  terminationSchema,
-} from "@/lib/runs/schema";
+import { terminationSchema } from "@/lib/runs/termination-schema";
+import { circuitSchema, elementSchema, lineRefSchema, maxElements, planeSchema } from "@/lib/runs/circuit-schema";
+import { bandSchema } from "@/lib/runs/schema";
 
 const figure = z.number().nullable().describe("null where there is no finite number");
 const figures = z.array(figure).describe("one value per frequency, null where there is no finite number");

@@ -12,7 +12,7 @@ import { AppError } from "@/lib/http/errors";
 import type { Circuit as EngineCircuit } from "@/lib/line/element";
 import type { MatchLine } from "@/lib/line/match/match-request";
 import { cableRefsOf, type CableRef, type CircuitFault, resolveCircuit } from "@/lib/runs/circuit";
-import type { Circuit, LineRef } from "@/lib/runs/schema";
+import type { Circuit, LineRef } from "@/lib/runs/circuit-schema";
 
 const mostOfCatalogue = 200;
 

@@ -9,18 +9,13 @@ import { lineFigures } from "@/lib/line/line-figures";
 import { sweep, sweepPrepared, type Sweep } from "@/lib/line/run";
 import { prepareRun } from "@/lib/line/walk";
 import { standingWave, type StandingWave } from "@/lib/line/standing-wave";
+import { worstIn, type Worst } from "@/lib/runs/worst";
 
 export interface Conditions {
   designHz: number;
   bandHz: readonly [number, number] | null;
   availablePowerW: number | null;
   temperatureC: number;
-}
-
-/** The worst value in the band and where it is. */
-export interface Worst {
-  frequencyHz: number;
-  value: number;
 }
 
 export interface Spot {
@@ -112,40 +107,6 @@ function pieceFigures(circuit: Circuit, { designHz, temperatureC }: Conditions, 
       lossDb: at.elementLossDb[index]![0]!,
     };
   });
-}
-
-/** The least of a curve inside the band, refined between the samples by golden section. */
-export function worstIn(
-  frequencies: Float64Array,
-  values: Float64Array,
-  band: readonly [number, number],
-  valueAt: (frequency: number) => number,
-): Worst {
-  let best = -1;
-  for (let k = 0; k < values.length; k++) {
-    const f = frequencies[k]!;
-    const isInside = f >= band[0] * (1 - 1e-12) && f <= band[1] * (1 + 1e-12);
-    if (isInside && !Number.isNaN(values[k]!) && (best < 0 || values[k]! < values[best]!)) best = k;
-  }
-  if (best < 0) return { frequencyHz: band[0], value: valueAt(band[0]) };
-  const sampled = { frequencyHz: frequencies[best]!, value: values[best]! };
-  const low = Math.max(band[0], frequencies[best - 1] ?? band[0]);
-  const high = Math.min(band[1], frequencies[best + 1] ?? band[1]);
-  const refined = goldenSection(valueAt, low, high);
-  return refined.value < sampled.value ? refined : sampled;
-}
-
-const golden = (Math.sqrt(5) - 1) / 2;
-
-function goldenSection(valueAt: (frequency: number) => number, low: number, high: number): Worst {
-  let [a, b] = [low, high];
-  for (let i = 0; i < 18 && b - a > 1e-9 * b; i++) {
-    const [c, d] = [b - golden * (b - a), a + golden * (b - a)];
-    if (valueAt(c) < valueAt(d)) b = d;
-    else a = c;
-  }
-  const frequencyHz = (a + b) / 2;
-  return { frequencyHz, value: valueAt(frequencyHz) };
 }
 
 type Curve = (at: Sweep) => Float64Array;

@@ -3,7 +3,8 @@ import { frequency, impedance, inWords, metres, scaled } from "@/lib/format/quan
 import { alike } from "@/lib/runs/alike";
 import type { RunDraft } from "@/lib/runs/edit";
 import { terminationWords } from "@/lib/runs/leaf/termination-fields";
-import type { Element, Termination } from "@/lib/runs/schema";
+import type { Termination } from "@/lib/line/element";
+import type { Element } from "@/lib/runs/circuit-schema";
 import { bandWords, targetWords } from "@/lib/runs/sentences";
 
 export interface ChangedField {

@@ -1,7 +1,7 @@
 /** Between a circuit as stored, whose lines are references, and the engine's, whose lines are models. Pure. */
 import type { Circuit as EngineCircuit, Element as EngineElement, Line } from "@/lib/line/element";
 import { lengthAlongPath } from "@/lib/line/element";
-import type { Circuit, Element, LineRef } from "@/lib/runs/schema";
+import type { Circuit, Element, LineRef } from "@/lib/runs/circuit-schema";
 
 /** A cable of the catalogue, in a revision or in the one a run pins. */
 export type CableRef = Extract<LineRef, { cableId: string }>;

@@ -3,7 +3,8 @@
  * makes any of it undoable. The screen calls these; nothing here knows the screen.
  */
 import { alike } from "@/lib/runs/alike";
-import type { Element, LineRef, Run, RunChange } from "@/lib/runs/schema";
+import type { Element, LineRef } from "@/lib/runs/circuit-schema";
+import type { Run, RunChange } from "@/lib/runs/schema";
 
 export type NewKind = Element["kind"];
 

@@ -6,7 +6,7 @@ import type { Candidate, MatchLine, Refusal } from "@/lib/line/match/match-reque
 import { rank } from "@/lib/line/match/rank";
 import { sweep } from "@/lib/line/run";
 import { alike } from "@/lib/runs/alike";
-import type { Element, LineRef } from "@/lib/runs/schema";
+import type { Element, LineRef } from "@/lib/runs/circuit-schema";
 
 export interface MatchAsked {
   load: Termination;

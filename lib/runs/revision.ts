@@ -1,5 +1,6 @@
 /** A save told in a sentence. Pure. */
-import type { Circuit, RunChange } from "@/lib/runs/schema";
+import type { Circuit } from "@/lib/runs/circuit-schema";
+import type { RunChange } from "@/lib/runs/schema";
 
 type Content = Omit<Required<RunChange>, "circuit"> & { circuit: Circuit };
 

@@ -2,7 +2,7 @@ import { describe, expect, test } from "vitest";
 import type { Line } from "@/lib/line/element";
 import { cableIdsOf, cableRefsOf, referredElement, resolveCircuit, totalLength } from "@/lib/runs/circuit";
 import { saveSentence } from "@/lib/runs/revision";
-import type { Circuit, Element } from "@/lib/runs/schema";
+import type { Circuit, Element } from "@/lib/runs/circuit-schema";
 import { coaxModel } from "@/tests/support/cables";
 
 const line = (cableId: string, revision?: number) => ({ cableId, revision });

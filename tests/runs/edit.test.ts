@@ -14,7 +14,7 @@ import {
   undone,
   type RunDraft,
 } from "@/lib/runs/edit";
-import { elementSchema, type Element } from "@/lib/runs/schema";
+import { elementSchema, type Element } from "@/lib/runs/circuit-schema";
 
 const line = { cableId: "c50-f10" };
 const kinds = ["cable", "parallel", "stub", "shunt", "part", "pad", "joint", "transformer"] as const;

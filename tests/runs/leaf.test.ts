@@ -1,9 +1,12 @@
 import { expect, test } from "vitest";
 import { newElement } from "@/lib/runs/edit";
-import { elementFields, elementKinds } from "@/lib/runs/leaf/element-fields";
+import { elementFields } from "@/lib/runs/leaf/element-fields";
+import { elementKinds } from "@/lib/runs/leaf/element-kinds";
 import type { LeafField } from "@/lib/runs/leaf/field";
 import { terminationFields } from "@/lib/runs/leaf/termination-fields";
-import { elementSchema, terminationSchema, type Element, type Termination } from "@/lib/runs/schema";
+import type { Termination } from "@/lib/line/element";
+import { terminationSchema } from "@/lib/runs/termination-schema";
+import { elementSchema, type Element } from "@/lib/runs/circuit-schema";
 
 const line = { cableId: "c50-f10" };
 

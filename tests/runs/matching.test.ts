@@ -11,7 +11,7 @@ import {
   withoutMatch,
   type MatchAsked,
 } from "@/lib/runs/matching";
-import type { Element } from "@/lib/runs/schema";
+import type { Element } from "@/lib/runs/circuit-schema";
 
 function cable(designation: string, z0: number): CableLine {
   return {

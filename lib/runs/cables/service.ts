@@ -8,7 +8,8 @@ import type { Cable, CableState } from "@/lib/cables/schema";
 import { cableFinder, listReferredCables } from "@/lib/cables/service";
 import { AppError, type FieldErrors } from "@/lib/http/errors";
 import { cableRefsOf, type CableRef } from "@/lib/runs/circuit";
-import type { Circuit, Run } from "@/lib/runs/schema";
+import type { Circuit } from "@/lib/runs/circuit-schema";
+import type { Run } from "@/lib/runs/schema";
 
 export type Pinned = Run["pinned"];
 

@@ -8,7 +8,8 @@ import {
   type TypedField,
 } from "@/lib/runs/leaf/field";
 import { terminationFields } from "@/lib/runs/leaf/termination-fields";
-import type { Element, LineRef, Termination } from "@/lib/runs/schema";
+import type { Termination } from "@/lib/line/element";
+import type { Element, LineRef } from "@/lib/runs/circuit-schema";
 
 type Of<K extends Element["kind"]> = Extract<Element, { kind: K }>;
 
@@ -188,13 +189,3 @@ const fieldsOf: { [K in Element["kind"]]: LeafField<Of<K>>[] } = {
 export function elementFields(kind: Element["kind"]): LeafField<Element>[] {
   return fieldsOf[kind] as unknown as LeafField<Element>[];
 }
-
-export const elementKinds: { kind: Element["kind"]; label: string }[] = [
-  { kind: "cable", label: "Cable" },
-  { kind: "joint", label: "Joint" },
-  { kind: "stub", label: "Stub" },
-  { kind: "part", label: "Coil, capacitor or resistor" },
-  { kind: "pad", label: "Pad" },
-  { kind: "shunt", label: "Something across the line" },
-  { kind: "transformer", label: "Transformer" },
-];

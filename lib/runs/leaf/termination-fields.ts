@@ -1,6 +1,6 @@
 /** Fields of a termination: what stands at an end of the line, of a stub, or across it. */
 import { choice, impedanceField, optionalQuantity, type LeafField } from "@/lib/runs/leaf/field";
-import type { Termination } from "@/lib/runs/schema";
+import type { Termination } from "@/lib/line/element";
 
 type Network = Extract<Termination, { kind: "network" }>;
 
