@@ -62,7 +62,7 @@ export function ChartFrame({
   summary,
   figures,
   aside,
-  level = 3,
+  level = 2,
   className = "",
   children,
 }: ChartFrameProps) {
@@ -71,7 +71,7 @@ export function ChartFrame({
   return (
     <figure className={`m-0 min-w-0 ${className}`}>
       <figcaption className="flex flex-wrap items-baseline gap-x-3.5">
-        <Heading>{title}</Heading>
+        <Heading className="text-body">{title}</Heading>
         {note && <span className="text-label text-ink-2">{note}</span>}
         <span className="ml-auto flex items-baseline gap-4 print:hidden">
           {aside}

@@ -120,7 +120,9 @@ export function SweepPlot(props: SweepPlotProps) {
       className="overflow-hidden outline-offset-0"
     >
       <ComposedChart width={width} height={height} data={rowsOf(xs, series)} margin={margin} accessibilityLayer={false}>
-        <SweepTarget {...props} />
+        <ZIndexLayer zIndex={-200}>
+          <SweepTarget {...props} />
+        </ZIndexLayer>
         <CartesianGrid stroke="var(--line)" />
         <XAxis {...axes.x} />
         <YAxis {...axes.y} />

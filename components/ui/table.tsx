@@ -2,7 +2,7 @@ import type { ComponentProps } from "react";
 
 /** A ruled table: a rule under the head, thin rules between rows, figures at the right. */
 export function Table({ className = "", ...rest }: ComponentProps<"table">) {
-  return <table {...rest} className={`w-full border-collapse text-body ${className}`} />;
+  return <table {...rest} className={`w-full border-collapse text-label ${className}`} />;
 }
 
 interface CellLook {
@@ -11,12 +11,16 @@ interface CellLook {
 }
 
 export function HeadCell({ isRight = false, className = "", scope = "col", ...rest }: ComponentProps<"th"> & CellLook) {
+  const { "aria-label": name, children, ...cell } = rest;
   return (
     <th
-      {...rest}
+      {...cell}
       scope={scope}
       className={`border-b border-rule py-1 align-bottom text-label font-[560] whitespace-nowrap text-ink-2 ${isRight ? "pl-2 text-right" : "pr-2 text-left"} ${className}`}
-    />
+    >
+      {children}
+      {name && <span className="sr-only">{name}</span>}
+    </th>
   );
 }
 
