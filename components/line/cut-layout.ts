@@ -80,6 +80,19 @@ function isBesideCable<L>(elements: readonly Element<L>[], index: number): boole
   return elements[index - 1]?.kind === "cable" || elements[index + 1]?.kind === "cable";
 }
 
+/** Room that the run's own cable needs at the left, px. */
+const leastLeadPx = 20;
+
+/** Many parts together may ask for more room than there is: then all of them give way alike. */
+function squeezed<L>(layout: CutLayout<L>): CutLayout<L> {
+  const { leadX, loadX } = cutFrame;
+  const share = (loadX - leadX - leastLeadPx) / (loadX - layout.startX);
+  if (share >= 1) return layout;
+  const at = (x: number) => rounded(loadX - (loadX - x) * share);
+  const items = layout.items.map(({ element, fromX, toX }) => ({ element, fromX: at(fromX), toX: at(toX) }));
+  return { items, pxPerM: layout.pxPerM * share, startX: at(layout.startX) };
+}
+
 /** @param elements - from source to load, as the engine has them */
 export function cutLayout<L>(elements: readonly Element<L>[]): CutLayout<L> {
   const pxPerM = scaleOf(elements);
@@ -93,7 +106,7 @@ export function cutLayout<L>(elements: readonly Element<L>[]): CutLayout<L> {
     items.unshift({ element, fromX: rounded(x - gap / 2 - width), toX: rounded(x - gap / 2) });
     x = rounded(x - width - gap);
   }
-  return { items, pxPerM, startX: x };
+  return squeezed({ items, pxPerM, startX: x });
 }
 
 /** How a stub is drawn: folded back under the line when it is long and has the room, else hanging. */

@@ -61,9 +61,10 @@ function shortOnes(lengths: readonly number[], roomPx: number, least: number) {
   for (;;) {
     const shorts = isShort.filter(Boolean).length;
     const metres = lengths.reduce((sum, length, i) => sum + (isShort[i] ? 0 : length), 0);
-    const pxPerM = metres > 0 ? (roomPx - shorts * least) / metres : 0;
-    const more = lengths.flatMap((length, i) => (!isShort[i] && length * pxPerM < least ? [i] : []));
-    if (more.length === 0) return { isShort, pxPerM, shortPx: shorts === lengths.length ? roomPx / shorts : least };
+    // A share of the metres first: the px of a metre alone would be infinite on a line of next to nothing.
+    const toScale = (length: number) => (metres > 0 ? (length / metres) * (roomPx - shorts * least) : 0);
+    const more = lengths.flatMap((length, i) => (!isShort[i] && toScale(length) < least ? [i] : []));
+    if (more.length === 0) return { isShort, toScale, shortPx: shorts === lengths.length ? roomPx / shorts : least };
     more.forEach((i) => (isShort[i] = true));
   }
 }
@@ -78,14 +79,14 @@ function widths(extents: readonly Extent[], fullPx: number): { px: number; isBro
   const share = (lengths.length > 0 ? 0.5 : 1) * (roomPx / Math.max(1, unknowns));
   const unknown = lengths.length > 0 ? Math.min(unknownPx, share) : share;
   const least = Math.min(leastPx, (0.7 * roomPx) / Math.max(1, lengths.length + unknowns));
-  const { isShort, pxPerM, shortPx } = shortOnes(lengths, roomPx - unknowns * unknown, least);
+  const { isShort, toScale, shortPx } = shortOnes(lengths, roomPx - unknowns * unknown, least);
   let k = -1;
   return extents.map((extent) => {
     if (extent.lengthM === undefined) return { px: symbolPx(extent), isBroken: false };
     if (extent.lengthM === null) return { px: unknown, isBroken: false };
     k++;
-    const toScale = extent.lengthM * pxPerM;
-    return isShort[k] ? { px: shortPx, isBroken: toScale < 0.95 * shortPx } : { px: toScale, isBroken: false };
+    const px = toScale(extent.lengthM);
+    return isShort[k] ? { px: shortPx, isBroken: px < 0.95 * shortPx } : { px, isBroken: false };
   });
 }
 
