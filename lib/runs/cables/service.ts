@@ -5,7 +5,7 @@ import { runCables } from "@/db/schema/runs";
 import type { Actor } from "@/lib/auth/actor";
 import { isUsable } from "@/lib/cables/model";
 import type { Cable, CableState } from "@/lib/cables/schema";
-import { cableFinder, listReferredCables } from "@/lib/cables/service";
+import { cableFinder } from "@/lib/cables/service";
 import { AppError, type FieldErrors } from "@/lib/http/errors";
 import { cableRefsOf, type CableRef } from "@/lib/runs/circuit";
 import type { Circuit } from "@/lib/runs/circuit-schema";
@@ -75,9 +75,4 @@ export function replacePinned(runId: string, pinned: Pinned): void {
     db.insert(runCables)
       .values(pinned.map((pin) => ({ runId, ...pin })))
       .run();
-}
-
-/** The cables of a run, whole, in the revisions it uses. */
-export function listCablesOfRun(actor: Actor, run: Pick<Run, "pinned">): Cable[] {
-  return listReferredCables(actor, run.pinned);
 }
