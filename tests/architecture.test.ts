@@ -172,7 +172,9 @@ test("Every import of our own leads to the file that defines the thing: no folde
     ({ file }) => /(^|\/)index\.tsx?$/.test(file) && !/^(seeds|tests\/bench)\/index\.ts$/.test(file),
   );
   expect(barrels.map(({ file }) => file)).toEqual([]);
-  const passingOn = sources.filter(({ text }) => /^export (\*|\{[^}]*\}) from "[@.]\//m.test(text)).map(({ file }) => file);
+  const passingOn = sources
+    .filter(({ text }) => /^export (\*|\{[^}]*\}) from "[@.]\//m.test(text))
+    .map(({ file }) => file);
   expect(passingOn).toEqual([]);
 });
 
