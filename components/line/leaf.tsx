@@ -10,7 +10,7 @@ interface LeafProps {
 /** The editor of a piece: it opens under the strip and points at its piece. */
 export function Leaf({ notchX, name, children }: LeafProps) {
   return (
-    <section aria-label={name} className="relative border-t-2 border-copper bg-copper-wash px-4 pt-2.5 pb-3">
+    <section data-leaf aria-label={name} className="relative border-t-2 border-copper bg-copper-wash px-4 pt-2.5 pb-3">
       <svg
         width="22"
         height="12"

@@ -14,6 +14,7 @@ import { RunFrame } from "@/components/runs/run-frame";
 import { RunReadings } from "@/components/runs/run-readings";
 import { pieceName, stripEnds, stripPieces } from "@/components/runs/strip-pieces";
 import { useAnalysis } from "@/components/runs/use-analysis";
+import { useLineKeys } from "@/components/runs/use-line-keys";
 import { Verdicts } from "@/components/runs/verdicts";
 import { WaveChart } from "@/components/runs/wave-chart";
 import { Button } from "@/components/ui/button";
@@ -24,6 +25,7 @@ import { insertAt, move, newElement } from "@/lib/runs/edit";
 export function LineView() {
   const { draft, lines, faults } = useRunEditor();
   const { analysis, trouble, isBehind } = useAnalysis();
+  useLineKeys();
   const names = draft.circuit.elements.map((_, i) => pieceName(draft.circuit.elements, i, lines));
   const isPartial = Object.keys(faults).length > 0;
   return (

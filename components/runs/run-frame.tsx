@@ -2,11 +2,12 @@
 
 import type { Route } from "next";
 import Link from "next/link";
-import { usePathname } from "next/navigation";
+import { usePathname, useRouter } from "next/navigation";
 import { useEffect, type ReactNode } from "react";
 import { useRunEditor } from "@/components/runs/run-editor";
 import { Conflict, SavingNote } from "@/components/runs/saving-note";
 import { Button, ButtonLink } from "@/components/ui/button";
+import { useKeys } from "@/components/ui/keys";
 import { ViewTabs } from "@/components/ui/view-tabs";
 
 interface Props {
@@ -24,7 +25,7 @@ export function RunFrame({ head, children }: Props) {
     { href: base as Route, label: "Line" },
     { href: `${base}/match` as Route, label: "Match" },
   ];
-  useUndoKeys(undo, redo);
+  useRunKeys(base, undo, redo);
   return (
     <>
       <div className="flex min-h-14.5 items-start gap-8 folded:flex-col folded:gap-2">
@@ -98,7 +99,14 @@ function NameField() {
   );
 }
 
-function useUndoKeys(undo: (() => void) | null, redo: (() => void) | null) {
+/** Keys of a run wherever one stands in it; undo works inside fields too, as everywhere. */
+function useRunKeys(base: string, undo: (() => void) | null, redo: (() => void) | null) {
+  const router = useRouter();
+  useKeys([
+    { key: "1", does: "line", run: () => router.push(base as Route) },
+    { key: "2", does: "match", run: () => router.push(`${base}/match` as Route) },
+    { key: "Ctrl z", does: "undo; with Shift, redo" },
+  ]);
   useEffect(() => {
     const press = (event: KeyboardEvent) => {
       if (!(event.ctrlKey || event.metaKey) || event.key.toLowerCase() !== "z") return;
@@ -109,5 +117,5 @@ function useUndoKeys(undo: (() => void) | null, redo: (() => void) | null) {
     };
     window.addEventListener("keydown", press);
     return () => window.removeEventListener("keydown", press);
-  });
+  }, [undo, redo]);
 }
