@@ -28,7 +28,8 @@ export function useLineKeys(): void {
   function remove() {
     if (index === null || !canEdit) return;
     put(removeAt(elements, index));
-    select(null);
+    // The hands stay where they were: on the piece before.
+    select(elements.length > 1 ? Math.max(0, index - 1) : null);
   }
   useKeys([
     { key: "ArrowLeft", does: "previous piece", run: () => step(-1) },
