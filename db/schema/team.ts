@@ -8,6 +8,8 @@ export const teams = sqliteTable("teams", {
   nextRunNumber: integer("next_run_number").notNull().default(1),
   /** one more whenever a word of the team's catalogue changes (kept by triggers): tells a stale vocabulary */
   wordsVersion: integer("words_version").notNull().default(0),
+  /** one more whenever an entry of the team or a revision changes (kept by triggers): tells a stale copy in memory */
+  catalogueVersion: integer("catalogue_version").notNull().default(0),
   /** ISO 8601 */
   createdAt: text("created_at").notNull(),
 });
