@@ -4,88 +4,13 @@
  * spelling into mathjs spelling. It loads mathjs: import it where something is typed, not where figures are shown.
  */
 import { complexDependencies, create, createUnitDependencies, unitDependencies, type FactoryFunctionMap } from "mathjs";
+import { impedance, inWords } from "@/lib/format/quantity";
+import { kinds } from "@/lib/format/quantity-kinds";
 import { mathUnit, perCount, type QuantityKind } from "@/lib/format/unit-spelling";
-import {
-  cutLength,
-  frequency,
-  impedance,
-  inWords,
-  scaled,
-  significantDigits,
-  type Figure,
-} from "@/lib/format/quantity";
 
 const math = create({ unitDependencies, complexDependencies, createUnitDependencies } as FactoryFunctionMap);
 math.createUnit!("dB");
 math.createUnit!("Np", "8.685889638065035 dB");
-
-interface Kind {
-  /** mathjs expression of the SI unit the answer is in; empty for a bare number */
-  si: string;
-  /** unit taken when none is typed */
-  usual: string;
-  what: string;
-  example: string;
-  show: (value: number) => Figure;
-}
-
-const plain = (unit: string) => (value: number) => trimmed({ digits: significantDigits(value, 6), unit, spoken: unit });
-
-const kinds: Record<QuantityKind, Kind> = {
-  length: {
-    si: "m",
-    usual: "m",
-    what: "a length",
-    example: "36 m or 118 ft",
-    show: (v) => (v < 1 && v > 0 ? cutLength(v) : plain("m")(v)),
-  },
-  frequency: { si: "Hz", usual: "MHz", what: "a frequency", example: "27.2 MHz", show: frequency },
-  temperature: { si: "degC", usual: "degC", what: "a temperature", example: "20 °C or 68 °F", show: plain("°C") },
-  power: { si: "W", usual: "W", what: "a power", example: "200 W", show: (v) => trimmed(scaled("power", v, 6)) },
-  resistance: {
-    si: "ohm",
-    usual: "ohm",
-    what: "a resistance",
-    example: "50 Ω",
-    show: (v) => trimmed(scaled("resistance", v, 6)),
-  },
-  inductance: {
-    si: "H",
-    usual: "nH",
-    what: "an inductance",
-    example: "350 nH",
-    show: (v) => trimmed(scaled("inductance", v, 6)),
-  },
-  capacitance: {
-    si: "F",
-    usual: "pF",
-    what: "a capacitance",
-    example: "132 pF",
-    show: (v) => trimmed(scaled("capacitance", v, 6)),
-  },
-  time: { si: "s", usual: "ns", what: "a time", example: "50 ns", show: (v) => trimmed(scaled("time", v, 6)) },
-  voltage: { si: "V", usual: "V", what: "a voltage", example: "300 V", show: (v) => trimmed(scaled("voltage", v, 6)) },
-  loss: { si: "dB", usual: "dB", what: "a loss", example: "2.2 dB", show: plain("dB") },
-  lossPerLength: {
-    si: "dB/m",
-    usual: "dB/hm",
-    what: "a loss per length",
-    example: "4.1 dB/100 m",
-    show: (v) => plain("dB/100 m")(v * 100),
-  },
-  capacitancePerLength: {
-    si: "F/m",
-    usual: "pF/m",
-    what: "a capacitance per length",
-    example: "100 pF/m",
-    show: (v) => plain("pF/m")(v * 1e12),
-  },
-  number: { si: "", usual: "", what: "a number", example: "1.5", show: plain("") },
-};
-
-function trimmed(figure: Figure): Figure {
-  return { ...figure, digits: figure.digits.replace(/(\.\d*?)0+$/, "$1").replace(/\.$/, "") };
-}
 
 export type Read<T> = { ok: true; value: T; understood: string } | { ok: false; message: string };
 
@@ -140,13 +65,18 @@ export function readQuantity(kind: QuantityKind, text: string): Read<number> {
   return { ok: true, value: total, understood: inWords(show(total)) };
 }
 
+/** Watts at 0 dB of a level: dBm is over a milliwatt, dBW over a watt. */
+const levels: Record<string, number> = { dbm: 1e-3, dbw: 1 };
+
 function toSi(kind: QuantityKind, value: number, unitText: string): number {
   const { si, usual } = kinds[kind];
+  const level = kind === "power" ? levels[unitText.toLowerCase()] : undefined;
+  if (level !== undefined) return Number((level * 10 ** (value / 10)).toPrecision(15));
   if (si === "") throw new Error("a bare number takes no unit");
   const from = mathUnit(kind, unitText, usual);
-  if (from === si) return value;
-  const number = math.unit!(value, from).toNumber(si) / perCount(unitText);
-  return Number(number.toPrecision(15));
+  const inSi = from === si ? value : math.unit!(value, from).toNumber(si);
+  const count = perCount(unitText);
+  return inSi === value && count === 1 ? value : Number((inSi / count).toPrecision(15));
 }
 
 /** A quantity as it stands in its field: SI -> the text a person would have typed. */

@@ -10,9 +10,13 @@ export type QuantityKind =
   | "capacitance"
   | "time"
   | "voltage"
+  | "current"
   | "loss"
   | "lossPerLength"
   | "capacitancePerLength"
+  | "inductancePerLength"
+  | "resistancePerLength"
+  | "timePerLength"
   | "number";
 
 const unitSpellings: [RegExp, string][] = [
@@ -63,13 +67,11 @@ export function mathUnit(kind: QuantityKind, text: string, usual: string): strin
   };
   if (under === undefined) return one(over ?? "");
   const count = /^(\d+)\s*(.*)$/.exec(under);
-  const base = one(count ? (count[2] ?? "") : under);
-  if (count?.[1] === "100" && base === "m") return `${one(over ?? "")}/hm`;
-  return `${one(over ?? "")}/${base}`;
+  return `${one(over ?? "")}/${one(count ? (count[2] ?? "") : under)}`;
 }
 
-/** "100" in "dB/100 ft" divides the number; mathjs has no such unit (a hectometre serves for 100 m). */
+/** "100" in "dB/100 ft" divides the number: mathjs has no such unit. */
 export function perCount(unitText: string): number {
-  const count = /\/\s*(\d+)\s*(?!m\s*$)[a-z]/i.exec(unitText);
+  const count = /\/\s*(\d+)\s*[a-z'"′″]/i.exec(unitText);
   return count ? Number(count[1]) : 1;
 }
