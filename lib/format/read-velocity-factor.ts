@@ -30,5 +30,5 @@ function fraction(value: number, how: string): Read<number> {
 }
 
 function trimmed(value: number): string {
-  return significantDigits(value, 4).replace(/(\.\d*?)0+$/, "$1");
+  return significantDigits(value, 4).replace(/\.?0+$/, "");
 }
