@@ -1,5 +1,5 @@
 /** The demo's runs. */
-import { eq } from "drizzle-orm";
+import { and, eq, or, sql } from "drizzle-orm";
 import { database } from "@/db/client";
 import { runAssignees, runCables, runRevisions, runs } from "@/db/schema/runs";
 import { people, teams } from "@/db/schema/team";
@@ -24,7 +24,9 @@ function runOf(seed: Seed, ownerName: string): Run {
 export function seedRuns(): void {
   database().transaction((tx) => {
     for (const seed of data.runs) {
-      if (tx.select({ id: runs.id }).from(runs).where(eq(runs.id, seed.id)).get()) continue;
+      // A number that somebody has used meanwhile is theirs: the demo's run stays out.
+      const isTaken = or(eq(runs.id, seed.id), and(eq(runs.teamId, team.team.id), eq(runs.number, seed.number)));
+      if (tx.select({ id: runs.id }).from(runs).where(isTaken).get()) continue;
       const owner = tx.select({ name: people.name }).from(people).where(eq(people.id, seed.ownerId)).get();
       if (!owner) throw new Error(`seedRuns: no person ${seed.ownerId}`);
       const run = runOf(seed, owner.name);
@@ -43,7 +45,7 @@ export function seedRuns(): void {
         .run();
       for (const personId of seed.assignees) tx.insert(runAssignees).values({ runId: run.id, personId }).run();
       tx.update(teams)
-        .set({ nextRunNumber: Number(seed.number.slice(1)) + 1 })
+        .set({ nextRunNumber: sql`max(${teams.nextRunNumber}, ${Number(seed.number.slice(1)) + 1})` })
         .where(eq(teams.id, team.team.id))
         .run();
     }

@@ -68,7 +68,14 @@ step(bin("tsc"), ["--noEmit"]);
 const unitReport = path.join(reports, "unit.json");
 suite(
   bin("vitest"),
-  ["run", "--config", "tests/vitest.config.ts", "--reporter=dot", "--reporter=json", `--outputFile.json=${unitReport}`],
+  [
+    "run",
+    "--config",
+    "tests/vitest.config.ts",
+    "--reporter=default",
+    "--reporter=json",
+    `--outputFile.json=${unitReport}`,
+  ],
   {},
   unitReport,
   (report) => ({

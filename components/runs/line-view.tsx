@@ -11,6 +11,7 @@ import { PowerLedger } from "@/components/runs/power-ledger";
 import { ReturnLossChart } from "@/components/runs/return-loss-chart";
 import { useRunEditor, type Selected } from "@/components/runs/run-editor";
 import { RunFrame } from "@/components/runs/run-frame";
+import { RunParticulars } from "@/components/runs/run-particulars";
 import { RunReadings } from "@/components/runs/run-readings";
 import { pieceName, stripEnds, stripPieces } from "@/components/runs/strip-pieces";
 import { useAnalysis } from "@/components/runs/use-analysis";
@@ -56,6 +57,7 @@ export function LineView() {
           </div>
         </div>
       )}
+      <RunParticulars />
     </RunFrame>
   );
 }

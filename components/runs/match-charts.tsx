@@ -7,7 +7,7 @@ import { SmithChart, type Reflection, type SmithTrace } from "@/components/plot/
 import { lookOf } from "@/components/runs/series-swatch";
 import { digits, frequency, inWords, megahertz, significantDigits } from "@/lib/format/quantity";
 import type { Candidate } from "@/lib/line/match/match-request";
-import { shownFrequencies } from "@/lib/runs/analysis";
+import { shownFrequencies } from "@/lib/runs/shown";
 import { plotted, returnLossDomain, thinned } from "@/lib/runs/curves";
 import { candidateCurve, candidateSteps, type CandidateCurve, type MatchAsked } from "@/lib/runs/matching";
 import { bandWords } from "@/lib/runs/sentences";
@@ -25,7 +25,7 @@ interface Props {
 
 function useCurves({ compared, asked }: Props) {
   return useMemo(() => {
-    const xs = shownFrequencies({ ...asked, availablePowerW: null }, 361);
+    const xs = shownFrequencies(asked, 361);
     const candidates = compared.map(({ elements }) => candidateCurve(elements, asked, xs));
     return { xs: Array.from(xs), alone: candidateCurve([], asked, xs), candidates };
   }, [compared, asked]);

@@ -20,9 +20,11 @@ export function ReturnLossChart({ analysis }: { analysis: Analysis }) {
   const { draft } = useRunEditor();
   const { bandHz, sourceName, loadName, targets, designHz } = draft;
   const limitDb = targets.find((t) => t.quantity === "returnLoss" && t.atLeast !== undefined)?.atLeast ?? null;
-  const xs = Array.from(analysis.sweep.frequencies);
-  const source = plotted(analysis.sourceReturnLossDb);
-  const load = plotted(analysis.loadReturnLossDb);
+  // A screen is not wider than this many points; the worst is found among all of them.
+  const shown = thinned([...analysis.sweep.frequencies.keys()], 1001);
+  const xs = shown.map((i) => analysis.sweep.frequencies[i]!);
+  const source = plotted(shown.map((i) => analysis.sourceReturnLossDb[i]!));
+  const load = plotted(shown.map((i) => analysis.loadReturnLossDb[i]!));
   const worst = analysis.worst.sourceReturnLoss;
   const yDomain = returnLossDomain([source, load], limitDb);
   const summary = `Return loss at ${sourceName} falls to ${digits(worst.value, 1)} dB at ${inWords(frequency(worst.frequencyHz))}${limitDb === null ? "" : `; target ${digits(limitDb, 1)}`}`;

@@ -14,6 +14,10 @@ export interface RunEditor {
   saved: Run;
   draft: RunDraft;
   canEdit: boolean;
+  /** who may own this run, and what this person may do beside editing it */
+  people: RunPeople;
+  /** the run as the server has it after a change that is not an edit: a new owner */
+  replaceSaved: (run: Run) => void;
   /** why not, in a sentence */
   cannotEditBecause: string | null;
   /** @param tag - edits with the same tag in a row are one undo step */
@@ -33,6 +37,12 @@ export interface RunEditor {
   settle: (keep: "mine" | "theirs") => void;
 }
 
+export interface RunPeople {
+  owners: { personId: string; name: string }[];
+  canHandOver: boolean;
+  canComment: boolean;
+}
+
 const Context = createContext<RunEditor | null>(null);
 
 export function useRunEditor(): RunEditor {
@@ -46,11 +56,12 @@ interface Props {
   lines: CableLine[];
   /** why this person may not change this run, null when they may */
   cannotEditBecause: string | null;
+  people: RunPeople;
   children: ReactNode;
 }
 
 /** One run being worked on. It outlives the views, so a change not yet saved survives going from one to the next. */
-export function RunEditorProvider({ run, lines: given, cannotEditBecause, children }: Props) {
+export function RunEditorProvider({ run, lines: given, cannotEditBecause, people, children }: Props) {
   const canEdit = cannotEditBecause === null;
   const [steps, setSteps] = useState(() => history(draftOf(run)));
   const [selected, select] = useState<Selected>(null);
@@ -58,8 +69,11 @@ export function RunEditorProvider({ run, lines: given, cannotEditBecause, childr
   const [lines, setLines] = useState(() => new Map(given.map((line) => [line.cableId, line])));
   const draft = steps.present;
   const isReadable = Object.keys(faults).length === 0;
-  const { saved, saving, isChanged, retry, settle } = useSaving(run, draft, canEdit && isReadable, (theirs) =>
-    setSteps((before) => edited(before, draftOf(theirs), null)),
+  const { saved, saving, isChanged, retry, settle, replaceSaved } = useSaving(
+    run,
+    draft,
+    canEdit && isReadable,
+    (theirs) => setSteps((before) => edited(before, draftOf(theirs), null)),
   );
 
   const setFault = (path: string, fault: Faults[string] | null) =>
@@ -84,6 +98,8 @@ export function RunEditorProvider({ run, lines: given, cannotEditBecause, childr
         saved,
         draft,
         canEdit,
+        people,
+        replaceSaved,
         cannotEditBecause,
         edit,
         undo: steps.past.length > 0 ? go(undone) : null,

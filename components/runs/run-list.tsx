@@ -1,53 +1,95 @@
 "use client";
 
 import { useInfiniteQuery } from "@tanstack/react-query";
-import type { Route } from "next";
-import Link from "next/link";
+import { useState } from "react";
 import { Button, ButtonLink } from "@/components/ui/button";
-import { Figure } from "@/components/ui/figure";
-import { StateMark, type MarkedState } from "@/components/ui/state-mark";
-import { Cell, HeadCell, RowHead, Table } from "@/components/ui/table";
-import { frequency, metres } from "@/lib/format/quantity";
+import { Field } from "@/components/ui/field";
+import { RunRows } from "@/components/runs/run-rows";
+import { Select } from "@/components/ui/select";
 import { call } from "@/lib/http/call";
 import type { RunPage } from "@/lib/runs/query";
-import type { RunItem, RunState } from "@/lib/runs/schema";
-import { bandWords } from "@/lib/runs/sentences";
+import type { RunState } from "@/lib/runs/schema";
 
 interface Props {
   first: RunPage;
   canStart: boolean;
 }
 
-const stateWords: Record<RunState, { mark: MarkedState; word: string }> = {
-  draft: { mark: "none", word: "Draft" },
-  issued: { mark: "pass", word: "Issued" },
-  verified: { mark: "pass", word: "Verified" },
-};
+const stateChoices: { value: RunState | ""; label: string }[] = [
+  { value: "", label: "Every state" },
+  { value: "draft", label: "Draft" },
+  { value: "issued", label: "Issued" },
+  { value: "verified", label: "Verified" },
+];
+
+function address(q: string, state: RunState | "", cursor: string): string {
+  const parameters = new URLSearchParams();
+  if (q.trim()) parameters.set("q", q.trim());
+  if (state) parameters.set("state", state);
+  if (cursor) parameters.set("cursor", cursor);
+  return parameters.size > 0 ? `/runs?${parameters}` : "/runs";
+}
 
 /** The runs of a team, the latest changed first. */
 export function RunList({ first, canStart }: Props) {
+  const [q, setQ] = useState("");
+  const [state, setState] = useState<RunState | "">("");
+  const isWhole = q.trim() === "" && state === "";
   const pages = useInfiniteQuery({
-    queryKey: ["runs"],
-    queryFn: ({ pageParam, signal }) =>
-      call<RunPage>(`/runs${pageParam ? `?cursor=${encodeURIComponent(pageParam)}` : ""}`, { signal }),
+    queryKey: ["runs", "list", q.trim(), state],
+    queryFn: ({ pageParam, signal }) => call<RunPage>(address(q, state, pageParam), { signal }),
     initialPageParam: "",
     getNextPageParam: (page) => page.nextCursor,
-    initialData: { pages: [first], pageParams: [""] },
+    initialData: isWhole ? { pages: [first], pageParams: [""] } : undefined,
+    placeholderData: (before) => before,
     refetchOnMount: "always",
   });
-  const runs = pages.data.pages.flatMap((page) => page.items);
+  const runs = pages.data?.pages.flatMap((page) => page.items) ?? [];
+  const total = pages.data?.pages[0]?.total;
   return (
     <>
-      <div className="flex flex-wrap items-center justify-between gap-3">
-        <h1 className="phone:sr-only">Runs</h1>
+      <div className="flex flex-wrap items-end gap-x-6 gap-y-3">
+        <h1 className="w-50 phone:sr-only">Runs</h1>
+        <Field
+          label="Find a run"
+          isLabelHidden
+          type="search"
+          placeholder="Number, name, site or folder"
+          value={q}
+          maxLength={120}
+          onChange={(event) => setQ(event.target.value)}
+          className="w-80 phone:w-full"
+        />
+        <Select
+          label="State"
+          isLabelHidden
+          value={state}
+          onChange={(event) => setState(event.target.value as RunState | "")}
+          className="w-36"
+        >
+          {stateChoices.map(({ value, label }) => (
+            <option key={value} value={value}>
+              {label}
+            </option>
+          ))}
+        </Select>
+        <p role="status" className="pb-1.5 text-label text-ink-2">
+          {total !== undefined && (
+            <>
+              <b className="figures text-ink">{total}</b> {total === 1 ? "run" : "runs"}
+            </>
+          )}
+        </p>
         {canStart && (
-          <ButtonLink href="/runs/new" kind="main">
+          <ButtonLink href="/runs/new" kind="main" className="ml-auto">
             Start a run
           </ButtonLink>
         )}
       </div>
       {pages.error && <p className="mt-3 text-fail">The list may be old: {pages.error.message}</p>}
-      {runs.length === 0 ? <NoRuns canStart={canStart} /> : <Runs runs={runs} />}
+      {runs.length > 0 && <RunRows runs={runs} />}
+      {total === 0 &&
+        (isWhole ? <NoRuns canStart={canStart} /> : <NoneFound showAll={() => (setQ(""), setState(""))} />)}
       {pages.hasNextPage && (
         <Button
           className="mt-4"
@@ -61,68 +103,14 @@ export function RunList({ first, canStart }: Props) {
   );
 }
 
-function Runs({ runs }: { runs: RunItem[] }) {
+function NoneFound({ showAll }: { showAll: () => void }) {
   return (
-    <Table className="mt-4">
-      <thead className="phone:sr-only">
-        <tr>
-          <HeadCell className="w-16">Sheet</HeadCell>
-          <HeadCell>Run</HeadCell>
-          <HeadCell>Cables</HeadCell>
-          <HeadCell isRight>Length</HeadCell>
-          <HeadCell isRight>Band</HeadCell>
-          <HeadCell className="pl-8">Owner</HeadCell>
-          <HeadCell>State</HeadCell>
-          <HeadCell isRight>Changed</HeadCell>
-        </tr>
-      </thead>
-      <tbody>
-        {runs.map((run) => (
-          <RunRow key={run.id} run={run} />
-        ))}
-      </tbody>
-    </Table>
-  );
-}
-
-function RunRow({ run }: { run: RunItem }) {
-  const { mark, word } = stateWords[run.state];
-  const place = [run.site, run.folder].filter(Boolean).join(" / ");
-  return (
-    <tr className="hover:bg-sailcloth phone:grid phone:grid-cols-[1fr_auto] phone:border-b phone:border-line phone:py-2 [&>*]:phone:border-0 [&>*]:phone:p-0">
-      <Cell className="figures phone:hidden">{run.number}</Cell>
-      <RowHead className="py-2.5">
-        <Link
-          href={`/runs/${run.id}` as Route}
-          className="flared text-row text-ink hover:text-copper phone:flex phone:min-h-11 phone:items-center"
-        >
-          <span className="hidden phone:mr-2 phone:inline">{run.number}</span>
-          <span className="line-clamp-2 break-words">{run.name}</span>
-        </Link>
-        {place && <span className="block text-note text-ink-3">{place}</span>}
-      </RowHead>
-      <Cell className="max-w-80 text-label text-ink-2 phone:col-span-2 phone:row-start-2">
-        {run.cables.join(", ") || "no cable yet"}
-      </Cell>
-      <Cell isRight className="phone:hidden">
-        <Figure {...metres(run.totalLengthM)} />
-      </Cell>
-      <Cell isRight className="phone:hidden">
-        {run.bandHz ? (
-          <span className="figures">{bandWords(run.bandHz)}</span>
-        ) : (
-          <Figure {...frequency(run.designHz)} />
-        )}
-      </Cell>
-      <Cell className="pl-8 phone:hidden">{run.ownerName}</Cell>
-      <Cell>
-        <StateMark state={run.condition ? "warn" : mark}>{word}</StateMark>
-        {run.condition && <span className="block text-note text-ink-3">{run.condition}</span>}
-      </Cell>
-      <Cell isRight className="text-label text-ink-2 phone:hidden">
-        <time dateTime={run.changedAt}>{run.changedAt.slice(0, 10)}</time>
-      </Cell>
-    </tr>
+    <p className="mt-8 text-row">
+      No run fits.{" "}
+      <button type="button" className="link" onClick={showAll}>
+        Show every run
+      </button>
+    </p>
   );
 }
 

@@ -22,6 +22,8 @@ interface UseSaving {
   isChanged: boolean;
   /** save now, for example after trouble */
   retry: () => void;
+  /** the server's run after a change that is not of the draft */
+  replaceSaved: (run: Run) => void;
   /** end a conflict: mine over theirs, or theirs in place of mine */
   settle: (keep: "mine" | "theirs") => void;
 }
@@ -88,7 +90,7 @@ export function useSaving(opened: Run, draft: RunDraft, canSave: boolean, take: 
     setSaving({ kind: "saved" });
   }
 
-  return { saved, saving, isChanged, retry: () => setAttempt((n) => n + 1), settle };
+  return { saved, saving, isChanged, retry: () => setAttempt((n) => n + 1), settle, replaceSaved: setSaved };
 }
 
 function trouble(error: unknown): Saving {

@@ -96,3 +96,21 @@ export const runAssignees = sqliteTable(
     index("run_assignees_by_person").on(table.personId),
   ],
 );
+
+/** What people say about a run. Never changed; what was said stands beside the run's history. */
+export const runComments = sqliteTable(
+  "run_comments",
+  {
+    id: text("id").primaryKey(),
+    runId: text("run_id")
+      .notNull()
+      .references(() => runs.id, { onDelete: "cascade" }),
+    personId: text("person_id")
+      .notNull()
+      .references(() => people.id),
+    /** ISO 8601 */
+    saidAt: text("said_at").notNull(),
+    text: text("text").notNull(),
+  },
+  (table) => [index("run_comments_by_run").on(table.runId, table.saidAt)],
+);

@@ -17,6 +17,12 @@ export const permissions = {
   "runs.readAll": ["designer", "librarian", "admin", "auditor"],
   /** create, change and remove any run of the team */
   "runs.write": ["designer", "librarian", "admin"],
+  /** say something about a run one may see */
+  "runs.comment": ["designer", "librarian", "admin"],
+  /** draft an entry of one's own; take back a draft that was never submitted */
+  "cables.propose": ["designer", "librarian", "admin"],
+  /** take back anybody's draft; hand over anybody's run */
+  "team.tidy": ["librarian", "admin"],
   /** computing, which stores nothing */
   "compute.use": everyone,
   /** one's own sign-in and password */

@@ -1,5 +1,6 @@
 /** What can be asked of `/cables`. */
 import { cablePageSchema, cableQuerySchema } from "@/lib/cables/query";
+import { newCableSchema } from "@/lib/cables/new-cable";
 import { cableSchema } from "@/lib/cables/schema";
 import { operation } from "@/lib/http/operation";
 
@@ -20,4 +21,25 @@ export const readCable = operation({
   summary: "One entry, its current revision whole.",
   permission: "cables.read",
   answer: { status: 200, description: "The entry.", schema: cableSchema },
+});
+
+export const proposeCable = operation({
+  id: "createCable",
+  method: "POST",
+  path: "/cables",
+  summary: "Add an entry as a draft of one's own.",
+  permission: "cables.propose",
+  body: newCableSchema,
+  answer: { status: 201, description: "The draft.", schema: cableSchema },
+  refusals: ["conflict"],
+});
+
+export const takeBackCable = operation({
+  id: "removeCable",
+  method: "DELETE",
+  path: "/cables/{cableId}",
+  summary: "Take back a draft that was never submitted.",
+  permission: "cables.propose",
+  answer: { status: 204, description: "The draft is gone." },
+  refusals: ["conflict"],
 });

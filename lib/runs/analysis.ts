@@ -9,6 +9,7 @@ import { lineFigures } from "@/lib/line/line-figures";
 import { sweep, sweepPrepared, type Sweep } from "@/lib/line/run";
 import { prepareRun } from "@/lib/line/walk";
 import { standingWave, type StandingWave } from "@/lib/line/standing-wave";
+import { pointsFor, shownFrequencies } from "@/lib/runs/shown";
 import { worstIn, type Worst } from "@/lib/runs/worst";
 
 export interface Conditions {
@@ -57,15 +58,6 @@ export interface Analysis {
 }
 
 const loadPlane: Plane = { at: "load" };
-
-/** Frequencies shown: the band and as much again on both sides, with the band's ends among the points. */
-export function shownFrequencies({ designHz, bandHz }: Conditions, points = 1001): Float64Array {
-  const [from, to] = bandHz && bandHz[1] > bandHz[0] ? bandHz : [designHz * 0.98, designHz * 1.02];
-  const third = Math.floor((points - 1) / 3);
-  const step = (to - from) / third;
-  const below = Math.min(third, Math.ceil(from / step) - 1);
-  return Float64Array.from({ length: points }, (_, i) => from + (i - below) * step);
-}
 
 function spotOf(circuit: Circuit, { designHz, temperatureC }: Conditions): { spot: Spot; at: Sweep } {
   const planes: Plane[] = [loadPlane, ...circuit.elements.map((_, beforeElement) => ({ beforeElement }))];
@@ -164,7 +156,11 @@ function waveOf(
  * Analyses a run.
  * @throws RangeError when the circuit is electrically impossible (a source without resistance and no reference …)
  */
-export function analyseRun(circuit: Circuit, conditions: Conditions, points = 1001): Analysis {
+export function analyseRun(
+  circuit: Circuit,
+  conditions: Conditions,
+  points = pointsFor(circuit, conditions),
+): Analysis {
   const { designHz, availablePowerW, temperatureC } = conditions;
   const shown = sweep(circuit, shownFrequencies(conditions, points), { temperatureC, planes: [loadPlane] });
   const { spot, at } = spotOf(circuit, conditions);

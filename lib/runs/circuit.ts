@@ -20,7 +20,7 @@ function linesIn(element: Element): { path: string; line: LineRef }[] {
 }
 
 /** Every reference to the catalogue in a circuit, in order, with its place. */
-export function cableRefsOf(circuit: Circuit): { path: string; ref: CableRef }[] {
+export function cableRefsOf(circuit: Pick<Circuit, "elements">): { path: string; ref: CableRef }[] {
   return circuit.elements.flatMap((element, i) =>
     linesIn(element).flatMap(({ path, line }) =>
       "cableId" in line ? [{ path: `elements.${i}.${path}`, ref: line }] : [],
@@ -48,26 +48,38 @@ function withLines(element: Element, toLine: (ref: LineRef, path: string) => Lin
   return { ...element, branches };
 }
 
+type FindLine = (ref: CableRef) => Line | undefined;
+
 /**
- * The engine's circuit: every reference replaced by its line.
+ * Elements of the engine: every reference replaced by its line.
  * @param findLine - the line of a reference to the catalogue, or undefined when there is none
- * @returns the circuit, or a sentence for every reference that leads nowhere
+ * @returns the elements, or a sentence for every reference that leads nowhere, at its path from the list
  */
-export function resolveCircuit(
-  circuit: Circuit,
-  findLine: (ref: CableRef) => Line | undefined,
-): { circuit: EngineCircuit } | { faults: CircuitFault[] } {
+export function resolveElements(
+  elements: readonly Element[],
+  findLine: FindLine,
+): { elements: EngineElement[] } | { faults: CircuitFault[] } {
   const faults: CircuitFault[] = [];
-  const elements = circuit.elements.map((element, i) =>
+  const resolved = elements.map((element, i) =>
     withLines(element, (ref, path) => {
       if (!("cableId" in ref)) return ref;
       const line = findLine(ref);
       if (line) return line;
-      faults.push({ path: `elements.${i}.${path}`, message: "There is no such cable in the catalogue." });
+      faults.push({ path: `${i}.${path}`, message: "There is no such cable in the catalogue." });
       return { model: { conductors: [], lInfHPerM: Number.NaN, cFPerM: Number.NaN } }; // never leaves here: there is a fault
     }),
   );
-  return faults.length > 0 ? { faults } : { circuit: { ...circuit, elements } };
+  return faults.length > 0 ? { faults } : { elements: resolved };
+}
+
+/** The engine's circuit, as `resolveElements`; paths are from the circuit's root. */
+export function resolveCircuit(
+  circuit: Circuit,
+  findLine: FindLine,
+): { circuit: EngineCircuit } | { faults: CircuitFault[] } {
+  const result = resolveElements(circuit.elements, findLine);
+  if ("elements" in result) return { circuit: { ...circuit, elements: result.elements } };
+  return { faults: result.faults.map((fault) => ({ ...fault, path: `elements.${fault.path}` })) };
 }
 
 function referred({ model, cableId, revision }: Line): LineRef {

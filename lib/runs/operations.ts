@@ -1,5 +1,7 @@
 /** What can be asked of `/runs`. */
 import { operation } from "@/lib/http/operation";
+import { z } from "zod";
+import { commentSchema, commentsSchema, newCommentSchema } from "@/lib/runs/comments/schema";
 import { runPageSchema, runQuerySchema } from "@/lib/runs/query";
 import { newRunSchema, runChangeSchema, runSchema } from "@/lib/runs/schema";
 
@@ -52,5 +54,36 @@ export const removeRun = operation({
   permission: "runs.write",
   needsMatch: true,
   answer: { status: 204, description: "The run is gone." },
+  refusals: ["conflict"],
+});
+
+export const handOverRun = operation({
+  id: "handOverRun",
+  method: "POST",
+  path: "/runs/{runId}/owner",
+  summary: "Give a run another owner. By its owner, a librarian or an admin.",
+  permission: "runs.write",
+  body: z.strictObject({ ownerId: z.string().min(1).max(80) }).meta({ id: "HandOver" }),
+  needsMatch: true,
+  answer: { status: 200, description: "The run as it now stands.", schema: runSchema, hasEntityTag: true },
+});
+
+export const listRunComments = operation({
+  id: "listRunComments",
+  method: "GET",
+  path: "/runs/{runId}/comments",
+  summary: "What was said about a run, oldest first.",
+  permission: "runs.read",
+  answer: { status: 200, description: "The comments.", schema: commentsSchema },
+});
+
+export const addRunComment = operation({
+  id: "addRunComment",
+  method: "POST",
+  path: "/runs/{runId}/comments",
+  summary: "Say something about a run.",
+  permission: "runs.comment",
+  body: newCommentSchema,
+  answer: { status: 201, description: "The comment.", schema: commentSchema },
   refusals: ["conflict"],
 });

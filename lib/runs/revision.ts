@@ -1,4 +1,5 @@
 /** A save told in a sentence. Pure. */
+import { alike } from "@/lib/runs/alike";
 import type { Circuit } from "@/lib/runs/circuit-schema";
 import type { RunChange } from "@/lib/runs/schema";
 
@@ -17,13 +18,11 @@ const named: Record<Exclude<keyof Content, "circuit">, string> = {
   loadName: "the load's name",
 };
 
-const isSame = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b);
-
 function changesInElements(before: Circuit["elements"], after: Circuit["elements"]): string[] {
   const difference = after.length - before.length;
   if (difference > 0) return [difference === 1 ? "one more element" : `${difference} more elements`];
   if (difference < 0) return [difference === -1 ? "one element fewer" : `${-difference} elements fewer`];
-  const changed = after.flatMap((element, i) => (isSame(element, before[i]) ? [] : [i]));
+  const changed = after.flatMap((element, i) => (alike(element, before[i]) ? [] : [i]));
   const [only] = changed;
   if (only === undefined) return [];
   if (changed.length > 1) return [`${changed.length} elements`];
@@ -32,9 +31,9 @@ function changesInElements(before: Circuit["elements"], after: Circuit["elements
 
 function changesInCircuit(before: Circuit, after: Circuit): string[] {
   const changes: string[] = [];
-  if (!isSame(before.source, after.source)) changes.push("the source");
+  if (!alike(before.source, after.source)) changes.push("the source");
   changes.push(...changesInElements(before.elements, after.elements));
-  if (!isSame(before.load, after.load)) changes.push("the load");
+  if (!alike(before.load, after.load)) changes.push("the load");
   if (before.referenceOhm !== after.referenceOhm) changes.push("the reference");
   return changes;
 }
@@ -48,6 +47,6 @@ function enumerate(parts: string[]): string {
 export function saveSentence(before: Content, after: Content): string | undefined {
   const changes = changesInCircuit(before.circuit, after.circuit);
   for (const key of Object.keys(named) as (keyof typeof named)[])
-    if (!isSame(before[key], after[key])) changes.push(named[key]);
+    if (!alike(before[key], after[key])) changes.push(named[key]);
   return changes.length === 0 ? undefined : `Changed ${enumerate(changes)}.`;
 }

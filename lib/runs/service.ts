@@ -55,7 +55,7 @@ export function getRun(actor: Actor, runId: string): Run {
 }
 
 /** Keeps the run as it now stands, whole. */
-function keepRevision(actor: Actor, run: Run, sentence: string): Run {
+export function keepRevision(actor: Actor, run: Run, sentence: string): Run {
   database()
     .insert(runRevisions)
     .values({

@@ -50,7 +50,8 @@ describe("Signing in", () => {
       await refusal(signIn({ email: address, password: "not this one" }, "10.0.0.1"));
       return performance.now() - begin;
     };
-    const quickest = async (address: string) => Math.min(await timed(address), await timed(address), await timed(address));
+    const quickest = async (address: string) =>
+      Math.min(await timed(address), await timed(address), await timed(address));
     // Hashing dominates: without it an answer takes well under a tenth of the time.
     expect(await quickest("nobody@skerry-light.example")).toBeGreaterThan((await quickest(email)) / 4);
   });

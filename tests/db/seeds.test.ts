@@ -41,7 +41,7 @@ describe("The demo", () => {
     expect(everything()).toEqual(before);
   });
 
-  test("It holds twelve people, 25 entries and run R1", () => {
+  test("It holds twelve people, 25 entries and runs R1 and R5", () => {
     expect(database().select().from(people).all()).toHaveLength(12);
     expect(database().select().from(cables).all()).toHaveLength(25);
   });

@@ -1,7 +1,8 @@
 import fc from "fast-check";
 import { expect, test } from "vitest";
 import type { Circuit, Line } from "@/lib/line/element";
-import { analyseRun, shownFrequencies } from "@/lib/runs/analysis";
+import { analyseRun } from "@/lib/runs/analysis";
+import { shownFrequencies } from "@/lib/runs/shown";
 import { maskingSentence, seenFromSource, targetWords } from "@/lib/runs/sentences";
 import { masking, verdicts } from "@/lib/runs/targets";
 import { worstIn } from "@/lib/runs/worst";

@@ -9,6 +9,7 @@ import { runAssignees, runCables, runs } from "@/db/schema/runs";
 import type { Actor } from "@/lib/auth/actor";
 import { may } from "@/lib/auth/permission";
 import { unapprovedStates } from "@/lib/cables/model";
+import type { CableState } from "@/lib/cables/schema";
 
 function isAssigned(actor: Actor): SQL {
   return exists(
@@ -45,4 +46,15 @@ export function readableCables(actor: Actor): SQL | undefined {
   if (may(actor, "cables.readUnapproved")) return knownCables(actor);
   const isOpen = or(notInArray(cableRevisions.state, unapprovedStates), eq(cableRevisions.authorId, actor.personId));
   return and(knownCables(actor), isOpen);
+}
+
+/** `readableCables` for entries that have been read already, once it has found which are known to an installer. */
+export function readableEntries(actor: Actor): (entry: { id: string; state: CableState; authorId: string }) => boolean {
+  if (may(actor, "cables.readUnapproved")) return () => true;
+  const isOpen = (entry: { state: CableState; authorId: string }) =>
+    !unapprovedStates.includes(entry.state) || entry.authorId === actor.personId;
+  if (may(actor, "cables.readCatalogue")) return isOpen;
+  const known = database().select({ id: cables.id }).from(cables).where(knownCables(actor)).all();
+  const ids = new Set(known.map(({ id }) => id));
+  return (entry) => ids.has(entry.id) && isOpen(entry);
 }

@@ -3,6 +3,7 @@ import type { Actor } from "@/lib/auth/actor";
 import { may } from "@/lib/auth/permission";
 import { lineOf, type CableLine } from "@/lib/cables/line";
 import { listReferredCables, listUsableCables } from "@/lib/cables/service";
+import { listPossibleOwners, mayHandOver, type PossibleOwner } from "@/lib/runs/owner/service";
 import { getRun } from "@/lib/runs/service";
 import type { Run } from "@/lib/runs/schema";
 
@@ -11,6 +12,7 @@ export interface OpenedRun {
   lines: CableLine[];
   /** a sentence; null when the run can be changed */
   cannotEditBecause: string | null;
+  people: { owners: PossibleOwner[]; canHandOver: boolean; canComment: boolean };
 }
 
 function refusal(actor: Actor, run: Run): string | null {
@@ -28,5 +30,11 @@ export function openRun(actor: Actor, runId: string): OpenedRun {
   const others = may(actor, "cables.readCatalogue") ? listUsableCables(actor) : [];
   const ids = new Set(pinned.map(({ id }) => id));
   const lines = [...pinned, ...others.filter(({ id }) => !ids.has(id))].map(lineOf);
-  return { run, lines, cannotEditBecause: refusal(actor, run) };
+  const canHandOver = mayHandOver(actor, run);
+  const people = {
+    owners: canHandOver ? listPossibleOwners(actor) : [],
+    canHandOver,
+    canComment: may(actor, "runs.comment"),
+  };
+  return { run, lines, cannotEditBecause: refusal(actor, run), people };
 }

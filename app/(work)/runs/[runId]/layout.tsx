@@ -16,12 +16,18 @@ interface Props {
 export default async function RunLayout({ params, children }: Props) {
   const actor = await currentActor();
   const { runId } = await params;
-  const { run, lines, cannotEditBecause } = found(() => openRun(actor, runId));
+  const { run, lines, cannotEditBecause, people } = found(() => openRun(actor, runId));
   return (
     <>
       <WorkBar signedIn={describeActor(actor)} current="/runs" title={run.name} back="/runs" hasOwnFoot />
       <main id="main" className="page-margin pt-3.5 pb-20">
-        <RunEditorProvider key={`${run.id}`} run={run} lines={lines} cannotEditBecause={cannotEditBecause}>
+        <RunEditorProvider
+          key={`${run.id}`}
+          run={run}
+          lines={lines}
+          cannotEditBecause={cannotEditBecause}
+          people={people}
+        >
           <CursorProvider>{children}</CursorProvider>
         </RunEditorProvider>
       </main>
