@@ -97,7 +97,11 @@ export function matchesAnswer(request: MatchRequest): z.infer<typeof matchesAnsw
       designReturnLossDb: wireNumber(candidate.designReturnLossDb),
       bandwidthHz: wireNumber(candidate.bandwidthHz),
       worstReturnLossDb: wireNumber(candidate.worstReturnLossDb),
+      ...(candidate.worstReturnLossAtLimitsDb !== undefined && {
+        worstReturnLossAtLimitsDb: wireNumber(candidate.worstReturnLossAtLimitsDb),
+      }),
       worstTransducerLossDb: wireNumber(candidate.worstTransducerLossDb),
+      worstMatchLossDb: wireNumber(candidate.worstMatchLossDb),
     })),
     refused,
   };

@@ -126,6 +126,24 @@ export const matchesRequestSchema = z
       .array(z.enum(matchMethods, { error: `A method is one of ${matchMethods.join(", ")}.` }))
       .min(1, { error: "At least one method is needed." })
       .optional(),
+    place: z
+      .strictObject({
+        behind: z
+          .array(elementSchema, { error: "What stands behind must be a list of elements." })
+          .max(maxElements, { error: `At most ${maxElements} elements can stand behind.` })
+          .describe("from the network to the load"),
+      })
+      .optional()
+      .describe("where the network stands: before these elements of the run; without it, at the load"),
+    tolerance: z
+      .strictObject({
+        lengthM: notNegative("The tolerance of a length").optional(),
+        valuePercent: notNegative("The tolerance of a value")
+          .lt(100, { error: "The tolerance of a value is less than 100 %." })
+          .optional(),
+      })
+      .optional()
+      .describe("how well lengths are cut and parts are chosen; each candidate then says what it keeps at its worst"),
     partQ: z
       .strictObject({ coilQ: q("coils"), capacitorQ: q("capacitors") })
       .optional()
@@ -146,11 +164,15 @@ export const matchesAnswerSchema = z
         z.strictObject({
           method: z.enum(matchMethods),
           title: z.string(),
-          elements: z.array(elementSchema).describe("from the target side to the load"),
+          elements: z.array(elementSchema).describe("the network alone, from the target side to the load"),
           designReturnLossDb: figure,
           bandwidthHz: figure.describe("contiguous width around designHz; may exceed the band"),
           worstReturnLossDb: figure,
-          worstTransducerLossDb: figure,
+          worstReturnLossAtLimitsDb: figure
+            .optional()
+            .describe("every length and value at its limits, in every combination; with tolerance only"),
+          worstTransducerLossDb: figure.describe("to the load, through what stands behind the network too"),
+          worstMatchLossDb: figure.describe("available power over the power that leaves the network"),
           totalLengthM: z.number(),
           needs: z.array(z.string()),
           notes: z.array(z.string()),

@@ -9,10 +9,10 @@ import { profileFaults, sweepFaults } from "@/lib/compute/faults";
 import { frequenciesOf } from "@/lib/compute/frequencies";
 import type { lineRequestSchema, MatchesRequest, ProfileRequest, SweepRequest } from "@/lib/compute/schema";
 import { AppError } from "@/lib/http/errors";
-import type { Circuit as EngineCircuit } from "@/lib/line/element";
+import type { Circuit as EngineCircuit, Element as EngineElement } from "@/lib/line/element";
 import type { MatchLine } from "@/lib/line/match/match-request";
-import { cableRefsOf, type CableRef, type CircuitFault, resolveCircuit } from "@/lib/runs/circuit";
-import type { Circuit, LineRef } from "@/lib/runs/circuit-schema";
+import { cableRefsOf, type CableRef, type CircuitFault, resolveElements } from "@/lib/runs/circuit";
+import type { Circuit, Element, LineRef } from "@/lib/runs/circuit-schema";
 
 const mostOfCatalogue = 200;
 
@@ -45,15 +45,20 @@ function lineFinder(actor: Actor, refs: CableRef[]): (ref: CableRef) => MatchLin
   };
 }
 
-function resolved(actor: Actor, circuit: Circuit): EngineCircuit {
+/** @param at - path of the elements in the request */
+function resolved(actor: Actor, elements: Element[], at: string): EngineElement[] {
   const find = lineFinder(
     actor,
-    cableRefsOf(circuit).map(({ ref }) => ref),
+    cableRefsOf({ elements }).map(({ ref }) => ref),
   );
-  const result = resolveCircuit(circuit, find);
-  if ("circuit" in result) return result.circuit;
-  refuse(result.faults.map(({ path, message }) => ({ path: `circuit.${path}.cableId`, message })));
-  throw new Error("resolved: neither a circuit nor a fault");
+  const result = resolveElements(elements, find);
+  if ("elements" in result) return result.elements;
+  refuse(result.faults.map(({ path, message }) => ({ path: `${at}.${path}.cableId`, message })));
+  throw new Error("resolved: neither elements nor a fault");
+}
+
+function resolvedCircuit(actor: Actor, circuit: Circuit): EngineCircuit {
+  return { ...circuit, elements: resolved(actor, circuit.elements, "circuit.elements") };
 }
 
 /** The lines of references outside a circuit, in order. */
@@ -81,14 +86,14 @@ export function computeLine(actor: Actor, request: z.output<typeof lineRequestSc
 
 export function computeSweep(actor: Actor, request: SweepRequest) {
   requirePermission(actor, "compute.use");
-  const circuit = resolved(actor, request.circuit);
+  const circuit = resolvedCircuit(actor, request.circuit);
   refuse(sweepFaults(request.circuit, frequenciesOf(request), request.planes));
   return computed(() => sweepAnswer(circuit, request));
 }
 
 export function computeProfile(actor: Actor, request: ProfileRequest) {
   requirePermission(actor, "compute.use");
-  const circuit = resolved(actor, request.circuit);
+  const circuit = resolvedCircuit(actor, request.circuit);
   refuse(profileFaults(request.circuit, request.frequencyHz));
   return computed(() => profileAnswer(circuit, request));
 }
@@ -112,9 +117,10 @@ function linesToCutFrom(actor: Actor, request: MatchesRequest): MatchLine[] {
 
 export function computeMatches(actor: Actor, request: MatchesRequest) {
   requirePermission(actor, "compute.use");
-  const { load, targetOhm, designHz, bandHz, returnLossDb, methods, partQ, temperatureC } = request;
+  const { load, targetOhm, designHz, bandHz, returnLossDb, methods, partQ, tolerance, temperatureC } = request;
   const lines = linesToCutFrom(actor, request);
   const [feeder] = request.feeder ? linesOf(actor, [{ path: "feeder", ref: request.feeder }]) : [];
-  const asked = { load, targetOhm, designHz, bandHz, returnLossDb, methods, partQ, temperatureC };
-  return computed(() => matchesAnswer({ ...asked, lines, feeder }));
+  const behind = request.place && resolved(actor, request.place.behind, "place.behind");
+  const asked = { load, targetOhm, designHz, bandHz, returnLossDb, methods, partQ, tolerance, temperatureC };
+  return computed(() => matchesAnswer({ ...asked, lines, feeder, behind }));
 }

@@ -39,8 +39,12 @@ export const everyday: MatchRequest = {
   partQ: { coilQ: 120, capacitorQ: 1000 },
 };
 
-export function circuitOf({ targetOhm, load }: MatchRequest, { elements }: Candidate): Circuit {
-  return { source: { kind: "constant", reOhm: targetOhm, imOhm: 0 }, elements, load };
+/** The run of a match: what it is matched to, its network, what stands behind, the load. */
+export function circuitOf(
+  { targetOhm, load, behind = [] }: MatchRequest,
+  { elements }: Pick<Candidate, "elements">,
+): Circuit {
+  return { source: { kind: "constant", reOhm: targetOhm, imOhm: 0 }, elements: [...elements, ...behind], load };
 }
 
 export function lengthsOf({ elements }: Candidate): number[] {

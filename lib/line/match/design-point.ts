@@ -1,12 +1,12 @@
-import { abs, isFinite, type Complex } from "@/lib/line/complex";
+import type { Complex } from "@/lib/line/complex";
 import { propagation } from "@/lib/line/cable";
 import { SPEED_OF_LIGHT } from "@/lib/line/constants";
 import type { Line } from "@/lib/line/element";
-import { reflectionAgainst } from "@/lib/line/match/line-angle";
 import type { MatchLine, MatchRequest } from "@/lib/line/match/match-request";
-import { frequencyText, listText, ohmText } from "@/lib/line/match/wording";
+import { seenLoad, type SeenLoadAt } from "@/lib/line/match/seen-load";
+import { frequencyText, lengthText, listText, ohmText } from "@/lib/line/match/wording";
 import { atTemperature } from "@/lib/line/temperature";
-import { terminationImpedance } from "@/lib/line/termination";
+import { portImpedance } from "@/lib/line/termination";
 
 /** A line at the design frequency and the request's temperature. */
 export interface DesignLine {
@@ -24,31 +24,49 @@ export interface DesignLine {
 /** Everything a method designs with. */
 export interface DesignPoint {
   request: MatchRequest;
+  /** the load, or what the run behind the network shows in its place, ohm */
   load: Complex;
+  seen: SeenLoadAt;
+  words: PlaceWords;
   feeder: DesignLine | undefined;
   isFeederAssumed: boolean;
   lines: DesignLine[];
 }
 
-/** A load whose reflection is within this of 0 or of total cannot or need not be matched (80 dB, 60 dB of loss). */
-const matched = 1e-4;
-const absorbed = 1e-6;
+/** How sentences call what is matched and where. */
+export interface PlaceWords {
+  /** "the load", or the first piece behind the network */
+  place: string;
+  /** what the network sees, after "the" or "this": "load" or "run behind" */
+  matched: string;
+}
 
 /**
  * The load and the lines at the design frequency. Without a feeder, the line whose impedance is nearest to the target
  * takes its place.
- * @throws RangeError when the load is not known there, or a line has no positive resistivity at the temperature
+ * @throws RangeError when the load is not known there, an element behind the network is impossible, or a line has no
+ *   positive resistivity at the temperature
  */
 export function designPoint(request: MatchRequest): DesignPoint {
   const lines = request.lines.map((line) => designLine(line, request));
   const named = request.feeder && designLine(request.feeder, request);
+  const feeder = named ?? nearest(lines, request.targetOhm);
+  const seen = seenLoad(request, request.targetOhm, feeder?.line);
   return {
     request,
-    load: terminationImpedance(request.load, { re: 0, im: 2 * Math.PI * request.designHz }),
-    feeder: named ?? nearest(lines, request.targetOhm),
+    load: portImpedance(seen(request.designHz).port),
+    seen,
+    words: placeWords(request),
+    feeder,
     isFeederAssumed: named === undefined,
     lines,
   };
+}
+
+function placeWords({ behind = [] }: MatchRequest): PlaceWords {
+  const [first] = behind;
+  if (!first) return { place: "the load", matched: "load" };
+  return { place: first.name || "the run behind", matched: "run behind" };
 }
 
 function designLine({ label, ...line }: MatchLine, { designHz, temperatureC = 20 }: MatchRequest): DesignLine {
@@ -73,35 +91,14 @@ function nearest(lines: readonly DesignLine[], ohms: number): DesignLine | undef
   );
 }
 
-/** The sentence that says why no method at all can help; undefined where one may. */
-export function hopeless({ load, request }: DesignPoint): string | undefined {
-  const at = frequencyText(request.designHz);
-  if (!(load.re < Infinity)) return `The load is open at ${at}: it takes no power, so there is nothing to match.`;
-  if (!isFinite(load)) return `The load has no impedance at ${at}.`;
-  const size = abs(reflectionAgainst(load, request.targetOhm));
-  if (size < matched) return `The load already is ${ohmText(request.targetOhm)} at ${at}: nothing to match.`;
-  if (!(load.re > 0) || 1 - size * size < absorbed)
-    return `The load is all but a pure reactance at ${at}: it takes no power, so there is nothing to match.`;
-  return undefined;
+/** Where a network stands: "269 mm from the load", "at J2 mast foot". */
+export function placeText({ words }: DesignPoint, distance: number): string {
+  return distance > 0 ? `${lengthText(distance)} from ${words.place}` : `at ${words.place}`;
 }
 
-/** The frequencies over which the load is known, and those of its own samples. */
-export function knownRange({ load }: MatchRequest): { knownHz: [number, number]; besidesHz: readonly number[] } {
-  if (load.kind !== "sampled") return { knownHz: [0, Infinity], besidesHz: [] };
-  const { frequenciesHz } = load;
-  return {
-    knownHz: [frequenciesHz[0] ?? Infinity, frequenciesHz[frequenciesHz.length - 1] ?? 0],
-    besidesHz: frequenciesHz,
-  };
-}
-
-/** The sentence that says the load's samples do not cover the job; undefined where they do. */
-export function unknownLoad(request: MatchRequest): string | undefined {
-  const { knownHz } = knownRange(request);
-  const asked = [request.designHz, ...request.bandHz];
-  if (asked.every((f) => f >= knownHz[0] && f <= knownHz[1])) return undefined;
-  const range = knownHz.map(frequencyText).join(" to ");
-  return `The load was measured from ${range}, which does not cover the design frequency and the band.`;
+/** The name of the length of feeder between a stub or section and what it matches. */
+export function leadName({ request }: DesignPoint, what: "Stub" | "Section"): string {
+  return request.behind?.length ? `${what} to run` : `${what} to load`;
 }
 
 /** The notes every match made of cable carries: how long the lengths are, and what was assumed. */
@@ -114,7 +111,7 @@ export function lengthNotes(point: DesignPoint, used: readonly DesignLine[]): st
   const feeder = point.feeder;
   if (point.isFeederAssumed && feeder && distinct.includes(feeder))
     notes.push(
-      `No feeder was named: ${feeder.label}, nearest to ${ohmText(point.request.targetOhm)}, is taken from the load on.`,
+      `No feeder was named: ${feeder.label}, nearest to ${ohmText(point.request.targetOhm)}, is taken from ${point.words.place} on.`,
     );
   return notes;
 }

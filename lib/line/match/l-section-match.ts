@@ -36,7 +36,7 @@ export function lSectionMatches(point: DesignPoint): Outcome {
     const standard = standardParts(point, exact);
     if (standard) proposals.push(proposal(point, standard, exact));
   }
-  return { proposals, why: proposals.length === 0 ? reason(request) : "" };
+  return { proposals, why: proposals.length === 0 ? reason(point) : "" };
 }
 
 function partsOf({ topology, shuntSusceptanceS, seriesReactanceOhm }: LSolution, frequency: number): Parts {
@@ -103,11 +103,11 @@ function qOf(part: PartValue, { partQ }: MatchRequest): number | undefined {
   return part.part === "coil" ? partQ?.coilQ : partQ?.capacitorQ;
 }
 
-function reflectionWith({ request }: DesignPoint, parts: Parts): Complex {
-  return reflectionOf(elementsOf(parts, request), request, request.designHz);
+function reflectionWith({ request, seen }: DesignPoint, parts: Parts): Complex {
+  return reflectionOf(elementsOf(parts, request), { ...request, seen }, request.designHz);
 }
 
-function proposal({ request }: DesignPoint, parts: Parts, standardOf?: Parts): Proposal {
+function proposal({ request, words }: DesignPoint, parts: Parts, standardOf?: Parts): Proposal {
   const list = coilsFirst(parts);
   const values = listText(list.map((part) => valueText(part, Boolean(standardOf))));
   const exact = standardOf && listText(coilsFirst(standardOf).map((part) => valueText(part)));
@@ -118,7 +118,7 @@ function proposal({ request }: DesignPoint, parts: Parts, standardOf?: Parts): P
     needs: list.map((part) => needOf(part, request, Boolean(standardOf))),
     notes: [
       ...(exact ? [`Standard E24 values; the exact ones are ${exact}.`] : []),
-      placeNote(parts, Boolean(standardOf)),
+      placeNote(parts, words.place, Boolean(standardOf)),
       ...(list.some((part) => qOf(part, request) === undefined) ? ["A part without a Q is taken as lossless."] : []),
     ],
   };
@@ -148,15 +148,15 @@ function needOf(part: PartValue, request: MatchRequest, isStandard: boolean): st
   return `1 ${part.part} ${valueText(part, isStandard)}${quality}`;
 }
 
-function placeNote({ topology, series, shunt }: Parts, isStandard: boolean): string {
+function placeNote({ topology, series, shunt }: Parts, place: string, isStandard: boolean): string {
   const inSeries = series && `${valueText(series, isStandard)} in series`;
   const across = shunt && `${valueText(shunt, isStandard)} across the line`;
   const [near, far] = topology === "shuntAtLoad" ? [across, inSeries] : [inSeries, across];
-  return `From the load toward the source: ${[near, far].filter((each) => each !== undefined).join(", then ")}.`;
+  return `From ${place} toward the source: ${[near, far].filter((each) => each !== undefined).join(", then ")}.`;
 }
 
-function reason({ partQ, targetOhm }: MatchRequest): string {
+function reason({ request: { partQ, targetOhm }, words }: DesignPoint): string {
   const qs = [partQ?.coilQ && `coils of Q ${partQ.coilQ}`, partQ?.capacitorQ && `capacitors of Q ${partQ.capacitorQ}`];
   const what = listText(qs.filter((each): each is string => Boolean(each)));
-  return `With the loss of ${what || "its parts"}, no two parts bring the load to ${ohmText(targetOhm)}.`;
+  return `With the loss of ${what || "its parts"}, no two parts bring the ${words.matched} to ${ohmText(targetOhm)}.`;
 }

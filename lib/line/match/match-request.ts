@@ -1,5 +1,6 @@
 /** What a matching job is asked with and answered with, the same shapes as `/compute/matches`. */
 import type { Element, Line, Termination } from "@/lib/line/element";
+import type { CutTolerance } from "@/lib/line/match/at-limits";
 
 export const matchMethods = [
   "shuntStub",
@@ -18,6 +19,11 @@ export interface MatchLine extends Line {
 
 export interface MatchRequest {
   load: Termination;
+  /**
+   * what stands between the network and the load, from the network to the load; without any, the network is at the
+   * load. A joint that names no impedance takes the feeder's, as it would in a run
+   */
+  behind?: readonly Element[];
   /** what the match must show toward the source, ohm, above 0 */
   targetOhm: number;
   designHz: number;
@@ -25,7 +31,7 @@ export interface MatchRequest {
   bandHz: readonly [number, number];
   /** asked over the band, dB, above 0 */
   returnLossDb: number;
-  /** the line between load and network; without one, the line nearest to the target is taken and the notes say so */
+  /** the line between load (or what stands behind) and network; without one, the line nearest to the target is taken and the notes say so */
   feeder?: MatchLine;
   /** for stubs and sections */
   lines: readonly MatchLine[];
@@ -33,6 +39,8 @@ export interface MatchRequest {
   methods?: readonly MatchMethod[];
   /** Q of the parts at the design frequency, above 0; a part without one is taken as lossless */
   partQ?: { coilQ?: number; capacitorQ?: number };
+  /** how well the match will be made; with it each candidate says what it keeps at its worst */
+  tolerance?: CutTolerance;
   /** default 20 */
   temperatureC?: number;
 }
@@ -41,7 +49,7 @@ export interface Candidate {
   method: MatchMethod;
   /** what it is, up to the first comma; then its lengths or values */
   title: string;
-  /** from the target side to the load */
+  /** the network alone, from the target side to the load */
   elements: Element[];
   /** at the design frequency; null for an exact match (180 dB and more, where only rounding is left) */
   designReturnLossDb: number | null;
@@ -49,8 +57,12 @@ export interface Candidate {
   bandwidthHz: number;
   /** least over the band; null for a perfect match throughout */
   worstReturnLossDb: number | null;
+  /** least over the band with every length and value at its worst limits; only where a tolerance is asked for */
+  worstReturnLossAtLimitsDb?: number | null;
   /** available source power over power in the load, most over the band; null where no power arrives */
   worstTransducerLossDb: number | null;
+  /** the same over the power that leaves the network; that of `worstTransducerLossDb` where the network is at the load */
+  worstMatchLossDb: number | null;
   /** cable to cut, metres, each of paralleled lengths counted */
   totalLengthM: number;
   needs: string[];

@@ -1,6 +1,6 @@
 import { abs, type Complex } from "@/lib/line/complex";
 import type { Element } from "@/lib/line/element";
-import { lengthNotes, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
+import { leadName, lengthNotes, placeText, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
 import { realPoints, sectionImpedance } from "@/lib/line/match/quarter-wave";
 import { along, loadPair } from "@/lib/line/match/pair";
@@ -72,10 +72,10 @@ function proposal(point: DesignPoint, feeder: DesignLine, { line, distance, need
   const build = (lengthM: number): Element[] => [
     { kind: "cable", name: "Quarter-wave section", line: line.line, lengthM },
     ...(distance > 0
-      ? [{ kind: "cable" as const, name: "Section to load", line: feeder.line, lengthM: distance }]
+      ? [{ kind: "cable" as const, name: leadName(point, "Section"), line: feeder.line, lengthM: distance }]
       : []),
   ];
-  const where = distance > 0 ? `${lengthText(distance)} from the load` : "at the load";
+  const where = placeText(point, distance);
   return {
     method: "quarterWave",
     title: `Quarter-wave section, ${lengthText(length)} of ${line.label} ${where}`,
@@ -83,7 +83,7 @@ function proposal(point: DesignPoint, feeder: DesignLine, { line, distance, need
     needs: [
       "2 joints",
       `${lengthText(length)} of ${line.label} for the section`,
-      ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to the load`] : []),
+      ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to ${point.words.place}`] : []),
     ],
     notes: [
       `An exact section here would be ${ohmText(neededOhm)}; ${line.label} is ${ohmText(line.zc.re)}.`,
@@ -94,10 +94,7 @@ function proposal(point: DesignPoint, feeder: DesignLine, { line, distance, need
 }
 
 function reason(point: DesignPoint, places: Place[], tries: Try[]): string {
-  const needed = places.map(
-    (each) =>
-      `${ohmText(each.neededOhm)} ${each.distance > 0 ? `${lengthText(each.distance)} from the load` : "at the load"}`,
-  );
+  const needed = places.map((each) => `${ohmText(each.neededOhm)} ${placeText(point, each.distance)}`);
   const best = tries.reduce((a, b) => (b.returnLossDb > a.returnLossDb ? b : a));
   return `A quarter-wave section needs ${listText(needed, "or")}; of the lines given, ${best.line.label} of ${ohmText(best.line.zc.re)} comes nearest and reaches ${decibelText(best.returnLossDb)}, not ${decibelText(point.request.returnLossDb)}.`;
 }

@@ -1,5 +1,5 @@
 import type { Element } from "@/lib/line/element";
-import { lengthNotes, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
+import { leadName, lengthNotes, placeText, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
 import { realPoints, sectionImpedance } from "@/lib/line/match/quarter-wave";
 import { seriesSection } from "@/lib/line/match/series-section";
@@ -69,11 +69,11 @@ function proposal(
   const build = (lengthM: number): Element[] => [
     { kind: "cable", name: "Section", line: line.line, lengthM, ...(count > 1 ? { paralleled: count } : {}) },
     ...(distance > 0
-      ? [{ kind: "cable" as const, name: "Section to load", line: feeder.line, lengthM: distance }]
+      ? [{ kind: "cable" as const, name: leadName(point, "Section"), line: feeder.line, lengthM: distance }]
       : []),
   ];
   const kind = count > 1 ? `${countWord(count)} cables in parallel` : "Series section";
-  const where = distance > 0 ? `${lengthText(distance)} from the load` : "at the load";
+  const where = placeText(point, distance);
   return {
     method: count > 1 ? "parallelCables" : "seriesSection",
     title: `${kind}, ${lengthText(length)} of ${line.label} ${where}`,
@@ -81,7 +81,7 @@ function proposal(
     needs: [
       count > 1 ? `2 junctions of ${count} cables` : "2 joints",
       `${count > 1 ? `${count} × ` : ""}${lengthText(length)} of ${line.label} for the section`,
-      ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to the load`] : []),
+      ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to ${point.words.place}`] : []),
     ],
     notes: [
       ...lengthNotes(point, distance > 0 ? [line, feeder] : [line]),
@@ -96,19 +96,20 @@ function proposal(
  * the target itself lies beyond those points.
  */
 function reason(point: DesignPoint, feeder: DesignLine, counts: number[]): string {
-  const { load, lines, request } = point;
+  const { load, lines, request, words } = point;
   const target = ohmText(request.targetOhm);
   if (lines.some((line) => counts.some((count) => closedForm(point, feeder, line.zc.re / count).length > 0)))
-    return `The loss of ${listText(lines.map((line) => line.label))} leaves no pair of lengths under a half wave that brings the load to ${target}.`;
+    return `The loss of ${listText(lines.map((line) => line.label))} leaves no pair of lengths under a half wave that brings the ${words.matched} to ${target}.`;
   const points = realPoints(load, feeder.zc.re);
-  if (points.length === 0) return `On ${feeder.label} the load shows no reflection that a section could turn.`;
+  if (points.length === 0)
+    return `On ${feeder.label} the ${words.matched} shows no reflection that a section could turn.`;
   const resistances = points.map((each) => each.resistanceOhm);
   const [low, high] = span(resistances.map((each) => sectionImpedance(request.targetOhm, each))).map(ohmText);
   const [least, most] = span(resistances);
   const isBetween = request.targetOhm < least || request.targetOhm > most;
   const needed = isBetween ? `between ${low} and ${high}` : `of at most ${low} or at least ${high}`;
   const have = span(lines.flatMap((line) => counts.map((count) => line.zc.re / count))).map(ohmText);
-  return `With ${feeder.label} of ${ohmText(feeder.zc.re)} this load needs a section ${needed}; ${counts[0] === 1 ? "the lines" : "two to four lengths of the lines"} given are ${[...new Set(have)].join(" to ")}.`;
+  return `With ${feeder.label} of ${ohmText(feeder.zc.re)} this ${words.matched} needs a section ${needed}; ${counts[0] === 1 ? "the lines" : "two to four lengths of the lines"} given are ${[...new Set(have)].join(" to ")}.`;
 }
 
 function span(values: number[]): [number, number] {

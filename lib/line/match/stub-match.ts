@@ -1,5 +1,5 @@
 import type { Element } from "@/lib/line/element";
-import { lengthNotes, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
+import { leadName, lengthNotes, placeText, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
 import { singleStub, type StubEnd } from "@/lib/line/match/single-stub";
 import { along, loadPair, stubPair, withBranch, withLossShare } from "@/lib/line/match/pair";
@@ -61,15 +61,17 @@ function proposal(
 ): Proposal {
   const build = (lengthM: number): Element[] => [
     { kind: "stub", name: "Stub", connection, end, line: stub.line, lengthM },
-    ...(distance > 0 ? [{ kind: "cable" as const, name: "Stub to load", line: feeder.line, lengthM: distance }] : []),
+    ...(distance > 0
+      ? [{ kind: "cable" as const, name: leadName(point, "Stub"), line: feeder.line, lengthM: distance }]
+      : []),
   ];
   const kind = `${end === "short" ? "Shorted" : "Open"} stub${connection === "series" ? " in series" : ""}`;
-  const where = distance > 0 ? `${lengthText(distance)} from the load` : "at the load";
+  const where = placeText(point, distance);
   return {
     method: connection === "shunt" ? "shuntStub" : "seriesStub",
     title: `${kind}, ${lengthText(length)} of ${stub.label} ${where}`,
     elements: build(length),
-    needs: needs(feeder, stub, connection, end, distance, length),
+    needs: needs(point, feeder, stub, connection, end, distance, length),
     notes: [
       ...lengthNotes(point, distance > 0 ? [stub, feeder] : [stub]),
       ...trimNotes(point, "stub", build, length),
@@ -81,6 +83,7 @@ function proposal(
 }
 
 function needs(
+  { words }: DesignPoint,
   feeder: DesignLine,
   stub: DesignLine,
   connection: Connection,
@@ -92,7 +95,7 @@ function needs(
     connection === "shunt" ? "1 tee" : "1 series joint, insulated",
     end === "short" ? "1 soldered short" : "1 insulated open end",
     `${lengthText(length)} of ${stub.label} for the stub`,
-    ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to the load`] : []),
+    ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to ${words.place}`] : []),
   ];
 }
 
@@ -101,8 +104,8 @@ function reason(point: DesignPoint, feeder: DesignLine, connection: Connection):
   const isReached = closedForm(point, feeder, feeder.zc.re, connection, "short").length > 0;
   if (!isReached) {
     const quantity = connection === "shunt" ? "conductance" : "resistance";
-    return `With this load, ${feeder.label} of ${ohmText(feeder.zc.re)} nowhere shows the ${quantity} of ${target}, so a stub cannot complete it.`;
+    return `With this ${point.words.matched}, ${feeder.label} of ${ohmText(feeder.zc.re)} nowhere shows the ${quantity} of ${target}, so a stub cannot complete it.`;
   }
   const names = listText(point.lines.map((line) => line.label));
-  return `With the loss of ${names}, no pair of lengths under a half wave brings the load to ${target}.`;
+  return `With the loss of ${names}, no pair of lengths under a half wave brings the ${point.words.matched} to ${target}.`;
 }

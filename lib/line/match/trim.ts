@@ -1,6 +1,7 @@
 import type { Element } from "@/lib/line/element";
-import { knownRange, type DesignPoint } from "@/lib/line/match/design-point";
+import type { DesignPoint } from "@/lib/line/match/design-point";
 import { reflectionOf } from "@/lib/line/match/response";
+import { knownRange } from "@/lib/line/match/seen-load";
 import { figure, lengthText } from "@/lib/line/match/wording";
 
 /** Fraction of the design frequency over which the reflection's slope is taken. */
@@ -13,16 +14,17 @@ const beside = 1e-5;
  * @returns undefined where the reflection does not depend on frequency
  */
 function trimSlope(
-  point: DesignPoint,
+  { request, seen }: DesignPoint,
   build: (length: number) => Element[],
   length: number,
 ): number | undefined {
-  const { designHz } = point.request;
+  const { designHz } = request;
+  const ends = { ...request, seen };
   const [df, dl] = [beside * designHz, 1e-4 * length];
-  const up = reflectionOf(build(length), point.request, designHz + df);
-  const down = reflectionOf(build(length), point.request, designHz - df);
-  const long = reflectionOf(build(length + dl), point.request, designHz);
-  const short = reflectionOf(build(length - dl), point.request, designHz);
+  const up = reflectionOf(build(length), ends, designHz + df);
+  const down = reflectionOf(build(length), ends, designHz - df);
+  const long = reflectionOf(build(length + dl), ends, designHz);
+  const short = reflectionOf(build(length - dl), ends, designHz);
   const byF = { re: (up.re - down.re) / (2 * df), im: (up.im - down.im) / (2 * df) };
   const byL = { re: (long.re - short.re) / (2 * dl), im: (long.im - short.im) / (2 * dl) };
   const size = byF.re * byF.re + byF.im * byF.im;

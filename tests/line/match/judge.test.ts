@@ -1,12 +1,25 @@
 import { expect, test } from "vitest";
 import type { Element, Termination } from "@/lib/line/element";
-import { judge, type Band } from "@/lib/line/match/judge";
+import type { Band } from "@/lib/line/match/extreme";
+import { judge } from "@/lib/line/match/judge";
 import { responder } from "@/lib/line/match/response";
+import { seenLoad } from "@/lib/line/match/seen-load";
 import { sweep } from "@/lib/line/run";
 import { c50F10 } from "@/tests/support/match-lines";
 
-const band: Band = { designHz: 100, bandHz: [90, 110], returnLossDb: 20, knownHz: [0, Infinity], besidesHz: [] };
-const constantLoss = (magnitude: (f: number) => number) => (f: number) => ({ magnitude: magnitude(f), lossDb: 0 });
+const band: Band = {
+  designHz: 100,
+  bandHz: [90, 110],
+  returnLossDb: 20,
+  knownHz: [0, Infinity],
+  besidesHz: [],
+  rippleHz: Infinity,
+};
+const constantLoss = (magnitude: (f: number) => number) => (f: number) => ({
+  magnitude: magnitude(f),
+  lossDb: 0,
+  matchLossDb: 0,
+});
 
 test("the bandwidth is the distance between the two crossings of the asked return loss, to a part in 10⁹", () => {
   // |Γ| = 0.01·|f − 100| + 0.02 reaches 0.1 at 92 and 108.
@@ -54,9 +67,16 @@ test("a match that never fails is said to be at least as wide as was looked for,
 
 test("the worst figures are the true extremes, not the nearest sample", () => {
   const peak = 97.123456;
-  const verdict = judge((f) => ({ magnitude: 0.3 - ((f - peak) / 30) ** 2, lossDb: 1 - ((f - peak) / 10) ** 2 }), band);
+  const below = (f: number, width: number) => ((f - peak) / width) ** 2;
+  const respond = (f: number) => ({
+    magnitude: 0.3 - below(f, 30),
+    lossDb: 1 - below(f, 10),
+    matchLossDb: 0.4 - below(f, 20),
+  });
+  const verdict = judge(respond, band);
   expect(verdict.worstReturnLossDb).toBeCloseTo(-20 * Math.log10(0.3), 9);
   expect(verdict.worstTransducerLossDb).toBeCloseTo(1, 9);
+  expect(verdict.worstMatchLossDb).toBeCloseTo(0.4, 9);
 });
 
 test("a narrow peak at a sample of the load is seen although it falls between the even samples", () => {
@@ -65,6 +85,19 @@ test("a narrow peak at a sample of the load is seen although it falls between th
   const seeing = judge(constantLoss(magnitude), { ...band, besidesHz: [95.017] });
   expect(blind.worstReturnLossDb).toBeCloseTo(-20 * Math.log10(0.05), 9);
   expect(seeing.worstReturnLossDb).toBeCloseTo(-20 * Math.log10(0.9), 9);
+});
+
+test("ripples of a long run behind are neither missed in the band nor stepped over by the bandwidth", () => {
+  // One narrow bump every 0.5 Hz: 20 % of a ripple wide, and the even samples of the band fall beside all of them.
+  const bump = (f: number) => {
+    const beside = Math.abs(((f - 99.9) / 0.5) % 1);
+    return Math.min(beside, 1 - beside) < 0.1 ? 0.2 : 0.05;
+  };
+  const coarse = judge(constantLoss(bump), { ...band, bandHz: [90.15, 110.15], rippleHz: Infinity });
+  const fine = judge(constantLoss(bump), { ...band, bandHz: [90.15, 110.15], rippleHz: 0.5 });
+  expect(fine.worstReturnLossDb).toBeCloseTo(-20 * Math.log10(0.2), 9);
+  expect(fine.bandwidthHz).toBeLessThan(0.5);
+  expect(coarse.bandwidthHz).toBeGreaterThan(100);
 });
 
 test("a band of one frequency is judged there", () => {
@@ -99,20 +132,22 @@ const scenario: Band = {
   returnLossDb: 20 * Math.log10(5),
   knownHz: [25.2e6, 29.2e6],
   besidesHz: [],
+  rippleHz: Infinity,
 };
 
 test("the VSWR 1.5 bandwidth of the scenario's L-section reads 1189 kHz at the antenna and 1420 kHz at the transmitter", () => {
-  const atAntenna = judge(responder(network, antenna(), 50), scenario);
+  const seen = seenLoad({ load: antenna() }, 50);
+  const atAntenna = judge(responder(network, { seen, targetOhm: 50 }), scenario);
   expect(Math.abs(atAntenna.bandwidthHz / 1e3 - 1189)).toBeLessThan(1);
   const feeder: Element = { kind: "cable", line: c50F10, lengthM: 36 };
-  const atTransmitter = judge(responder([feeder, ...network], antenna(), 50), scenario);
+  const atTransmitter = judge(responder([feeder, ...network], { seen, targetOhm: 50 }), scenario);
   expect(Math.abs(atTransmitter.bandwidthHz / 1e3 - 1420)).toBeLessThan(1);
 });
 
-test("responder(elements, load, target) gives the sweep's own reflection and transducer loss", () => {
+test("responder(elements, ends) gives the sweep's own reflection and transducer loss", () => {
   const elements: Element[] = [{ kind: "cable", line: c50F10, lengthM: 36 }, ...network];
   const load = antenna();
-  const respond = responder(elements, load, 50, 40);
+  const respond = responder(elements, { seen: seenLoad({ load }, 50), targetOhm: 50, temperatureC: 40 });
   const frequencies = [26.4e6, 27.2e6, 28.1e6];
   const source = { kind: "constant", reOhm: 50, imOhm: 0 } as const;
   const { returnLossDb, transducerLossDb } = sweep({ source, elements, load }, frequencies, { temperatureC: 40 });

@@ -12,6 +12,7 @@ function candidate(title: string, figures: Partial<Candidate>): Candidate {
     bandwidthHz: 1e6,
     worstReturnLossDb: 20,
     worstTransducerLossDb: 0.1,
+    worstMatchLossDb: 0.1,
     totalLengthM: 1,
     needs: [],
     notes: [],
