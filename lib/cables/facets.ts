@@ -1,5 +1,5 @@
 /** How many entries each value of a filter has under all the other filters. Pure. */
-import type { Candidate, FilterName } from "@/lib/cables/filter";
+import type { Candidate, Sifted } from "@/lib/cables/filter";
 import type { Facets } from "@/lib/cables/query";
 
 const mostBins = 12;
@@ -16,16 +16,21 @@ function binWidth(span: number): number {
 /** Edges lie a quarter of a bin beside the round numbers: nominal values are round, and real ones a hair to either side. */
 const edgeShift = 0.25;
 
+type Values = readonly number[] | Float64Array;
+
 /**
  * Counts values in bins of equal width. The bins cover `range`, not only what is counted, so that they stay where they
  * are while other filters move.
  * @param range - every value there is, none below 0; the lowest and the highest give the ends
  * @param counted - the values to count
  */
-export function histogram(range: number[], counted: number[]): { from: number; to: number; count: number }[] {
+export function histogram(range: Values, counted: Values): { from: number; to: number; count: number }[] {
   if (range.length === 0) return [];
-  const low = range.reduce((a, b) => Math.min(a, b));
-  const high = range.reduce((a, b) => Math.max(a, b));
+  let [low, high] = [Infinity, 0];
+  for (const value of range) {
+    low = Math.min(low, value);
+    high = Math.max(high, value);
+  }
   // Values that differ by rounding only are one value: bins much finer than that would say nothing.
   const width = binWidth(Math.max(high - low, high * finestShare) || 1);
   const place = (value: number) => Math.floor(value / width - edgeShift);
@@ -44,29 +49,39 @@ export function histogram(range: number[], counted: number[]): { from: number; t
   return bins;
 }
 
-function tally<T extends string>(values: T[]): { value: T; count: number }[] {
-  const counts = new Map<T, number>();
-  for (const value of values) counts.set(value, (counts.get(value) ?? 0) + 1);
+function tally<T extends string>(counts: Map<T, number>): { value: T; count: number }[] {
   return [...counts].map(([value, count]) => ({ value, count })).sort((a, b) => (a.value < b.value ? -1 : 1));
 }
 
-const present = (values: (number | null)[]) => values.filter((value) => value !== null);
+type Measure = "z0Ohm" | "velocityFactor" | "lossDbPer100m" | "outerDiameterMm";
 
 /** @param entries - all that the search found and the person may see, before any filter */
-export function facetsOf(entries: Candidate[], filters: Record<FilterName, (entry: Candidate) => boolean>): Facets {
-  const names = Object.keys(filters) as FilterName[];
-  const under = (left: FilterName) => {
-    const kept = names.filter((name) => name !== left).map((name) => filters[name]);
-    return entries.filter((entry) => kept.every((passes) => passes(entry)));
+export function facetsOf(entries: readonly Candidate[], { passing, keptOutBy }: Sifted): Facets {
+  const numeric = (name: Measure) => histogram(values(name, entries), values(name, passing, keptOutBy[name] ?? []));
+  const words = <Name extends "family" | "state">(name: Name) => {
+    const counts = new Map<Candidate[Name], number>();
+    for (const list of [passing, keptOutBy[name] ?? []])
+      for (const entry of list) counts.set(entry[name], (counts.get(entry[name]) ?? 0) + 1);
+    return tally(counts);
   };
-  const numeric = (name: "z0Ohm" | "velocityFactor" | "lossDbPer100m" | "outerDiameterMm") =>
-    histogram(present(entries.map((entry) => entry[name])), present(under(name).map((entry) => entry[name])));
   return {
     z0Ohm: numeric("z0Ohm"),
     velocityFactor: numeric("velocityFactor"),
     lossDbPer100m: numeric("lossDbPer100m"),
     outerDiameterMm: numeric("outerDiameterMm"),
-    family: tally(under("family").map((entry) => entry.family)),
-    state: tally(under("state").map((entry) => entry.state)),
+    family: words("family"),
+    state: words("state"),
   };
+}
+
+/** The values that are there, of several lists one after another. */
+function values(name: Measure, ...lists: (readonly Candidate[])[]): Float64Array {
+  const there = new Float64Array(lists.reduce((sum, list) => sum + list.length, 0));
+  let count = 0;
+  for (const list of lists)
+    for (const entry of list) {
+      const value = entry[name];
+      if (value !== null) there[count++] = value;
+    }
+  return there.subarray(0, count);
 }

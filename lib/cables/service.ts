@@ -6,13 +6,14 @@ import type { Actor } from "@/lib/auth/actor";
 import { may, requirePermission } from "@/lib/auth/permission";
 import { knownCables, readableCables } from "@/lib/auth/visibility/service";
 import { facetsOf } from "@/lib/cables/facets";
-import { type Candidate, comparePlaces, filters, sortAsked, sortValue } from "@/lib/cables/filter";
+import { type Candidate, filters, sift } from "@/lib/cables/filter";
 import { unapprovedStates } from "@/lib/cables/model";
+import { firstInOrder, sortAsked, sortedBy } from "@/lib/cables/order";
 import type { CablePage, CableQuery } from "@/lib/cables/query";
 import { currentRevision, listItems, selectWhole, toCable } from "@/lib/cables/rows/service";
 import type { Cable, CableState } from "@/lib/cables/schema";
 import { loosenings } from "@/lib/cables/search/loosen";
-import { listCandidates, readSearchIn } from "@/lib/cables/search/service";
+import { findCandidates, readSearchIn } from "@/lib/cables/search/service";
 import { AppError } from "@/lib/http/errors";
 import { defaultLimit, encodeCursor } from "@/lib/http/list";
 
@@ -92,32 +93,32 @@ export function listDesignations(actor: Actor, ids: string[]): Map<string, strin
 export function listCables(actor: Actor, query: CableQuery): CablePage {
   requirePermission(actor, "cables.read");
   const reading = readSearchIn(actor, query.q, query.exact ?? false);
-  const entries = listCandidates(actor, reading, query.lossAtHz);
+  const { entries, relevance } = findCandidates(actor, reading, query.lossAtHz);
   // Whoever sees the catalogue is shown what may be used; an installer, what was used.
   const defaultStates: CableState[] | undefined = may(actor, "cables.readCatalogue") ? ["approved"] : undefined;
-  const passes = filters(query, defaultStates);
-  const { key, isReversed } = sortAsked(query);
-  const isPassing = (entry: Candidate) => Object.values(passes).every((isPassed) => isPassed(entry));
-  const passing = entries
-    .filter(isPassing)
-    .map((entry) => ({ entry, place: { key: sortValue(entry, key), id: entry.id } }))
-    .sort((a, b) => comparePlaces(a.place, b.place, isReversed));
-  const { cursor } = query;
-  const rest = cursor ? passing.filter(({ place }) => comparePlaces(place, cursor, isReversed) > 0) : passing;
-  const page = rest.slice(0, query.limit ?? defaultLimit);
-  const last = page.at(-1);
+  const asked = filters(query, defaultStates);
+  const sifted = sift(entries, asked);
+  const { items, nextCursor } = pageOf(sifted.passing, query, relevance);
   return {
-    items: listItems(
-      actor,
-      page.map(({ entry }) => entry),
-    ),
-    nextCursor: last && rest.length > page.length ? encodeCursor(last.place) : null,
-    total: passing.length,
+    items: listItems(actor, items),
+    nextCursor,
+    total: sifted.passing.length,
     ...(reading && { readAs: reading.text, corrected: reading.corrected }),
     ...(reading &&
-      passing.length === 0 && {
-        loosenings: loosenings(reading, (less) => listCandidates(actor, less, query.lossAtHz).filter(isPassing).length),
+      sifted.passing.length === 0 && {
+        loosenings: loosenings(
+          reading,
+          (less) => sift(findCandidates(actor, less, query.lossAtHz).entries, asked).passing.length,
+        ),
       }),
-    ...(query.facets && { facets: facetsOf(entries, passes) }),
+    ...(query.facets && { facets: facetsOf(entries, sifted) }),
   };
+}
+
+/** Of what passed, the page a query asks for. */
+function pageOf(passing: Candidate[], query: CableQuery, relevance: (entry: Candidate) => number) {
+  const { key, isReversed } = sortAsked(query);
+  const wanted = { after: query.cursor, most: query.limit ?? defaultLimit };
+  const { items, count, last } = firstInOrder(passing, sortedBy(key, relevance), isReversed, wanted);
+  return { items, nextCursor: last && count > items.length ? encodeCursor(last) : null };
 }

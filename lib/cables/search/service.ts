@@ -1,15 +1,21 @@
 /** Finding entries by text: how a search is read in the team's own words, and what the full-text table finds for it. */
-import { and, eq, type SQL, sql } from "drizzle-orm";
+import { eq, sql } from "drizzle-orm";
 import { database } from "@/db/client";
 import { cableRevisions, cables } from "@/db/schema/cables";
 import { teams } from "@/db/schema/team";
 import type { Actor } from "@/lib/auth/actor";
-import { readableCables } from "@/lib/auth/visibility/service";
+import { readableEntries } from "@/lib/auth/visibility/service";
+import { listFacts } from "@/lib/cables/facts/service";
 import type { Candidate } from "@/lib/cables/filter";
-import { lossDbPer100m } from "@/lib/cables/model";
-import { matchExpression, readSearch, type SearchReading, type Vocabulary, vocabulary } from "@/lib/cables/read-search";
+import {
+  matchExpression,
+  type RangeQuantity,
+  readSearch,
+  type SearchReading,
+  type Vocabulary,
+  vocabulary,
+} from "@/lib/cables/read-search";
 import { currentRevision } from "@/lib/cables/rows/service";
-import type { LineModel } from "@/lib/line/element";
 
 // The vocabulary of each team, good as long as no word of its catalogue has changed.
 const vocabularies = new Map<string, { wordsVersion: number; words: Vocabulary }>();
@@ -36,52 +42,51 @@ export function readSearchIn(actor: Actor, text: string | undefined, isExact: bo
   return text ? readSearch(text, vocabularyOf(actor.teamId), isExact) : undefined;
 }
 
-const ranged = {
-  z0Ohm: sql`${cableRevisions.z0Ohm}`,
-  outerDiameterMm: sql`${cableRevisions.outerDiameterMm}`,
-  velocityFactor: sql`${cableRevisions.velocityFactor}`,
-  capacitancePfPerM: sql`${cableRevisions.capacitanceFPerM} * 1e12`,
+const ranged: Record<RangeQuantity, (entry: Candidate) => number | null> = {
+  z0Ohm: (entry) => entry.z0Ohm,
+  outerDiameterMm: (entry) => entry.outerDiameterMm,
+  velocityFactor: (entry) => entry.velocityFactor,
+  capacitancePfPerM: (entry) => entry.capacitanceFPerM * 1e12,
 };
 
-function withinRanges(reading: SearchReading | undefined): SQL | undefined {
-  const conditions = reading?.terms.flatMap((term) =>
-    term.kind === "range" ? [sql`${ranged[term.quantity]} between ${term.from} and ${term.to}`] : [],
-  );
-  return and(...(conditions ?? []));
+function isWithinRanges(reading: SearchReading, entry: Candidate): boolean {
+  return reading.terms.every((term) => {
+    if (term.kind === "word") return true;
+    const value = ranged[term.quantity](entry);
+    return value !== null && value >= term.from && value <= term.to;
+  });
 }
 
-const onItsRevision = sql`cable_search.cable_id = ${cables.id} and cable_search.revision = ${cables.currentRevision}`;
+/** How well entries fit the words of a search, by id; undefined when it has no words. */
+function fits(teamId: string, reading: SearchReading, entries: readonly Candidate[]): Map<string, number> | undefined {
+  const match = matchExpression(teamId.replaceAll("-", ""), reading.terms);
+  if (match === null) return undefined;
+  // bm25 is negative, and the more so the better
+  const rows = database().all<{ id: string; revision: number; fit: number }>(
+    sql`select cable_id as id, revision, -bm25(cable_search) as fit from cable_search where cable_search match ${match}`,
+  );
+  const revisions = new Map(entries.map((entry) => [entry.id, entry.revision]));
+  const found = new Map<string, number>();
+  for (const { id, revision, fit } of rows) if (revisions.get(id) === revision) found.set(id, fit);
+  return found;
+}
+
+export interface Found {
+  /** by designation */
+  entries: readonly Candidate[];
+  /** the more, the better an entry fits the search; 0 without words */
+  relevance: (entry: Candidate) => number;
+}
 
 /**
  * The entries that the actor may read and the search finds, with what they are filtered and sorted by.
  * @param lossAtHz - frequency for the loss, hertz; the loss is null without it
  */
-export function listCandidates(
-  actor: Actor,
-  reading: SearchReading | undefined,
-  lossAtHz: number | undefined,
-): Candidate[] {
-  const match = reading ? matchExpression(actor.teamId.replaceAll("-", ""), reading.terms) : null;
-  const columns = {
-    id: cables.id,
-    designation: cables.designation,
-    preferred: cables.preferred,
-    family: cableRevisions.family,
-    state: cableRevisions.state,
-    z0Ohm: cableRevisions.z0Ohm,
-    velocityFactor: cableRevisions.velocityFactor,
-    outerDiameterMm: cableRevisions.outerDiameterMm,
-    maxFrequencyHz: cableRevisions.maxFrequencyHz,
-    // bm25 is negative, and the more so the better
-    relevance: match === null ? sql<number>`0` : sql<number>`-bm25(cable_search)`,
-    ...(lossAtHz !== undefined && { model: cableRevisions.model }),
-  };
-  const query = database().select(columns).from(cables).innerJoin(cableRevisions, currentRevision).$dynamic();
-  if (match !== null) query.innerJoin(sql`cable_search`, onItsRevision);
-  const matches = match === null ? undefined : sql`cable_search match ${match}`;
-  const rows = query.where(and(matches, readableCables(actor), withinRanges(reading))).all();
-  return (rows as (Omit<Candidate, "lossDbPer100m"> & { model?: LineModel })[]).map(({ model, ...row }) => ({
-    ...row,
-    lossDbPer100m: model && lossAtHz !== undefined ? lossDbPer100m(model, lossAtHz) : null,
-  }));
+export function findCandidates(actor: Actor, reading: SearchReading | undefined, lossAtHz: number | undefined): Found {
+  const readable = listFacts(actor.teamId, lossAtHz).filter(readableEntries(actor));
+  if (!reading) return { entries: readable, relevance: () => 0 };
+  const within = readable.filter((entry) => isWithinRanges(reading, entry));
+  const found = fits(actor.teamId, reading, within);
+  if (!found) return { entries: within, relevance: () => 0 };
+  return { entries: within.filter(({ id }) => found.has(id)), relevance: ({ id }) => found.get(id) ?? 0 };
 }
