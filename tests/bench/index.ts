@@ -1,8 +1,10 @@
 /** `npm run bench`: how fast the product is, as ratios within one run. Nothing here fails a build; figures go into the notes. */
 import { benchEngine } from "@/tests/bench/engine";
+import { benchFirstLoad } from "@/tests/bench/first-load";
 import { benchSearch } from "@/tests/bench/search";
 import { row } from "@/tests/bench/timing";
 
 row("", "ours", "other", "ratio");
 benchEngine();
 await benchSearch();
+await benchFirstLoad();
