@@ -98,7 +98,8 @@ interface TypedProps<T> {
 function understood(kind: TypedField<unknown>["kind"], text: string): string | undefined {
   if (kind === "words" || text.trim() === "" || (kind !== "impedance" && /^[\d.\s]*$/.test(text))) return undefined;
   const read = kind === "impedance" ? readImpedance(text) : readQuantity(kind, text);
-  return read.ok ? `= ${read.understood}` : undefined;
+  const said = read.ok ? read.understood.replace("\u00a0", " ") : undefined;
+  return said === undefined || said === text.trim() ? undefined : `= ${said}`;
 }
 
 function Typed<T>({ field, path, register, control, setValue, isInline, write }: TypedProps<T>) {

@@ -4,20 +4,26 @@ import { useDeferredValue, useMemo, useState } from "react";
 import { lineNamed } from "@/components/runs/strip-pieces";
 import { useRunEditor } from "@/components/runs/run-editor";
 import type { CableLine } from "@/lib/cables/line";
+import type { CutTolerance } from "@/lib/line/match/at-limits";
+import { resolveElements } from "@/lib/runs/circuit";
+import type { RunDraft } from "@/lib/runs/edit";
+import { feederTo, piecesBehind, placeOfMatch } from "@/lib/runs/match-place";
 import { matchesFor, type MatchAsked, type MatchesFound } from "@/lib/runs/matching";
 
 /** What may be changed on the Match view that is not part of the run. */
 export interface MatchChoices {
+  /** pieces between the match and the load */
+  place: number;
   targetOhm: number;
   returnLossDb: number;
   coilQ: number | undefined;
   capacitorQ: number | undefined;
   stubCableId: string | null;
+  tolerance: CutTolerance;
 }
 
 export interface Matching {
   asked: MatchAsked;
-  feeder: CableLine | null;
   stubLine: CableLine | null;
   found: MatchesFound | null;
   /** why nothing was looked for */
@@ -27,27 +33,59 @@ export interface Matching {
   choose: (part: Partial<MatchChoices>) => void;
 }
 
-const usual = { coilQ: 120, capacitorQ: 1000 };
+const usual = { coilQ: 120, capacitorQ: 1000, tolerance: { lengthM: 0.005, valuePercent: 5 } };
 /** VSWR 1.5 where the run asks for nothing. */
 const usualReturnLossDb = 14;
 
-/** The ways to match the run's load, worked out in the browser as anything changes. */
-export function useMatches(): Matching {
-  const { draft, lines } = useRunEditor();
-  const { circuit, designHz, bandHz, temperatureC, targets } = draft;
+function firstChoices({ circuit, targets }: RunDraft): MatchChoices {
   const wished = targets.find((t) => t.quantity === "returnLoss" && t.atLeast !== undefined)?.atLeast;
-  const [choices, setChoices] = useState<MatchChoices>({
+  return {
+    ...usual,
+    place: placeOfMatch(circuit.elements),
     targetOhm: circuit.source.kind === "constant" && circuit.source.reOhm > 0 ? circuit.source.reOhm : 50,
     returnLossDb: wished ?? usualReturnLossDb,
-    ...usual,
     stubCableId: null,
-  });
-  const feeder = useMemo(() => feederOf(circuit.elements, lines), [circuit.elements, lines]);
-  const stubLine = (choices.stubCableId !== null && lines.get(choices.stubCableId)) || feeder;
-  const { targetOhm, returnLossDb, coilQ, capacitorQ } = choices;
-  const request = useMemo(() => {
+  };
+}
+
+/** The ways to match the run at the chosen place, worked out in the browser as anything changes. */
+export function useMatches(): Matching {
+  const { draft, lines } = useRunEditor();
+  const [chosen, setChoices] = useState<MatchChoices>(() => firstChoices(draft));
+  // The run may have become shorter since: an undo, another's edit.
+  const choices = { ...chosen, place: Math.min(chosen.place, draft.circuit.elements.length) };
+  const request = useRequest(choices);
+  const taken = useDeferredValue(request);
+  const worked = useMemo(() => work(taken), [taken]);
+  return {
+    asked: taken.asked,
+    stubLine: (choices.stubCableId !== null && lines.get(choices.stubCableId)) || request.feeder,
+    ...worked,
+    isBehind: taken !== request,
+    choices,
+    choose: (part) => setChoices((before) => ({ ...before, ...part })),
+  };
+}
+
+interface Request {
+  asked: MatchAsked;
+  feeder: CableLine | null;
+  stubLine: CableLine | null;
+  sections: CableLine[];
+  /** every piece behind the match has its cable */
+  isWhole: boolean;
+}
+
+function useRequest({ place, targetOhm, returnLossDb, coilQ, capacitorQ, stubCableId }: MatchChoices): Request {
+  const { draft, lines } = useRunEditor();
+  const { circuit, designHz, bandHz, temperatureC } = draft;
+  return useMemo(() => {
+    const ref = feederTo(circuit.elements, place);
+    const feeder = (ref && lineNamed(ref, lines)) ?? null;
+    const behind = resolveElements(piecesBehind(circuit.elements, place), ({ cableId }) => lines.get(cableId));
     const asked: MatchAsked = {
       load: circuit.load,
+      behind: "elements" in behind ? behind.elements : [],
       targetOhm,
       designHz,
       bandHz: bandHz ?? [designHz, designHz],
@@ -56,39 +94,14 @@ export function useMatches(): Matching {
       capacitorQ,
       temperatureC,
     };
-    return { asked, feeder, stubLine, sections: feeder ? alikeLines(lines, feeder) : [] };
-  }, [
-    circuit.load,
-    targetOhm,
-    designHz,
-    bandHz,
-    returnLossDb,
-    coilQ,
-    capacitorQ,
-    temperatureC,
-    feeder,
-    stubLine,
-    lines,
-  ]);
-  const taken = useDeferredValue(request);
-  const worked = useMemo(() => work(taken), [taken]);
-  return {
-    asked: taken.asked,
-    feeder,
-    stubLine,
-    ...worked,
-    isBehind: taken !== request,
-    choices,
-    choose: (part) => setChoices((before) => ({ ...before, ...part })),
-  };
-}
-
-function feederOf(
-  elements: ReturnType<typeof useRunEditor>["draft"]["circuit"]["elements"],
-  lines: ReadonlyMap<string, CableLine>,
-) {
-  const plain = elements.findLast((element) => element.kind === "cable" && (element.paralleled ?? 1) === 1);
-  return plain?.kind === "cable" ? (lineNamed(plain.line, lines) ?? null) : null;
+    return {
+      asked,
+      feeder,
+      stubLine: (stubCableId !== null && lines.get(stubCableId)) || feeder,
+      sections: feeder ? alikeLines(lines, feeder) : [],
+      isWhole: "elements" in behind,
+    };
+  }, [circuit, place, targetOhm, designHz, bandHz, returnLossDb, coilQ, capacitorQ, temperatureC, stubCableId, lines]);
 }
 
 /** Cables that can be joined to the feeder without changing kind, and may be used. */
@@ -101,14 +114,8 @@ function alikeLines(lines: ReadonlyMap<string, CableLine>, feeder: CableLine): C
   );
 }
 
-interface Request {
-  asked: MatchAsked;
-  feeder: CableLine | null;
-  stubLine: CableLine | null;
-  sections: CableLine[];
-}
-
-function work({ asked, feeder, stubLine, sections }: Request): Pick<Matching, "found" | "trouble"> {
+function work({ asked, feeder, stubLine, sections, isWhole }: Request): Pick<Matching, "found" | "trouble"> {
+  if (!isWhole) return { found: null, trouble: "A piece behind the match has no cable yet. Give it one on the Line view." };
   if (!feeder || !stubLine)
     return {
       found: null,

@@ -1,15 +1,16 @@
-/** Ways to match a run's load with the team's cables, and keeping one in the run. Pure. */
+/** Ways to match a run with the team's cables, at its load or before any of its pieces. Pure. */
 import type { CableLine } from "@/lib/cables/line";
 import type { Element as EngineElement, Termination } from "@/lib/line/element";
 import { findMatches } from "@/lib/line/match/find-matches";
 import type { Candidate, MatchLine, Refusal } from "@/lib/line/match/match-request";
 import { rank } from "@/lib/line/match/rank";
 import { sweep } from "@/lib/line/run";
-import { alike } from "@/lib/runs/alike";
 import type { Element, LineRef } from "@/lib/runs/circuit-schema";
 
 export interface MatchAsked {
   load: Termination;
+  /** the pieces between the match and the load, from the match to the load; none where it stands at the load */
+  behind: EngineElement[];
   targetOhm: number;
   designHz: number;
   bandHz: readonly [number, number];
@@ -31,7 +32,7 @@ function matchLine({ cableId, revision, designation, model }: CableLine): MatchL
 /**
  * Stubs and paralleled lengths are cut from one cable, sections from whatever cable has the impedance: so stubs do not
  * come once for every cable there is.
- * @param feeder - the line between load and network
+ * @param feeder - the line that leads to the network, and from it to what is matched
  * @param stubLine - what stubs and paralleled lengths are cut from
  * @param sectionLines - what may serve as a section
  */
@@ -64,14 +65,14 @@ export interface CandidateCurve {
   reflection: { re: Float64Array; im: Float64Array };
 }
 
-/** A candidate over frequency, seen from its target side. Without elements it is the load alone. */
+/** A candidate over frequency, seen from its target side. Without elements it is what is matched, alone. */
 export function candidateCurve(
   elements: readonly EngineElement[],
   asked: MatchAsked,
   frequencies: ArrayLike<number>,
 ): CandidateCurve {
   const source = { kind: "constant", reOhm: asked.targetOhm, imOhm: 0 } as const;
-  const at = sweep({ source, elements: [...elements], load: asked.load }, frequencies, {
+  const at = sweep({ source, elements: [...elements, ...asked.behind], load: asked.load }, frequencies, {
     temperatureC: asked.temperatureC,
   });
   return { returnLossDb: at.returnLossDb, reflection: at.reflection };
@@ -116,40 +117,3 @@ export function storedElements(elements: readonly EngineElement[]): Element[] {
   });
 }
 type EngineLineModel = Extract<EngineElement, { kind: "cable" }>["line"]["model"];
-
-/** Whether the run ends in these elements: the match is in it. */
-export function isKept(elements: readonly Element[], match: readonly Element[]): boolean {
-  return match.length > 0 && elements.length >= match.length && alike(elements.slice(-match.length), match);
-}
-
-const single = (element: Element | undefined) =>
-  element?.kind === "cable" && (element.paralleled ?? 1) === 1 ? element : null;
-
-/** Length of the match that is cut from the feeder itself, metres. */
-function fromFeeder(match: readonly Element[], feeder: LineRef): number {
-  return match.reduce(
-    (sum, element) => sum + (alike(single(element)?.line, feeder) ? (single(element)?.lengthM ?? 0) : 0),
-    0,
-  );
-}
-
-/**
- * The run with a match at its load. Length of the match on the feeder's own cable is taken from the feeder before it,
- * where there is enough, so that the load stays where it is.
- */
-export function withMatch(elements: readonly Element[], match: readonly Element[]): Element[] {
-  const feeder = single(elements.at(-1));
-  const taken = feeder ? fromFeeder(match, feeder.line) : 0;
-  if (!feeder || taken === 0 || taken >= feeder.lengthM) return [...elements, ...match];
-  return [...elements.slice(0, -1), { ...feeder, lengthM: feeder.lengthM - taken }, ...match];
-}
-
-/** The run without a match it ends in; the length goes back to the feeder. */
-export function withoutMatch(elements: readonly Element[], match: readonly Element[]): Element[] {
-  const before = elements.slice(0, -match.length);
-  const feeder = single(before.at(-1));
-  const taken = feeder ? fromFeeder(match, feeder.line) : 0;
-  if (!feeder || taken === 0) return before;
-  const whole = Number((feeder.lengthM + taken).toPrecision(12));
-  return [...before.slice(0, -1), { ...feeder, lengthM: whole }];
-}

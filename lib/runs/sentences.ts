@@ -14,6 +14,10 @@ export interface Sentence {
 
 const db = (value: number, decimals = 1) => inWords(decibels(value, decimals));
 
+/** A return loss without end is a match without fault. */
+const seen = (value: number) => (Number.isFinite(value) ? db(value) : "a perfect match");
+const stands = (value: number) => (Number.isFinite(value) ? `stands at ${db(value)}` : "is matched");
+
 /** Above this much difference the cable, not the load, makes the reading at the source. */
 const hidingDb = 1;
 
@@ -32,7 +36,7 @@ export function seenFromSource(analysis: Analysis, draft: RunDraft, verdicts: re
     };
   return {
     state,
-    text: `${draft.sourceName} sees ${db(spot.sourceReturnLossDb)} and ${draft.loadName} stands at ${db(spot.loadReturnLossDb)}, at ${inWords(frequency(draft.designHz))}.`,
+    text: `${draft.sourceName} sees ${seen(spot.sourceReturnLossDb)} and ${draft.loadName} ${stands(spot.loadReturnLossDb)}, at ${inWords(frequency(draft.designHz))}.`,
     isMatchWorth,
   };
 }

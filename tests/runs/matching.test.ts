@@ -1,16 +1,8 @@
 import { expect, test } from "vitest";
 import type { CableLine } from "@/lib/cables/line";
 import { modelFromNominal } from "@/lib/line/cable";
-import {
-  candidateCurve,
-  candidateSteps,
-  isKept,
-  matchesFor,
-  storedElements,
-  withMatch,
-  withoutMatch,
-  type MatchAsked,
-} from "@/lib/runs/matching";
+import { isKept, withMatch, withoutMatch } from "@/lib/runs/match-place";
+import { candidateCurve, candidateSteps, matchesFor, storedElements, type MatchAsked } from "@/lib/runs/matching";
 import type { Element } from "@/lib/runs/circuit-schema";
 
 function cable(designation: string, z0: number): CableLine {
@@ -36,6 +28,7 @@ function cable(designation: string, z0: number): CableLine {
 const feeder = cable("F50", 50);
 const asked: MatchAsked = {
   load: { kind: "constant", reOhm: 22, imOhm: -35 },
+  behind: [],
   targetOhm: 50,
   designHz: 27.2e6,
   bandHz: [26.9e6, 27.5e6],
@@ -70,9 +63,9 @@ test("the load alone keeps its own return loss", () => {
 test("withMatch keeps the run's length where the match is of the feeder's own cable, and withoutMatch gives it back", () => {
   for (const { elements, method } of found.candidates) {
     const match = storedElements(elements);
-    const matched = withMatch(run, match);
-    expect(isKept(matched, match), method).toBe(true);
-    expect(withoutMatch(matched, match)).toEqual(run);
+    const matched = withMatch(run, match, 0);
+    expect(isKept(matched, match, 0), method).toBe(true);
+    expect(withoutMatch(matched, match, 0)).toEqual(run);
     const single = matched.filter(
       (e) => e.kind === "cable" && e.line && "cableId" in e.line && e.line.cableId === "f50" && !e.paralleled,
     );
@@ -84,5 +77,19 @@ test("withMatch keeps the run's length where the match is of the feeder's own ca
 test("a match longer than its feeder is added whole rather than leaving a negative length", () => {
   const short: Element[] = [{ kind: "cable", line: { cableId: "f50" }, lengthM: 0.1 }];
   const match = storedElements(found.candidates.find(({ method }) => method === "shuntStub")?.elements ?? []);
-  expect(withMatch(short, match)).toEqual([...short, ...match]);
+  expect(withMatch(short, match, 0)).toEqual([...short, ...match]);
+});
+
+test("before the run behind, the steps start at what the match sees there and still end at the middle", () => {
+  const behind = [{ kind: "cable" as const, name: "Feeder", line: feeder, lengthM: 36 }];
+  const there = { ...asked, behind };
+  const { candidates } = matchesFor(there, feeder, feeder, [feeder]);
+  expect(candidates.length).toBeGreaterThanOrEqual(6);
+  const alone = candidateCurve([], there, [27.2e6]);
+  for (const { elements, designReturnLossDb } of candidates) {
+    const steps = candidateSteps(elements, there);
+    expect(steps[0]!.re).toBeCloseTo(alone.reflection.re[0]!, 12);
+    if (designReturnLossDb !== null) continue;
+    expect(Math.hypot(steps.at(-1)!.re, steps.at(-1)!.im)).toBeCloseTo(0, 6);
+  }
 });
