@@ -3,6 +3,7 @@
 import { createContext, useContext, useState, type ReactNode } from "react";
 import type { CableLine } from "@/lib/cables/line";
 import { draftOf, edited, faultsAfter, history, redone, undone, type Faults, type RunDraft } from "@/lib/runs/edit";
+import { heldKey } from "@/lib/runs/held";
 import type { Run } from "@/lib/runs/schema";
 import { useSaving, type Saving } from "@/components/runs/use-saving";
 
@@ -38,6 +39,8 @@ export interface RunEditor {
 }
 
 export interface RunPeople {
+  /** who is looking */
+  personId: string;
   owners: { personId: string; name: string }[];
   canHandOver: boolean;
   canComment: boolean;
@@ -69,12 +72,13 @@ export function RunEditorProvider({ run, lines: given, cannotEditBecause, people
   const [lines, setLines] = useState(() => new Map(given.map((line) => [line.cableId, line])));
   const draft = steps.present;
   const isReadable = Object.keys(faults).length === 0;
-  const { saved, saving, isChanged, retry, settle, replaceSaved } = useSaving(
-    run,
+  const { saved, saving, isChanged, retry, settle, replaceSaved } = useSaving({
+    opened: run,
     draft,
-    canEdit && isReadable,
-    (theirs) => setSteps((before) => edited(before, draftOf(theirs), null)),
-  );
+    canSave: canEdit && isReadable,
+    key: heldKey(people.personId, run.id),
+    take: (next) => setSteps((before) => edited(before, next, null)),
+  });
 
   const setFault = (path: string, fault: Faults[string] | null) =>
     setFaults((before) => {

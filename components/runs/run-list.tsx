@@ -1,19 +1,26 @@
 "use client";
 
 import { useInfiniteQuery } from "@tanstack/react-query";
-import { useState } from "react";
+import { useState, useSyncExternalStore } from "react";
 import { Button, ButtonLink } from "@/components/ui/button";
 import { Field } from "@/components/ui/field";
 import { RunRows } from "@/components/runs/run-rows";
+import { StateNote } from "@/components/ui/state-mark";
 import { Select } from "@/components/ui/select";
 import { call } from "@/lib/http/call";
+import { countHeld } from "@/lib/runs/held";
 import type { RunPage } from "@/lib/runs/query";
 import type { RunState } from "@/lib/runs/schema";
 
 interface Props {
+  /** who is looking: what their browser holds is theirs */
+  personId: string;
   first: RunPage;
   canStart: boolean;
 }
+
+/** What is held changes only on the run's own page, so a look when the list is drawn is enough. */
+const noChange = () => () => undefined;
 
 const stateChoices: { value: RunState | ""; label: string }[] = [
   { value: "", label: "Every state" },
@@ -31,7 +38,12 @@ function address(q: string, state: RunState | "", cursor: string): string {
 }
 
 /** The runs of a team, the latest changed first. */
-export function RunList({ first, canStart }: Props) {
+export function RunList({ personId, first, canStart }: Props) {
+  const held = useSyncExternalStore(
+    noChange,
+    () => countHeld(personId),
+    () => 0,
+  );
   const [q, setQ] = useState("");
   const [state, setState] = useState<RunState | "">("");
   const isWhole = q.trim() === "" && state === "";
@@ -86,6 +98,16 @@ export function RunList({ first, canStart }: Props) {
           </ButtonLink>
         )}
       </div>
+      {held > 0 && (
+        <div className="mt-3">
+          <StateNote state="none">
+            <b>
+              {held} {held === 1 ? "run has a change" : "runs have changes"} held in this browser.
+            </b>{" "}
+            Open {held === 1 ? "it" : "them"} and the change goes to the team. Nobody else can see it yet.
+          </StateNote>
+        </div>
+      )}
       {pages.error && <p className="mt-3 text-fail">The list may be old: {pages.error.message}</p>}
       {runs.length > 0 && <RunRows runs={runs} />}
       {total === 0 &&

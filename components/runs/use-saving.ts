@@ -3,17 +3,20 @@
 import { useEffect, useRef, useState } from "react";
 import { AwayError, call, ProblemError } from "@/lib/http/call";
 import { changeBetween, draftOf, type RunDraft } from "@/lib/runs/edit";
+import { hold, readHeld } from "@/lib/runs/held";
 import type { Run } from "@/lib/runs/schema";
 
 export type Saving =
   | { kind: "saved" }
   | { kind: "saving" }
   /** not saved; what to say about it */
-  | { kind: "unsaved"; message: string; since: Date }
+  | { kind: "unsaved"; message: string; since: Date; draft: RunDraft; isAway: boolean }
   /** someone else saved first: both versions */
   | { kind: "conflict"; theirs: Run };
 
 const pause = 700;
+/** while the server is away it is asked again this often */
+const awayPause = 10_000;
 
 interface UseSaving {
   saved: Run;
@@ -28,15 +31,24 @@ interface UseSaving {
   settle: (keep: "mine" | "theirs") => void;
 }
 
+interface Given {
+  /** the run as the page opened it */
+  opened: Run;
+  /** what is on the screen */
+  draft: RunDraft;
+  /** false for readers, and while a field holds something that cannot be read */
+  canSave: boolean;
+  /** where changes are kept that the server does not have */
+  key: string;
+  /** puts another draft on the screen */
+  take: (draft: RunDraft) => void;
+}
+
 /**
  * Saves a draft a moment after its last edit, one request at a time, each against the version it was made from, so that
- * two people never overwrite each other unseen.
- * @param opened - the run as the page opened it
- * @param draft - what is on the screen
- * @param canSave - false for readers, and while a field holds something that cannot be read
- * @param take - puts another version on the screen
+ * two people never overwrite each other unseen. What is not saved is kept in the browser and sent later.
  */
-export function useSaving(opened: Run, draft: RunDraft, canSave: boolean, take: (run: Run) => void): UseSaving {
+export function useSaving({ opened, draft, canSave, key, take }: Given): UseSaving {
   const [saved, setSaved] = useState(opened);
   // What the server last took, as it was sent: how the server spells it back never counts as a change.
   const [sent, setSent] = useState(() => draftOf(opened));
@@ -45,7 +57,8 @@ export function useSaving(opened: Run, draft: RunDraft, canSave: boolean, take: 
   const isUnderWay = useRef(false);
   const change = changeBetween(sent, draft);
   const isChanged = Object.keys(change).length > 0;
-  const isWaiting = canSave && isChanged && saving.kind !== "conflict" && (saving.kind !== "unsaved" || attempt > 0);
+  const isStuck = saving.kind === "conflict" || (saving.kind === "unsaved" && saving.draft === draft && attempt === 0);
+  const isWaiting = canSave && isChanged && !isStuck;
 
   useEffect(() => {
     if (!isWaiting || isUnderWay.current) return;
@@ -56,16 +69,12 @@ export function useSaving(opened: Run, draft: RunDraft, canSave: boolean, take: 
       isUnderWay.current = true;
       setSaving({ kind: "saving" });
       try {
-        const run = await call<Run>(`/runs/${saved.id}`, {
-          method: "PATCH",
-          body: change,
-          ifMatch: `"${saved.version}"`,
-        });
-        setSaved(run);
+        const ifMatch = `"${saved.version}"`;
+        setSaved(await call<Run>(`/runs/${saved.id}`, { method: "PATCH", body: change, ifMatch }));
         setSent(draft);
         setSaving({ kind: "saved" });
       } catch (error) {
-        setSaving(trouble(error));
+        setSaving(trouble(error, draft));
       } finally {
         isUnderWay.current = false;
         setAttempt(0);
@@ -75,33 +84,78 @@ export function useSaving(opened: Run, draft: RunDraft, canSave: boolean, take: 
     // eslint-disable-next-line react-hooks/exhaustive-deps
   }, [draft, sent, isWaiting, attempt]);
 
+  useKept({ opened, key, take, onConflict: () => setSaving({ kind: "conflict", theirs: opened }) });
+  useEffect(() => {
+    if (canSave) hold(key, isChanged ? { draft, version: saved.version } : null);
+  }, [canSave, key, isChanged, draft, saved.version]);
+  useAskingAgain(saving.kind === "unsaved" && saving.isAway, () => setAttempt((n) => n + 1));
+  useAskingBeforeLeaving(isChanged);
+
+  function settle(keep: "mine" | "theirs") {
+    if (saving.kind !== "conflict") return;
+    const theirs = draftOf(saving.theirs);
+    setSaved(saving.theirs);
+    setSent(theirs);
+    // Mine over theirs is what I changed and nothing else: what they changed elsewhere stays.
+    take(keep === "mine" ? { ...theirs, ...change } : theirs);
+    setSaving({ kind: "saved" });
+  }
+  return { saved, saving, isChanged, retry: () => setAttempt((n) => n + 1), settle, replaceSaved: setSaved };
+}
+
+/** Puts a change back on the screen that was kept when the page last closed; if the run has moved on, both versions are shown. */
+function useKept({
+  opened,
+  key,
+  take,
+  onConflict,
+}: Pick<Given, "opened" | "key" | "take"> & { onConflict: () => void }) {
+  const isLookedAt = useRef(false);
+  useEffect(() => {
+    if (isLookedAt.current) return;
+    isLookedAt.current = true;
+    const held = readHeld(key);
+    if (!held || Object.keys(changeBetween(draftOf(opened), held.draft)).length === 0) return;
+    take(held.draft);
+    if (held.version !== opened.version) onConflict();
+  });
+}
+
+function useAskingAgain(isAway: boolean, retry: () => void) {
+  const again = useRef(retry);
+  useEffect(() => {
+    again.current = retry;
+  });
+  useEffect(() => {
+    if (!isAway) return;
+    const ask = () => again.current();
+    const timer = setInterval(ask, awayPause);
+    window.addEventListener("online", ask);
+    return () => {
+      clearInterval(timer);
+      window.removeEventListener("online", ask);
+    };
+  }, [isAway]);
+}
+
+function useAskingBeforeLeaving(isChanged: boolean) {
   useEffect(() => {
     if (!isChanged) return;
     const ask = (event: BeforeUnloadEvent) => event.preventDefault();
     window.addEventListener("beforeunload", ask);
     return () => window.removeEventListener("beforeunload", ask);
   }, [isChanged]);
-
-  function settle(keep: "mine" | "theirs") {
-    if (saving.kind !== "conflict") return;
-    setSaved(saving.theirs);
-    setSent(draftOf(saving.theirs));
-    if (keep === "theirs") take(saving.theirs);
-    setSaving({ kind: "saved" });
-  }
-
-  return { saved, saving, isChanged, retry: () => setAttempt((n) => n + 1), settle, replaceSaved: setSaved };
 }
 
-function trouble(error: unknown): Saving {
+function trouble(error: unknown, draft: RunDraft): Saving {
   const since = new Date();
   if (error instanceof ProblemError && error.problem.status === 412 && error.problem.current)
     return { kind: "conflict", theirs: error.problem.current as Run };
   if (error instanceof ProblemError) {
-    const first = error.problem.errors?.[0]?.message;
-    return { kind: "unsaved", message: first ?? error.problem.detail, since };
+    const message = error.problem.errors?.[0]?.message ?? error.problem.detail;
+    return { kind: "unsaved", message, since, draft, isAway: false };
   }
-  if (error instanceof AwayError)
-    return { kind: "unsaved", message: "Ropewalk cannot be reached. Your change is kept here.", since };
+  const message = "Ropewalk cannot be reached. Your change is kept in this browser and sent when it can be.";
+  if (error instanceof AwayError) return { kind: "unsaved", message, since, draft, isAway: true };
   throw error;
 }

@@ -3,6 +3,7 @@
 import type { Route } from "next";
 import { Bar } from "@/components/ui/bar";
 import { call } from "@/lib/http/call";
+import { forgetHeld } from "@/lib/runs/held";
 import type { SignedIn } from "@/lib/team/schema";
 
 interface Props {
@@ -22,6 +23,7 @@ const places: { href: Route; label: string }[] = [
 /** Ends the session and leaves nothing of the team's in the browser's memory: the door is loaded afresh. */
 async function signOut() {
   await call("/session", { method: "DELETE" });
+  forgetHeld();
   // A full load on purpose: nothing of the team stays in memory.
   // eslint-disable-next-line @next/next/no-location-assign-relative-destination
   window.location.assign("/sign-in");

@@ -53,6 +53,43 @@ test("Two people change one run: the second sees both versions and nothing is lo
   await context.close();
 });
 
+test("Mine on top of theirs keeps what they changed elsewhere", async ({ page, browser }) => {
+  await signedIn(page, "ines.hartwell");
+  const address = await makeRun(page, "On top");
+  const context = await browser.newContext({ baseURL: test.info().project.use.baseURL });
+  const other = await context.newPage();
+  await signedIn(other, "tomas.averill");
+  await page.goto(address);
+  await other.goto(address);
+  await other.getByLabel("Name of the run").fill("On top, renamed by Tomas");
+  await expect(other.getByText("Saved, revision 2")).toBeVisible();
+  await page.getByRole("button", { name: /1 of 1/ }).click();
+  await page.getByLabel("Length", { exact: true }).fill("37 m");
+  await page.getByRole("button", { name: /Keep mine/ }).click();
+  await expect(page.getByText("Saved, revision 3")).toBeVisible();
+  expect(await storedRun(page, address)).toMatchObject({
+    name: "On top, renamed by Tomas",
+    circuit: { elements: [{ lengthM: 37 }] },
+  });
+  await context.close();
+});
+
+test("A change made while the server was away survives a closed tab and is sent later", async ({ page }) => {
+  await signedIn(page, "ines.hartwell");
+  const address = await makeRun(page, "Closed while away");
+  await page.goto(address);
+  await page.route("**/api/v1/runs/*", (route) => route.abort());
+  await page.getByLabel("Name of the run").fill("Closed while away, and kept");
+  await expect(page.getByText(/Not saved since/)).toBeVisible();
+  page.on("dialog", (dialog) => void dialog.accept());
+  await page.goto("/runs");
+  await page.unroute("**/api/v1/runs/*");
+  await page.goto(address);
+  await expect(page.getByLabel("Name of the run")).toHaveValue("Closed while away, and kept");
+  await expect(page.getByText("Saved, revision 2")).toBeVisible();
+  expect(await storedRun(page, address)).toMatchObject({ name: "Closed while away, and kept" });
+});
+
 test("Undo and redo reach back over every edit of a run", async ({ page }) => {
   await signedIn(page, "gwen.ostrander");
   const address = await makeRun(page, "Undo");

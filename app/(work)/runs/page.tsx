@@ -15,7 +15,7 @@ export default async function RunsPage() {
     <>
       <WorkBar signedIn={describeActor(actor)} current="/runs" title="Runs" />
       <main id="main" className="page-margin pt-3.5 pb-20">
-        <RunList first={page} canStart={may(actor, "runs.write")} />
+        <RunList personId={actor.personId} first={page} canStart={may(actor, "runs.write")} />
       </main>
     </>
   );

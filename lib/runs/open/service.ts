@@ -12,7 +12,7 @@ export interface OpenedRun {
   lines: CableLine[];
   /** a sentence; null when the run can be changed */
   cannotEditBecause: string | null;
-  people: { owners: PossibleOwner[]; canHandOver: boolean; canComment: boolean };
+  people: { personId: string; owners: PossibleOwner[]; canHandOver: boolean; canComment: boolean };
 }
 
 function refusal(actor: Actor, run: Run): string | null {
@@ -32,6 +32,7 @@ export function openRun(actor: Actor, runId: string): OpenedRun {
   const lines = [...pinned, ...others.filter(({ id }) => !ids.has(id))].map(lineOf);
   const canHandOver = mayHandOver(actor, run);
   const people = {
+    personId: actor.personId,
     owners: canHandOver ? listPossibleOwners(actor) : [],
     canHandOver,
     canComment: may(actor, "runs.comment"),
