@@ -63,15 +63,16 @@ export function padResistors(pad: PadElement): PadResistors {
   const mean = Math.sqrt(pad.inputOhm * pad.outputOhm);
   const coth = 1 / Math.tanh(theta);
   if (pad.topology === "pi") {
-    const arm = (ohm: number) => 1 / atLeastZero(coth / ohm - 1 / (mean * Math.sinh(theta)));
+    const series = 1 / (mean * Math.sinh(theta));
+    const arm = (ohm: number) => 1 / leftOf(coth / ohm, series);
     return theta === 0 ? [Infinity, 0, Infinity] : [arm(pad.inputOhm), mean * Math.sinh(theta), arm(pad.outputOhm)];
   }
   const shunt = mean / Math.sinh(theta);
-  const arm = (ohm: number) => atLeastZero(ohm * coth - shunt);
+  const arm = (ohm: number) => leftOf(ohm * coth, shunt);
   return theta === 0 ? [0, Infinity, 0] : [arm(pad.inputOhm), shunt, arm(pad.outputOhm)];
 }
 
-/** At the least loss one arm is 0 but for rounding. */
-function atLeastZero(value: number): number {
-  return Math.max(0, value);
+/** What is left of one value beside another; at the least loss that is 0 but for rounding, and then it is 0. */
+function leftOf(value: number, taken: number): number {
+  return value - taken > 1e-12 * value ? value - taken : 0;
 }

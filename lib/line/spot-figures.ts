@@ -69,3 +69,27 @@ export function spotFigures(model: LineModel, frequency: number, temperatureC = 
 export function frequencyPerLength(at: SpotFigures, length: number): number {
   return -at.phaseRadPerM / (length * 2 * Math.PI * at.groupDelaySPerM);
 }
+
+/** A length of a cable at one frequency and temperature. */
+export interface LengthFigures {
+  /** attenuation between matched ends */
+  lossDb: number;
+  phaseRad: number;
+  wavelengths: number;
+  phaseDelayS: number;
+  groupDelayS: number;
+  /** both conductors */
+  dcResistanceOhm: number;
+}
+
+/** @param length - metre, at least 0 */
+export function lengthFigures(at: SpotFigures, length: number): LengthFigures {
+  return {
+    lossDb: at.attenuationDbPerM * length,
+    phaseRad: at.phaseRadPerM * length,
+    wavelengths: length / at.wavelengthM,
+    phaseDelayS: at.phaseDelaySPerM * length,
+    groupDelayS: at.groupDelaySPerM * length,
+    dcResistanceOhm: at.dcResistanceOhmPerM * length,
+  };
+}

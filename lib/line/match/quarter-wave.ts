@@ -35,6 +35,17 @@ export function sectionImpedance(targetOhm: number, resistanceOhm: number): numb
 }
 
 /**
+ * What a quarter-wave section of any impedance leaves of the reflection between two resistances: it turns the load into
+ * Zs²/R2, against R1 that is (Zs² − R1·R2)/(Zs² + R1·R2). Source: as `sectionImpedance`.
+ * @param sectionOhm - of the lossless section, above 0
+ * @returns |Γ| at the design frequency
+ */
+export function sectionReflection(sectionOhm: number, targetOhm: number, resistanceOhm: number): number {
+  const [square, product] = [sectionOhm * sectionOhm, targetOhm * resistanceOhm];
+  return Math.abs(square - product) / (square + product);
+}
+
+/**
  * Fraction of the design frequency over which a lossless quarter-wave section keeps the reflection of a real load
  * within a limit.
  * @param maxReflection - above 0 and under 1
