@@ -14,6 +14,8 @@ interface CutDrawingProps<L> {
   cableOf?: (line: L) => DrawnCable | undefined;
   /** the run's own cable, that comes up to the match; without it the first cable of the match */
   lead?: DrawnCable;
+  /** the run's cable that goes on from the match, where it does not stand at the load */
+  onward?: DrawnCable;
   /** the cut in one sentence, for a screen reader */
   name: string;
 }
@@ -68,13 +70,26 @@ function drawingOrder<L>(items: readonly CutItem<L>[]): number[] {
   return [...items.keys()].sort((a, b) => isOver(a) - isOver(b));
 }
 
+/** The run goes on: a stretch of its cable, broken off as it is at the other side. */
+function Onward({ cable, mmToPx }: { cable: DrawnCable; mmToPx: number }) {
+  const { loadX, width } = cutFrame;
+  const toX = width - 8;
+  return (
+    <g>
+      <CableLengthwise {...cable} fromX={loadX} toX={toX} y={y} mmToPx={mmToPx} />
+      <path d={`M${loadX} ${y - 9}v18`} stroke="var(--ink)" strokeWidth="1.4" />
+      <path d={`M${toX + 2} ${y - 12}q-6 6 0 12t0 12`} fill="none" stroke="var(--ink)" strokeWidth="1.2" />
+    </g>
+  );
+}
+
 /** The small drawing of a match: what to cut, how it is joined, in one proportion. */
-export function CutDrawing<L>({ elements, load, cableOf, lead, name }: CutDrawingProps<L>) {
+export function CutDrawing<L>({ elements, load, cableOf, lead, onward, name }: CutDrawingProps<L>) {
   const layout = cutLayout(elements);
   const draw = (line: L) => cableOf?.(line) ?? plainCoax;
   const own = elements.flatMap(linesOf).map(draw);
   const leading = lead ?? own[0] ?? plainCoax;
-  const cables = [leading, ...own];
+  const cables = [leading, ...own, ...(onward ? [onward] : [])];
   const mmToPx = thickestPx / Math.max(...cables.map((cable) => cableShape(cable)?.outerMm ?? 5));
   const { width, height, leadX, loadX } = cutFrame;
   return (
@@ -95,7 +110,7 @@ export function CutDrawing<L>({ elements, load, cableOf, lead, name }: CutDrawin
         <path key={x} d={`M${x} ${y - 9}v18`} stroke="var(--ink)" strokeWidth="1.4" />
       ))}
       <PartsBox items={layout.items} />
-      <LoadSymbol x={loadX} y={y} kind={load} />
+      {onward ? <Onward cable={onward} mmToPx={mmToPx} /> : <LoadSymbol x={loadX} y={y} kind={load} />}
     </svg>
   );
 }

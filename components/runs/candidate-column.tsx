@@ -1,24 +1,18 @@
 "use client";
 
 import { CutDrawing } from "@/components/line/cut-drawing";
-import { lookOf, SeriesSwatch } from "@/components/runs/series-swatch";
+import { isBest, rowsOf } from "@/components/runs/candidate-rows";
+import { letterOf, lookOf, SeriesSwatch } from "@/components/runs/series-swatch";
 import { stripEnds } from "@/components/runs/strip-pieces";
 import { useRunEditor } from "@/components/runs/run-editor";
 import { useKeeping } from "@/components/runs/use-keeping";
 import { Button } from "@/components/ui/button";
 import { Figure } from "@/components/ui/figure";
 import { StateMark } from "@/components/ui/state-mark";
-import {
-  decibels,
-  digits,
-  metres,
-  ratio,
-  scaled,
-  significantDigits,
-  type Figure as Shown,
-} from "@/lib/format/quantity";
+import { digits, significantDigits } from "@/lib/format/quantity";
+import type { Element, Line } from "@/lib/line/element";
 import type { Candidate } from "@/lib/line/match/match-request";
-import { vswr } from "@/lib/line/reflection";
+import type { AtLimits } from "@/lib/runs/match-limits";
 import type { MatchAsked } from "@/lib/runs/matching";
 
 interface Props {
@@ -26,68 +20,23 @@ interface Props {
   /** 0 to 3: its letter and its look */
   place: number;
   others: Candidate[];
+  /** of the others, in their order */
+  limits: (AtLimits | null)[];
   candidates: Candidate[];
   asked: MatchAsked;
 }
 
-/** A return loss as VSWR; a perfect match is 1. */
-export function vswrOf(returnLossDb: number | null): number {
-  return returnLossDb === null ? 1 : vswr(10 ** (-returnLossDb / 20));
-}
-
-interface Row {
-  label: string;
-  value: number;
-  /** the smaller is the better, or the larger */
-  better: "less" | "more";
-  figure: Shown;
-}
-
-function rowsOf(candidate: Candidate, { returnLossDb }: MatchAsked): Row[] {
-  const worst = vswrOf(candidate.worstReturnLossDb);
-  const loss = candidate.worstTransducerLossDb ?? Infinity;
-  return [
-    { label: "Worst VSWR over the band", value: worst, better: "less", figure: ratio(worst) },
-    {
-      label: `Bandwidth at ${significantDigits(returnLossDb, 3)} dB`,
-      value: candidate.bandwidthHz,
-      better: "more",
-      figure: scaled("frequency", candidate.bandwidthHz, 3),
-    },
-    { label: "Lost in the match", value: loss, better: "less", figure: decibels(candidate.worstTransducerLossDb, 3) },
-    {
-      label: "Return loss at the design frequency",
-      value: candidate.designReturnLossDb ?? Infinity,
-      better: "more",
-      figure:
-        candidate.designReturnLossDb === null
-          ? { digits: "exact", unit: "", spoken: "" }
-          : decibels(candidate.designReturnLossDb, 1),
-    },
-    {
-      label: "Cable to cut",
-      value: candidate.totalLengthM,
-      better: "less",
-      figure: candidate.totalLengthM > 0 ? metres(candidate.totalLengthM, 3) : { digits: "none", unit: "", spoken: "" },
-    },
-  ];
-}
-
-/** Best among those side by side, and not shared by all of them. */
-function isBest(row: Row, index: number, columns: Row[][]): boolean {
-  const values = columns.map((rows) => rows[index]?.value ?? NaN);
-  const best = row.better === "less" ? Math.min(...values) : Math.max(...values);
-  return columns.length > 1 && row.value === best && values.some((value) => value !== best);
-}
-
 /** One way to match: its cut drawing, its figures, what it needs, and keeping it. */
-export function CandidateColumn({ candidate, place, others, candidates, asked }: Props) {
+export function CandidateColumn({ candidate, place, others, limits, candidates, asked }: Props) {
   const { draft, lines } = useRunEditor();
-  const keeping = useKeeping(candidates);
+  const keeping = useKeeping(candidates, asked.behind.length);
   const isKept = keeping.isKept(candidate);
   const [kind, detail] = splitTitle(candidate.title);
-  const letter = "ABCD"[place] ?? "";
-  const columns = others.map((other) => rowsOf(other, asked));
+  const letter = letterOf(place);
+  const hasLimits = limits.some((each) => each !== null);
+  const columns = others.map((other, i) => rowsOf(other, asked, hasLimits ? (limits[i] ?? null) : undefined));
+  const cableOf = (line: Line) => (line.cableId === undefined ? undefined : lines.get(line.cableId));
+  const onward = firstLine(asked.behind);
   const isMet = (candidate.worstReturnLossDb ?? Infinity) >= asked.returnLossDb;
   const target = significantDigits(asked.returnLossDb, 3);
   return (
@@ -105,11 +54,12 @@ export function CandidateColumn({ candidate, place, others, candidates, asked }:
       <CutDrawing
         elements={candidate.elements}
         load={stripEnds(draft).load.kind}
-        cableOf={(line) => (line.cableId === undefined ? undefined : lines.get(line.cableId))}
+        cableOf={cableOf}
+        onward={onward && cableOf(onward)}
         name={candidate.title}
       />
       <dl className="mt-2">
-        {rowsOf(candidate, asked).map((row, i) => {
+        {(columns[place] ?? []).map((row, i) => {
           const best = isBest(row, i, columns);
           return (
             <div
@@ -162,6 +112,11 @@ export function CandidateColumn({ candidate, place, others, candidates, asked }:
       </div>
     </article>
   );
+}
+
+/** The cable that leads on from a match before some of the run. */
+function firstLine(behind: readonly Element[]): Line | undefined {
+  return behind.find((element) => element.kind === "cable")?.line;
 }
 
 /** "Shorted stub, 951 mm of C50-F10 …" is a kind and its detail. */

@@ -1,51 +1,21 @@
 "use client";
 
-import { useState } from "react";
 import { CablePicker } from "@/components/runs/cable-picker";
 import { BandConditions, FrequencyCondition } from "@/components/runs/conditions";
+import { MatchPlace } from "@/components/runs/match-place";
+import { NumberField } from "@/components/runs/number-field";
 import type { Matching } from "@/components/runs/use-matches";
-import { Field } from "@/components/ui/field";
-import { asTyped, readQuantity } from "@/lib/format/read-quantity";
-import type { QuantityKind } from "@/lib/format/unit-spelling";
 
-interface NumberFieldProps {
-  label: string;
-  kind: QuantityKind;
-  unit?: string;
-  value: number | undefined;
-  /** an empty field is undefined; without this it is refused */
-  canBeEmpty?: boolean;
-  set: (value: number | undefined) => void;
-}
-
-function NumberField({ label, kind, unit, value, canBeEmpty = false, set }: NumberFieldProps) {
-  const [text, setText] = useState(value === undefined ? "" : asTyped(kind, value).replace(/ .*$/, ""));
-  const [error, setError] = useState<string>();
-  function take(next: string) {
-    setText(next);
-    if (next.trim() === "" && canBeEmpty) return (setError(undefined), set(undefined));
-    const read = readQuantity(kind, next);
-    setError(read.ok ? (read.value > 0 ? undefined : "More than 0.") : read.message);
-    if (read.ok && read.value > 0) set(read.value);
-  }
-  return (
-    <Field
-      label={label}
-      unit={unit}
-      isFigure
-      value={text}
-      error={error}
-      className="w-24 phone:w-32"
-      onChange={(event) => take(event.target.value)}
-    />
-  );
-}
+const mostCut = { value: 0.1, message: "At most 100 mm. Write the unit, 5 mm." };
+const mostPart = { value: 50, message: "At most 50 %." };
 
 /** What the matches are worked out for. */
 export function MatchConditions({ matching }: { matching: Matching }) {
   const { choices, choose, stubLine } = matching;
+  const { tolerance } = choices;
   return (
     <div className="mt-4 flex flex-wrap items-start gap-3">
+      <MatchPlace place={choices.place} choose={(place) => choose({ place })} />
       <NumberField
         label="Match to"
         kind="resistance"
@@ -65,6 +35,23 @@ export function MatchConditions({ matching }: { matching: Matching }) {
         cableId={stubLine?.cableId ?? ""}
         choose={(stubCableId) => choose({ stubCableId })}
         isAlwaysOpen
+      />
+      <NumberField
+        label="Cut to within ±"
+        kind="length"
+        value={tolerance.lengthM}
+        canBeEmpty
+        most={mostCut}
+        set={(lengthM) => choose({ tolerance: { ...tolerance, lengthM } })}
+      />
+      <NumberField
+        label="Parts within ±"
+        kind="number"
+        unit="%"
+        value={tolerance.valuePercent}
+        canBeEmpty
+        most={mostPart}
+        set={(valuePercent) => choose({ tolerance: { ...tolerance, valuePercent } })}
       />
       <NumberField
         label="Q of coils"

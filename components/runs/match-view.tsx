@@ -7,25 +7,29 @@ import { MatchCharts } from "@/components/runs/match-charts";
 import { MatchConditions } from "@/components/runs/match-conditions";
 import { useRunEditor } from "@/components/runs/run-editor";
 import { RunFrame } from "@/components/runs/run-frame";
-import { useMatches, type Matching } from "@/components/runs/use-matches";
-import { Figure } from "@/components/ui/figure";
+import { MatchAskedFor } from "@/components/runs/match-asked-for";
+import { LeftBehind } from "@/components/runs/left-behind";
+import { useLimits } from "@/components/runs/use-limits";
+import { useMatches } from "@/components/runs/use-matches";
 import { StateNote } from "@/components/ui/state-mark";
 import type { Candidate } from "@/lib/line/match/match-request";
-import { frequency, impedance, inWords, significantDigits } from "@/lib/format/quantity";
-import { isKept, storedElements } from "@/lib/runs/matching";
-import { bandWords } from "@/lib/runs/sentences";
+import { isKept } from "@/lib/runs/match-place";
+import { storedElements } from "@/lib/runs/matching";
 
 const mostCompared = 4;
 
-/** Ways to match the load, ranked; up to four side by side; one kept in the run. */
+/** Ways to match the run at a place of it, ranked; up to four side by side; one kept in the run. */
 export function MatchView() {
   const { draft } = useRunEditor();
   const matching = useMatches();
   const { found, trouble, isBehind } = matching;
-  const { compared, toggle, refusal } = useCompared(found?.candidates ?? []);
+  const place = matching.asked.behind.length;
+  const { compared, toggle, refusal } = useCompared(found?.candidates ?? [], place);
+  const limits = useLimits(compared, matching.asked, matching.choices.tolerance);
   return (
-    <RunFrame head={<Asked matching={matching} />}>
+    <RunFrame head={<MatchAskedFor matching={matching} />}>
       <MatchConditions matching={matching} />
+      <LeftBehind asked={matching.asked} />
       {trouble && (
         <div className="mt-5">
           <StateNote state="warn">{trouble}</StateNote>
@@ -41,13 +45,21 @@ export function MatchView() {
                   candidate={candidate}
                   place={i}
                   others={compared}
+                  limits={limits}
                   asked={matching.asked}
                   candidates={found.candidates}
                 />
               ))}
             </div>
           )}
-          {compared.length > 0 && <MatchCharts compared={compared} asked={matching.asked} loadName={draft.loadName} />}
+          {compared.length > 0 && (
+            <MatchCharts
+              compared={compared}
+              limits={limits}
+              asked={matching.asked}
+              name={place === 0 ? draft.loadName : "run behind"}
+            />
+          )}
           <CandidateList
             found={found}
             compared={compared}
@@ -61,34 +73,14 @@ export function MatchView() {
   );
 }
 
-function Asked({ matching }: { matching: Matching }) {
-  const { draft } = useRunEditor();
-  const { asked, found } = matching;
-  const { loadName, designHz, bandHz, circuit } = draft;
-  const { load } = circuit;
-  const count = found?.candidates.length ?? 0;
-  const meets = found?.candidates.filter((c) => (c.worstReturnLossDb ?? Infinity) >= asked.returnLossDb).length ?? 0;
-  return (
-    <p className="max-w-140 pt-3.5 text-row text-ink-2 folded:pt-0">
-      {loadName}{" "}
-      {load.kind === "constant" && (
-        <b className="text-ink">
-          <Figure {...impedance({ re: load.reOhm, im: load.imOhm })} />
-        </b>
-      )}{" "}
-      at {inWords(frequency(designHz))}. {count} {count === 1 ? "way" : "ways"} to bring it to{" "}
-      {significantDigits(asked.targetOhm, 3)} Ω; {meets} {meets === 1 ? "keeps" : "keep"}{" "}
-      {significantDigits(asked.returnLossDb, 3)} dB over {bandHz ? bandWords(bandHz) : "the frequency"}.
-    </p>
-  );
-}
-
 /** Which candidates stand side by side: the best of each kind first, until someone chooses. */
-function useCompared(candidates: Candidate[]) {
+function useCompared(candidates: Candidate[], place: number) {
   const [chosen, setChosen] = useState<string[] | null>(null);
   const [refusal, setRefusal] = useState<string | null>(null);
   const { draft } = useRunEditor();
-  const kept = candidates.find((candidate) => isKept(draft.circuit.elements, storedElements(candidate.elements)));
+  const kept = candidates.find((candidate) =>
+    isKept(draft.circuit.elements, storedElements(candidate.elements), place),
+  );
   const titles = chosen ?? firstFour(candidates, kept);
   const compared = titles.flatMap((title) => candidates.find((candidate) => candidate.title === title) ?? []);
   function toggle(title: string) {

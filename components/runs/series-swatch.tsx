@@ -5,6 +5,11 @@ export function lookOf(place: number): SeriesLook {
   return Math.min(4, place + 1) as SeriesLook;
 }
 
+/** Its letter. */
+export function letterOf(place: number): string {
+  return "ABCD"[place] ?? "";
+}
+
 /** A stroke in a series' colour and dash, for where a name stands away from its curve. */
 export function SeriesSwatch({ look }: { look: SeriesLook }) {
   return (

@@ -50,7 +50,7 @@ function firstChoices({ circuit, targets }: RunDraft): MatchChoices {
 
 /** The ways to match the run at the chosen place, worked out in the browser as anything changes. */
 export function useMatches(): Matching {
-  const { draft, lines } = useRunEditor();
+  const { draft } = useRunEditor();
   const [chosen, setChoices] = useState<MatchChoices>(() => firstChoices(draft));
   // The run may have become shorter since: an undo, another's edit.
   const choices = { ...chosen, place: Math.min(chosen.place, draft.circuit.elements.length) };
@@ -59,7 +59,7 @@ export function useMatches(): Matching {
   const worked = useMemo(() => work(taken), [taken]);
   return {
     asked: taken.asked,
-    stubLine: (choices.stubCableId !== null && lines.get(choices.stubCableId)) || request.feeder,
+    stubLine: request.stubLine,
     ...worked,
     isBehind: taken !== request,
     choices,
@@ -115,7 +115,8 @@ function alikeLines(lines: ReadonlyMap<string, CableLine>, feeder: CableLine): C
 }
 
 function work({ asked, feeder, stubLine, sections, isWhole }: Request): Pick<Matching, "found" | "trouble"> {
-  if (!isWhole) return { found: null, trouble: "A piece behind the match has no cable yet. Give it one on the Line view." };
+  if (!isWhole)
+    return { found: null, trouble: "A piece behind the match has no cable yet. Give it one on the Line view." };
   if (!feeder || !stubLine)
     return {
       found: null,

@@ -78,6 +78,25 @@ export function candidateCurve(
   return { returnLossDb: at.returnLossDb, reflection: at.reflection };
 }
 
+/** What the match sees at the design frequency, ohm; null where it is open or cannot be worked out. */
+export function seenAt({
+  load,
+  behind,
+  targetOhm,
+  designHz,
+  temperatureC,
+}: MatchAsked): { re: number; im: number } | null {
+  const source = { kind: "constant", reOhm: targetOhm, imOhm: 0 } as const;
+  try {
+    const { inputImpedance } = sweep({ source, elements: behind, load }, [designHz], { temperatureC });
+    const seen = { re: inputImpedance.re[0]!, im: inputImpedance.im[0]! };
+    return Number.isFinite(seen.re) && Number.isFinite(seen.im) ? seen : null;
+  } catch (error) {
+    if (!(error instanceof RangeError)) throw error;
+    return null;
+  }
+}
+
 /** Reflection at every element of a candidate, from the load to its target side: the steps on the Smith chart. */
 export function candidateSteps(elements: readonly EngineElement[], asked: MatchAsked): { re: number; im: number }[] {
   const steps: { re: number; im: number }[] = [];

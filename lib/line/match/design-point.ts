@@ -3,6 +3,7 @@ import { propagation } from "@/lib/line/cable";
 import { SPEED_OF_LIGHT } from "@/lib/line/constants";
 import type { Line } from "@/lib/line/element";
 import type { MatchLine, MatchRequest } from "@/lib/line/match/match-request";
+import type { MatchPieceName } from "@/lib/line/match/piece-name";
 import { seenLoad, type SeenLoadAt } from "@/lib/line/match/seen-load";
 import { frequencyText, lengthText, listText, ohmText } from "@/lib/line/match/wording";
 import { atTemperature } from "@/lib/line/temperature";
@@ -97,7 +98,7 @@ export function placeText({ words }: DesignPoint, distance: number): string {
 }
 
 /** The name of the length of feeder between a stub or section and what it matches. */
-export function leadName({ request }: DesignPoint, what: "Stub" | "Section"): string {
+export function leadName({ request }: DesignPoint, what: "Stub" | "Section"): MatchPieceName {
   return request.behind?.length ? `${what} to run` : `${what} to load`;
 }
 

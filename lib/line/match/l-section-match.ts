@@ -11,6 +11,7 @@ import {
   type PartValue,
 } from "@/lib/line/match/l-section";
 import type { MatchRequest, Outcome, Proposal } from "@/lib/line/match/match-request";
+import type { MatchPieceName } from "@/lib/line/match/piece-name";
 import { reflectionOf } from "@/lib/line/match/response";
 import { solvePair } from "@/lib/line/match/solve-pair";
 import { figure, frequencyText, listText, ohmText } from "@/lib/line/match/wording";
@@ -93,7 +94,7 @@ function elementsOf({ topology, series, shunt }: Parts, request: MatchRequest): 
 }
 
 function element(connection: "shunt" | "series", part: PartValue, request: MatchRequest): PartElement {
-  const name = `${connection === "series" ? "Series" : "Shunt"} ${part.part}`;
+  const name = `${connection === "series" ? "Series" : "Shunt"} ${part.part}` satisfies MatchPieceName;
   const value = part.part === "coil" ? { lH: part.lH } : { cF: part.cF };
   const q = qOf(part, request);
   return { kind: "part", name, connection, ...value, ...(q === undefined ? {} : { q, qAtHz: request.designHz }) };
