@@ -112,6 +112,7 @@ export const cablePageSchema = z
     items: z.array(cableItemSchema),
     nextCursor: nextCursorSchema,
     total: z.int(),
+    outOf: z.int().describe("entries of the catalogue there are to read, whatever is asked"),
     readAs: z.string().optional().describe("how the search was read"),
     corrected: z
       .array(z.strictObject({ typed: z.string(), read: z.string() }))

@@ -93,7 +93,7 @@ export function listDesignations(actor: Actor, ids: string[]): Map<string, strin
 export function listCables(actor: Actor, query: CableQuery): CablePage {
   requirePermission(actor, "cables.read");
   const reading = readSearchIn(actor, query.q, query.exact ?? false);
-  const { entries, relevance } = findCandidates(actor, reading, query.lossAtHz);
+  const { entries, relevance, readable } = findCandidates(actor, reading, query.lossAtHz);
   // Whoever sees the catalogue is shown what may be used; an installer, what was used.
   const defaultStates: CableState[] | undefined = may(actor, "cables.readCatalogue") ? ["approved"] : undefined;
   const asked = filters(query, defaultStates);
@@ -103,6 +103,7 @@ export function listCables(actor: Actor, query: CableQuery): CablePage {
     items: listItems(actor, items),
     nextCursor,
     total: sifted.passing.length,
+    outOf: readable,
     ...(reading && { readAs: reading.text, corrected: reading.corrected }),
     ...(reading &&
       sifted.passing.length === 0 && {

@@ -76,6 +76,8 @@ export interface Found {
   entries: readonly Candidate[];
   /** the more, the better an entry fits the search; 0 without words */
   relevance: (entry: Candidate) => number;
+  /** how many entries there are to search, whatever is searched for */
+  readable: number;
 }
 
 /**
@@ -83,10 +85,15 @@ export interface Found {
  * @param lossAtHz - frequency for the loss, hertz; the loss is null without it
  */
 export function findCandidates(actor: Actor, reading: SearchReading | undefined, lossAtHz: number | undefined): Found {
-  const readable = listFacts(actor.teamId, lossAtHz).filter(readableEntries(actor));
-  if (!reading) return { entries: readable, relevance: () => 0 };
-  const within = readable.filter((entry) => isWithinRanges(reading, entry));
+  const entries = listFacts(actor.teamId, lossAtHz).filter(readableEntries(actor));
+  const readable = entries.length;
+  if (!reading) return { entries, relevance: () => 0, readable };
+  const within = entries.filter((entry) => isWithinRanges(reading, entry));
   const found = fits(actor.teamId, reading, within);
-  if (!found) return { entries: within, relevance: () => 0 };
-  return { entries: within.filter(({ id }) => found.has(id)), relevance: ({ id }) => found.get(id) ?? 0 };
+  if (!found) return { entries: within, relevance: () => 0, readable };
+  return {
+    entries: within.filter(({ id }) => found.has(id)),
+    relevance: ({ id }) => found.get(id) ?? 0,
+    readable,
+  };
 }
