@@ -25,7 +25,8 @@ interface DumbbellsProps {
 
 const top = 4;
 const rowHeight = 50;
-const gutter = { left: 24, right: 14 };
+/** Room at the left for a letter and for the figure of a row that begins there. */
+const gutter = { left: 62, right: 14 };
 
 /** Two ends of one quantity a row, on a common axis: as drawn, and as bad as it may be made. */
 export function Dumbbells({ rows, domain, limit, format, ticks = 4, width = 286 }: DumbbellsProps) {

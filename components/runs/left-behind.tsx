@@ -4,6 +4,7 @@ import { useMemo } from "react";
 import { useRunEditor } from "@/components/runs/run-editor";
 import { pieceName } from "@/components/runs/strip-pieces";
 import { StateNote } from "@/components/ui/state-mark";
+import { isAtSource } from "@/lib/runs/match-place";
 import { leftBehind, leftBehindSentence } from "@/lib/runs/match-sentences";
 import type { MatchAsked } from "@/lib/runs/matching";
 
@@ -16,7 +17,7 @@ export function LeftBehind({ asked }: { asked: MatchAsked }) {
   if (!left) return null;
   const index = elements.length - place + (left.longest?.index ?? 0);
   const said = leftBehindSentence(left, asked.designHz, {
-    isAtSource: place === elements.length,
+    isAtSource: isAtSource(elements, place),
     sourceName: draft.sourceName,
     cableName: pieceName(elements, index, lines),
   });

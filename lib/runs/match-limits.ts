@@ -1,5 +1,5 @@
 /** What a match of a run keeps when it is not made as drawn. Pure. */
-import { cutLength, inWords, significantDigits } from "@/lib/format/quantity";
+import { cutLength, inWords } from "@/lib/format/quantity";
 import type { Element } from "@/lib/line/element";
 import { worstAtLimits, type CutTolerance } from "@/lib/line/match/at-limits";
 import { bandOf } from "@/lib/line/match/extreme";
@@ -19,9 +19,7 @@ function looseWords(elements: readonly Element[], { lengthM = 0, valuePercent = 
   const hasParts = valuePercent > 0 && elements.some(({ kind }) => kind === "part");
   const words = [
     ...(isCut ? [`cut ±${inWords(cutLength(lengthM))}`] : []),
-    ...(hasParts
-      ? [`parts ±${significantDigits(Number(valuePercent.toPrecision(2)), valuePercent < 10 ? 1 : 2)}\u00a0%`]
-      : []),
+    ...(hasParts ? [`parts ±${Number(valuePercent.toPrecision(3))}\u00a0%`] : []),
   ];
   return words.length > 0 ? words.join(", ") : null;
 }

@@ -32,6 +32,11 @@ export function placeOfMatch(elements: readonly Element[]): number {
   return last < 0 ? 0 : elements.length - 1 - last;
 }
 
+/** Whether nothing of the run stands in front of a place but a match that is there. */
+export function isAtSource(elements: readonly Element[], place: number): boolean {
+  return cutAt(elements, place).before.every(isMatchPiece);
+}
+
 const single = (element: Element | undefined) =>
   element?.kind === "cable" && (element.paralleled ?? 1) === 1 ? element : null;
 

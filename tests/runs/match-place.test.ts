@@ -1,6 +1,14 @@
 import { expect, test } from "vitest";
 import fc from "@/tests/support/property";
-import { feederTo, isKept, piecesBehind, placeOfMatch, withMatch, withoutMatch } from "@/lib/runs/match-place";
+import {
+  feederTo,
+  isAtSource,
+  isKept,
+  piecesBehind,
+  placeOfMatch,
+  withMatch,
+  withoutMatch,
+} from "@/lib/runs/match-place";
 import type { Element } from "@/lib/runs/circuit-schema";
 
 const cable = (cableId: string, lengthM: number, name?: string): Element => ({
@@ -41,6 +49,12 @@ test("length on the line of the cable just before the match is taken from that c
     expect(total).toBeCloseTo(place === 1 ? 49.5 : 49.75, 9);
   }
   expect(withMatch(run, match, 1)[3]).toEqual(cable("f28", 47.75, "Feeder"));
+});
+
+test("a place is at the source where only a match stands in front of it", () => {
+  expect(allPlaces.map((place) => isAtSource(run, place))).toEqual([false, false, false, false, false, true]);
+  expect(isAtSource(withMatch(run, match, run.length), run.length)).toBe(true);
+  expect(isAtSource(withMatch(run, match, 2), 2)).toBe(false);
 });
 
 test("a cable shorter than what the match would take of it is left whole", () => {
