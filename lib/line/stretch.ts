@@ -1,3 +1,4 @@
+import { goldenSection } from "@/lib/line/golden-section";
 import { prepareLine } from "@/lib/line/cable";
 import { abs, add, divide, multiply, scale, subtract, type Complex } from "@/lib/line/complex";
 import { lengthAlongPath, type Element, type ParallelElement } from "@/lib/line/element";
@@ -111,30 +112,9 @@ function largestOf(value: (distance: number) => number, length: number, halfWave
       value,
       (length * Math.max(0, n - 1)) / count,
       (length * Math.min(count, n + 1)) / count,
+      50,
     );
     if (crest.value > best.value) best = crest;
   });
   return best;
-}
-
-const golden = (Math.sqrt(5) - 1) / 2;
-
-/** The crest between two places that have one between them; 50 steps narrow it by 3·10⁻¹¹. */
-function goldenSection(value: (distance: number) => number, from: number, to: number): Peak {
-  let [low, high] = [from, to];
-  let left = high - golden * (high - low);
-  let right = low + golden * (high - low);
-  let [atLeft, atRight] = [value(left), value(right)];
-  for (let n = 0; n < 50; n++) {
-    if (atLeft > atRight) {
-      [high, right, atRight] = [right, left, atLeft];
-      left = high - golden * (high - low);
-      atLeft = value(left);
-    } else {
-      [low, left, atLeft] = [left, right, atRight];
-      right = low + golden * (high - low);
-      atRight = value(right);
-    }
-  }
-  return atLeft > atRight ? { value: atLeft, at: left } : { value: atRight, at: right };
 }

@@ -1,5 +1,9 @@
+import { goldenSection } from "@/lib/line/golden-section";
 import type { MatchRequest } from "@/lib/line/match/match-request";
 import { knownRange, rippleHz } from "@/lib/line/match/seen-load";
+
+/** Leaves 6·10⁻⁶ of the interval, 10⁻¹¹ of the peak. */
+const goldenSteps = 25;
 
 export interface Band {
   designHz: number;
@@ -55,7 +59,7 @@ export function greatest(
     if (top !== undefined && top > highest) [highest, best] = [top, k];
   }
   if (!(highest > atSample)) return atSample;
-  return Math.max(atSample, goldenMaximum(value, frequencies[best - 1]!, frequencies[best + 1]!));
+  return Math.max(atSample, goldenSection(value, frequencies[best - 1]!, frequencies[best + 1]!, goldenSteps).value);
 }
 
 /** The top of the parabola through three evenly spaced values; undefined where the middle one is not above both others. */
@@ -63,25 +67,4 @@ function parabolaTop(before: number, middle: number, after: number): number | un
   if (!(middle >= before && middle >= after && middle < Infinity)) return undefined;
   const bend = 2 * middle - before - after;
   return bend > 0 ? middle + (before - after) ** 2 / (8 * bend) : middle;
-}
-
-const golden = (Math.sqrt(5) - 1) / 2;
-/** Source: J. Kiefer, Proc. Amer. Math. Soc. 4 (1953) 502. 25 steps leave 6·10⁻⁶ of the interval, 10⁻¹¹ of the peak. */
-function goldenMaximum(value: (x: number) => number, from: number, to: number): number {
-  let [low, high] = [from, to];
-  let left = high - golden * (high - low);
-  let right = low + golden * (high - low);
-  let [atLeft, atRight] = [value(left), value(right)];
-  for (let step = 0; step < 25; step++) {
-    if (atLeft > atRight) {
-      [high, right, atRight] = [right, left, atLeft];
-      left = high - golden * (high - low);
-      atLeft = value(left);
-    } else {
-      [low, left, atLeft] = [left, right, atRight];
-      right = low + golden * (high - low);
-      atRight = value(right);
-    }
-  }
-  return Math.max(atLeft, atRight);
 }
