@@ -68,7 +68,7 @@ test("a second, shorted stub at the same tee gives the wanted channel back and l
 test.each(notch.velocity_off)("a velocity factor $percent % off moves the notch of $cable one for one", (row) => {
   const length = quarterWave(row.cable);
   for (const factor of [1 + row.percent / 100, 1 - row.percent / 100]) {
-    const off = between(50, [stub(row.cable, "open", length / factor)]);
+    const off = between(50, [stub(row.cable, "open", length * factor)]);
     closeTo(lossAt(off, notch.reject_hz), { value: row.depth_left_db, rel_tolerance: 0, abs_tolerance: 0.1 }, "left");
     const around = even(94e6, 101e6, 7001);
     const { transducerLossDb } = sweep(off, around);
