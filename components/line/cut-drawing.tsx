@@ -22,7 +22,7 @@ interface CutDrawingProps<L> {
 
 const { axisY: y } = cutFrame;
 
-const plainCoax: DrawnCable = {
+export const plainCoax: DrawnCable = {
   construction: { kind: "coax", innerMm: 0.9, dielectricMm: 3.15, relativePermittivity: 2.3, lossTangent: 0 },
   build: null,
   outerDiameterMm: 5,

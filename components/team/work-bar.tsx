@@ -8,7 +8,7 @@ import type { SignedIn } from "@/lib/team/schema";
 
 interface Props {
   signedIn: SignedIn;
-  current: "/cables" | "/runs";
+  current: "/cables" | "/runs" | "/calculate";
   /** what a phone shows in place of the name */
   title: string;
   back?: Route;
@@ -18,6 +18,7 @@ interface Props {
 const places: { href: Route; label: string }[] = [
   { href: "/cables", label: "Catalogue" },
   { href: "/runs", label: "Runs" },
+  { href: "/calculate" as Route, label: "Calculate" },
 ];
 
 /** Ends the session and leaves nothing of the team's in the browser's memory: the door is loaded afresh. */

@@ -1,5 +1,5 @@
 /** A length as people give it for a line: degrees, wavelengths, time, or metres of cable. Pure. */
-import { digits, significantDigits } from "@/lib/format/quantity";
+import { significantDigits, withoutTrailingZeros } from "@/lib/format/quantity";
 import { readQuantity, type Read } from "@/lib/format/read-quantity";
 
 /** An angle is in radians; a delay in seconds; a length, of cable, in metres. */
@@ -37,8 +37,7 @@ function angle(value: number): Read<GivenLength> {
 }
 
 function shortened(value: number): string {
-  const text = significantDigits(value, 5);
-  return text.includes(".") ? text.replace(/\.?0+$/, "") : digits(value, 0);
+  return withoutTrailingZeros(significantDigits(value, 5));
 }
 
 /** Reads a length of line; a bare figure is refused, since degrees and metres are both usual. */

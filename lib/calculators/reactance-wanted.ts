@@ -1,5 +1,5 @@
 /** A wanted reactance as people give it: ohms, or the part that would have it. Pure. */
-import { significantDigits } from "@/lib/format/quantity";
+import { significantDigits, withoutTrailingZeros } from "@/lib/format/quantity";
 import { readQuantity, type Read } from "@/lib/format/read-quantity";
 import { reactanceOfPart, type ReactivePart } from "@/lib/line/reactance";
 
@@ -16,7 +16,7 @@ export function readWantedReactance(text: string): Read<WantedReactance> {
   if (found && !(found[2] && found[4])) {
     const ohm = Number((found[3] ?? "").replace(",", ".")) * (found[1] === "-" ? -1 : 1);
     if (Math.abs(ohm) > 1e9) return { ok: false, message: "At most 1 GΩ." };
-    const size = significantDigits(Math.abs(ohm), 4).replace(/(\.\d*?)\.?0+$/, "$1");
+    const size = withoutTrailingZeros(significantDigits(Math.abs(ohm), 4));
     return { ok: true, value: { kind: "ohm", ohm }, understood: `${ohm < 0 ? "\u2212" : "+"}j${size}\u00a0Ω` };
   }
   const coil = readQuantity("inductance", typed);

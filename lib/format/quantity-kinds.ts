@@ -1,5 +1,12 @@
 /** The quantities people type: what each is called, its units, and how it is written back. */
-import { cutLength, frequency, scaled, significantDigits, type Figure } from "@/lib/format/quantity";
+import {
+  cutLength,
+  frequency,
+  scaled,
+  significantDigits,
+  withoutTrailingZeros,
+  type Figure,
+} from "@/lib/format/quantity";
 import type { QuantityKind } from "@/lib/format/unit-spelling";
 
 interface Kind {
@@ -89,5 +96,5 @@ export const kinds: Record<QuantityKind, Kind> = {
 };
 
 function trimmed(figure: Figure): Figure {
-  return { ...figure, digits: figure.digits.replace(/(\.\d*?)0+$/, "$1").replace(/\.$/, "") };
+  return { ...figure, digits: withoutTrailingZeros(figure.digits) };
 }

@@ -37,6 +37,11 @@ export function significantDigits(value: number | null | undefined, significant:
   return digits(value, decimalsFor(value, significant));
 }
 
+/** "0.660" → "0.66", "90.000" → "90"; whole numbers stay. */
+export function withoutTrailingZeros(text: string): string {
+  return text.includes(".") ? text.replace(/\.?0+$/, "") : text;
+}
+
 interface Unit {
   symbol: string;
   factor: number;

@@ -1,5 +1,5 @@
 /** What people type for the velocity of a cable: a fraction, a percentage, or its inverse. */
-import { significantDigits } from "@/lib/format/quantity";
+import { significantDigits, withoutTrailingZeros } from "@/lib/format/quantity";
 import type { Read } from "@/lib/format/read-quantity";
 
 const example = "0.85, 85 % or 1/1.18";
@@ -26,9 +26,6 @@ export function readVelocityFactor(text: string): Read<number> {
 
 function fraction(value: number, how: string): Read<number> {
   if (!(value > 0 && value <= 1)) return { ok: false, message: "More than 0, at most 1: nothing outruns light." };
-  return { ok: true, value: Number(value.toPrecision(15)), understood: `${trimmed(value)}${how}` };
-}
-
-function trimmed(value: number): string {
-  return significantDigits(value, 4).replace(/\.?0+$/, "");
+  const figure = withoutTrailingZeros(significantDigits(value, 4));
+  return { ok: true, value: Number(value.toPrecision(15)), understood: `${figure}${how}` };
 }

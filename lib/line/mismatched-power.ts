@@ -3,7 +3,7 @@
  * impedance is real and whose loss is spread over its length; where a run is known whole, `standing-wave.ts` is exact.
  */
 import { magnitudeThroughLine } from "@/lib/line/reflection";
-import { arg, type Complex } from "@/lib/line/complex";
+import { abs, add, arg, multiply, ONE, polar, type Complex } from "@/lib/line/complex";
 import { wavelengths } from "@/lib/line/match/line-angle";
 
 /** The waves at one place, watt; net is what goes on toward the load. */
@@ -102,4 +102,14 @@ export function rippleDb(first: number, second: number, lossDb = 0): number {
  */
 export function voltageMaximumAt(gamma: Complex): number {
   return wavelengths(arg(gamma) / 2);
+}
+
+/**
+ * Voltage of the standing wave over that of the wave toward the load, |1 + Γ·e^(−j4πd)|, on a lossless line.
+ * @param gamma - reflection at the load
+ * @param distance - from the load, wavelengths
+ * @returns between 1 − |Γ| and 1 + |Γ|
+ */
+export function standingVoltage(gamma: Complex, distance: number): number {
+  return abs(add(ONE, multiply(gamma, polar(1, -4 * Math.PI * distance))));
 }

@@ -3,7 +3,14 @@ import { expect, test } from "vitest";
 import { modelFromNominal } from "@/lib/line/cable";
 import { complex, polar } from "@/lib/line/complex";
 import { SPEED_OF_LIGHT } from "@/lib/line/constants";
-import { powersOnLine, ratingShares, rippleDb, voltageMaximumAt, waveExtremes } from "@/lib/line/mismatched-power";
+import {
+  powersOnLine,
+  ratingShares,
+  rippleDb,
+  standingVoltage,
+  voltageMaximumAt,
+  waveExtremes,
+} from "@/lib/line/mismatched-power";
 import { impedanceOfReflection, magnitudeOfVswr, mismatchedLineLossDb } from "@/lib/line/reflection";
 import { standingWave } from "@/lib/line/standing-wave";
 import { agrees, number, published, type PublishedCheck } from "@/tests/support/published";
@@ -93,6 +100,22 @@ test("voltageMaximumAt: at an open or high load at once, a quarter wave before a
   // a capacitive load has its maximum before the next quarter is over, an inductive one within the first
   expect(voltageMaximumAt(polar(0.5, -Math.PI / 2))).toBeCloseTo(0.375, 12);
   expect(voltageMaximumAt(polar(0.5, Math.PI / 2))).toBeCloseTo(0.125, 12);
+});
+
+test("standingVoltage runs between 1 − |Γ| and 1 + |Γ|, greatest where voltageMaximumAt says", () => {
+  fc.assert(
+    fc.property(
+      fc.double({ min: 0.01, max: 1, noNaN: true }),
+      fc.double({ min: -3, max: 3, noNaN: true }),
+      (m, angle) => {
+        const gamma = polar(m, angle);
+        const at = voltageMaximumAt(gamma);
+        expect(standingVoltage(gamma, at)).toBeCloseTo(1 + m, 9);
+        expect(standingVoltage(gamma, at + 0.25)).toBeCloseTo(1 - m, 9);
+        expect(standingVoltage(gamma, at + 0.1)).toBeLessThan(1 + m);
+      },
+    ),
+  );
 });
 
 test("a line that reflects everything takes no net power, and says what forward power alone does", () => {

@@ -1,0 +1,38 @@
+import type { Route } from "next";
+import Link from "next/link";
+import { CalculatorKeys } from "@/components/calculators/calculator-keys";
+import { Vignette } from "@/components/calculators/vignettes";
+import { KeyCap } from "@/components/ui/key-cap";
+import { calculatorPlaces } from "@/lib/calculators/places";
+
+/** The calculators, each drawn and in a sentence. */
+export function CalculatorIndex() {
+  return (
+    <>
+      <CalculatorKeys />
+      <h1 className="phone:sr-only">Calculate</h1>
+      <p className="mt-1 max-w-160 text-ink-2">
+        Figures without a run. What stands on a page is in its address, so it can be sent as it is; cables come from
+        your catalogue or are typed, and each page leads on into a run.
+      </p>
+      <ul className="mt-5 grid grid-cols-3 gap-x-10 gap-y-8 folded:grid-cols-2 phone:grid-cols-1">
+        {calculatorPlaces.map(({ path, title, answers }, i) => (
+          <li key={path} className="border-t-[1.5px] border-ink pt-2">
+            <Link href={path as Route} className="group block">
+              <span className="flex items-baseline justify-between gap-3">
+                <h2 className="group-hover:text-copper">{title}</h2>
+                <span className="phone:hidden">
+                  <KeyCap>{i + 1}</KeyCap>
+                </span>
+              </span>
+              <span className="mt-3 block">
+                <Vignette path={path} />
+              </span>
+              <span className="mt-2 block text-label text-ink-2">{answers}</span>
+            </Link>
+          </li>
+        ))}
+      </ul>
+    </>
+  );
+}
