@@ -20,6 +20,7 @@ import { Verdicts } from "@/components/runs/verdicts";
 import { WaveChart } from "@/components/runs/wave-chart";
 import { Button } from "@/components/ui/button";
 import { StateNote } from "@/components/ui/state-mark";
+import { useIsPhone } from "@/components/ui/use-is-phone";
 import { insertAt, move, newElement } from "@/lib/runs/edit";
 
 /** The run as its line: the strip, the leaf of what is selected, and under them everything that depends on place. */
@@ -92,6 +93,7 @@ function LinePanel({ analysis, isBehind }: LinePanelProps) {
   const { elements } = draft.circuit;
   const pieces = stripPieces(draft, lines, faults, analysis?.pieces);
   const { ref, width, scale } = useLineScale(pieces);
+  const isPhone = useIsPhone();
   const put = (next: typeof elements) => edit({ ...draft, circuit: { ...draft.circuit, elements: next } });
   const index = typeof selected === "number" ? selected : null;
   const strip = {
@@ -105,21 +107,27 @@ function LinePanel({ analysis, isBehind }: LinePanelProps) {
   const wave = analysis?.wave ?? null;
   return (
     <div ref={ref}>
-      <div className="relative phone:hidden">
-        <Strip {...strip} scale={scale} width={width} />
-        <EndButtons
-          source={{ width: scale.startX - 4 }}
-          load={{ left: scale.endX + 8, width: Math.max(24, width - scale.endX - 8) }}
-        />
-      </div>
-      <div className="hidden phone:block">
-        <LineDown {...strip} wave={wave} availablePowerW={draft.availablePowerW} />
-      </div>
+      {isPhone !== true && (
+        <div className="relative phone:hidden">
+          <Strip {...strip} scale={scale} width={width} />
+          <EndButtons
+            source={{ width: scale.startX - 4 }}
+            load={{ left: scale.endX + 8, width: Math.max(24, width - scale.endX - 8) }}
+          />
+        </div>
+      )}
+      {isPhone !== false && (
+        <div className="hidden phone:block">
+          <LineDown {...strip} wave={wave} availablePowerW={draft.availablePowerW} />
+        </div>
+      )}
       <LeafPanel notchX={notchOf(selected, scale)} figures={index === null ? undefined : analysis?.pieces[index]} />
       {canEdit && <AddPiece put={put} />}
-      <div className={`mt-3 phone:hidden ${isBehind ? "opacity-60" : ""}`}>
-        <WaveChart wave={wave} scale={scale} width={width} />
-      </div>
+      {isPhone !== true && (
+        <div className={`mt-3 phone:hidden ${isBehind ? "opacity-60" : ""}`}>
+          <WaveChart wave={wave} scale={scale} width={width} />
+        </div>
+      )}
     </div>
   );
 }

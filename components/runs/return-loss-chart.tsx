@@ -21,7 +21,7 @@ export function ReturnLossChart({ analysis }: { analysis: Analysis }) {
   const { bandHz, sourceName, loadName, targets, designHz } = draft;
   const limitDb = targets.find((t) => t.quantity === "returnLoss" && t.atLeast !== undefined)?.atLeast ?? null;
   // A screen is not wider than this many points; the worst is found among all of them.
-  const shown = thinned([...analysis.sweep.frequencies.keys()], 1001);
+  const shown = thinned([...analysis.sweep.frequencies.keys()], 501);
   const xs = shown.map((i) => analysis.sweep.frequencies[i]!);
   const source = plotted(shown.map((i) => analysis.sourceReturnLossDb[i]!));
   const load = plotted(shown.map((i) => analysis.loadReturnLossDb[i]!));

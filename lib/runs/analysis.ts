@@ -145,8 +145,11 @@ function waveOf(
   temperatureC: number,
   pieces: PieceFigures[],
 ): StandingWave | null {
-  const longest = Math.max(0, ...pieces.map(({ electricalLength }) => electricalLength ?? 0));
-  const pointsPerElement = Math.min(4001, Math.max(101, Math.ceil(longest * 2 * 40) + 1));
+  const halfWaves = pieces.map(({ electricalLength }) => 2 * (electricalLength ?? 0));
+  const total = halfWaves.reduce((sum, count) => sum + count, 0);
+  // Where the ripples are too many to be told apart, only the curves that hold them are drawn.
+  const perHalfWave = total > 80 ? 8 : 32;
+  const pointsPerElement = Math.min(2001, Math.max(51, Math.ceil(Math.max(0, ...halfWaves) * perHalfWave) + 1));
   const { source } = circuit;
   const hasPower = source.kind === "constant" ? source.reOhm > 0 : source.kind === "network" && (source.rOhm ?? 0) > 0;
   return hasPower ? standingWave(circuit, designHz, powerW, { temperatureC, pointsPerElement }) : null;
