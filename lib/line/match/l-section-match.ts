@@ -13,7 +13,7 @@ import {
 import type { MatchRequest, Outcome, Proposal } from "@/lib/line/match/match-request";
 import type { MatchPieceName } from "@/lib/line/match/piece-name";
 import { reflectionOf } from "@/lib/line/match/response";
-import { solvePair } from "@/lib/line/match/solve-pair";
+import { lossySections, type PartsQ } from "@/lib/line/match/l-section-lossy";
 import { figure, frequencyText, listText, ohmText } from "@/lib/line/match/wording";
 
 interface Parts {
@@ -24,44 +24,37 @@ interface Parts {
 }
 
 /**
- * A coil or capacitor in series and one across, every solution of both topologies: the lossless closed form, then solved
- * again with the parts' Q, then with standard E24 values as candidates of their own.
+ * A coil or capacitor in series and one across, every solution of both topologies: the closed form for parts without
+ * loss, else solved with their Q, and each again with standard E24 values as a candidate of its own. One part alone that
+ * would match without its loss is a candidate too.
  */
 export function lSectionMatches(point: DesignPoint): Outcome {
-  const { load, request } = point;
-  const proposals: Proposal[] = [];
-  for (const solution of lSections(load, request.targetOhm)) {
-    const exact = withLoss(point, partsOf(solution, request.designHz));
-    if (!exact) continue;
-    proposals.push(proposal(point, exact));
+  const { load, request, words } = point;
+  const q = { coil: request.partQ?.coilQ ?? Infinity, capacitor: request.partQ?.capacitorQ ?? Infinity };
+  const lossless = lSections(load, request.targetOhm);
+  const single = lossless.filter((each) => each.shuntSusceptanceS === 0 || each.seriesReactanceOhm === 0);
+  const isLossy = q.coil < Infinity || q.capacitor < Infinity;
+  const solutions = isLossy ? [...lossySections(load, request.targetOhm, q), ...single] : lossless;
+  const proposals = solutions.flatMap((solution) => {
+    const exact = partsOf(solution, request.designHz, q);
     const standard = standardParts(point, exact);
-    if (standard) proposals.push(proposal(point, standard, exact));
-  }
-  return { proposals, why: proposals.length === 0 ? reason(point) : "" };
+    return [proposal(point, exact), ...(standard ? [proposal(point, standard, exact)] : [])];
+  });
+  return { proposals, why: `No two parts bring the ${words.matched} to ${ohmText(request.targetOhm)}.` };
 }
 
-function partsOf({ topology, shuntSusceptanceS, seriesReactanceOhm }: LSolution, frequency: number): Parts {
+function partsOf(
+  { topology, shuntSusceptanceS: b, seriesReactanceOhm: x }: LSolution,
+  frequency: number,
+  q: PartsQ,
+): Parts {
+  // The susceptance of a lossy part is a little less than that of its reactance alone: 1/(X·(1 + 1/Q²)).
+  const lossless = b * (1 + 1 / (b > 0 ? q.capacitor : q.coil) ** 2);
   return {
     topology,
-    ...(shuntSusceptanceS !== 0 ? { shunt: shuntPart(shuntSusceptanceS, frequency) } : {}),
-    ...(seriesReactanceOhm !== 0 ? { series: seriesPart(seriesReactanceOhm, frequency) } : {}),
+    ...(b !== 0 ? { shunt: shuntPart(lossless, frequency) } : {}),
+    ...(x !== 0 ? { series: seriesPart(x, frequency) } : {}),
   };
-}
-
-/** The same parts with values that bring the load to the target in spite of their Q; undefined where none do. */
-function withLoss(point: DesignPoint, lossless: Parts): Parts | undefined {
-  const { series, shunt } = lossless;
-  if (!series || !shunt) return lossless;
-  const [x, y] = [valueOf(series), valueOf(shunt)];
-  const parts = (a: number, b: number): Parts => ({
-    ...lossless,
-    series: withValue(series, a),
-    shunt: withValue(shunt, b),
-  });
-  const residual = (a: number, b: number): Complex =>
-    a > 0 && b > 0 ? reflectionWith(point, parts(a, b)) : { re: NaN, im: NaN };
-  const solution = solvePair(residual, [x, y], [x / 4, y / 4]);
-  return solution.converged ? parts(...solution.value) : undefined;
 }
 
 /** Of the standard values on either side, those that match best; undefined where the parts are standard already. */
@@ -154,10 +147,4 @@ function placeNote({ topology, series, shunt }: Parts, place: string, isStandard
   const across = shunt && `${valueText(shunt, isStandard)} across the line`;
   const [near, far] = topology === "shuntAtLoad" ? [across, inSeries] : [inSeries, across];
   return `From ${place} toward the source: ${[near, far].filter((each) => each !== undefined).join(", then ")}.`;
-}
-
-function reason({ request: { partQ, targetOhm }, words }: DesignPoint): string {
-  const qs = [partQ?.coilQ && `coils of Q ${partQ.coilQ}`, partQ?.capacitorQ && `capacitors of Q ${partQ.capacitorQ}`];
-  const what = listText(qs.filter((each): each is string => Boolean(each)));
-  return `With the loss of ${what || "its parts"}, no two parts bring the ${words.matched} to ${ohmText(targetOhm)}.`;
 }

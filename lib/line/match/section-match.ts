@@ -1,8 +1,11 @@
+import { abs } from "@/lib/line/complex";
 import type { Element } from "@/lib/line/element";
 import { leadName, lengthNotes, placeText, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
+import { reflectionAgainst } from "@/lib/line/match/line-angle";
 import { realPoints, sectionImpedance } from "@/lib/line/match/quarter-wave";
-import { seriesSection } from "@/lib/line/match/series-section";
+import { sectionScan } from "@/lib/line/match/section-scan";
+import { sectionCosine, seriesSection } from "@/lib/line/match/series-section";
 import { along, loadPair, withLossShare } from "@/lib/line/match/pair";
 import { solveLengths, type Lengths, type Network } from "@/lib/line/match/solve-lengths";
 import { trimNotes } from "@/lib/line/match/trim";
@@ -51,8 +54,19 @@ function solutions(point: DesignPoint, feeder: DesignLine, line: DesignLine, cou
     const [main, section] = [withLossShare(feeder, share), withLossShare(line, share)];
     return (d, l) => along(along(loadPair(point), main, d), section, l, count);
   };
+  const hints = isReachUncertain(point, feeder, line, count) ? sectionScan(point, feeder, line, count) : [];
   // A section of no length is no section: the feeder alone would match.
-  return solveLengths(point, network, starts, halfWaves).filter(([, length]) => length > 0);
+  return solveLengths(point, network, starts, halfWaves, hints).filter(([, length]) => length > 0);
+}
+
+/** Whether loss may decide if the section reaches the target at all: the lossless form is this near its limit. */
+function isReachUncertain(point: DesignPoint, feeder: DesignLine, line: DesignLine, count: number): boolean {
+  const { load, request } = point;
+  const sectionOhm = line.zc.re / count;
+  const cosine = sectionCosine({ load, lineOhm: feeder.zc.re, sectionOhm, targetOhm: request.targetOhm });
+  const loss = feeder.gamma.re / feeder.gamma.im + line.gamma.re / line.gamma.im;
+  const size = abs(reflectionAgainst(load, feeder.zc.re));
+  return Math.abs(Math.abs(cosine) - 1) < (10 * loss) / size;
 }
 
 function closedForm({ load, request }: DesignPoint, feeder: DesignLine, sectionOhm: number) {

@@ -16,6 +16,8 @@ type Solve = (lossShare: number, from: Lengths) => Lengths | undefined;
 const nearStart = 0.05;
 /** A length this part of a half wave from either end may have a twin a half wave on. */
 const nearEnd = 0.1;
+/** Within this part of a half wave two solutions are one. */
+const same = 1e-6;
 /** Below this part of a half wave a length is 0: rounding of the solution. */
 const rounding = 1e-11;
 
@@ -26,9 +28,16 @@ const rounding = 1e-11;
  * by a half wave, its twin a half wave on is solved too, and whatever ends between 0 and a half wave is kept.
  * @param starts - the lossless solutions, metre
  * @param halfWaves - metre, of the two lines
+ * @param hints - places near which there may be more, with all of the loss, metre
  * @returns metre, each 0 to under its half wave; without the solutions that the loss does away with
  */
-export function solveLengths(point: DesignPoint, network: Network, starts: Lengths[], halfWaves: Lengths): Lengths[] {
+export function solveLengths(
+  point: DesignPoint,
+  network: Network,
+  starts: Lengths[],
+  halfWaves: Lengths,
+  hints: Lengths[] = [],
+): Lengths[] {
   const target = { re: point.request.targetOhm, im: 0 };
   const solve: Solve = (lossShare, from) => {
     const seen = network(lossShare);
@@ -40,14 +49,16 @@ export function solveLengths(point: DesignPoint, network: Network, starts: Lengt
     return converged ? value : undefined;
   };
   const found: Lengths[] = [];
+  const keep = (exact: Lengths | undefined) => {
+    const inside = exact && withinHalfWaves(exact, halfWaves);
+    if (inside && !found.some((each) => near(each, inside, halfWaves, same))) found.push(inside);
+  };
   for (const start of starts) {
     const solution = near(solve(1, start), start, halfWaves) ?? followed(solve, start, halfWaves);
-    for (const twin of solution ? twins(solution, halfWaves) : []) {
-      const exact = twin === solution ? solution : near(solve(1, twin), twin, halfWaves);
-      const inside = exact && withinHalfWaves(exact, halfWaves);
-      if (inside && !found.some((each) => near(each, inside, halfWaves, 1e-6))) found.push(inside);
-    }
+    for (const twin of solution ? twins(solution, halfWaves) : [])
+      keep(twin === solution ? solution : near(solve(1, twin), twin, halfWaves));
   }
+  for (const hint of hints) keep(near(solve(1, hint), hint, halfWaves));
   return found;
 }
 

@@ -75,20 +75,6 @@ test("a feeder that nowhere shows the target's conductance is refused by name", 
   ]);
 });
 
-test("parts whose Q cannot complete the match are refused with their Q", () => {
-  const load: Termination = { kind: "constant", reOhm: 20, imOhm: -150 };
-  const { candidates, refused } = findMatches({
-    ...request,
-    load,
-    methods: ["lSection"],
-    partQ: { coilQ: 0.5, capacitorQ: 0.5 },
-  });
-  expect(candidates).toEqual([]);
-  expect(plain(refused[0]!.why)).toBe(
-    "With the loss of coils of Q 0.5 and capacitors of Q 0.5, no two parts bring the load to 50.0 Ω.",
-  );
-});
-
 test.each([
   ["targetOhm", { targetOhm: 0 }],
   ["targetOhm", { targetOhm: NaN }],
