@@ -1,25 +1,31 @@
+"use client";
+
 import type { Route } from "next";
-import Link from "next/link";
-import { SectionView } from "@/components/line/section-view";
-import { RangeBar, RangeBarScale } from "@/components/plot/range-bar";
-import { StateMark } from "@/components/ui/state-mark";
-import { Cell, HeadCell, RowHead, Table } from "@/components/ui/table";
-import { buildWords, stateWords } from "@/components/cables/words";
+import { useState, type KeyboardEvent } from "react";
+import { barDomain, barWidth, CableRow } from "@/components/cables/cable-row";
+import { segments } from "@/components/cables/row-window";
+import { useRowHeight, useRowWindow } from "@/components/cables/use-row-window";
+import { RangeBarScale } from "@/components/plot/range-bar";
+import { HeadCell, Table } from "@/components/ui/table";
+import { entryAddress } from "@/lib/cables/entry-address";
 import type { CableItem } from "@/lib/cables/schema";
-import { digits, frequency, inWords } from "@/lib/format/quantity";
+import { frequency, inWords } from "@/lib/format/quantity";
 
 interface Props {
-  items: CableItem[];
+  items: readonly CableItem[];
+  /** how many the search finds, of which `items` are the first */
+  total: number;
+  /** of the thickest cable there may be in the list */
+  thickestMm: number;
   lossAtHz: number;
   canStartRun: boolean;
+  held: readonly string[];
+  toggleHold: (item: CableItem) => void;
+  /** the last of the rows have come in sight */
+  onEnd: () => void;
 }
 
-/** px per millimetre on a desk: the thickest cable in common use still fits its row. */
-const mmToPx = 2.6;
-const barDomain = [0.1, 200] as const;
-const barWidth = 118;
-
-function Scale() {
+function Scale({ mmToPx }: { mmToPx: number }) {
   return (
     <svg width={10 * mmToPx + 2} height="8" aria-hidden="true" className="mx-auto block">
       <path d={`M1 1v6M1 4h${10 * mmToPx}m0 -3v6`} fill="none" stroke="var(--ink-2)" />
@@ -27,16 +33,16 @@ function Scale() {
   );
 }
 
-function Head({ lossAtHz }: { lossAtHz: number }) {
+function Head({ lossAtHz, mmToPx }: { lossAtHz: number; mmToPx: number }) {
   const unit = (text: string) => <span className="block font-normal">{text}</span>;
   return (
-    <thead className="phone:hidden">
-      <tr className="[&>th]:border-ink [&>th]:align-top">
+    <thead className="sticky top-0 z-2 bg-paper phone:hidden">
+      <tr aria-rowindex={1} className="[&>th]:border-ink [&>th]:align-top">
         <HeadCell className="w-16 text-center">
           <span className="block font-normal">10 mm</span>
-          <Scale />
+          <Scale mmToPx={mmToPx} />
         </HeadCell>
-        <HeadCell>Cable</HeadCell>
+        <HeadCell className="w-full">Cable</HeadCell>
         <HeadCell isRight>
           Z<sub>0</sub>
           {unit("Ω")}
@@ -58,94 +64,75 @@ function Head({ lossAtHz }: { lossAtHz: number }) {
         </HeadCell>
         <HeadCell className="pl-6">State</HeadCell>
         <HeadCell aria-label="Use" />
+        <HeadCell isRight>Hold</HeadCell>
       </tr>
     </thead>
   );
 }
 
-/** The rows of the catalogue: each cable end-on, to one scale, with its figures. */
-export function CableRows({ items, lossAtHz, canStartRun }: Props) {
-  return (
-    <Table className="mt-1">
-      <Head lossAtHz={lossAtHz} />
-      <tbody>
-        {items.map((item) => (
-          <CableRow key={item.id} item={item} lossAtHz={lossAtHz} canStartRun={canStartRun} />
-        ))}
-      </tbody>
-    </Table>
-  );
+const columns = 12;
+const mostMmToPx = 3;
+
+/** px per millimetre, the same for every row: as large as the thickest cable lets it be. */
+function scaleFor(thickestMm: number, rowHeight: number): number {
+  return Math.round(10 * Math.min(mostMmToPx, (rowHeight - 6) / thickestMm)) / 10;
 }
 
-function CableRow({ item, lossAtHz, canStartRun }: { item: CableItem; lossAtHz: number; canStartRun: boolean }) {
-  const { word, mark } = stateWords[item.state];
-  const isUsable = item.state === "approved" || item.state === "restricted";
-  const [low, high] = item.lossRangeDbPer100m;
-  const figure = (value: number | null, decimals: number) => <span className="figures">{digits(value, decimals)}</span>;
+/** Arrow keys go from one cable to the next, whatever in the row has the focus. */
+function step(event: KeyboardEvent<HTMLElement>) {
+  const by = { ArrowDown: 1, ArrowUp: -1 }[event.key];
+  const row = (event.target as HTMLElement).closest("[data-index]");
+  if (!by || !row || event.altKey || event.ctrlKey || event.metaKey) return;
+  const next = Number(row.getAttribute("data-index")) + by;
+  event.preventDefault();
+  if (next < 0) document.querySelector<HTMLElement>("input[type=search]")?.focus();
+  else event.currentTarget.querySelector<HTMLElement>(`[data-index="${next}"] a`)?.focus();
+}
+
+/**
+ * The rows of the catalogue: each cable end-on, to one scale, with its figures. Of a long list only the rows in sight
+ * are drawn.
+ */
+export function CableRows({ items, total, thickestMm, lossAtHz, canStartRun, held, toggleHold, onEnd }: Props) {
+  const rowHeight = useRowHeight();
+  const { ref, inSight } = useRowWindow(rowHeight, items.length, onEnd);
+  const mmToPx = scaleFor(thickestMm, rowHeight);
+  const [focused, setFocused] = useState<number | null>(null);
   return (
-    <tr className="hover:bg-copper-wash/50 phone:grid phone:grid-cols-[76px_minmax(0,1fr)_auto] phone:gap-x-3 phone:border-b phone:border-line phone:py-3 [&>*]:align-middle [&>*]:phone:border-0 [&>*]:phone:p-0">
-      <Cell className="h-13 w-16 phone:row-span-3 phone:h-auto">
-        <span className="flex items-center justify-center">
-          <SectionView
-            construction={item.construction}
-            build={item.build}
-            family={item.family}
-            outerDiameterMm={item.outerDiameterMm}
-            mmToPx={mmToPx}
-          />
-        </span>
-      </Cell>
-      <RowHead className="max-w-0 min-w-56 phone:max-w-none phone:min-w-0">
-        <span className="flared block truncate text-row">
-          {item.designation}
-          {item.preferred && <span className="ml-2 text-note font-normal text-copper">preferred</span>}
-        </span>
-        <span className="block truncate text-label text-ink-2" title={`${item.name}. ${buildWords(item.build)}`}>
-          {item.name}. {buildWords(item.build)}
-        </span>
-      </RowHead>
-      <Cell isRight className="phone:hidden">
-        {figure(item.z0Ohm, 1)}
-      </Cell>
-      <Cell isRight className="phone:hidden">
-        {figure(item.velocityFactor, 3)}
-      </Cell>
-      <Cell isRight className="phone:col-start-3 phone:row-start-1 phone:text-figure">
-        <b className="figures">{digits(item.lossDbPer100m, 2)}</b>
-        <span className="unit hidden phone:block phone:text-note">dB/100 m at {inWords(frequency(lossAtHz))}</span>
-      </Cell>
-      <Cell className="pl-5 folded:hidden">
-        <RangeBar range={[low, high]} at={item.lossDbPer100m} domain={barDomain} width={barWidth} height={30} />
-      </Cell>
-      <Cell isRight className="folded:hidden">
-        {figure(item.delaySPerM * 1e9, 2)}
-      </Cell>
-      <Cell isRight className="phone:hidden">
-        {figure(item.outerDiameterMm, 1)}
-      </Cell>
-      <Cell isRight className="folded:hidden">
-        {figure(item.usedInRuns, 0)}
-      </Cell>
-      <Cell className="hidden phone:col-start-2 phone:row-start-2 phone:block">
-        <span className="figures">{digits(item.z0Ohm, 1)}</span>
-        <span className="unit"> Ω</span> <span className="figures">{digits(item.velocityFactor, 3)}</span>{" "}
-        <span className="figures">{digits(item.outerDiameterMm, 1)}</span>
-        <span className="unit"> mm</span>
-      </Cell>
-      <Cell className="pl-6 phone:col-start-2 phone:row-start-3">
-        <StateMark state={mark}>{word}</StateMark>
-        {item.condition && <span className="block max-w-40 text-note text-ink-3">{item.condition}</span>}
-      </Cell>
-      <Cell isRight className="phone:col-start-3 phone:row-start-3">
-        {canStartRun && isUsable && (
-          <Link
-            href={`/runs/new?cable=${encodeURIComponent(item.id)}` as Route}
-            className="link text-label whitespace-nowrap phone:flex phone:min-h-11 phone:items-center"
-          >
-            Use in a run
-          </Link>
-        )}
-      </Cell>
-    </tr>
+    <Table className="mt-1 phone:-mx-4 phone:w-screen" aria-rowcount={total + 1} aria-label="Cables">
+      <Head lossAtHz={lossAtHz} mmToPx={mmToPx} />
+      <tbody
+        ref={ref}
+        onKeyDown={step}
+        onFocus={(event) => {
+          const row = event.target.closest("[data-index]");
+          setFocused(row ? Number(row.getAttribute("data-index")) : null);
+        }}
+        onBlur={() => setFocused(null)}
+      >
+        {segments(items.length, inSight, focused).map((segment) => {
+          if (segment.kind === "gap")
+            return (
+              <tr key={`gap ${segment.from}`} aria-hidden="true">
+                <td colSpan={columns} style={{ height: segment.rows * rowHeight }} className="p-0" />
+              </tr>
+            );
+          const item = items[segment.index];
+          if (!item) return null;
+          return (
+            <CableRow
+              key={item.id}
+              item={item}
+              index={segment.index}
+              href={entryAddress(item.id, { lossAtHz, held: [...held] }) as Route}
+              canStartRun={canStartRun}
+              isHeld={held.includes(item.id)}
+              toggleHold={() => toggleHold(item)}
+              mmToPx={mmToPx}
+            />
+          );
+        })}
+      </tbody>
+    </Table>
   );
 }

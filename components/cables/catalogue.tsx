@@ -1,153 +1,156 @@
 "use client";
 
-import { useInfiniteQuery } from "@tanstack/react-query";
-import { useEffect, useState } from "react";
+import dynamic from "next/dynamic";
 import { CableRows } from "@/components/cables/cable-rows";
-import { CatalogueFilters } from "@/components/cables/catalogue-filters";
+import { CatalogueFacets } from "@/components/cables/catalogue-facets";
+import { FacetCards } from "@/components/cables/facet-cards";
+import { ListOrder } from "@/components/cables/list-order";
 import { NothingFound } from "@/components/cables/nothing-found";
+import { PutBack } from "@/components/cables/put-back";
+import { ReadAs, SearchField } from "@/components/cables/search-field";
+import { useCablePages, type FirstPage } from "@/components/cables/use-cable-pages";
+import { useCatalogueAddress } from "@/components/cables/use-catalogue-address";
+import { useHeld } from "@/components/cables/use-held";
 import { Button } from "@/components/ui/button";
-import { fieldColours, fieldEdge } from "@/components/ui/field";
-import { KeyCap } from "@/components/ui/key-cap";
-import { Select } from "@/components/ui/select";
+import { useKeys } from "@/components/ui/keys";
 import { StateNote } from "@/components/ui/state-mark";
-import { cableRequest, catalogueAddress, type CatalogueAsked, type CatalogueSort } from "@/lib/cables/address";
+import { Working } from "@/components/ui/working";
+import { cableRequest } from "@/lib/cables/request";
 import type { CablePage } from "@/lib/cables/query";
+import type { CableItem } from "@/lib/cables/schema";
 import { frequency, inWords } from "@/lib/format/quantity";
-import { call } from "@/lib/http/call";
+
+// Fetched when the first cable is held up.
+const Tray = dynamic(() => import("@/components/cables/tray").then((file) => file.Tray));
+const Comparison = dynamic(() => import("@/components/cables/comparison").then((file) => file.Comparison));
 
 interface Props {
-  asked: CatalogueAsked;
+  first: FirstPage;
   canStartRun: boolean;
 }
 
-/** The team's cables: searched as typed, filtered, each drawn end-on to one scale. */
-export function Catalogue({ asked: first, canStartRun }: Props) {
-  const [asked, setAsked] = useState(first);
-  const pages = useInfiniteQuery({
-    queryKey: ["cables", "catalogue", asked],
-    queryFn: ({ pageParam, signal }) => call<CablePage>(cableRequest(asked, pageParam), { signal }),
-    initialPageParam: null as string | null,
-    getNextPageParam: (page) => page.nextCursor,
-    placeholderData: (before) => before,
-  });
-  // The address follows the search without a visit to the server for every letter.
-  useEffect(() => window.history.replaceState(null, "", catalogueAddress(asked)), [asked]);
+/** Thickest cable when nobody has one: a row's drawing is then to the usual scale. */
+const usualThickestMm = 16;
 
-  const change = (part: Partial<CatalogueAsked>) => setAsked((before) => ({ ...before, ...part }));
+function Count({ page }: { page: CablePage | undefined }) {
+  return (
+    <p role="status" className="text-label whitespace-nowrap text-ink-2">
+      {page && (
+        <>
+          <b className="figures text-ink">{page.total}</b> of <span className="figures">{page.outOf}</span>{" "}
+          {page.outOf === 1 ? "cable" : "cables"}
+        </>
+      )}
+    </p>
+  );
+}
+
+/** Holds or puts back the cable whose row has the focus, else the one under the pointer. */
+function useHoldKey(items: readonly CableItem[], toggle: (item: CableItem) => void) {
+  function run() {
+    const row = document.activeElement?.closest("[data-cable]") ?? document.querySelector("[data-cable]:hover");
+    const item = items.find(({ id }) => id === row?.getAttribute("data-cable"));
+    if (item) toggle(item);
+  }
+  useKeys([
+    { key: "ArrowUp ArrowDown", does: "previous, next cable" },
+    { key: "Enter", does: "open its entry" },
+    { key: "h", does: "hold it to compare, or put it back", run },
+  ]);
+}
+
+/** The team's cables: searched as typed, narrowed by figures, held up to compare. All of it stands in the address. */
+export function Catalogue({ first, canStartRun }: Props) {
+  const [asked, change] = useCatalogueAddress();
+  const pages = useCablePages(cableRequest(asked), first);
+  const { held, waiting, toggle, putBack, exchange } = useHeld(asked.held, change);
   const page = pages.data?.pages[0];
   const items = pages.data?.pages.flatMap((each) => each.items) ?? [];
+  useHoldKey(items, toggle);
+  const facets = { asked, change, facets: page?.facets };
+  const next = () => {
+    if (pages.hasNextPage && !pages.isFetchingNextPage && !pages.isFetchNextPageError) void pages.fetchNextPage();
+  };
   return (
     <div className="grid grid-cols-[252px_minmax(0,1fr)] gap-x-9 folded:grid-cols-1">
-      <div className="pt-1 folded:order-2 folded:hidden">
+      <div
+        className={`sticky top-0 -mx-2 self-start overflow-x-hidden overflow-y-auto px-2 pt-0.5 pb-2 folded:hidden ${asked.held.length > 0 ? "max-h-[calc(100dvh-148px)]" : "max-h-dvh"}`}
+      >
         <h1>Catalogue</h1>
-        <CatalogueFilters asked={asked} change={change} facets={page?.facets} />
+        <CatalogueFacets {...facets} />
       </div>
       <div className="min-w-0">
         <h1 className="sr-only hidden folded:block">Catalogue</h1>
         <div className="flex flex-wrap items-center gap-x-6 gap-y-2">
-          <SearchField
-            text={asked.q}
-            change={(q) => change({ q, isExact: false, sort: q.trim() ? "relevance" : "designation" })}
-          />
-          <p role="status" className="text-label text-ink-2">
-            {page && (
-              <>
-                <b className="figures text-ink">{page.total}</b> {page.total === 1 ? "cable" : "cables"}
-              </>
-            )}
-          </p>
-          <div className="ml-auto flex items-center gap-2 phone:ml-0">
-            <span className="text-label text-ink-2">Sort</span>
-            <Select
-              label="Sort"
-              isLabelHidden
-              value={asked.sort}
-              className="w-42"
-              onChange={(event) => change({ sort: event.target.value as CatalogueSort })}
-            >
-              {asked.q.trim() && <option value="relevance">Best fit</option>}
-              <option value="designation">Designation</option>
-              <option value="loss">Loss at {inWords(frequency(asked.lossAtHz))}</option>
-              <option value="z0">Impedance</option>
-              <option value="velocityFactor">Velocity factor</option>
-              <option value="outerDiameter">Outer diameter</option>
-            </Select>
-          </div>
+          <SearchField asked={asked} change={change} />
+          <Count page={page} />
+          <ListOrder asked={asked} change={change} />
         </div>
-        <ReadAs asked={asked} page={page} change={change} />
-        <details className="mt-2 hidden folded:block">
-          <summary className="link text-label">Loss frequency, construction, state</summary>
-          <CatalogueFilters asked={asked} change={change} facets={page?.facets} />
+        <ReadAs asked={asked} change={change} page={page} />
+        <details className="mt-2 hidden folded:block phone:hidden">
+          <summary className="link text-label">Impedance, velocity, loss, diameter, construction, state</summary>
+          <div className="max-w-90">
+            <CatalogueFacets {...facets} />
+          </div>
         </details>
+        <FacetCards {...facets} />
+        {pages.isPending && <Working label="Looking through the catalogue" />}
+        {page && page.total === 0 && <NothingFound asked={asked} change={change} page={page} />}
+        {items.length > 0 && (
+          <p className="mt-2 hidden justify-between border-b border-rule pb-1 text-label text-ink-2 phone:flex">
+            <span>to scale</span>
+            <span>dB/100 m at {inWords(frequency(asked.lossAtHz))}</span>
+          </p>
+        )}
+        {page && items.length > 0 && (
+          <div className={pages.isBehind ? "opacity-60 transition-opacity delay-200" : ""}>
+            <CableRows
+              items={items}
+              total={page.total}
+              thickestMm={page.facets?.outerDiameterMm.at(-1)?.to ?? usualThickestMm}
+              lossAtHz={asked.lossAtHz}
+              canStartRun={canStartRun}
+              held={asked.held}
+              toggleHold={toggle}
+              onEnd={next}
+            />
+          </div>
+        )}
         {pages.error && (
-          <div className="mt-4">
+          <div className="mt-4" role="alert">
             <StateNote state="fail">{pages.error.message}</StateNote>
-            <Button className="mt-2" onClick={() => void pages.refetch()}>
+            <Button
+              className="mt-2"
+              onClick={() => void (pages.isFetchNextPageError ? pages.fetchNextPage() : pages.refetch())}
+            >
               Try again
             </Button>
           </div>
         )}
-        {page && page.total === 0 && <NothingFound asked={asked} change={change} loosenings={page.loosenings ?? []} />}
-        {items.length > 0 && (
-          <div className={pages.isPlaceholderData ? "opacity-60" : ""}>
-            <CableRows items={items} lossAtHz={asked.lossAtHz} canStartRun={canStartRun} />
-          </div>
+        {pages.hasNextPage && !pages.error && (
+          <p className="py-3 text-label text-ink-3">
+            {items.length} of {page?.total} so far; more come as you scroll.
+          </p>
         )}
-        {pages.hasNextPage && (
-          <Button
-            className="mt-4"
-            onClick={() => void pages.fetchNextPage()}
-            refused={pages.isFetchingNextPage && "The next cables are on their way."}
-          >
-            Show more
-          </Button>
-        )}
+        <p role="status" className="sr-only">
+          {asked.held.length > 0 && `${asked.held.length} held up to compare`}
+        </p>
+        {asked.held.length > 0 && <div className="h-40 phone:h-24" />}
       </div>
+      <PutBack waiting={waiting} held={held} exchange={exchange} />
+      {asked.held.length > 0 && (
+        <Tray held={held} lossAtHz={asked.lossAtHz} putBack={putBack} compare={() => change({ isCompared: true })} />
+      )}
+      {asked.isCompared && (
+        <Comparison
+          isOpen
+          held={held}
+          lossAtHz={asked.lossAtHz}
+          canStartRun={canStartRun}
+          putBack={putBack}
+          close={() => change({ isCompared: false })}
+        />
+      )}
     </div>
-  );
-}
-
-function SearchField({ text, change }: { text: string; change: (text: string) => void }) {
-  return (
-    <span className={`${fieldEdge} ${fieldColours(false)} h-8.5 w-118 px-2.5 folded:w-full phone:h-11`}>
-      <input
-        type="search"
-        value={text}
-        maxLength={200}
-        onChange={(event) => change(event.target.value)}
-        onKeyDown={(event) => event.key === "Escape" && change("")}
-        aria-label="Search the catalogue"
-        placeholder="Name, construction, 75 ohm, 7 mm"
-        className="w-full min-w-0 bg-transparent text-row outline-none placeholder:text-ink-3 phone:text-section [&::-webkit-search-cancel-button]:hidden"
-      />
-      {text && <KeyCap>Esc</KeyCap>}
-    </span>
-  );
-}
-
-interface ReadAsProps {
-  asked: CatalogueAsked;
-  page: CablePage | undefined;
-  change: (part: Partial<CatalogueAsked>) => void;
-}
-
-/** How the search was read, and a way to have it exactly. */
-function ReadAs({ asked, page, change }: ReadAsProps) {
-  if (!asked.q.trim() || !page?.readAs) return <p className="h-5" />;
-  const corrected = page.corrected ?? [];
-  return (
-    <p className="min-h-5 pt-1 text-label text-ink-2">
-      Read as <b className="text-ink">{page.readAs}</b>.{" "}
-      {corrected.length > 0 && (
-        <button type="button" className="link" onClick={() => change({ isExact: true })}>
-          Search for “{corrected.map(({ typed }) => typed).join(" ")}” exactly
-        </button>
-      )}
-      {asked.isExact && (
-        <button type="button" className="link" onClick={() => change({ isExact: false })}>
-          Search forgivingly again
-        </button>
-      )}
-    </p>
   );
 }

@@ -32,6 +32,17 @@ export function roundedFromZero(values: readonly (number | null)[], ticks = 5): 
   return [low, high];
 }
 
+/** The ends of a log axis that holds values above 0: the nearest 1, 2 or 5 times a power of ten below and above them. */
+export function decadesAround(values: readonly (number | null)[]): [number, number] {
+  const there = values.flatMap((value) => (value !== null && value > 0 && Number.isFinite(value) ? [value] : []));
+  if (there.length === 0) return [0.1, 10];
+  const [least, most] = [Math.min(...there), Math.max(...there)];
+  const steps = (value: number) => [1, 2, 5, 10].map((step) => step * 10 ** Math.floor(Math.log10(value) + 1e-9));
+  const low = steps(least).findLast((step) => step <= least * 1.0001) ?? least;
+  const high = steps(most).find((step) => step >= most * 0.9999) ?? most;
+  return [low, high > low ? high : low * 10];
+}
+
 /** Decades of a log axis, and the steps 2 and 5 where there are few of them. */
 export function logTicks([low, high]: readonly [number, number]): number[] {
   const first = Math.floor(Math.log10(low) + 1e-9);

@@ -13,7 +13,7 @@ export const measures = {
   outerDiameterMm: "od",
 } as const;
 export type Measure = keyof typeof measures;
-const measureNames = Object.keys(measures) as Measure[];
+export const measureNames = Object.keys(measures) as Measure[];
 
 export interface CatalogueAsked {
   q: string;
@@ -45,12 +45,11 @@ const states: Record<CableState, true> = {
 export const usualLossHz = 100e6;
 /** How many cables can be held up at once. */
 export const mostHeld = 4;
-const perPage = 100;
 
-type Parameters = Record<string, string | string[] | undefined> | URLSearchParams;
+export type Parameters = Record<string, string | string[] | undefined> | URLSearchParams;
 
 /** Every value of a word of the address. */
-function all(parameters: Parameters, name: string): string[] {
+export function valuesOf(parameters: Parameters, name: string): string[] {
   if (parameters instanceof URLSearchParams) return parameters.getAll(name);
   const value = parameters[name];
   return value === undefined ? [] : Array.isArray(value) ? value : [value];
@@ -60,7 +59,8 @@ const known = <T extends string>(words: Record<T, true>, texts: string[]): T[] =
   ...new Set(texts.filter((text): text is T => Object.hasOwn(words, text))),
 ];
 
-function readEnd(text: string | undefined): number | undefined {
+/** A figure of the address; undefined for what is none. */
+export function readEnd(text: string | undefined): number | undefined {
   const value = text ? Number(text) : NaN;
   return Number.isFinite(value) ? value : undefined;
 }
@@ -79,18 +79,20 @@ export function rangeText({ from, to }: Range): string {
   return `${from ?? ""}..${to ?? ""}`;
 }
 
-function readFrequency(parameters: Parameters): number {
-  const hertz = Number(all(parameters, "at")[0]);
+/** The frequency losses are asked at, hertz. */
+export function readFrequency(parameters: Parameters): number {
+  const hertz = Number(valuesOf(parameters, "at")[0]);
   return hertz > 0 && hertz < 1e12 ? hertz : usualLossHz;
 }
 
-function readHeld(parameters: Parameters): string[] {
-  return [...new Set(all(parameters, "held").filter((id) => id !== "" && id.length <= 100))].slice(0, mostHeld);
+/** The cables held up, each once, no more than there is room for. */
+export function readHeld(parameters: Parameters): string[] {
+  return [...new Set(valuesOf(parameters, "held").filter((id) => id !== "" && id.length <= 100))].slice(0, mostHeld);
 }
 
 /** The order an address asks for; without one by fit where something is searched for, else by designation. */
 function readSort(parameters: Parameters, q: string): Pick<CatalogueAsked, "sort" | "isReversed"> {
-  const text = all(parameters, "sort")[0] ?? "";
+  const text = valuesOf(parameters, "sort")[0] ?? "";
   const asked = catalogueSorts.find((key) => key === text.replace(/^-/, ""));
   const isReadable = asked !== undefined && !(asked === "relevance" && q.trim() === "");
   return isReadable ? { sort: asked, isReversed: text.startsWith("-") } : { sort: usualSort(q), isReversed: false };
@@ -103,26 +105,27 @@ export function usualSort(q: string): CatalogueSort {
 
 /** What cannot be read in an address is left out: a mangled link still opens the catalogue. */
 export function readCatalogueAddress(parameters: Parameters): CatalogueAsked {
-  const q = (all(parameters, "q")[0] ?? "").slice(0, 200);
+  const q = (valuesOf(parameters, "q")[0] ?? "").slice(0, 200);
   const held = readHeld(parameters);
   const ranges = measureNames.flatMap((name) => {
-    const range = readRange(all(parameters, measures[name])[0]);
+    const range = readRange(valuesOf(parameters, measures[name])[0]);
     return range ? [[name, range] as const] : [];
   });
   return {
     q,
-    isExact: all(parameters, "exact")[0] === "true",
+    isExact: valuesOf(parameters, "exact")[0] === "true",
     lossAtHz: readFrequency(parameters),
     ranges: Object.fromEntries(ranges),
-    families: known(families, all(parameters, "family")),
-    states: known(states, all(parameters, "state")),
+    families: known(families, valuesOf(parameters, "family")),
+    states: known(states, valuesOf(parameters, "state")),
     ...readSort(parameters, q),
     held,
-    isCompared: held.length > 0 && all(parameters, "compare")[0] === "open",
+    isCompared: held.length > 0 && valuesOf(parameters, "compare")[0] === "open",
   };
 }
 
-function withQuery(path: string, parameters: URLSearchParams): string {
+/** A path with the words after it, if there are any. */
+export function withQuery(path: string, parameters: URLSearchParams): string {
   const text = parameters.toString();
   return text ? `${path}?${text}` : path;
 }
@@ -145,53 +148,6 @@ export function catalogueAddress(asked: CatalogueAsked): string {
   return withQuery("/cables", parameters);
 }
 
-const sortText = ({ sort, isReversed }: CatalogueAsked) => `${isReversed ? "-" : ""}${sort}`;
-
-/** The same search asked of the API; the counts of the filters come with the first page. */
-export function cableRequest(asked: CatalogueAsked, cursor: string | null): string {
-  const parameters = new URLSearchParams({ limit: String(perPage), lossAtHz: String(asked.lossAtHz) });
-  const q = asked.q.trim();
-  if (q) parameters.set("q", q);
-  if (asked.isExact) parameters.set("exact", "true");
-  parameters.set("sort", sortText(asked.sort === "relevance" && !q ? { ...asked, sort: "designation" } : asked));
-  for (const name of measureNames) {
-    const range = asked.ranges[name];
-    if (range) parameters.set(name, rangeText(range));
-  }
-  for (const family of asked.families) parameters.append("family", family);
-  for (const state of asked.states.length > 0 ? asked.states : (["approved"] as const))
-    parameters.append("state", state);
-  if (cursor) parameters.set("cursor", cursor);
-  else parameters.set("facets", "true");
-  return withQuery("/cables", parameters);
-}
-
-/** What an entry is looked at with. */
-export interface EntryAsked {
-  /** hertz */
-  lossAtHz: number;
-  /** °C */
-  temperatureC: number;
-  held: string[];
-}
-
-const usualTemperatureC = 20;
-
-export function readEntryAddress(parameters: Parameters): EntryAsked {
-  const temperature = readEnd(all(parameters, "t")[0]) ?? usualTemperatureC;
-  return {
-    lossAtHz: readFrequency(parameters),
-    temperatureC: temperature >= -200 && temperature <= 400 ? temperature : usualTemperatureC,
-    held: readHeld(parameters),
-  };
-}
-
-/** The address of an entry, with what is held up so that it is not lost on the way. */
-export function entryAddress(cableId: string, asked: Partial<EntryAsked>): string {
-  const { lossAtHz = usualLossHz, temperatureC = usualTemperatureC, held = [] } = asked;
-  const parameters = new URLSearchParams();
-  if (lossAtHz !== usualLossHz) parameters.set("at", String(lossAtHz));
-  if (temperatureC !== usualTemperatureC) parameters.set("t", String(temperatureC));
-  for (const id of held) parameters.append("held", id);
-  return withQuery(`/cables/${encodeURIComponent(cableId)}`, parameters);
-}
+/** An order as the address and the API spell it. */
+export const sortText = ({ sort, isReversed }: Pick<CatalogueAsked, "sort" | "isReversed">) =>
+  `${isReversed ? "-" : ""}${sort}`;

@@ -2,7 +2,7 @@
 import type { Candidate, Sifted } from "@/lib/cables/filter";
 import type { Facets } from "@/lib/cables/query";
 
-const mostBins = 12;
+const mostBins = 14;
 /** Narrowest span a histogram resolves, as a share of the values. */
 const finestShare = 0.01;
 

@@ -1,15 +1,9 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import {
-  cableRequest,
-  catalogueAddress,
-  catalogueSorts,
-  entryAddress,
-  readCatalogueAddress,
-  readEntryAddress,
-  type CatalogueAsked,
-} from "@/lib/cables/address";
+import { catalogueAddress, catalogueSorts, readCatalogueAddress, type CatalogueAsked } from "@/lib/cables/address";
+import { entryAddress, readEntryAddress } from "@/lib/cables/entry-address";
 import { cableQuerySchema } from "@/lib/cables/query";
+import { cableRequest, nextRequest } from "@/lib/cables/request";
 
 const searchOf = (address: string) => new URLSearchParams(address.split("?")[1] ?? "");
 /** As a page is handed it: repeated words as lists. */
@@ -88,19 +82,22 @@ describe("The request of a search", () => {
   test("is one the API reads, whatever was asked", () => {
     fc.assert(
       fc.property(asked, (one) => {
-        const request = recordOf(cableRequest(one, null));
+        const request = recordOf(cableRequest(one));
         expect(cableQuerySchema.safeParse(request).error?.issues ?? []).toEqual([]);
       }),
     );
   });
 
-  test("asks for the counts of the filters with the first page only, and for approved cables where nothing else is asked", () => {
-    expect(recordOf(cableRequest(usual, null))).toMatchObject({ facets: "true", state: "approved" });
-    expect(recordOf(cableRequest(usual, "abc"))).not.toHaveProperty("facets");
+  test("asks for the counts of the filters with the first page only, and leaves the usual states to the API", () => {
+    expect(recordOf(cableRequest(usual))).toHaveProperty("facets", "true");
+    expect(recordOf(cableRequest(usual))).not.toHaveProperty("state");
+    const next = recordOf(nextRequest(cableRequest(usual), "a+b"));
+    expect(next).toMatchObject({ cursor: "a+b", limit: "100" });
+    expect(next).not.toHaveProperty("facets");
   });
 
   test("does not change with what is held up", () => {
-    expect(cableRequest({ ...usual, held: ["a"], isCompared: true }, null)).toBe(cableRequest(usual, null));
+    expect(cableRequest({ ...usual, held: ["a"], isCompared: true })).toBe(cableRequest(usual));
   });
 });
 

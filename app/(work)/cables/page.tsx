@@ -4,6 +4,10 @@ import { WorkBar } from "@/components/team/work-bar";
 import { currentActor } from "@/lib/auth/actor";
 import { may } from "@/lib/auth/permission";
 import { readCatalogueAddress } from "@/lib/cables/address";
+import { cableQuerySchema } from "@/lib/cables/query";
+import { cableRequest, readRequest } from "@/lib/cables/request";
+import { listCables } from "@/lib/cables/service";
+import { parse } from "@/lib/http/parse";
 import { describeActor } from "@/lib/team/service";
 
 export const metadata: Metadata = { title: "Catalogue" };
@@ -14,11 +18,13 @@ interface Props {
 
 export default async function CataloguePage({ searchParams }: Props) {
   const actor = await currentActor();
+  const request = cableRequest(readCatalogueAddress(await searchParams));
+  const page = listCables(actor, parse(cableQuerySchema, readRequest(request)));
   return (
     <>
       <WorkBar signedIn={describeActor(actor)} current="/cables" title="Catalogue" />
       <main id="main" className="page-margin pt-2.5 pb-20">
-        <Catalogue asked={readCatalogueAddress(await searchParams)} canStartRun={may(actor, "runs.write")} />
+        <Catalogue first={{ request, page }} canStartRun={may(actor, "runs.write")} />
       </main>
     </>
   );
