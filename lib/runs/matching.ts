@@ -1,6 +1,7 @@
 /** Ways to match a run with the team's cables, at its load or before any of its pieces. Pure. */
 import type { CableLine } from "@/lib/cables/line";
 import type { Element as EngineElement, Termination } from "@/lib/line/element";
+import { distinct } from "@/lib/line/match/distinct";
 import { findMatches } from "@/lib/line/match/find-matches";
 import type { Candidate, MatchLine, Refusal } from "@/lib/line/match/match-request";
 import { rank } from "@/lib/line/match/rank";
@@ -55,7 +56,7 @@ export function matchesFor(
     methods: ["quarterWave", "seriesSection"],
   });
   return {
-    candidates: rank([...cut.candidates, ...sections.candidates], asked.returnLossDb),
+    candidates: distinct(rank([...cut.candidates, ...sections.candidates], asked.returnLossDb)),
     refused: [...cut.refused, ...sections.refused],
   };
 }

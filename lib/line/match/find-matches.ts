@@ -1,6 +1,7 @@
 import type { Element } from "@/lib/line/element";
 import { worstAtLimits } from "@/lib/line/match/at-limits";
 import { designPoint, type DesignPoint } from "@/lib/line/match/design-point";
+import { distinct } from "@/lib/line/match/distinct";
 import { bandOf } from "@/lib/line/match/extreme";
 import { hopeless, unknownLoad } from "@/lib/line/match/hopeless";
 import { judge } from "@/lib/line/match/judge";
@@ -51,7 +52,7 @@ export function findMatches(request: MatchRequest): { candidates: Candidate[]; r
   const outcomes = methods.map((method) => ({ method, ...find[method](point) }));
   const candidates = outcomes.flatMap(({ proposals }) => proposals.map((proposal) => judged(proposal, point)));
   const refused = outcomes.flatMap(({ method, proposals, why }) => (proposals.length === 0 ? [{ method, why }] : []));
-  return { candidates: rank(candidates, request.returnLossDb), refused };
+  return { candidates: distinct(rank(candidates, request.returnLossDb)), refused };
 }
 
 function judged(proposal: Proposal, { request, seen }: DesignPoint): Candidate {
