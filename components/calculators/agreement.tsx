@@ -1,10 +1,11 @@
 import type { ReactNode } from "react";
+import { Figure } from "@/components/ui/figure";
 import { Section } from "@/components/ui/section";
 import { StateNote, type MarkedState } from "@/components/ui/state-mark";
 import { Cell, HeadCell, RowHead, Table } from "@/components/ui/table";
 import { insulationsOf } from "@/lib/calculators/dielectrics";
 import type { PerLength } from "@/lib/calculators/per-length";
-import { digits, significantDigits } from "@/lib/format/quantity";
+import { digits, inWords, significantDigits, type Figure as Shown } from "@/lib/format/quantity";
 import { agreementLimits, type PerLengthQuantity } from "@/lib/line/per-length";
 
 interface Named {
@@ -22,11 +23,12 @@ const named: Record<PerLengthQuantity, Named> = {
   inductance: { name: "inductance", unit: "nH/m", scale: 1e9 },
 };
 
-function written(quantity: PerLengthQuantity, value: number): string {
+function figureOf(quantity: PerLengthQuantity, value: number): Shown {
   const { unit, scale } = named[quantity];
-  const figure = significantDigits(value * scale, 3);
-  return unit ? `${figure}\u00a0${unit}` : figure;
+  return { digits: significantDigits(value * scale, 3), unit, spoken: unit };
 }
+
+const written = (quantity: PerLengthQuantity, value: number) => inWords(figureOf(quantity, value));
 
 const signed = (share: number) => `${share < 0 ? "\u2212" : "+"}${digits(Math.abs(share) * 100, 1)}\u00a0%`;
 
@@ -54,6 +56,7 @@ export function Agreement({ result }: { result: PerLength }) {
   );
 }
 
+const capital = (text = "") => text.charAt(0).toUpperCase() + text.slice(1);
 const percent = (share: number) => `${digits(share * 100, 0)}\u00a0%`;
 
 function verdict({ agreement, grade }: PerLength): ReactNode {
@@ -67,7 +70,7 @@ function verdict({ agreement, grade }: PerLength): ReactNode {
   const how = grade === "look" ? "worth a look" : "a contradiction";
   return (
     <>
-      {first} and {second} make the {named[quantity].name} {written(quantity, implied)}; given is{" "}
+      {capital(first)} and {second} make the {named[quantity].name} {written(quantity, implied)}; given is{" "}
       {written(quantity, value)}, <b>{signed(deviation)}</b>: {how}.
       {oddOneOut && ` Without the ${named[oddOneOut].name} the others agree, so look there first.`}
     </>
@@ -88,12 +91,12 @@ function ComparedTable({ result: { agreement } }: { result: PerLength }) {
       <tbody>
         {agreement.compared.map(({ quantity, value, implied, deviation }) => (
           <tr key={quantity}>
-            <RowHead>{named[quantity].name}</RowHead>
-            <Cell isRight className="figures">
-              {written(quantity, value)}
+            <RowHead>{capital(named[quantity].name)}</RowHead>
+            <Cell isRight>
+              <Figure {...figureOf(quantity, value)} />
             </Cell>
-            <Cell isRight className="figures">
-              {written(quantity, implied)}
+            <Cell isRight>
+              <Figure {...figureOf(quantity, implied)} />
             </Cell>
             <Cell isRight className="figures">
               {signed(deviation)}

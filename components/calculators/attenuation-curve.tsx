@@ -30,14 +30,16 @@ export function AttenuationCurve({ calculator, result }: Props) {
   const { curve } = result;
   return (
     <CursorProvider>
-      {curve && <Chart curve={curve} result={result} />}
-      <div className="mt-1 flex flex-wrap items-start gap-3">
-        <InputField of={calculator} name="from" />
-        <InputField
-          of={calculator}
-          name="to"
-          fault={curve ? undefined : "Above the frequency that the curve starts at."}
-        />
+      <div className="min-w-0">
+        {curve && <Chart curve={curve} result={result} />}
+        <div className="mt-1 flex flex-wrap items-start gap-3">
+          <InputField of={calculator} name="from" />
+          <InputField
+            of={calculator}
+            name="to"
+            fault={curve ? undefined : "Above the frequency that the curve starts at."}
+          />
+        </div>
       </div>
     </CursorProvider>
   );

@@ -136,7 +136,7 @@ function rowsOf(result: AttenuationResult): FigureRow[] {
     { label: "Attenuation", figure: per(spot.attenuationDbPerM * 100, "dB/100 m") },
     { label: "per 100 feet", figure: per(spot.attenuationDbPerM * 100 * metresPerFoot, "dB/100 ft") },
     { label: "in nepers", figure: per(spot.attenuationNpPerM * 1000, "Np/km") },
-    { label: "Phase", figure: per((whole.phaseRad * 180) / Math.PI, "°") },
+    { label: "Phase", figure: { digits: digits((whole.phaseRad * 180) / Math.PI, 1), unit: "°", spoken: "degrees" } },
     { label: "Electrical length", figure: per(whole.wavelengths, "λ") },
     { label: "Phase delay", figure: scaled("time", whole.phaseDelayS, 5) },
     { label: "Group delay", figure: scaled("time", whole.groupDelayS, 5) },

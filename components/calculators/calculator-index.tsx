@@ -19,16 +19,16 @@ export function CalculatorIndex() {
         {calculatorPlaces.map(({ path, title, answers }, i) => (
           <li key={path} className="border-t-[1.5px] border-ink pt-2">
             <Link href={path as Route} className="group block">
-              <span className="flex items-baseline justify-between gap-3">
+              <div className="flex items-baseline justify-between gap-3">
                 <h2 className="group-hover:text-copper">{title}</h2>
                 <span className="phone:hidden">
                   <KeyCap>{i + 1}</KeyCap>
                 </span>
-              </span>
-              <span className="mt-3 block">
+              </div>
+              <div className="mt-3">
                 <Vignette path={path} />
-              </span>
-              <span className="mt-2 block text-label text-ink-2">{answers}</span>
+              </div>
+              <p className="mt-2 text-label text-ink-2">{answers}</p>
             </Link>
           </li>
         ))}

@@ -17,7 +17,9 @@ export function CopyAddress() {
   }
   return (
     <>
-      <span role="status">{said}</span>
+      <span role="status" className={said ? "" : "sr-only"}>
+        {said}
+      </span>
       <Button size="small" onClick={() => void copy()} title="Everything on this page is in its address">
         Copy the address
       </Button>

@@ -6,7 +6,7 @@ import { Dimension } from "@/components/line/dimension";
 import { material } from "@/components/line/materials";
 import { useMeasuredWidth } from "@/components/plot/measured-width";
 import type { LengthResult } from "@/lib/calculators/length";
-import { cutLength, significantDigits } from "@/lib/format/quantity";
+import { cutLength, significantDigits, withoutTrailingZeros } from "@/lib/format/quantity";
 
 interface Props {
   result: LengthResult;
@@ -73,7 +73,8 @@ export function CutLengthSketch({ result, name }: Props) {
   const [cutFrom, cutTo] = [fromX + endPx, toX - endPx];
   const mmToPx = Math.min(2.7, 36 / (cable.outerDiameterMm ?? 5));
   const half = thickness(cable, mmToPx) / 2;
-  const degrees = significantDigits((whole.phaseRad * 180) / Math.PI, 4);
+  const short = (value: number) => withoutTrailingZeros(significantDigits(value, 4));
+  const degrees = short((whole.phaseRad * 180) / Math.PI);
   return (
     <div ref={ref}>
       <svg width={width} height={height} role="img" aria-label={name} className="block overflow-visible">
@@ -99,7 +100,7 @@ export function CutLengthSketch({ result, name }: Props) {
           toX={toX}
           y={waveY + amplitude + 12}
           figure={{ digits: degrees, unit: "°" }}
-          note={`${significantDigits(whole.wavelengths, 4)} λ${endsM > 0 ? ", ends and all" : ""}`}
+          note={`${short(whole.wavelengths)} λ${endsM > 0 ? ", ends and all" : ""}`}
           isBelow
         />
       </svg>

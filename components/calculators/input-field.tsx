@@ -65,7 +65,8 @@ function understood(input: TypedInput<unknown>, text: string): string | undefine
   }
   const read = input.read(text);
   const bare = (words: string) => words.replace(/[\s\u00a0\u202f]/g, "").toLowerCase();
-  return read.ok && read.understood && bare(read.understood) !== bare(text) ? `= ${read.understood}` : undefined;
+  if (!read.ok || !read.understood || read.value === 0) return undefined;
+  return bare(read.understood) === bare(text) ? undefined : `= ${read.understood}`;
 }
 
 function TypedField({ input, text, error, set }: TypedProps) {
@@ -84,7 +85,6 @@ function TypedField({ input, text, error, set }: TypedProps) {
       maxLength={80}
       autoComplete="off"
       spellCheck={false}
-      placeholder={input.isOptional ? "not given" : undefined}
       className={widths[input.width]}
       error={error}
       hint={understood(input, text)}

@@ -22,6 +22,8 @@ import {
   inWords,
   scaled,
   significantDigits,
+  trimmed,
+  withoutTrailingZeros,
   type Figure,
 } from "@/lib/format/quantity";
 
@@ -98,6 +100,8 @@ export function LengthCalculator({ opened, canStartRun }: Props) {
   );
 }
 
+const short = (value: number | undefined, significant: number) =>
+  withoutTrailingZeros(significantDigits(value, significant));
 const degreesOf = (radians: number) => (radians * 180) / Math.PI;
 const bare = (text: string, unit: string): Figure => ({ digits: text, unit, spoken: unit });
 
@@ -110,13 +114,8 @@ function Head({ result }: { result: LengthResult | null }) {
   return (
     <Readings className="min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
       <Reading label="To cut" {...cutLength(cutM)} />
-      <Reading
-        label="Phase"
-        digits={significantDigits(whole && degreesOf(whole.phaseRad), 5)}
-        unit="°"
-        spoken="degrees"
-      />
-      <Reading label="Wavelengths" digits={significantDigits(whole?.wavelengths, 5)} unit="λ" spoken="wavelengths" />
+      <Reading label="Phase" digits={short(whole && degreesOf(whole.phaseRad), 6)} unit="°" spoken="degrees" />
+      <Reading label="Wavelengths" digits={short(whole?.wavelengths, 5)} unit="λ" spoken="wavelengths" />
       <Reading label="Delay" {...scaled("time", whole?.phaseDelayS)} />
     </Readings>
   );
@@ -136,11 +135,11 @@ function Trim({ result: { frequencyPerM, spot, cutM } }: { result: LengthResult 
 
 function wholeRows({ whole, spot, totalM }: LengthResult): FigureRow[] {
   return [
-    { label: "Phase", figure: bare(significantDigits(degreesOf(whole.phaseRad), 6), "°"), isStrong: true },
-    { label: "less whole turns", figure: bare(digits(degreesOf(whole.phaseRad) % 360, 2), "°") },
-    { label: "Wavelengths", figure: bare(significantDigits(whole.wavelengths, 6), "λ"), isStrong: true },
-    { label: "Phase delay", figure: scaled("time", whole.phaseDelayS, 6), isStrong: true },
-    { label: "Group delay", figure: scaled("time", whole.groupDelayS, 6) },
+    { label: "Phase", figure: bare(short(degreesOf(whole.phaseRad), 7), "°"), isStrong: true },
+    { label: "less whole turns", figure: bare(withoutTrailingZeros(digits(degreesOf(whole.phaseRad) % 360, 2)), "°") },
+    { label: "Wavelengths", figure: bare(short(whole.wavelengths, 7), "λ"), isStrong: true },
+    { label: "Phase delay", figure: trimmed(scaled("time", whole.phaseDelayS, 6)), isStrong: true },
+    { label: "Group delay", figure: trimmed(scaled("time", whole.groupDelayS, 6)) },
     { label: "Length, ends and all", figure: cutLength(totalM) },
     { label: "Matched loss", figure: decibels(whole.lossDb, 3) },
     { label: "Velocity factor here", figure: bare(digits(spot.velocityFactor, 4), "") },

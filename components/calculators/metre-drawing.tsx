@@ -41,11 +41,11 @@ export function MetreDrawing({ figures, name }: { figures: NominalFigures; name:
   const [fromX, toX] = [margin, Math.min(width, 980) - margin];
   const span = toX - fromX;
   const [coilX, capacitorX] = [fromX + span * 0.36, fromX + span * 0.68];
-  const delay = { digits: significantDigits(figures.delay * 1e9, 4), unit: "ns" };
+  const delay = significantDigits(figures.delay * 1e9, 4);
   return (
     <div ref={ref}>
       <svg width={width} height={height} role="img" aria-label={name} className="block overflow-visible">
-        <Dimension fromX={fromX} toX={toX} y={24} figure={{ digits: "1", unit: "m" }} note={`${delay.digits} ns`} />
+        <Dimension fromX={fromX} toX={toX} y={24} figure={{ digits: "1", unit: "m" }} note={`${delay} ns`} />
         <CableLengthwise {...drawn(figures)} fromX={fromX} toX={toX} y={cableY} mmToPx={3.4} />
         <path
           d={`M${fromX} ${railY}H${coilX - 29}M${coilX + 29} ${railY}H${toX}M${fromX} ${railY + 44}H${toX}`}

@@ -52,7 +52,7 @@ export function MismatchCalculator({ opened, canStartRun }: Props) {
             <InputField of={calculator} name="gamma" />
             <InputField of={calculator} name="load" />
             <InputField of={calculator} name="reference" />
-            <InputField of={calculator} name="loss" label="Loss of the line, one way" />
+            <InputField of={calculator} name="loss" />
             <InputField of={calculator} name="power" />
             <InputField of={calculator} name="as" />
           </div>

@@ -1,7 +1,7 @@
 import { CutWords } from "@/components/line/dimension";
 import { LoadSymbol, SourceSymbol } from "@/components/line/end-symbols";
 import { SeriesPart, ShuntPart } from "@/components/line/symbols";
-import { scaled } from "@/lib/format/quantity";
+import { scaled, trimmed } from "@/lib/format/quantity";
 import type { PadResistors } from "@/lib/line/pad";
 import type { PadTopology } from "@/lib/line/pad-parts";
 
@@ -18,7 +18,7 @@ const [startX, endX] = [62, 372];
 /** Centres of the three resistors. */
 const places = { T: [130, 217, 304], pi: [118, 217, 316] } as const;
 
-const ohms = (value: number) => scaled("resistance", value, 4);
+const ohms = (value: number) => trimmed(scaled("resistance", value, 4));
 
 /** A resistor in the line; one of 0 Ω is a wire. */
 function InLine({ x, ohm }: { x: number; ohm: number }) {

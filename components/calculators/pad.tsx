@@ -17,7 +17,7 @@ import { Reading, Readings } from "@/components/ui/reading";
 import type { Caution } from "@/lib/calculators/cautions";
 import { pad, padInputs, type PadResult } from "@/lib/calculators/pad";
 import { newRunAddress } from "@/lib/calculators/start";
-import { decibels, digits, inWords, scaled } from "@/lib/format/quantity";
+import { decibels, digits, inWords, scaled, trimmed, withoutTrailingZeros } from "@/lib/format/quantity";
 import { minimumPadLossDb } from "@/lib/line/pad";
 
 const path = "/calculate/pad";
@@ -112,7 +112,7 @@ function PadOnLine({ sourceOhm, loadOhm, lossDb }: { sourceOhm: number; loadOhm:
   const [fromX, toX] = [58, Math.min(width, 760) - 30];
   const middle = (fromX + toX) / 2;
   const y = 36;
-  const ohms = (value: number) => scaled("resistance", value, 4);
+  const ohms = (value: number) => trimmed(scaled("resistance", value, 4));
   return (
     <div ref={ref}>
       <svg
@@ -125,7 +125,7 @@ function PadOnLine({ sourceOhm, loadOhm, lossDb }: { sourceOhm: number; loadOhm:
         <SourceSymbol x={fromX} y={y} />
         <CableLengthwise {...plainCoax} fromX={fromX} toX={middle - 40} y={y} mmToPx={2.7} />
         <CableLengthwise {...plainCoax} fromX={middle + 40} toX={toX} y={y} mmToPx={2.7} />
-        <Box x={middle} y={y} inside={`${digits(lossDb, 2)} dB`} width={80} />
+        <Box x={middle} y={y} inside={`${withoutTrailingZeros(digits(lossDb, 2))} dB`} width={80} />
         <LoadSymbol x={toX} y={y} kind="resistor" />
         <CutWords x={(fromX + middle - 40) / 2} y={y + 32} figure={ohms(sourceOhm)} />
         <CutWords x={(middle + 40 + toX) / 2} y={y + 32} figure={ohms(loadOhm)} />

@@ -1,7 +1,8 @@
+import { Figure } from "@/components/ui/figure";
 import { Section } from "@/components/ui/section";
 import { Cell, HeadCell, RowHead, Table } from "@/components/ui/table";
 import type { MismatchResult, PlaneReading } from "@/lib/calculators/mismatch";
-import { decibels, inWords, ratio, scaled } from "@/lib/format/quantity";
+import { decibels, inWords, ratio, scaled, type Figure as Shown } from "@/lib/format/quantity";
 
 interface Props {
   result: MismatchResult;
@@ -11,31 +12,31 @@ interface Props {
 
 interface Row {
   label: string;
-  text: (reading: PlaneReading) => string;
+  figure: (reading: PlaneReading) => Shown;
   isStrong?: boolean;
 }
 
-const watts = (value: number) => inWords(scaled("power", value, 4));
-const volts = (value: number) => inWords(scaled("voltage", value, 3));
-const amperes = (value: number) => inWords(scaled("current", value, 3));
+const watts = (value: number) => scaled("power", value, 4);
+const volts = (value: number) => scaled("voltage", value, 3);
+const amperes = (value: number) => scaled("current", value, 3);
 /** A sine's peak over its rms. */
 const crest = Math.SQRT2;
 
 const rows: Row[] = [
-  { label: "VSWR", text: ({ vswr }) => ratio(vswr, 3).digits },
+  { label: "VSWR", figure: ({ vswr }) => ratio(vswr, 3) },
   {
     label: "Return loss",
-    text: ({ returnLossDb }) => inWords(decibels(Number.isFinite(returnLossDb) ? returnLossDb : null)),
+    figure: ({ returnLossDb }) => decibels(returnLossDb),
   },
-  { label: "Forward power", text: ({ forwardW }) => watts(forwardW) },
-  { label: "Reflected power", text: ({ reflectedW }) => watts(reflectedW) },
-  { label: "Net power, toward the load", text: ({ netW }) => watts(netW), isStrong: true },
-  { label: "Highest voltage, rms", text: ({ extremes }) => volts(extremes.highestV) },
-  { label: "Highest voltage, peak", text: ({ extremes }) => volts(extremes.highestV * crest), isStrong: true },
-  { label: "Lowest voltage, rms", text: ({ extremes }) => volts(extremes.lowestV) },
-  { label: "Highest current, rms", text: ({ extremes }) => amperes(extremes.highestA) },
-  { label: "Highest current, peak", text: ({ extremes }) => amperes(extremes.highestA * crest) },
-  { label: "Lowest current, rms", text: ({ extremes }) => amperes(extremes.lowestA) },
+  { label: "Forward power", figure: ({ forwardW }) => watts(forwardW) },
+  { label: "Reflected power", figure: ({ reflectedW }) => watts(reflectedW) },
+  { label: "Net power, toward the load", figure: ({ netW }) => watts(netW), isStrong: true },
+  { label: "Highest voltage, rms", figure: ({ extremes }) => volts(extremes.highestV) },
+  { label: "Highest voltage, peak", figure: ({ extremes }) => volts(extremes.highestV * crest), isStrong: true },
+  { label: "Lowest voltage, rms", figure: ({ extremes }) => volts(extremes.lowestV) },
+  { label: "Highest current, rms", figure: ({ extremes }) => amperes(extremes.highestA) },
+  { label: "Highest current, peak", figure: ({ extremes }) => amperes(extremes.highestA * crest) },
+  { label: "Lowest current, rms", figure: ({ extremes }) => amperes(extremes.lowestA) },
 ];
 
 /** What a meter reads at both ends of the line, and what the line takes from the power on the way. */
@@ -44,7 +45,7 @@ export function PlaneTable({ result, lossDb, given }: Props) {
   return (
     <Section
       title="Power, volts and amperes"
-      note={`from ${watts(given === "forward" ? near.forwardW : near.netW)} ${given} at the near end`}
+      note={`from ${inWords(watts(given === "forward" ? near.forwardW : near.netW))} ${given} at the near end`}
     >
       <Table className="mt-1">
         <thead>
@@ -55,12 +56,12 @@ export function PlaneTable({ result, lossDb, given }: Props) {
           </tr>
         </thead>
         <tbody>
-          {rows.map(({ label, text, isStrong }) => (
+          {rows.map(({ label, figure, isStrong }) => (
             <tr key={label}>
               <RowHead>{label}</RowHead>
               {[near, load].map((reading, i) => (
-                <Cell key={i} isRight className={`figures whitespace-nowrap ${isStrong ? "font-[650]" : ""}`}>
-                  {text(reading)}
+                <Cell key={i} isRight>
+                  <Figure {...figure(reading)} isStrong={isStrong} unitSlot={2.4} />
                 </Cell>
               ))}
             </tr>

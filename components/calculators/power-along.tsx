@@ -6,7 +6,7 @@ import { Dimension } from "@/components/line/dimension";
 import { LoadSymbol, SourceSymbol } from "@/components/line/end-symbols";
 import { useMeasuredWidth } from "@/components/plot/measured-width";
 import type { CableLine } from "@/lib/cables/line";
-import { digits, metres } from "@/lib/format/quantity";
+import { digits, metres, trimmed } from "@/lib/format/quantity";
 import { powerShare } from "@/lib/line/decibels";
 
 interface Props {
@@ -53,7 +53,7 @@ export function PowerAlong({ cable, lengthM, lossDb, name }: Props) {
           fromX={fromX}
           toX={toX}
           y={cableY - thickness(drawn, mmToPx) / 2 - 12}
-          figure={metres(lengthM)}
+          figure={trimmed(metres(lengthM, 3))}
           note={cable?.designation ?? "typed cable"}
         />
         <path d={`M${fromX} ${bottom}L${edge}L${toX} ${bottom}Z`} fill="var(--copper-wash)" />

@@ -3,6 +3,7 @@
 import { InputField } from "@/components/calculators/input-field";
 import type { StubColumnProps } from "@/components/calculators/stub-column";
 import { CutDrawing, plainCoax } from "@/components/line/cut-drawing";
+import { Figure } from "@/components/ui/figure";
 import { Section } from "@/components/ui/section";
 import { StateNote } from "@/components/ui/state-mark";
 import { Cell, HeadCell, RowHead, Table } from "@/components/ui/table";
@@ -21,12 +22,14 @@ export function ReactanceColumn({ calculator, result }: StubColumnProps) {
   return (
     <Section title="A stub for a reactance" note={line.label}>
       {shortest && (
-        <CutDrawing
-          elements={[{ kind: "stub", connection: "shunt", end: shortest.end, line: null, lengthM: shortest.lengthM }]}
-          load="resistor"
-          cableOf={() => cable}
-          name={`The shortest: ${inWords(cutLength(shortest.lengthM))}, ${endWords[shortest.end].toLowerCase()}`}
-        />
+        <div className="max-w-84">
+          <CutDrawing
+            elements={[{ kind: "stub", connection: "shunt", end: shortest.end, line: null, lengthM: shortest.lengthM }]}
+            load="resistor"
+            cableOf={() => cable}
+            name={`The shortest: ${inWords(cutLength(shortest.lengthM))}, ${endWords[shortest.end].toLowerCase()}`}
+          />
+        </div>
       )}
       <div className="mt-2 flex flex-wrap items-start gap-3">
         <InputField of={calculator} name="wanted" />
@@ -53,11 +56,11 @@ function Cuts({ cuts }: { cuts: readonly CutStub[] }) {
         {cuts.map(({ end, lengthM, impedance: z }, i) => (
           <tr key={`${end} ${i}`}>
             <RowHead>{endWords[end]}</RowHead>
-            <Cell isRight className="figures whitespace-nowrap">
-              {inWords(cutLength(lengthM))}
+            <Cell isRight>
+              <Figure {...cutLength(lengthM)} unitSlot={2} />
             </Cell>
-            <Cell isRight className="figures whitespace-nowrap">
-              {inWords(impedance(z, 2))}
+            <Cell isRight>
+              <Figure {...impedance(z, 2)} />
             </Cell>
             <Cell isRight className="figures">
               {z.re > 0 ? significantDigits(Math.abs(z.im) / z.re, 3) : "–"}

@@ -1,6 +1,7 @@
 "use client";
 
 import { useQuery } from "@tanstack/react-query";
+import { familyWords } from "@/components/cables/words";
 import { SectionView } from "@/components/line/section-view";
 import { Button } from "@/components/ui/button";
 import { StateMark, StateNote } from "@/components/ui/state-mark";
@@ -94,6 +95,7 @@ function Candidates({ candidates }: { candidates: readonly SectionCandidate[] })
             </Cell>
             <RowHead>
               {count === 1 ? item.designation : `2 × ${item.designation}`}
+              <span className="ml-2 text-note text-ink-3">{familyWords[item.family].toLowerCase()}</span>
               {item.state === "restricted" && (
                 <StateMark state="warn" className="ml-2">
                   restricted

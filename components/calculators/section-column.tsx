@@ -16,12 +16,14 @@ export function SectionColumn({ calculator, result }: StubColumnProps) {
   const cable = line.entry ?? plainCoax;
   return (
     <Section title="A quarter-wave section" note="between two resistances">
-      <CutDrawing
-        elements={[{ kind: "cable", line: null, lengthM: section.lengthM }]}
-        load="resistor"
-        cableOf={() => cable}
-        name={`A quarter-wave section, ${inWords(cutLength(section.lengthM))} of ${line.label}`}
-      />
+      <div className="max-w-84">
+        <CutDrawing
+          elements={[{ kind: "cable", line: null, lengthM: section.lengthM }]}
+          load="resistor"
+          cableOf={() => cable}
+          name={`A quarter-wave section, ${inWords(cutLength(section.lengthM))} of ${line.label}`}
+        />
+      </div>
       <div className="mt-2 flex flex-wrap items-start gap-3">
         <InputField of={calculator} name="source" />
         <InputField of={calculator} name="load" />

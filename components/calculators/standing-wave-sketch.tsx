@@ -25,9 +25,17 @@ const height = waveTop + waveHeight + 24;
 /** Wavelengths before the load that are drawn. */
 const drawnWaves = 1.5;
 
+interface WavesProps {
+  x: number;
+  reading: PlaneReading;
+  isEnd: boolean;
+  isNarrow: boolean;
+}
+
 /** A wave toward the load over the line, and one back under it, with their powers. */
-function Waves({ x, reading, isEnd }: { x: number; reading: PlaneReading; isEnd: boolean }) {
-  const [from, to] = isEnd ? [x - 62, x] : [x, x + 62];
+function Waves({ x, reading, isEnd, isNarrow }: WavesProps) {
+  const reach = isNarrow ? 26 : 62;
+  const [from, to] = isEnd ? [x - reach, x] : [x, x + reach];
   const words = isEnd ? "end" : "start";
   const at = isEnd ? from - 6 : to + 6;
   return (
@@ -42,7 +50,13 @@ function Waves({ x, reading, isEnd }: { x: number; reading: PlaneReading; isEnd:
             stroke="var(--series-2)"
             strokeWidth="1.75"
           />
-          <CutWords x={at} y={axisY + 26} figure={scaled("power", reading.reflectedW, 3)} note="back" anchor={words} />
+          <CutWords
+            x={at}
+            y={axisY + 26}
+            figure={scaled("power", reading.reflectedW, 3)}
+            note={isNarrow ? undefined : "back"}
+            anchor={words}
+          />
         </>
       )}
     </g>
@@ -104,8 +118,8 @@ export function StandingWaveSketch({ result, lossDb, name }: Props) {
         <text x={toX + 16} y="16" textAnchor="end" className="key">
           load
         </text>
-        <Waves x={fromX + 4} reading={result.near} isEnd={false} />
-        <Waves x={toX - 4} reading={result.load} isEnd />
+        <Waves x={fromX + 4} reading={result.near} isEnd={false} isNarrow={isNarrow} />
+        <Waves x={toX - 4} reading={result.load} isEnd isNarrow={isNarrow} />
         <Pattern result={result} fromX={isNarrow ? fromX + 64 : breakX + 40} toX={toX} />
       </svg>
     </div>

@@ -20,12 +20,14 @@ export function StubColumn({ calculator, result }: StubColumnProps) {
   const cable = line.entry ?? plainCoax;
   return (
     <Section title="The stub" note={line.label}>
-      <CutDrawing
-        elements={[{ kind: "stub", connection: "shunt", end, line: null, lengthM: stub.lengthM }]}
-        load="resistor"
-        cableOf={() => cable}
-        name={`A stub of ${inWords(cutLength(stub.lengthM))}, ${end === "short" ? "shorted" : "open"}`}
-      />
+      <div className="max-w-84">
+        <CutDrawing
+          elements={[{ kind: "stub", connection: "shunt", end, line: null, lengthM: stub.lengthM }]}
+          load="resistor"
+          cableOf={() => cable}
+          name={`A stub of ${inWords(cutLength(stub.lengthM))}, ${end === "short" ? "shorted" : "open"}`}
+        />
+      </div>
       <div className="mt-2 flex flex-wrap items-start gap-3">
         <InputField of={calculator} name="length" />
         <InputField of={calculator} name="end" />
@@ -36,8 +38,10 @@ export function StubColumn({ calculator, result }: StubColumnProps) {
   );
 }
 
+/** The part it stands for; at resonance, where little reactance is left, it is a resistance. */
 function partRow({ stub, spot }: StubAndSection): FigureRow[] {
-  if (!stub.part) return [];
+  if (!stub.part || stub.q < 1)
+    return [{ label: "Stands for", figure: { digits: "resistance", unit: "", spoken: "" }, note: "it resonates here" }];
   const figure = "lH" in stub.part ? scaled("inductance", stub.part.lH, 3) : scaled("capacitance", stub.part.cF, 3);
   const kind = "lH" in stub.part ? "a coil" : "a capacitor";
   return [{ label: `Stands for ${kind}`, figure, note: `at ${inWords(scaled("frequency", spot.frequency))} only` }];
@@ -52,10 +56,9 @@ function rowsOf(result: StubAndSection): FigureRow[] {
     { label: "Electrical length", figure: bare(significantDigits(stub.wavelengths, 4), "λ") },
     { label: "Impedance", figure: isOpen ? bare("open") : impedance(stub.impedance, 2), isStrong: true },
     ...partRow(result),
-    {
-      label: "Q, reactance over resistance",
-      figure: bare(stub.q > 1e5 ? "over 100 000" : significantDigits(stub.q, 3)),
-    },
+    ...(stub.q >= 1
+      ? [{ label: "Q", figure: bare(stub.q > 1e5 ? "over 100 000" : significantDigits(stub.q, 3)), note: "X over R" }]
+      : []),
     {
       label: "Takes from the line",
       figure: decibels(stub.acrossDb),

@@ -5,59 +5,28 @@ import type { Route } from "next";
 import Link from "next/link";
 import { useRouter } from "next/navigation";
 import { useForm, useWatch } from "react-hook-form";
-import { z } from "zod";
 import { Button } from "@/components/ui/button";
+import { Checkbox } from "@/components/ui/checkbox";
 import { Field } from "@/components/ui/field";
 import { Select } from "@/components/ui/select";
 import { StateNote } from "@/components/ui/state-mark";
-import { impedanceText, optionalQuantityText, quantityText } from "@/lib/format/quantity-schema";
+import { typedCable } from "@/lib/cables/typed-line";
+import { cutLength, decibels, inWords } from "@/lib/format/quantity";
 import { readImpedance, readQuantity } from "@/lib/format/read-quantity";
 import { call, ProblemError } from "@/lib/http/call";
-import type { NewRun, Run } from "@/lib/runs/schema";
+import type { Run } from "@/lib/runs/schema";
+import { runFormSchema, startedRun, type RunFormRead, type RunFormTexts, type RunStart } from "@/lib/runs/start";
 
 interface Props {
   cables: { id: string; designation: string; name: string; condition: string | null }[];
-  cableId?: string;
+  /** what the address brings along */
+  start: RunStart;
 }
 
-const formSchema = z.object({
-  name: z
-    .string()
-    .trim()
-    .min(1, { error: "Give the run a name." })
-    .max(120, { error: "A name has at most 120 characters." }),
-  site: z.string().trim().max(120, { error: "A site has at most 120 characters." }),
-  cableId: z.string().min(1, { error: "Choose a cable." }),
-  length: quantityText("length", { isNotNegative: true, most: 1e7 }),
-  frequency: quantityText("frequency", { isPositive: true }),
-  power: optionalQuantityText("power", { isPositive: true, most: 1e9 }),
-  source: impedanceText,
-  load: impedanceText,
-});
-type Typed = z.input<typeof formSchema>;
-type Read = z.output<typeof formSchema>;
-
-function newRun({ name, site, cableId, length, frequency, power, source, load }: Read): Partial<NewRun> {
-  return {
-    name,
-    site,
-    circuit: {
-      source: { kind: "constant", reOhm: source.re, imOhm: source.im },
-      elements: [{ kind: "cable", line: { cableId }, lengthM: length }],
-      load: { kind: "constant", reOhm: load.re, imOhm: load.im },
-      // Where the source has no resistance of its own, reflections need something to be measured against.
-      ...(source.re > 0 ? {} : { referenceOhm: 50 }),
-    },
-    designHz: frequency,
-    bandHz: [frequency * 0.99, frequency * 1.01],
-    availablePowerW: power ?? null,
-  };
-}
-
-const quantities = { length: "length", frequency: "frequency", power: "power" } as const;
+const quantities = { length: "length", frequency: "frequency", power: "power", temperature: "temperature" } as const;
 
 /** What a text was understood as, where that says more than the text. */
-function understood(name: keyof Typed, text: string): string | undefined {
+function understood(name: keyof RunFormTexts, text: string): string | undefined {
   if (name === "source" || name === "load") {
     const read = readImpedance(text);
     return read.ok ? `= ${read.understood}` : undefined;
@@ -67,20 +36,31 @@ function understood(name: keyof Typed, text: string): string | undefined {
   return read.ok ? `= ${read.understood}` : undefined;
 }
 
+/** What goes along with the first cable, in words. */
+function pieceWords(piece: NonNullable<RunStart["piece"]>): string {
+  if (piece.kind === "pad")
+    return `With a pad of ${inWords(decibels(piece.lossDb))} from the source's to the load's resistance, before the cable`;
+  return `With a stub of the same cable, ${inWords(cutLength(piece.lengthM))}, ${piece.end === "short" ? "shorted" : "open"}, at the load`;
+}
+
 /** The first facts of a run. Everything can be changed later on the strip. */
-export function NewRunForm({ cables, cableId }: Props) {
+export function NewRunForm({ cables, start }: Props) {
   const router = useRouter();
-  const { register, handleSubmit, control, setError, formState } = useForm<Typed, unknown, Read>({
-    resolver: zodResolver(formSchema),
+  const { texts: brought, line, piece } = start;
+  const isTyped = start.cableId === typedCable;
+  const { register, handleSubmit, control, setError, formState } = useForm<RunFormTexts, unknown, RunFormRead>({
+    resolver: zodResolver(runFormSchema),
     defaultValues: {
       name: "",
       site: "",
-      cableId: cables.find((c) => c.id === cableId)?.id ?? "",
-      length: "",
-      frequency: "",
-      power: "",
-      source: "50",
-      load: "50",
+      cableId: isTyped ? typedCable : (cables.find(({ id }) => id === start.cableId)?.id ?? ""),
+      length: brought.length ?? "",
+      frequency: brought.frequency ?? "",
+      temperature: brought.temperature ?? "20",
+      power: brought.power ?? "",
+      source: brought.source ?? "50",
+      load: brought.load ?? "50",
+      hasPiece: piece !== null,
     },
     mode: "onTouched",
   });
@@ -90,7 +70,7 @@ export function NewRunForm({ cables, cableId }: Props) {
 
   const send = handleSubmit(async (read) => {
     try {
-      const run = await call<Run>("/runs", { method: "POST", body: newRun(read) });
+      const run = await call<Run>("/runs", { method: "POST", body: startedRun(read, start) });
       router.push(`/runs/${run.id}` as Route);
     } catch (error) {
       const detail =
@@ -100,7 +80,12 @@ export function NewRunForm({ cables, cableId }: Props) {
       setError("root", { message: detail });
     }
   });
-  const typed = (name: Exclude<keyof Typed, "cableId">, label: string, unit?: string, placeholder?: string) => (
+  const typed = (
+    name: Exclude<keyof RunFormTexts, "cableId" | "hasPiece">,
+    label: string,
+    unit?: string,
+    placeholder?: string,
+  ) => (
     <Field
       label={label}
       unit={unit}
@@ -133,6 +118,7 @@ export function NewRunForm({ cables, cableId }: Props) {
           {...register("cableId")}
         >
           <option value="">Choose a cable</option>
+          {line && <option value={typedCable}>Typed: {line.words}</option>}
           {cables.map(({ id, designation, name }) => (
             <option key={id} value={id}>
               {designation}, {name}
@@ -144,7 +130,13 @@ export function NewRunForm({ cables, cableId }: Props) {
         {typed("source", "Source impedance", undefined, "50")}
         {typed("load", "Load impedance", undefined, "22-35j")}
         {typed("power", "Available power, if it matters", undefined, "200 W")}
+        {typed("temperature", "Temperature", /[a-z°]/i.test(texts.temperature ?? "") ? undefined : "°C")}
       </div>
+      {piece && (
+        <Checkbox className="mt-4" {...register("hasPiece")}>
+          {pieceWords(piece)}
+        </Checkbox>
+      )}
       {errors.root && (
         <div role="alert" className="mt-4">
           <StateNote state="fail">{errors.root.message}</StateNote>

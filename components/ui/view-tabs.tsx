@@ -24,7 +24,7 @@ export function ViewTabs({ items, current, name, aside, isFootOnPhone = true }: 
   return (
     <div className="flex flex-wrap items-start justify-between gap-x-4 border-b border-rule phone:border-0">
       <nav aria-label={name} className={isFootOnPhone ? "phone:hidden" : ""}>
-        <ul className="flex flex-wrap gap-x-6">
+        <ul className="flex flex-wrap gap-x-6 gap-y-1">
           {items.map((item) => {
             const isCurrent = item.href === current;
             return (
@@ -32,7 +32,7 @@ export function ViewTabs({ items, current, name, aside, isFootOnPhone = true }: 
                 <Link
                   href={item.href}
                   aria-current={isCurrent ? "page" : undefined}
-                  className={`block border-b-[3px] pb-1.25 hover:text-ink ${isCurrent ? "border-copper font-[640] text-ink" : "border-transparent font-[480] text-ink-2"}`}
+                  className={`block border-b-[3px] pb-1.25 hover:text-ink phone:flex phone:min-h-11 phone:items-end ${isCurrent ? "border-copper font-[640] text-ink" : "border-transparent font-[480] text-ink-2"}`}
                 >
                   {item.label}
                 </Link>
@@ -41,7 +41,13 @@ export function ViewTabs({ items, current, name, aside, isFootOnPhone = true }: 
           })}
         </ul>
       </nav>
-      {aside && <div className="-mt-1.5 flex flex-wrap items-center gap-2.5 pb-1 text-note text-ink-3">{aside}</div>}
+      {aside && (
+        <div
+          className={`-mt-1.5 flex flex-wrap items-center gap-2.5 pb-1 text-note text-ink-3 ${isFootOnPhone ? "" : "phone:mt-3"}`}
+        >
+          {aside}
+        </div>
+      )}
       {isFootOnPhone && <FootTabs items={items} current={current} name={name} />}
     </div>
   );

@@ -51,9 +51,9 @@ export const mismatchInputs = {
   gamma: quantity("number", "Reflection coefficient", "0.2", { least: 0, most: 1, isShown: when("gamma") }),
   load: typed("Load impedance", "75", readLoad, { unit: "Ω", width: "wide", isShown: when("load") }),
   reference: quantity("resistance", "Line impedance", "50", { isPositive: true, most: 1e6 }),
-  loss: quantity("loss", "Matched loss to here", "0", { isNotNegative: true, most: 300 }),
-  power: quantity("power", "Power at the near end", "100 W", { isNotNegative: true, most: 1e12 }),
-  as: chosen("which is the", "forward", [
+  loss: quantity("loss", "Matched loss", "0", { isNotNegative: true, most: 300 }),
+  power: quantity("power", "Near-end power", "100 W", { isNotNegative: true, most: 1e12 }),
+  as: chosen("which is", "forward", [
     ["forward", "forward power"],
     ["net", "net power"],
   ]),

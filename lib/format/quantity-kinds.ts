@@ -1,12 +1,5 @@
 /** The quantities people type: what each is called, its units, and how it is written back. */
-import {
-  cutLength,
-  frequency,
-  scaled,
-  significantDigits,
-  withoutTrailingZeros,
-  type Figure,
-} from "@/lib/format/quantity";
+import { cutLength, frequency, scaled, significantDigits, trimmed, type Figure } from "@/lib/format/quantity";
 import type { QuantityKind } from "@/lib/format/unit-spelling";
 
 interface Kind {
@@ -94,7 +87,3 @@ export const kinds: Record<QuantityKind, Kind> = {
   },
   number: { si: "", usual: "", what: "a number", example: "1.5", show: plain("") },
 };
-
-function trimmed(figure: Figure): Figure {
-  return { ...figure, digits: withoutTrailingZeros(figure.digits) };
-}

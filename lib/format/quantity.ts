@@ -42,6 +42,11 @@ export function withoutTrailingZeros(text: string): string {
   return text.includes(".") ? text.replace(/\.?0+$/, "") : text;
 }
 
+/** A figure as people write it by hand: without zeros that say nothing. */
+export function trimmed(figure: Figure): Figure {
+  return { ...figure, digits: withoutTrailingZeros(figure.digits) };
+}
+
 interface Unit {
   symbol: string;
   factor: number;
@@ -119,7 +124,8 @@ const dash = (kind: Scaled): Figure => {
 /** A quantity in the unit of its own size: 27.2 MHz, 350 nH, 72.8 µs. `significant` digits, default 4. */
 export function scaled(kind: Scaled, value: number | null | undefined, significant = 4): Figure {
   if (value == null || !Number.isFinite(value)) return dash(kind);
-  const unit = unitFor(kind, value);
+  // The unit of the rounded value: 999.96 ns is 1.000 µs, not 1000 ns.
+  const unit = unitFor(kind, Number(value.toPrecision(significant)));
   return { digits: significantDigits(value / unit.factor, significant), unit: unit.symbol, spoken: unit.spoken };
 }
 
@@ -130,6 +136,22 @@ export function frequency(value: number | null | undefined): Figure {
   const short = Number((value / unit.factor).toPrecision(7));
   const decimals = short.toString().includes("e") ? 0 : (short.toString().split(".")[1]?.length ?? 0);
   return { digits: digits(short, decimals), unit: unit.symbol, spoken: unit.spoken };
+}
+
+/** A figure that somebody set, all its digits and no more: 14, 2.205. */
+export function asGiven(value: number): string {
+  const short = Number(value.toPrecision(12));
+  return digits(short, Math.min(9, short.toString().split(".")[1]?.length ?? 0));
+}
+
+/** The unit for an axis of frequencies, and the digits of each on it; to a millionth of the highest. */
+export function frequencyAxis(highest: number): { unit: string; format: (value: number) => string } {
+  const { symbol, factor } = unitFor("frequency", highest * 0.2);
+  const format = (value: number) => {
+    const short = Number((value / factor).toPrecision(6));
+    return digits(short, Math.min(6, short.toString().split(".")[1]?.length ?? 0));
+  };
+  return { unit: symbol, format };
 }
 
 /** Digits of a frequency in MHz, to the kilohertz where it needs them: for axes and tables whose head says MHz. */

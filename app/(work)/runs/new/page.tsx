@@ -5,6 +5,7 @@ import { WorkBar } from "@/components/team/work-bar";
 import { currentActor } from "@/lib/auth/actor";
 import { may } from "@/lib/auth/permission";
 import { listUsableCables } from "@/lib/cables/service";
+import { readRunStart } from "@/lib/runs/start";
 import { describeActor } from "@/lib/team/service";
 
 export const metadata: Metadata = { title: "Start a run" };
@@ -16,7 +17,7 @@ interface Props {
 export default async function NewRunPage({ searchParams }: Props) {
   const actor = await currentActor();
   if (!may(actor, "runs.write")) notFound();
-  const { cable } = await searchParams;
+  const start = readRunStart(await searchParams);
   const cables = listUsableCables(actor).map(({ id, designation, name, condition }) => ({
     id,
     designation,
@@ -27,7 +28,7 @@ export default async function NewRunPage({ searchParams }: Props) {
     <>
       <WorkBar signedIn={describeActor(actor)} current="/runs" title="Start a run" back="/runs" />
       <main id="main" className="page-margin pt-3.5 pb-20">
-        <NewRunForm cables={cables} cableId={typeof cable === "string" ? cable : undefined} />
+        <NewRunForm cables={cables} start={start} />
       </main>
     </>
   );
