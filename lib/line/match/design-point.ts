@@ -67,8 +67,12 @@ export function designPoint(request: MatchRequest): DesignPoint {
 function placeWords({ behind = [] }: MatchRequest): PlaceWords {
   const [first] = behind;
   if (!first) return { place: "the load", matched: "load" };
-  return { place: first.name || "the run behind", matched: "run behind" };
+  const isShort = first.name !== undefined && first.name !== "" && first.name.length <= longestName;
+  return { place: isShort ? first.name! : "the run behind", matched: "run behind" };
 }
+
+/** Letters of a piece's name that a title still takes. */
+const longestName = 32;
 
 function designLine({ label, ...line }: MatchLine, { designHz, temperatureC = 20 }: MatchRequest): DesignLine {
   const omega = 2 * Math.PI * designHz;

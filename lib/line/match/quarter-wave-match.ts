@@ -2,6 +2,7 @@ import { abs, type Complex } from "@/lib/line/complex";
 import type { Element } from "@/lib/line/element";
 import { leadName, lengthNotes, placeText, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
+import { reflectionAgainst } from "@/lib/line/match/line-angle";
 import { realPoints, sectionImpedance } from "@/lib/line/match/quarter-wave";
 import { along, loadPair } from "@/lib/line/match/pair";
 import { trimNotes } from "@/lib/line/match/trim";
@@ -20,6 +21,9 @@ interface Try extends Place {
   returnLossDb: number;
 }
 
+/** What a section must add to the return loss without it, dB. */
+const leastGainDb = 1;
+
 /**
  * A quarter-wave section where the feeder shows a resistance: at the load itself where that is one, else at the extremes
  * of voltage. The section is a real line, electrically a quarter wave by its own phase; its distance is solved again so
@@ -34,10 +38,12 @@ export function quarterWaveMatches(point: DesignPoint): Outcome {
   }));
   if (places.length === 0) places.push({ distance: 0, neededOhm: sectionImpedance(request.targetOhm, point.load.re) });
   const tries = lines.flatMap((line) => places.map((place) => tryLine(point, feeder, line, place)));
-  const reached = tries.filter((each) => each.returnLossDb >= request.returnLossDb);
+  // A section near the feeder's own impedance changes nothing: where the load is fair already, that is no match.
+  const alone = returnLossDb(abs(reflectionAgainst(point.load, request.targetOhm)));
+  const reached = tries.filter((each) => each.returnLossDb >= Math.max(request.returnLossDb, alone + leastGainDb));
   return {
     proposals: reached.map((each) => proposal(point, feeder, each)),
-    why: reached.length === 0 ? reason(point, places, tries) : "",
+    why: reached.length === 0 ? reason(point, places, tries, alone) : "",
   };
 }
 
@@ -93,8 +99,13 @@ function proposal(point: DesignPoint, feeder: DesignLine, { line, distance, need
   };
 }
 
-function reason(point: DesignPoint, places: Place[], tries: Try[]): string {
+function reason(point: DesignPoint, places: Place[], tries: Try[], alone: number): string {
   const needed = places.map((each) => `${ohmText(each.neededOhm)} ${placeText(point, each.distance)}`);
   const best = tries.reduce((a, b) => (b.returnLossDb > a.returnLossDb ? b : a));
-  return `A quarter-wave section needs ${listText(needed, "or")}; of the lines given, ${best.line.label} of ${ohmText(best.line.zc.re)} comes nearest and reaches ${decibelText(best.returnLossDb)}, not ${decibelText(point.request.returnLossDb)}.`;
+  const { returnLossDb: asked } = point.request;
+  const short =
+    best.returnLossDb < asked
+      ? `not ${decibelText(asked)}`
+      : `not a decibel better than the ${point.words.matched} alone with ${decibelText(alone)}`;
+  return `A quarter-wave section needs ${listText(needed, "or")}; of the lines given, ${best.line.label} of ${ohmText(best.line.zc.re)} comes nearest and reaches ${decibelText(best.returnLossDb)}, ${short}.`;
 }

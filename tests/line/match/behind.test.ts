@@ -128,6 +128,12 @@ test("a name is never asked of what stands behind, and the sentences then speak 
   expect(refused.map(({ why }) => why).join(" ")).not.toContain("the load ");
 });
 
+test("a name too long for a title is left out of it", () => {
+  const long = { ...feeder, name: "The main feeder from the mast foot to the mast head" } as Element;
+  const { candidates } = findMatches({ ...everyday, behind: [long], methods: ["shuntStub"] });
+  for (const { title } of candidates) expect(title).toMatch(/ from the run behind$/);
+});
+
 const measured: Termination = {
   kind: "sampled",
   referenceOhm: 50,

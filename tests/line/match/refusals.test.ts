@@ -51,6 +51,19 @@ test("a quarter-wave section that no line can make names the impedances needed a
   );
 });
 
+test("a section that changes nothing is no match, however fair the load is already", () => {
+  const load: Termination = { kind: "constant", reOhm: 60, imOhm: 0 };
+  const { candidates, refused } = findMatches({
+    ...request,
+    load,
+    returnLossDb: 14,
+    methods: ["quarterWave"],
+    lines: [c50F10],
+  });
+  expect(candidates).toEqual([]);
+  expect(plain(refused[0]!.why)).toMatch(/reaches 21\.3 dB, not a decibel better than the load alone with 20\.8 dB\.$/);
+});
+
 test("a series section too near the feeder's impedance is refused with the impedances that would do", () => {
   const { refused } = findMatches({ ...request, methods: ["seriesSection"] });
   expect(plain(refused[0]!.why)).toMatch(
