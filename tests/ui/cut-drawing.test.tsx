@@ -58,3 +58,13 @@ test("whatever a match is made of, its parts follow one another from source to l
     }),
   );
 });
+
+test("before some of the run the drawing goes on with its cable instead of ending in the load", () => {
+  const elements: Piece[] = [{ kind: "stub", connection: "shunt", end: "open", line, lengthM: 0.1 }];
+  const onward = { construction: null, build: null, outerDiameterMm: 5 };
+  const { container, rerender } = render(<CutDrawing elements={elements} load="resistor" name="Stub" />);
+  const atLoad = container.querySelectorAll("g[transform]").length;
+  rerender(<CutDrawing elements={elements} load="resistor" onward={onward} name="Stub" />);
+  expect(container.querySelectorAll("g[transform]").length).toBe(atLoad - 1);
+  expect(container.innerHTML).not.toMatch(/NaN/);
+});
