@@ -47,7 +47,7 @@ export function modelOf(figures: GivenFigures): LineModel {
 function revisionOf(entry: Entry): typeof cableRevisions.$inferInsert {
   const { id, name, family, state, condition, construction, build, limits } = entry;
   const model = modelOf(entry.figures);
-  const figures: Figure[] = figuresOf(entry.figures, family, build.dielectric, limits);
+  const figures: Figure[] = figuresOf(entry.figures, family, build.dielectric);
   const approval = neverApproved.includes(state) ? {} : { approvedById: approverId, approvedAt };
   return {
     ...{

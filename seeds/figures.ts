@@ -1,5 +1,5 @@
 /** The figures of a demo entry as a sheet would state them: value, kind, tolerance, conditions, source. */
-import type { Build, Family, Figure, Limits } from "@/lib/cables/schema";
+import type { Build, Family, Figure } from "@/lib/cables/schema";
 
 /** Units as in the keys; 20 °C; resistance and inductance are loop values. */
 export interface GivenFigures {
@@ -74,7 +74,7 @@ function resistanceFigures({ loopResistanceOhmPerKm: loop }: GivenFigures): Figu
   ];
 }
 
-function lossFigures({ lossDbPer100m, lossTangent }: GivenFigures, limits: Limits): Figure[] {
+function lossFigures({ lossDbPer100m, lossTangent }: GivenFigures): Figure[] {
   const rows = Object.entries(lossDbPer100m).flatMap(([at, typical]): Figure[] => {
     const hz = frequencyHz[at];
     if (hz === undefined) throw new Error(`lossFigures: unknown frequency ${at}`);
@@ -85,7 +85,8 @@ function lossFigures({ lossDbPer100m, lossTangent }: GivenFigures, limits: Limit
       { ...common, valueSi: most / 100, asTyped: `${most} dB/100 m at ${spoken[at]}`, kind: "maximum" },
     ];
   });
-  const range = { fromHz: 1e6, toHz: limits.maxFrequencyHz };
+  // The fit is as wide as the table, however far the cable is rated.
+  const range = { fromHz: 1e6, toHz: 1e9 };
   const source = "fitted to the loss table";
   return [
     ...rows,
@@ -108,16 +109,11 @@ function delayFigures({ delayPpmPerK }: GivenFigures): Figure[] {
 }
 
 /** Every figure of an entry, with the house's tolerances. */
-export function figuresOf(
-  given: GivenFigures,
-  family: Family,
-  dielectric: Build["dielectric"],
-  limits: Limits,
-): Figure[] {
+export function figuresOf(given: GivenFigures, family: Family, dielectric: Build["dielectric"]): Figure[] {
   return [
     ...geometryFigures(given, family, dielectric),
     ...resistanceFigures(given),
-    ...lossFigures(given, limits),
+    ...lossFigures(given),
     ...delayFigures(given),
   ];
 }

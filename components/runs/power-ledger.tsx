@@ -37,12 +37,23 @@ function Bar({ lossDb, most, isHatched }: { lossDb: number; most: number; isHatc
 export function PowerLedger({ analysis, names, designHz, sourceName, loadName }: Props) {
   const { pieces, spot } = analysis;
   const rows: Row[] = pieces
-    .map(({ lengthM, delayS, matchedLossDb }, i) => ({ name: names[i] ?? "", lengthM, delayS, lossDb: matchedLossDb }))
+    .map((piece, i) => ({
+      name: names[i] ?? "",
+      lengthM: piece.lengthM,
+      delayS: piece.delayS,
+      lossDb: piece.isMatched ? piece.matchedLossDb : piece.lossDb,
+    }))
     .filter((row) => row.lossDb > 0 || row.lengthM !== null);
-  const added = spot.mismatchLossDb + spot.extraLossDb;
+  // Of cables, joints and pads the loss between matched ends stands in the rows, of other pieces what they really lose;
+  // what is left of the whole is what mismatch and standing waves add.
+  const added = spot.transducerLossDb - rows.reduce((sum, row) => sum + row.lossDb, 0);
   const most = Math.max(added, ...rows.map((row) => row.lossDb));
-  const total = (key: "lengthM" | "delayS", scale: number, decimals: number) =>
-    digits(rows.reduce((sum, row) => sum + (row[key] ?? 0), 0) * scale, decimals);
+  const onPath = pieces.filter(({ pathM }) => pathM > 0);
+  const pathM = onPath.reduce((sum, piece) => sum + piece.pathM, 0);
+  // Different cables side by side have no one delay, and then the path has none either.
+  const pathS = onPath.some(({ delayS }) => delayS === null)
+    ? null
+    : onPath.reduce((sum, { delayS }) => sum + (delayS ?? 0), 0);
   return (
     <Section title="Where the power goes">
       <Table className="mt-1">
@@ -93,10 +104,10 @@ export function PowerLedger({ analysis, names, designHz, sourceName, loadName }:
               </b>
             </RowHead>
             <Cell isRight className="figures border-0">
-              {total("lengthM", 1, 2)}
+              {digits(pathM, 2)}
             </Cell>
             <Cell isRight className="figures border-0">
-              {total("delayS", 1e9, 1)}
+              {digits(pathS === null ? null : pathS * 1e9, 1)}
             </Cell>
             <Cell isRight className="figures border-0">
               {digits(spot.transducerLossDb, 3)}

@@ -5,7 +5,8 @@ import { BandConditions } from "@/components/runs/conditions";
 import { useRunEditor } from "@/components/runs/run-editor";
 import { TargetList } from "@/components/runs/target-list";
 import { ChartFrame } from "@/components/plot/chart-frame";
-import { digits, frequency, inWords, megahertz } from "@/lib/format/quantity";
+import { asGiven, frequencyAxis } from "@/lib/format/axis";
+import { digits, frequency, inWords } from "@/lib/format/quantity";
 import type { Analysis } from "@/lib/runs/analysis";
 import { plotted, returnLossDomain, thinned } from "@/lib/runs/curves";
 import { bandWords } from "@/lib/runs/sentences";
@@ -26,10 +27,11 @@ export function ReturnLossChart({ analysis }: { analysis: Analysis }) {
   const source = plotted(shown.map((i) => analysis.sourceReturnLossDb[i]!));
   const load = plotted(shown.map((i) => analysis.loadReturnLossDb[i]!));
   const worst = analysis.worst.sourceReturnLoss;
+  const axis = frequencyAxis(xs.at(-1) ?? 1);
   const yDomain = returnLossDomain([source, load], limitDb);
-  const summary = `Return loss at ${sourceName} falls to ${digits(worst.value, 1)} dB at ${inWords(frequency(worst.frequencyHz))}${limitDb === null ? "" : `; target ${digits(limitDb, 1)}`}`;
+  const summary = `Return loss at ${sourceName} falls to ${digits(worst.value, 1)} dB at ${inWords(frequency(worst.frequencyHz))}${limitDb === null ? "" : `; target ${asGiven(limitDb)}`}`;
   const rows = thinned(
-    xs.map((x, i) => [megahertz(x), digits(source[i], 2), digits(load[i], 2)]),
+    xs.map((x, i) => [axis.format(x), digits(source[i], 2), digits(load[i], 2)]),
     120,
   );
   return (
@@ -42,7 +44,7 @@ export function ReturnLossChart({ analysis }: { analysis: Analysis }) {
         </span>
       }
       summary={summary}
-      figures={{ head: ["MHz", `at ${sourceName}, dB`, `at ${loadName}, dB`], rows }}
+      figures={{ head: [axis.unit, `at ${sourceName}, dB`, `at ${loadName}, dB`], rows }}
     >
       <SweepPlot
         xs={xs}
@@ -52,13 +54,13 @@ export function ReturnLossChart({ analysis }: { analysis: Analysis }) {
         ]}
         xDomain={[xs[0] ?? 0, xs.at(-1) ?? 1]}
         yDomain={yDomain}
-        xUnit="MHz"
-        formatX={megahertz}
+        xUnit={axis.unit}
+        formatX={axis.format}
         formatY={(value) => digits(value, 0)}
         mark={designHz}
         band={bandHz ? { from: bandHz[0], to: bandHz[1], label: bandWords(bandHz) } : undefined}
         limit={
-          limitDb === null ? undefined : { value: limitDb, forbidden: "below", label: `target ${digits(limitDb, 1)}` }
+          limitDb === null ? undefined : { value: limitDb, forbidden: "below", label: `target ${asGiven(limitDb)}` }
         }
         worst={
           Number.isFinite(worst.value)

@@ -34,6 +34,12 @@ const conductorSchema = z
     error: "This conductor form needs a skin corner.",
   });
 
+/** Ranges that touch are apart; ranges that overlap would count a slope twice. */
+function isApart(ranges: { fromC: number; toC: number }[]): boolean {
+  const ordered = [...ranges].sort((a, b) => a.fromC - b.fromC);
+  return ordered.every(({ fromC }, i) => i === 0 || fromC >= (ordered[i - 1]?.toC ?? -Infinity));
+}
+
 export const lineModelSchema = z
   .strictObject({
     conductors: z
@@ -49,13 +55,16 @@ export const lineModelSchema = z
       .describe("per kelvin; default 0.00393"),
     lossSlopes: z
       .array(
-        z.strictObject({
-          fromC: temperature("The start of the range"),
-          toC: temperature("The end of the range"),
-          perK: finite("The slope"),
-        }),
+        z
+          .strictObject({
+            fromC: temperature("The start of the range"),
+            toC: temperature("The end of the range"),
+            perK: finite("The slope"),
+          })
+          .refine(({ fromC, toC }) => toC > fromC, { path: ["toC"], error: "The range must end above its start." }),
       )
       .max(20, { error: "At most 20 ranges are allowed." })
+      .refine(isApart, { error: "Two ranges of loss slopes overlap: each temperature may have one slope." })
       .optional(),
   })
   .meta({ id: "LineModel", description: "One cable per metre at 20 °C; R and L are loop values." });

@@ -1,5 +1,5 @@
 /** The quantities people type: what each is called, its units, and how it is written back. */
-import { cutLength, frequency, scaled, significantDigits, trimmed, type Figure } from "@/lib/format/quantity";
+import { frequency, scaled, significantDigits, trimmed, type Figure } from "@/lib/format/quantity";
 import type { QuantityKind } from "@/lib/format/unit-spelling";
 
 interface Kind {
@@ -20,7 +20,7 @@ export const kinds: Record<QuantityKind, Kind> = {
     usual: "m",
     what: "a length",
     example: "36 m or 118 ft",
-    show: (v) => (v < 1 && v > 0 ? cutLength(v) : plain("m")(v)),
+    show: (v) => (v < 1 && v > 0 ? plain("mm")(v * 1000) : plain("m")(v)),
   },
   frequency: { si: "Hz", usual: "MHz", what: "a frequency", example: "27.2 MHz", show: frequency },
   temperature: { si: "degC", usual: "degC", what: "a temperature", example: "20 °C or 68 °F", show: plain("°C") },

@@ -108,7 +108,7 @@ const scales = {
 
 export type Scaled = keyof typeof scales;
 
-function unitFor(kind: Scaled, value: number): Unit {
+export function unitFor(kind: Scaled, value: number): Unit {
   const units: Unit[] = scales[kind];
   const size = Math.abs(value) * (1 + 1e-12);
   const last = units[units.length - 1] as Unit;
@@ -136,22 +136,6 @@ export function frequency(value: number | null | undefined): Figure {
   const short = Number((value / unit.factor).toPrecision(7));
   const decimals = short.toString().includes("e") ? 0 : (short.toString().split(".")[1]?.length ?? 0);
   return { digits: digits(short, decimals), unit: unit.symbol, spoken: unit.spoken };
-}
-
-/** A figure that somebody set, all its digits and no more: 14, 2.205. */
-export function asGiven(value: number): string {
-  const short = Number(value.toPrecision(12));
-  return digits(short, Math.min(9, short.toString().split(".")[1]?.length ?? 0));
-}
-
-/** The unit for an axis of frequencies, and the digits of each on it; to a millionth of the highest. */
-export function frequencyAxis(highest: number): { unit: string; format: (value: number) => string } {
-  const { symbol, factor } = unitFor("frequency", highest * 0.2);
-  const format = (value: number) => {
-    const short = Number((value / factor).toPrecision(6));
-    return digits(short, Math.min(6, short.toString().split(".")[1]?.length ?? 0));
-  };
-  return { unit: symbol, format };
 }
 
 /** Digits of a frequency in MHz, to the kilohertz where it needs them: for axes and tables whose head says MHz. */

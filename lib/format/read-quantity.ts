@@ -91,10 +91,16 @@ export function asTyped(kind: QuantityKind, value: number): string {
 /** Reads an impedance: "22-35j", "22 − j35 Ω", "j50", "75", "50∠-30°", "1.2k". Ohm. */
 export function readImpedance(text: string): Read<{ re: number; im: number }> {
   const refuse = { ok: false, message: `“${text.trim()}” is not an impedance. Try 22-35j, 50 or 75∠-20°.` } as const;
-  const typed = tidy(text)
+  const given = tidy(text)
     .replace(/\s*(ohms?|Ω|\u2126)$/i, "")
-    .replace(/\s+/g, "")
-    .replace(/(\d),(\d)/g, "$1.$2");
+    .replace(/\s+/g, "");
+  const doubtful = /(?<![\d.,])[1-9]\d{0,2},\d{3}(?![\d,])/.exec(given)?.[0];
+  if (doubtful)
+    return {
+      ok: false,
+      message: `Is “${doubtful}” a thousand or a decimal? Write it with a point, or without the comma.`,
+    };
+  const typed = given.replace(/(\d),(\d)/g, "$1.$2");
   if (typed === "") return { ok: false, message: "Type an impedance, for example 22-35j." };
   const polarForm = /^([\d.]+(?:e[+-]?\d+)?)(?:∠|<|@)([+-]?[\d.]+)°?$/i.exec(typed);
   if (polarForm) {

@@ -59,10 +59,16 @@ export function prepareElement(element: Element, options: ElementOptions = {}): 
     case "pad":
       return constant(padTwoPort(element));
     case "joint":
-      return jointTwoPort(element, element.referenceOhm ?? options.jointReferenceOhm ?? NaN);
+      return jointTwoPort(element, neededReference(element.referenceOhm ?? options.jointReferenceOhm));
     case "transformer":
       return constant(transformerTwoPort(element.turnsRatio));
   }
+}
+
+/** @throws RangeError where nothing says what impedance a joint's loss is stated in */
+function neededReference(referenceOhm: number | undefined): number {
+  if (referenceOhm !== undefined) return referenceOhm;
+  throw new RangeError("prepareElement: a joint in a run without cable needs a referenceOhm");
 }
 
 /** The element's two-port at one complex frequency. For a sweep prepare once. Throws as `prepareElement`. */

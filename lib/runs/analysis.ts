@@ -4,13 +4,13 @@
  */
 import { DB_PER_NEPER } from "@/lib/line/constants";
 import { prepareElements } from "@/lib/line/element-two-port";
-import type { Circuit, Element, Plane } from "@/lib/line/element";
+import { lengthAlongPath, type Circuit, type Element, type Plane } from "@/lib/line/element";
 import { lineFigures } from "@/lib/line/line-figures";
-import { sweep, sweepPrepared, type Sweep } from "@/lib/line/run";
+import { sweep, type Sweep } from "@/lib/line/run";
 import { prepareRun } from "@/lib/line/walk";
 import { standingWave, type StandingWave } from "@/lib/line/standing-wave";
 import { pointsFor, shownFrequencies } from "@/lib/runs/shown";
-import { worstIn, type Worst } from "@/lib/runs/worst";
+import { leastReturnLossDb, worstOfSweep, worstOver, type Band, type WorstOver } from "@/lib/runs/worst-over";
 
 export interface Conditions {
   designHz: number;
@@ -35,10 +35,15 @@ export interface Spot {
 /** One line of "where the power goes". */
 export interface PieceFigures {
   element: number;
+  /** of what is laid here: a cable along the path, a stub beside it */
   lengthM: number | null;
+  /** metres it adds between source and load */
+  pathM: number;
   delayS: number | null;
   electricalLength: number | null;
   matchedLossDb: number;
+  /** whether its loss between matched ends is known; of other pieces only the loss they really have here counts */
+  isMatched: boolean;
   /** impedance at its source side, looking toward the load */
   impedance: { re: number; im: number };
   /** what it really loses here, power in over power out */
@@ -51,7 +56,12 @@ export interface Analysis {
   loadReturnLossDb: Float64Array;
   spot: Spot;
   pieces: PieceFigures[];
-  worst: { sourceReturnLoss: Worst; loadReturnLoss: Worst; loss: Worst; sourceVswr: Worst; loadVswr: Worst };
+  /** over the run's band, else at its one frequency */
+  worst: WorstOver;
+  /** over another band: targets may have one of their own */
+  worstOver: (band: Band) => WorstOver;
+  /** the run's own band */
+  band: Band;
   /** the least return loss a sweep of the band reads at the source with the load missing, and with it shorted */
   masking: { openDb: number; shortDb: number };
   wave: StandingWave | null;
@@ -91,50 +101,16 @@ function pieceFigures(circuit: Circuit, { designHz, temperatureC }: Conditions, 
     const plane = at.atPlanes[index + 1]!;
     return {
       element: index,
-      lengthM: laid ? laid.lengthM : null,
+      lengthM: laid ? laid.lengthM : lengthAlongPath(element) || null,
+      pathM: lengthAlongPath(element),
       delayS: laid && figures ? laid.lengthM * figures.groupDelaySPerM[0]! : null,
       electricalLength: laid && figures ? (laid.lengthM * figures.phaseRadPerM[0]!) / (2 * Math.PI) : null,
       matchedLossDb: twoPorts[index]!(s).matchedLoss * DB_PER_NEPER,
+      isMatched: element.kind === "cable" || element.kind === "joint" || element.kind === "pad",
       impedance: { re: plane.impedance.re[0]!, im: plane.impedance.im[0]! },
       lossDb: at.elementLossDb[index]![0]!,
     };
   });
-}
-
-type Curve = (at: Sweep) => Float64Array;
-
-function worstValues(circuit: Circuit, conditions: Conditions, shown: Sweep): Analysis["worst"] {
-  const { designHz, temperatureC } = conditions;
-  const band = conditions.bandHz ?? [designHz, designHz];
-  const run = prepareRun(circuit, temperatureC);
-  const least = (curve: Curve, sign: 1 | -1): Worst => {
-    const valueAt = (f: number) => sign * curve(sweepPrepared(run, [f], [loadPlane]))[0]!;
-    const found = worstIn(
-      shown.frequencies,
-      curve(shown).map((v) => sign * v),
-      band,
-      valueAt,
-    );
-    return { ...found, value: sign * found.value };
-  };
-  return {
-    sourceReturnLoss: least((at) => at.returnLossDb, 1),
-    loadReturnLoss: least((at) => at.atPlanes[0]!.returnLossDb, 1),
-    loss: least((at) => at.transducerLossDb, -1),
-    sourceVswr: least((at) => at.vswr, -1),
-    loadVswr: least((at) => at.atPlanes[0]!.vswr, -1),
-  };
-}
-
-/** What a sweep of the band reads at the source with the load gone: the least return loss, which a limit is held against. */
-function maskingOf(circuit: Circuit, conditions: Conditions): Analysis["masking"] {
-  const { designHz, temperatureC } = conditions;
-  const [from, to] = conditions.bandHz ?? [designHz, designHz];
-  const count = from === to ? 1 : 51;
-  const frequencies = Float64Array.from({ length: count }, (_, i) => from + ((to - from) * i) / Math.max(1, count - 1));
-  const least = (kind: "open" | "short") =>
-    sweep({ ...circuit, load: { kind } }, frequencies, { temperatureC }).returnLossDb.reduce((a, b) => Math.min(a, b));
-  return { openDb: least("open"), shortDb: least("short") };
 }
 
 /** A source without resistance has no available power, so no wave can be drawn for it. */
@@ -168,14 +144,18 @@ export function analyseRun(
   const shown = sweep(circuit, shownFrequencies(conditions, points), { temperatureC, planes: [loadPlane] });
   const { spot, at } = spotOf(circuit, conditions);
   const pieces = pieceFigures(circuit, conditions, at);
+  const band: Band = conditions.bandHz ?? [designHz, designHz];
+  const gone = (kind: "open" | "short") => leastReturnLossDb({ ...circuit, load: { kind } }, band, temperatureC);
   return {
     sweep: shown,
     sourceReturnLossDb: shown.returnLossDb,
     loadReturnLossDb: shown.atPlanes[0]!.returnLossDb,
     spot,
     pieces,
-    worst: worstValues(circuit, conditions, shown),
-    masking: maskingOf(circuit, conditions),
+    worst: worstOfSweep(prepareRun(circuit, temperatureC), shown, band),
+    worstOver: (other) => worstOver(circuit, other, temperatureC),
+    band,
+    masking: { openDb: gone("open"), shortDb: gone("short") },
     wave: availablePowerW === null ? null : waveOf(circuit, designHz, availablePowerW, temperatureC, pieces),
   };
 }

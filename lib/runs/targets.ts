@@ -18,10 +18,18 @@ function atLoad(target: Target): boolean {
   return target.plane !== undefined && "at" in target.plane && target.plane.at === "load";
 }
 
-/** The value that decides, at its worst over the run's band. Targets on inner planes are not judged here. */
-function deciding(target: Target, { worst, wave }: Analysis): { value: number; frequencyHz: number | null } | null {
+/** The band a target is judged over: its own, else the run's. */
+export function bandOf(target: Target, analysis: Analysis): readonly [number, number] {
+  return target.bandHz ?? analysis.band;
+}
+
+/** The value that decides, at its worst over the target's band. Targets on inner planes are not judged here. */
+function deciding(target: Target, analysis: Analysis): { value: number; frequencyHz: number | null } | null {
   if (target.plane && !("at" in target.plane)) return null;
   const load = atLoad(target);
+  const { band, wave } = analysis;
+  const [from, to] = bandOf(target, analysis);
+  const worst = from === band[0] && to === band[1] ? analysis.worst : analysis.worstOver([from, to]);
   const found = {
     loss: worst.loss,
     returnLoss: load ? worst.loadReturnLoss : worst.sourceReturnLoss,
@@ -45,15 +53,16 @@ export function verdicts(targets: readonly Target[], analysis: Analysis): Verdic
 /** Whether a return-loss limit at the source would notice that the load is missing or shorted. */
 export interface Masking {
   limitDb: number;
-  /** what the sweep reads with nothing there */
+  /** the least the sweep reads with nothing there, and with a short */
   openDb: number;
   shortDb: number;
-  isBlind: boolean;
+  isOpenUnseen: boolean;
+  isShortUnseen: boolean;
 }
 
 export function masking(targets: readonly Target[], analysis: Analysis): Masking | null {
   const limit = targets.find((t) => t.quantity === "returnLoss" && !atLoad(t) && t.atLeast !== undefined)?.atLeast;
   if (limit === undefined) return null;
   const { openDb, shortDb } = analysis.masking;
-  return { limitDb: limit, openDb, shortDb, isBlind: Math.max(openDb, shortDb) >= limit };
+  return { limitDb: limit, openDb, shortDb, isOpenUnseen: openDb >= limit, isShortUnseen: shortDb >= limit };
 }

@@ -36,7 +36,7 @@ test.each([
   [132e-12, "capacitance", "132.0 pF"],
   [57.6, "voltage", "57.60 V"],
   [0.8, "current", "800.0 mA"],
-  [999.96, "power", "1000 W"],
+  [999.96, "power", "1.000 kW"],
   [72.8e-6, "time", "72.80 µs"],
   [0, "power", "0 W"],
 ] as const)("scaled(%s) as %s picks the unit of its own size", (value, kind, expected) => {

@@ -119,3 +119,7 @@ test("what a field shows is read back to the same value", () => {
   }
   expect(readImpedance(impedanceAsTyped({ re: 22, im: -35 }))).toMatchObject({ ok: true, value: { re: 22, im: -35 } });
 });
+
+test.each(["1,234", "22-1,500j"])("readImpedance(%j) asks whether the comma is a thousand or a decimal", (text) => {
+  expect(readImpedance(text)).toEqual({ ok: false, message: expect.stringMatching(/thousand or a decimal/) });
+});

@@ -69,7 +69,7 @@ describe("a joint", () => {
       10,
     );
     expect(impedanceOf({ ...alone, source: { kind: "constant", reOhm: 75, imOhm: 0 } })).toBeCloseTo(75, 10);
-    expect(() => prepareElements(alone)).toThrow("jointTwoPort: referenceOhm must be positive, got NaN");
+    expect(() => prepareElements(alone)).toThrow("a joint in a run without cable needs a referenceOhm");
     expect(() => prepareElements({ elements: [{ ...joint, lossDb: -1, referenceOhm: 50 }] })).toThrow(
       "jointTwoPort: lossDb must be at least 0, got -1",
     );

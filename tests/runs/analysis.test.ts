@@ -79,9 +79,9 @@ test("a limit that the line alone would keep is called blind, one it would not i
   ] as const) {
     const circuit = run({ kind: "constant", reOhm: 75, imOhm: 0 }, lengthM);
     const guard = masking([target], analyseRun(circuit, conditions));
-    expect(guard?.isBlind).toBe(isBlind);
+    expect(guard?.isOpenUnseen).toBe(isBlind);
     const said = guard && maskingSentence(guard, draftOfCircuit(lengthM));
-    expect(said?.text).toMatch(isBlind ? /cannot detect a missing load/ : /notices it/);
+    expect(said?.text).toMatch(isBlind ? /cannot detect a missing or a shorted load/ : /notices both/);
   }
 });
 
@@ -108,7 +108,7 @@ test("what the source sees names the line that hides the load", () => {
     /only because 0\.76\sdB of line each way hides the load at 5\.0\sdB/,
   );
   expect(targetWords({ quantity: "returnLoss", atLeast: 14 }, [450e6, 454e6]).replace(/\u00a0/g, " ")).toBe(
-    "at least 14.0, 450–454 MHz",
+    "at least 14, 450–454 MHz",
   );
 });
 
@@ -134,4 +134,69 @@ test("a source without resistance is refused by name unless the run has a refere
   const { wave, spot } = analyseRun({ ...circuit, referenceOhm: 50 }, conditions);
   expect(wave).toBeNull();
   expect(spot.loadVswr).toBeCloseTo(3.54, 2);
+});
+
+test("a match between source and load is said to be a match, not a loss of the line", () => {
+  const matched: Circuit = {
+    ...whip,
+    elements: [
+      ...whip.elements,
+      { kind: "part", connection: "shunt", cF: 132e-12 },
+      { kind: "part", connection: "series", lH: 350e-9 },
+    ],
+  };
+  const said = seenFromSource(analyseRun(matched, conditions), draftOfCircuit(36), []);
+  expect(said.text).toMatch(/what stands between brings the load up from 5\.0/);
+  expect(said.text).not.toMatch(/hides/);
+});
+
+test("a target is judged over its own band where it has one", () => {
+  // Source return loss of this run: 6.56 dB over 27–27.4 MHz, 6.34 dB over 20–21 MHz (a second, 40-digit computation).
+  const analysis = analyseRun(whip, { ...conditions, bandHz: [27e6, 27.4e6] });
+  const target = { quantity: "returnLoss", plane: { at: "source" }, atLeast: 6.4 } as const;
+  expect(verdicts([target, { ...target, bandHz: [20e6, 21e6] }], analysis).map(({ isMet }) => isMet)).toEqual([
+    true,
+    false,
+  ]);
+  expect(verdicts([{ ...target, bandHz: [20e6, 21e6] }], analysis)[0]?.value).toBeCloseTo(6.34, 2);
+});
+
+test("the masking guard finds the least reading between its points", () => {
+  // 460 m of P120-S1, 120 Ω, shorted, 0.1–5 MHz: 3.92 dB at 139.2 kHz (a second, 40-digit computation).
+  const pair: Line = {
+    model: {
+      conductors: [{ form: "sqrt", r0OhmPerM: 0.156727, skinCornerRadPerS: 2 * Math.PI * 125.01e3 }],
+      lInfHPerM: 555.94e-9,
+      cFPerM: 38.61e-12,
+      lossTangent: 1.5e-3,
+    },
+  };
+  const ohm120 = { kind: "constant", reOhm: 120, imOhm: 0 } as const;
+  const bus: Circuit = { source: ohm120, elements: [{ kind: "cable", line: pair, lengthM: 460 }], load: ohm120 };
+  const { masking: gone } = analyseRun(bus, { ...conditions, designHz: 1e6, bandHz: [0.1e6, 5e6] });
+  expect(gone.shortDb).toBeCloseTo(3.92, 2);
+});
+
+test("the path counts what lies on it once: stubs add nothing, cables side by side do", () => {
+  const { pieces } = analyseRun(
+    {
+      ...whip,
+      elements: [
+        ...whip.elements,
+        { kind: "stub", connection: "shunt", end: "short", line, lengthM: 0.951 },
+        {
+          kind: "parallel",
+          branches: [
+            { line, lengthM: 2 },
+            { line, lengthM: 2 },
+          ],
+        },
+        { kind: "part", connection: "series", rOhm: 100 },
+      ],
+    },
+    conditions,
+  );
+  expect(pieces.map(({ pathM }) => pathM)).toEqual([36, 0, 2, 0]);
+  expect(pieces.map(({ isMatched }) => isMatched)).toEqual([true, false, false, false]);
+  expect(pieces[3]?.lossDb).toBeGreaterThan(3);
 });
