@@ -27,18 +27,13 @@ const short = (hertz: number) => inWords(frequency(Number(hertz.toPrecision(3)))
 
 /** Loss of the length over frequency, between two frequencies that are typed under it. */
 export function AttenuationCurve({ calculator, result }: Props) {
-  const { curve } = result;
   return (
     <CursorProvider>
       <div className="min-w-0">
-        {curve && <Chart curve={curve} result={result} />}
+        <Chart curve={result.curve} result={result} />
         <div className="mt-1 flex flex-wrap items-start gap-3">
           <InputField of={calculator} name="from" />
-          <InputField
-            of={calculator}
-            name="to"
-            fault={curve ? undefined : "Above the frequency that the curve starts at."}
-          />
+          <InputField of={calculator} name="to" />
         </div>
       </div>
     </CursorProvider>

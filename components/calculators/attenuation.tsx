@@ -6,7 +6,7 @@ import { Cautions } from "@/components/calculators/cautions";
 import { FigureRows, type FigureRow } from "@/components/calculators/figure-rows";
 import { InputField } from "@/components/calculators/input-field";
 import { LineFields } from "@/components/calculators/line-fields";
-import { PowerAlong } from "@/components/calculators/power-along";
+import { percentOf, PowerAlong } from "@/components/calculators/power-along";
 import { useCalculator, type OpenedCalculator } from "@/components/calculators/use-calculator";
 import { Leaf } from "@/components/line/leaf";
 import { Reading, Readings } from "@/components/ui/reading";
@@ -36,11 +36,8 @@ interface Props {
 
 /** What a length of cable loses, and what else it does, at one frequency and temperature. */
 export function AttenuationCalculator({ opened, canStartRun }: Props) {
-  const calculator = useCalculator(path, attenuationInputs, opened);
-  const { texts, values } = calculator;
-  const outcome = attenuation(values, calculator.entries);
-  const result = outcome.ok ? outcome.result : null;
-  const faults = outcome.ok ? {} : outcome.faults;
+  const calculator = useCalculator({ path, inputs: attenuationInputs, compute: attenuation }, opened);
+  const { texts, values, result } = calculator;
   const start = newRunAddress(texts, {
     length: texts.length ?? "",
     frequency: texts.frequency ?? "",
@@ -69,7 +66,7 @@ export function AttenuationCalculator({ opened, canStartRun }: Props) {
             <LineFields of={calculator} />
             <InputField of={calculator} name="length" />
             <InputField of={calculator} name="frequency" />
-            <InputField of={calculator} name="temperature" fault={faults.temperature} />
+            <InputField of={calculator} name="temperature" />
             <InputField of={calculator} name="current" />
           </div>
         </Leaf>
@@ -99,7 +96,7 @@ function Head({ result }: { result: AttenuationResult | null }) {
   return (
     <Readings className="min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
       <Reading label="Attenuation" {...decibels(whole?.lossDb)} target="between matched ends" />
-      <Reading label="Power that arrives" digits={digits(share === undefined ? null : share * 100, 1)} unit="%" />
+      <Reading label="Power that arrives" digits={share === undefined ? "–" : percentOf(share)} unit="%" />
       <Reading label="Delay" {...scaled("time", whole?.phaseDelayS)} />
       <Reading
         label="Loop resistance, dc"

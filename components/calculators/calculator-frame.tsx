@@ -13,7 +13,7 @@ import { calculatorPlaces, type CalculatorPath } from "@/lib/calculators/places"
 
 interface Props {
   path: CalculatorPath;
-  calculator: Pick<Calculator, "notes" | "unread">;
+  calculator: Pick<Calculator, "notes">;
   /** right of the title */
   head: ReactNode;
   /** where a run begins with what stands here; null for those who may not start one */
@@ -69,14 +69,19 @@ export function CalculatorFrame({ path, calculator, head, start, children }: Pro
   );
 }
 
-/** The results; while a field cannot be read, those of the last value that could, and it is said. */
-export function Results({ calculator, children }: { calculator: Pick<Calculator, "unread">; children: ReactNode }) {
-  const isBehind = Object.keys(calculator.unread).length > 0;
+interface ResultsProps {
+  calculator: Pick<Calculator, "problems">;
+  children: ReactNode;
+}
+
+/** The results; while something is wrong with a field, those of the last values that gave any, and it is said. */
+export function Results({ calculator, children }: ResultsProps) {
+  const isBehind = Object.keys(calculator.problems).length > 0;
   return (
     <>
       {isBehind && (
         <p role="status" className="mt-3 text-label text-ink-2">
-          Until every field can be read, the figures are those of the last value that could.
+          Until every field is right, the figures are those of the last values that were.
         </p>
       )}
       <div className={`mt-4 ${isBehind ? "opacity-60" : ""}`}>{children}</div>

@@ -10,34 +10,23 @@ import { nudge } from "@/lib/format/nudge";
 interface Props<I extends Inputs> {
   of: Calculator<I>;
   name: keyof I & string;
-  /** what the calculation itself has against the value */
-  fault?: string;
-  /** in place of the input's own */
-  label?: string;
 }
 
 const widths = { narrow: "w-20 phone:w-28", normal: "w-26 phone:w-36", wide: "w-40 phone:w-full" };
 
 /** One field of a calculator, whatever it asks for. Nothing where it is not asked for just now. */
-export function InputField<I extends Inputs>({ of, name, fault, label }: Props<I>) {
+export function InputField<I extends Inputs>({ of, name }: Props<I>) {
   const input = of.inputs[name];
   if (!input || !of.shown.includes(name)) return null;
   const text = of.texts[name] ?? "";
   if (input.input === "typed")
-    return (
-      <TypedField
-        input={label === undefined ? input : { ...input, label }}
-        text={text}
-        error={of.unread[name] ?? fault}
-        set={(next) => of.set(name, next)}
-      />
-    );
+    return <TypedField input={input} text={text} error={of.problems[name]} set={(next) => of.set(name, next)} />;
   if (input.input === "cable") return null;
   return (
     <Select
-      label={label ?? input.label}
+      label={input.label}
       value={text}
-      error={of.unread[name] ?? fault}
+      error={of.problems[name]}
       className="w-44 phone:w-full"
       onChange={(event) => of.set(name, event.target.value)}
     >

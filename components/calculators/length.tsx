@@ -37,11 +37,8 @@ interface Props {
 
 /** Electrical length of a cable and the length to cut, either from the other. */
 export function LengthCalculator({ opened, canStartRun }: Props) {
-  const calculator = useCalculator(path, lengthInputs, opened);
-  const { values, texts } = calculator;
-  const outcome = electricalLength(values, calculator.entries);
-  const result = outcome.ok ? outcome.result : null;
-  const faults = outcome.ok ? {} : outcome.faults;
+  const calculator = useCalculator({ path, inputs: lengthInputs, compute: electricalLength }, opened);
+  const { values, texts, result } = calculator;
   const start = newRunAddress(texts, {
     length: result ? `${Number(result.cutM.toPrecision(6))} m` : "",
     frequency: texts.frequency ?? "",
@@ -64,9 +61,9 @@ export function LengthCalculator({ opened, canStartRun }: Props) {
           <div className="flex flex-wrap items-start gap-3">
             <LineFields of={calculator} />
             <InputField of={calculator} name="frequency" />
-            <InputField of={calculator} name="wanted" fault={faults.wanted} />
-            <InputField of={calculator} name="ends" fault={faults.ends} />
-            <InputField of={calculator} name="temperature" fault={faults.temperature} />
+            <InputField of={calculator} name="wanted" />
+            <InputField of={calculator} name="ends" />
+            <InputField of={calculator} name="temperature" />
             <p className="max-w-90 self-center text-note text-ink-3">
               Degrees, wavelengths or time for what it shall be; metres or feet for what is cut already. The ends take
               off what plugs, tees and caps count for, as cable.

@@ -25,11 +25,9 @@ interface Props {
 
 /** One mismatch in all its figures. */
 export function MismatchCalculator({ opened, canStartRun }: Props) {
-  const calculator = useCalculator(path, mismatchInputs, opened);
-  const { values, texts } = calculator;
-  const outcome = mismatch(values);
-  if (!outcome.ok) return null;
-  const { result } = outcome;
+  const calculator = useCalculator({ path, inputs: mismatchInputs, compute: mismatch }, opened);
+  const { values, texts, result } = calculator;
+  if (!result) return null;
   const loadText = values.given === "load" ? (texts.load ?? "") : significantDigits(result.resistances.high, 4);
   const canStart = canStartRun && Number.isFinite(result.resistances.high);
   const start = newRunAddress({}, { source: texts.reference ?? "", load: loadText, power: texts.power ?? "" });

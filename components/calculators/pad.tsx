@@ -15,10 +15,9 @@ import { useMeasuredWidth } from "@/components/plot/measured-width";
 import { Button } from "@/components/ui/button";
 import { Reading, Readings } from "@/components/ui/reading";
 import type { Caution } from "@/lib/calculators/cautions";
-import { pad, padInputs, type PadResult } from "@/lib/calculators/pad";
+import { leastLossDb, pad, padInputs, type PadResult } from "@/lib/calculators/pad";
 import { newRunAddress } from "@/lib/calculators/start";
 import { decibels, digits, inWords, scaled, trimmed, withoutTrailingZeros } from "@/lib/format/quantity";
-import { minimumPadLossDb } from "@/lib/line/pad";
 
 const path = "/calculate/pad";
 
@@ -29,13 +28,11 @@ interface Props {
 
 /** A resistive pad between two resistances. */
 export function PadCalculator({ opened, canStartRun }: Props) {
-  const calculator = useCalculator(path, padInputs, opened);
-  const { values, texts } = calculator;
-  const outcome = pad(values);
-  const result = outcome.ok ? outcome.result : null;
-  const faults = outcome.ok ? {} : outcome.faults;
-  const leastDb = minimumPadLossDb(values.source, values.load);
-  const lossDb = result?.isLeast ? leastDb : values.loss;
+  const calculator = useCalculator({ path, inputs: padInputs, compute: pad }, opened);
+  const { values, texts, result } = calculator;
+  // Of the resistances as typed: the result may still be that of others.
+  const leastDb = leastLossDb(texts) ?? result?.leastDb ?? 0;
+  const lossDb = result?.isLeast ? result.leastDb : values.loss;
   const start = newRunAddress(
     {},
     {
@@ -58,11 +55,11 @@ export function PadCalculator({ opened, canStartRun }: Props) {
       <div className="mt-3">
         <Leaf name="The pad" notchX={300}>
           <div className="flex flex-wrap items-start gap-3">
-            <InputField of={calculator} name="loss" fault={faults.loss} />
+            <InputField of={calculator} name="loss" />
             <InputField of={calculator} name="source" />
             <InputField of={calculator} name="load" />
             <InputField of={calculator} name="power" />
-            {leastDb > 0 && !result?.isLeast && (
+            {leastDb > 0 && !(result?.isLeast && calculator.problems.loss === undefined) && (
               <Button
                 kind="quiet"
                 className="self-center"

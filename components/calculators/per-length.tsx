@@ -28,10 +28,9 @@ interface Props {
 
 /** Any two of a line's five figures give the rest. */
 export function PerLengthCalculator({ opened, canStartRun }: Props) {
-  const calculator = useCalculator(path, perLengthInputs, opened);
-  const outcome = perLength(calculator.values);
-  const figures = outcome.ok ? outcome.result.agreement.figures : null;
-  const faults = outcome.ok ? {} : outcome.faults;
+  const calculator = useCalculator({ path, inputs: perLengthInputs, compute: perLength }, opened);
+  const { result } = calculator;
+  const figures = result?.agreement.figures ?? null;
   return (
     <CalculatorFrame
       path={path}
@@ -48,7 +47,7 @@ export function PerLengthCalculator({ opened, canStartRun }: Props) {
         <Leaf name="What is known of the line" notchX={120}>
           <div className="flex flex-wrap items-start gap-3">
             {names.map((name) => (
-              <InputField key={name} of={calculator} name={name} fault={faults[name]} />
+              <InputField key={name} of={calculator} name={name} />
             ))}
             <p className="max-w-80 self-center text-note text-ink-3">
               Two of them are enough. The velocity may be a fraction, a percentage or 1/VF.
@@ -56,13 +55,13 @@ export function PerLengthCalculator({ opened, canStartRun }: Props) {
           </div>
         </Leaf>
       </div>
-      {outcome.ok && (
+      {result && (
         <Results calculator={calculator}>
           <div className="grid grid-cols-[minmax(0,1fr)_minmax(0,1fr)] gap-x-10 gap-y-6 folded:grid-cols-1">
-            <Derived result={outcome.result} />
-            <Agreement result={outcome.result} />
+            <Derived result={result} />
+            <Agreement result={result} />
           </div>
-          <WaysOn figures={outcome.result.agreement.figures} />
+          <WaysOn figures={result.agreement.figures} />
         </Results>
       )}
     </CalculatorFrame>

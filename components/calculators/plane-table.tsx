@@ -71,7 +71,9 @@ export function PlaneTable({ result, lossDb, given }: Props) {
       <p className="mt-3 text-label text-ink-2">
         {lossDb === 0
           ? "Without loss both ends read the same."
-          : `The line loses ${inWords(decibels(totalLossDb))} of the net power: ${inWords(decibels(lossDb))} matched, ${inWords(decibels(extraLossDb, 3))} more for the standing wave.`}
+          : totalLossDb === Infinity
+            ? "The load takes nothing: all of the net power stays in the line."
+            : `The line loses ${inWords(decibels(totalLossDb))} of the net power: ${inWords(decibels(lossDb))} matched, ${inWords(decibels(extraLossDb, 3))} more for the standing wave.`}
       </p>
     </Section>
   );

@@ -6,7 +6,7 @@ import { Dimension } from "@/components/line/dimension";
 import { LoadSymbol, SourceSymbol } from "@/components/line/end-symbols";
 import { useMeasuredWidth } from "@/components/plot/measured-width";
 import type { CableLine } from "@/lib/cables/line";
-import { digits, metres, trimmed } from "@/lib/format/quantity";
+import { digits, metres, significantDigits, trimmed } from "@/lib/format/quantity";
 import { powerShare } from "@/lib/line/decibels";
 
 interface Props {
@@ -21,6 +21,12 @@ const areaTop = 96;
 const areaHeight = 76;
 const height = areaTop + areaHeight + 22;
 const mostMarks = 6;
+
+/** What arrives of a power, per cent, to three digits; next to nothing is said so. */
+export function percentOf(share: number): string {
+  const percent = share * 100;
+  return percent < 0.01 ? "under 0.01" : significantDigits(percent, 3);
+}
 
 /** Losses at which a mark stands: round ones, few enough to be read. */
 function marksOf(lossDb: number): number[] {
@@ -39,7 +45,7 @@ export function PowerAlong({ cable, lengthM, lossDb, name }: Props) {
   const mmToPx = Math.min(2.7, 40 / (drawn.outerDiameterMm ?? 5));
   const shareAt = (share: number) => powerShare(lossDb * share);
   const y = (share: number) => areaTop + areaHeight * (1 - shareAt(share));
-  const steps = Array.from({ length: 81 }, (_, k) => k / 80);
+  const steps = Array.from({ length: 241 }, (_, k) => k / 240);
   const edge = steps.map((share) => `${(fromX + span * share).toFixed(1)} ${y(share).toFixed(1)}`).join("L");
   const bottom = areaTop + areaHeight;
   const marks = marksOf(lossDb);
@@ -74,7 +80,7 @@ export function PowerAlong({ cable, lengthM, lossDb, name }: Props) {
           100 %
         </text>
         <text x={toX} y={Math.min(y(1) - 6, bottom - 6)} textAnchor="end" className="figures key">
-          {digits(shareAt(1) * 100, shareAt(1) < 0.1 ? 2 : 1)} %
+          {percentOf(shareAt(1))} %
         </text>
       </svg>
     </div>

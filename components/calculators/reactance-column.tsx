@@ -8,7 +8,7 @@ import { Section } from "@/components/ui/section";
 import { StateNote } from "@/components/ui/state-mark";
 import { Cell, HeadCell, RowHead, Table } from "@/components/ui/table";
 import type { CutStub, StubAndSection } from "@/lib/calculators/stub";
-import { cutLength, impedance, inWords, significantDigits } from "@/lib/format/quantity";
+import { cutLength, impedance, inWords, scaled, significantDigits } from "@/lib/format/quantity";
 import type { StubEnd } from "@/lib/line/stub";
 
 const endWords: Record<StubEnd, string> = { open: "Open", short: "Shorted" };
@@ -72,15 +72,21 @@ function Cuts({ cuts }: { cuts: readonly CutStub[] }) {
   );
 }
 
+const reactanceWords = (ohm: number) =>
+  `${ohm < 0 ? "\u2212" : "+"}j${inWords(scaled("resistance", Math.abs(ohm), 3))}`;
+
 /** What the cable's loss keeps out of reach. */
 function NotReached({ result: { cuts, reach, wantedOhm } }: { result: StubAndSection }) {
   const missing = (["short", "open"] as const).filter((end) => !cuts.some((cut) => cut.end === end));
   return missing.map((end) => {
-    const most = wantedOhm >= 0 ? reach[end].inductive : reach[end].capacitive;
+    const isInductive = wantedOhm >= 0;
+    const most = isInductive ? reach[end].inductive : reach[end].capacitive;
+    const kind = isInductive ? "inductive" : "capacitive";
     return (
       <StateNote key={end} state="warn" className="mt-2">
-        {endWords[end]}, this cable reaches at most {inWords(impedance({ re: 0, im: most }, 0))}: its loss keeps it from
-        more.
+        {most > 0 === isInductive && most !== 0
+          ? `${endWords[end]}, this cable reaches at most ${reactanceWords(most)}: its loss keeps it from more.`
+          : `${endWords[end]}, this cable is never ${kind} at this frequency: its loss is too great.`}
       </StateNote>
     );
   });

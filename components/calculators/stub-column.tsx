@@ -38,10 +38,16 @@ export function StubColumn({ calculator, result }: StubColumnProps) {
   );
 }
 
-/** The part it stands for; at resonance, where little reactance is left, it is a resistance. */
+/** The part it stands for; where little reactance is left, it is a resistance. */
 function partRow({ stub, spot }: StubAndSection): FigureRow[] {
   if (!stub.part || stub.q < 1)
-    return [{ label: "Stands for", figure: { digits: "resistance", unit: "", spoken: "" }, note: "it resonates here" }];
+    return [
+      {
+        label: "Stands for",
+        figure: { digits: "resistance", unit: "", spoken: "" },
+        note: "little reactance is left at this length",
+      },
+    ];
   const figure = "lH" in stub.part ? scaled("inductance", stub.part.lH, 3) : scaled("capacitance", stub.part.cF, 3);
   const kind = "lH" in stub.part ? "a coil" : "a capacitor";
   return [{ label: `Stands for ${kind}`, figure, note: `at ${inWords(scaled("frequency", spot.frequency))} only` }];

@@ -25,11 +25,8 @@ interface Props {
 
 /** A stub of a cable, the stub for a reactance, and a quarter-wave section. */
 export function StubCalculator({ opened, canStartRun }: Props) {
-  const calculator = useCalculator(path, stubInputs, opened);
-  const { texts, values } = calculator;
-  const outcome = stubAndSection(values, calculator.entries);
-  const result = outcome.ok ? outcome.result : null;
-  const faults = outcome.ok ? {} : outcome.faults;
+  const calculator = useCalculator({ path, inputs: stubInputs, compute: stubAndSection }, opened);
+  const { texts, values, result } = calculator;
   const start = newRunAddress(texts, {
     frequency: texts.frequency ?? "",
     source: texts.across ?? "",
@@ -54,7 +51,7 @@ export function StubCalculator({ opened, canStartRun }: Props) {
           <div className="flex flex-wrap items-start gap-3">
             <LineFields of={calculator} />
             <InputField of={calculator} name="frequency" />
-            <InputField of={calculator} name="temperature" fault={faults.temperature} />
+            <InputField of={calculator} name="temperature" />
           </div>
         </Leaf>
       </div>

@@ -40,8 +40,7 @@ export interface AttenuationResult {
   dropV: number | null;
   /** of copper at this temperature, metre */
   skinDepthM: number;
-  /** null where it would end before it begins */
-  curve: Curve | null;
+  curve: Curve;
 }
 
 /** Points of the curve; on a log axis they lie closer than a screen can show. */
@@ -54,6 +53,7 @@ export function attenuation(
   const line = chosenLine(values, entries);
   if (!line) return fault("cable", "This cable is on its way.");
   const { length, frequency, temperature, current, from, to } = values;
+  if (!(to > from)) return fault("to", "Above the frequency that the curve starts at.");
   const refusal = temperatureRefusal(line, temperature);
   if (refusal) return fault("temperature", refusal);
   const spot = spotFigures(line.model, frequency, temperature);
@@ -67,7 +67,7 @@ export function attenuation(
     share: powerShare(whole.lossDb),
     dropV: current === undefined ? null : current * whole.dcResistanceOhm,
     skinDepthM: skinDepth(frequency, COPPER_RESISTIVITY * resistivityRatio),
-    curve: to > from ? curveOf(line, length, temperature, from, to) : null,
+    curve: curveOf(line, length, temperature, from, to),
   });
 }
 

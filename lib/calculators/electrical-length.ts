@@ -51,10 +51,11 @@ export function readGivenLength(text: string): Read<GivenLength> {
   const inWaves = wavelengthsOf(typed);
   if (inWaves !== undefined) return angle(2 * Math.PI * inWaves);
   if (/^[\d.,\s]+$/.test(typed)) return { ok: false, message: `Degrees, wavelengths, time or metres? Try ${example}.` };
-  const time = readQuantity("time", typed);
-  if (time.ok) return positive(time.value, { kind: "delay", seconds: time.value }, time.understood);
+  // Length first: "18 m" is metres, though a bare m after a time is a millisecond.
   const length = readQuantity("length", typed);
   if (length.ok) return positive(length.value, { kind: "length", metres: length.value }, length.understood);
+  const time = readQuantity("time", typed);
+  if (time.ok) return positive(time.value, { kind: "delay", seconds: time.value }, time.understood);
   return { ok: false, message: `“${typed}” is not a length of line. Try ${example}.` };
 }
 

@@ -122,6 +122,15 @@ export function shownInputs<I extends Inputs>(inputs: I, texts: Texts): (keyof I
   return Object.keys(inputs).filter((name) => inputs[name]?.isShown?.(texts) ?? true);
 }
 
+/** The texts, each that cannot be read replaced by its last that could. */
+export function readableTexts(inputs: Inputs, texts: Texts, last: Texts): Texts {
+  const entries = Object.entries(inputs).map(([name, input]) => {
+    const text = texts[name] ?? input.usual;
+    return [name, readInput(input, text).ok ? text : (last[name] ?? input.usual)];
+  });
+  return Object.fromEntries(entries) as Texts;
+}
+
 /** The values of texts that can all be read; what is not asked for just now has its value all the same. */
 export function valuesOf<I extends Inputs>(inputs: I, texts: Texts): Values<I> {
   const entries = Object.entries(inputs).map(([name, input]) => {

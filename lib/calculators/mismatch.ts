@@ -48,7 +48,7 @@ export const mismatchInputs = {
   ]),
   vswr: typed("VSWR", "1.5", readVswr, { isShown: when("vswr") }),
   returnLoss: quantity("loss", "Return loss", "14", { isNotNegative: true, most: 300, isShown: when("returnLoss") }),
-  gamma: quantity("number", "Reflection coefficient", "0.2", { least: 0, most: 1, isShown: when("gamma") }),
+  gamma: quantity("number", "Reflection, |Γ|", "0.2", { least: 0, most: 1, isShown: when("gamma") }),
   load: typed("Load impedance", "75", readLoad, { unit: "Ω", width: "wide", isShown: when("load") }),
   reference: quantity("resistance", "Line impedance", "50", { isPositive: true, most: 1e6 }),
   loss: quantity("loss", "Matched loss", "0", { isNotNegative: true, most: 300 }),
@@ -90,7 +90,8 @@ export function mismatch(values: Values<typeof mismatchInputs>): Outcome<Mismatc
   const gamma = values.given === "load" ? reflection(values.load, complex(reference)) : null;
   const magnitude = Math.min(1, gamma ? abs(gamma) : magnitudeGiven(values));
   const powers = powersOnLine(magnitude, loss, { watts: power, kind: as });
-  const totalLossDb = mismatchedLineLossDb(magnitude, loss);
+  // A load that reflects everything takes nothing, however little the line loses.
+  const totalLossDb = magnitude === 1 ? Infinity : mismatchedLineLossDb(magnitude, loss);
   return found({
     gamma,
     magnitude,

@@ -19,6 +19,8 @@ export function readWantedReactance(text: string): Read<WantedReactance> {
     const size = withoutTrailingZeros(significantDigits(Math.abs(ohm), 4));
     return { ok: true, value: { kind: "ohm", ohm }, understood: `${ohm < 0 ? "\u2212" : "+"}j${size}\u00a0Ω` };
   }
+  if (!/[HhFfµμnpum]/.test(typed))
+    return { ok: false, message: `“${text.trim()}” is not a reactance. Try ${example}.` };
   const coil = readQuantity("inductance", typed);
   if (coil.ok && coil.value > 0)
     return { ok: true, value: { kind: "part", part: { lH: coil.value } }, understood: coil.understood };
