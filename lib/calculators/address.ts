@@ -28,7 +28,8 @@ export function readAddress(inputs: Inputs, parameters: Parameters): Opened {
     const read = readInput(input, texts[name]);
     if (read.ok) continue;
     texts[name] = isEmptied ? "" : input.usual;
-    const instead = texts[name] === "" ? "It is left empty." : `The usual ${texts[name]} stands here.`;
+    const usual = input.input === "typed" ? `The usual ${texts[name]} stands here.` : "The usual one stands here.";
+    const instead = texts[name] === "" ? "It is left empty." : usual;
     notes.push(`${input.label}: the address held “${shortened(text ?? "")}”. ${read.message} ${instead}`);
   }
   const strangers = given.filter((name) => !isOwn(name)).map((name) => `“${shortened(name)}”`);

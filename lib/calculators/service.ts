@@ -22,12 +22,14 @@ export function openCalculator(actor: Actor, inputs: Inputs, parameters: Paramet
   requirePermission(actor, "compute.use");
   const opened = readAddress(inputs, parameters);
   if (!("cable" in inputs)) return { ...opened, line: null };
-  const asked = parameters.cable === undefined ? undefined : opened.texts.cable;
+  const named = [parameters.cable].flat()[0];
+  // What readAddress could not take has been noted by it.
+  const asked = named === opened.texts.cable ? named : undefined;
   if (asked === typedCable) return { ...opened, line: null };
-  const named = asked === undefined ? null : readableLine(actor, asked);
-  const line = named ?? usualLine(actor);
+  const found = asked === undefined ? null : readableLine(actor, asked);
+  const line = found ?? usualLine(actor);
   const notes =
-    asked === undefined || named
+    asked === undefined || found
       ? opened.notes
       : [...opened.notes, `There is no cable “${asked}” for you. ${line?.designation ?? "A typed cable"} stands here.`];
   return { texts: { ...opened.texts, cable: line?.cableId ?? typedCable }, notes, line };
