@@ -67,7 +67,7 @@ export function CableRow({ item, index, href, canStartRun, isHeld, toggleHold, m
       aria-rowindex={index + 2}
       className={`relative h-13 phone:grid phone:h-21 phone:grid-cols-[76px_minmax(0,1fr)_auto] phone:content-center phone:gap-x-3 phone:border-b phone:px-4 phone:border-line [&>*]:align-middle [&>*]:phone:border-0 [&>*]:phone:p-0 ${isHeld ? "bg-copper-wash" : "hover:bg-copper-wash/50"}`}
     >
-      <Cell className="w-16 py-0 phone:row-span-2 phone:self-center">
+      <Cell className="w-16 p-0! phone:row-span-2 phone:self-center">
         <span className="flex items-center justify-center">
           <SectionView
             construction={item.construction}
@@ -78,7 +78,7 @@ export function CableRow({ item, index, href, canStartRun, isHeld, toggleHold, m
           />
         </span>
       </Cell>
-      <RowHead className="max-w-0 min-w-56 py-0 phone:row-span-2 phone:max-w-none phone:min-w-0 phone:self-center">
+      <RowHead className="max-w-0 min-w-56 phone:row-span-2 phone:max-w-none phone:min-w-0 phone:self-center">
         <Names item={item} href={href} />
         <PhoneFigures item={item} />
       </RowHead>
@@ -109,7 +109,7 @@ export function CableRow({ item, index, href, canStartRun, isHeld, toggleHold, m
       <Cell isRight className="py-0 folded:hidden">
         {figure(item.usedInRuns, 0)}
       </Cell>
-      <Cell className="max-w-34 py-0 pl-6 phone:hidden">
+      <Cell className="max-w-34 pl-6 phone:hidden">
         <StateMark state={mark}>{word}</StateMark>
         {item.condition && (
           <span className="block truncate text-note text-ink-3" title={item.condition}>
@@ -128,7 +128,7 @@ export function CableRow({ item, index, href, canStartRun, isHeld, toggleHold, m
           </Link>
         )}
       </Cell>
-      <Cell isRight className="w-12 py-0 phone:col-start-3 phone:row-start-2 phone:w-auto">
+      <Cell isRight className="w-12 phone:col-start-3 phone:row-start-2 phone:w-auto">
         <HoldButton designation={item.designation} isHeld={isHeld} toggle={toggleHold} />
       </Cell>
     </tr>

@@ -27,7 +27,7 @@ function Core({ x, y, shape, scale }: CoreProps) {
 }
 
 /** Where each pair lies and how it is turned: one in the middle, more on a circle. */
-function places(shape: PairShape, scale: number) {
+export function pairPlaces(shape: PairShape, scale: number) {
   const core = shape.coreMm * scale;
   if (shape.pairCount === 1) return [{ x: 0, y: 0, turn: shape.isTwisted ? -0.5 : 0 }];
   const ring = core / Math.sin(Math.PI / shape.pairCount);
@@ -55,7 +55,7 @@ export function PairSection({ shape, scale }: { shape: PairShape; scale: number 
         />
       )}
       <circle r={inside.toFixed(2)} fill="var(--filler)" />
-      {places(shape, scale).map(({ x, y, turn }) => {
+      {pairPlaces(shape, scale).map(({ x, y, turn }) => {
         const [dx, dy] = [half * Math.cos(turn), half * Math.sin(turn)];
         return (
           <g key={`${x} ${y}`}>

@@ -100,3 +100,14 @@ export function Limit({ limit, frame }: { limit: { x: number; label: string }; f
     </g>
   );
 }
+
+/** Words above the first curve at a place, to its left: a rising curve leaves room there. */
+export function Note({ note, xs, series, frame }: Curves & { note: { x: number; label: string }; frame: CurveFrame }) {
+  const value = series[0]?.values[nearestIndex(xs, note.x)];
+  if (!hasPlace(frame, value)) return null;
+  return (
+    <text x={frame.x(note.x) - 8} y={Math.max(frame.top + 12, frame.y(value) - 6)} textAnchor="end">
+      {note.label}
+    </text>
+  );
+}

@@ -2,7 +2,7 @@
 
 import { useId } from "react";
 import { AxisX, AxisY, axisScale, logTicks } from "@/components/plot/axes";
-import { Given, Labels, Limit, Mark, type CurveFrame, type GivenPoint } from "@/components/plot/curve-marks";
+import { Given, Labels, Limit, Mark, Note, type CurveFrame, type GivenPoint } from "@/components/plot/curve-marks";
 import { CurvePaths, type CurveSeries } from "@/components/plot/curve-paths";
 import { nearestIndex } from "@/components/plot/curve";
 import { useMeasuredWidth } from "@/components/plot/measured-width";
@@ -28,6 +28,8 @@ export interface CurvePlotProps {
   mark?: number;
   /** a place on the x-axis with words at its head */
   limit?: { x: number; label: string };
+  /** words beside the first curve at a place */
+  note?: { x: number; label: string };
   /** under the right end of the x-axis; without it the axis has no figures: a strip below has them */
   xUnit?: string;
   height?: number;
@@ -116,6 +118,7 @@ export function CurvePlot(props: CurvePlotProps) {
           <CurvePaths xs={xs} series={series} x={frame.x} y={frame.y} />
           <Given points={points} frame={frame} />
         </g>
+        {props.note && <Note note={props.note} xs={xs} series={series} frame={frame} />}
         {mark !== undefined && <Mark {...{ mark, xs, series, frame }} />}
         <Labels series={series} xs={xs} frame={frame} />
         {at >= 0 && <Readout x={frame.x(xs[at] ?? 0)} fromY={top} toY={bottom} limits={[left, right]} words={words} />}

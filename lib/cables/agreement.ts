@@ -22,6 +22,8 @@ export interface Check {
   verdict: Verdict;
   /** per cent; of the cut-off: by how much it lies above the highest rated frequency */
   percent: number;
+  /** of the cut-off: where it lies, hertz */
+  frequencyHz?: number;
 }
 
 export interface AgreementOfEntry {
@@ -121,8 +123,9 @@ function cutoffCheck({ construction, limits }: Pick<Cable, "construction" | "lim
   if (construction?.kind !== "coax" || limits.maxFrequencyHz === undefined) return [];
   const { innerMm, dielectricMm, relativePermittivity } = construction;
   if (!(dielectricMm > innerMm && relativePermittivity >= 1)) return [];
-  const above = coaxCutoff(innerMm / 1000, dielectricMm / 1000, relativePermittivity) / limits.maxFrequencyHz - 1;
-  return [{ check: "cutoff", verdict: above > 0 ? "fine" : "contradiction", percent: 100 * above }];
+  const frequencyHz = coaxCutoff(innerMm / 1000, dielectricMm / 1000, relativePermittivity);
+  const above = frequencyHz / limits.maxFrequencyHz - 1;
+  return [{ check: "cutoff", verdict: above > 0 ? "fine" : "contradiction", percent: 100 * above, frequencyHz }];
 }
 
 export function agreementOfEntry(
