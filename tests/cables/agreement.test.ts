@@ -12,7 +12,7 @@ type Entry = Pick<Cable, "model" | "figures" | "construction" | "limits">;
 const entries = catalogue.cables.map((cable): Entry & { id: string } => ({
   id: cable.id,
   model: modelOf(cable.figures as never),
-  figures: figuresOf(cable.figures as never, cable.family as never, cable.build.dielectric as never, cable.limits),
+  figures: figuresOf(cable.figures as never, cable.family as never, cable.build.dielectric as never),
   construction: cable.construction as never,
   limits: cable.limits,
 }));
