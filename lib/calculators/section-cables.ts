@@ -35,8 +35,10 @@ export interface SectionCandidate {
 }
 
 const most = 5;
+/** Beyond this return loss, dB, sections are as good as one another: no cable keeps its impedance more closely. */
+const alikeDb = 40;
 
-/** The candidates from best to worst, each cable once in each number. */
+/** The candidates from best to worst, each cable once in each number; of those alike, one cable before two. */
 export function rankedSections(
   found: readonly { count: 1 | 2; items: readonly CableItem[] }[],
   sourceOhm: number,
@@ -49,5 +51,10 @@ export function rankedSections(
       const reflection = sectionReflection(sectionOhm, sourceOhm, loadOhm);
       byKey.set(`${item.id} ${count}`, { item, count, sectionOhm, returnLossDb: returnLossDb(reflection) });
     }
-  return [...byKey.values()].sort((a, b) => b.returnLossDb - a.returnLossDb || a.count - b.count).slice(0, most);
+  return [...byKey.values()].sort(compareSections).slice(0, most);
+}
+
+function compareSections(a: SectionCandidate, b: SectionCandidate): number {
+  const better = Math.min(b.returnLossDb, alikeDb) - Math.min(a.returnLossDb, alikeDb);
+  return better || a.count - b.count || b.returnLossDb - a.returnLossDb;
 }

@@ -5,7 +5,7 @@ import { readAddress, type Opened, type Parameters } from "@/lib/calculators/add
 import type { Inputs } from "@/lib/calculators/input";
 import { lineOf, type CableLine } from "@/lib/cables/line";
 import { getCable, listCables } from "@/lib/cables/service";
-import { typedCable } from "@/lib/cables/typed-line";
+import { typedCable } from "@/lib/cables/line";
 import { AppError } from "@/lib/http/errors";
 
 export interface OpenedCalculator extends Opened {

@@ -1,7 +1,7 @@
 /** Addresses that carry what stands in a calculator into a new run or another calculator. Pure. */
 import type { lineInputs } from "@/lib/calculators/line-inputs";
 import type { Texts } from "@/lib/calculators/input";
-import { typedCable } from "@/lib/cables/typed-line";
+import { typedCable } from "@/lib/cables/line";
 
 /** A lossless line of an impedance and a velocity, as a typed cable. */
 export function typedLineAddress({ z0, velocityFactor }: { z0: number; velocityFactor: number }): string {

@@ -32,6 +32,14 @@ test("candidates come best first, an exact one with no reflection at all, each o
   expect(ranked[3]!.returnLossDb).toBeCloseTo(13.98, 2);
 });
 
+test("of sections that no cable could tell apart, one cable comes before two", () => {
+  const found = [
+    { count: 1 as const, items: [item("a", 61.1)] },
+    { count: 2 as const, items: [item("b", 122.474487139)] },
+  ];
+  expect(rankedSections(found, 50, 75).map(({ item: { id } }) => id)).toEqual(["a", "b"]);
+});
+
 test("an empty catalogue gives no candidates", () => {
   expect(rankedSections([], 50, 75)).toEqual([]);
 });
