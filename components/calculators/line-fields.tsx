@@ -5,7 +5,7 @@ import { InputField } from "@/components/calculators/input-field";
 import type { Calculator } from "@/components/calculators/use-calculator";
 import type { Inputs } from "@/lib/calculators/input";
 import type { lineInputs } from "@/lib/calculators/line-inputs";
-import { typedCable } from "@/lib/cables/typed-line";
+import { typedCable } from "@/lib/cables/line";
 
 /** The cable: from the catalogue, or its five figures typed. */
 export function LineFields<I extends Inputs & typeof lineInputs>({ of }: { of: Calculator<I> }) {

@@ -4,18 +4,18 @@ import { zodResolver } from "@hookform/resolvers/zod";
 import type { Route } from "next";
 import Link from "next/link";
 import { useRouter } from "next/navigation";
-import { useForm, useWatch } from "react-hook-form";
+import { useEffect, useState } from "react";
+import { useForm, useWatch, type Resolver } from "react-hook-form";
 import { Button } from "@/components/ui/button";
 import { Checkbox } from "@/components/ui/checkbox";
 import { Field } from "@/components/ui/field";
 import { Select } from "@/components/ui/select";
 import { StateNote } from "@/components/ui/state-mark";
-import { typedCable } from "@/lib/cables/typed-line";
+import { typedCable } from "@/lib/cables/line";
 import { cutLength, decibels, inWords } from "@/lib/format/quantity";
-import { readImpedance, readQuantity } from "@/lib/format/read-quantity";
 import { call, ProblemError } from "@/lib/http/call";
 import type { Run } from "@/lib/runs/schema";
-import { runFormSchema, startedRun, type RunFormRead, type RunFormTexts, type RunStart } from "@/lib/runs/start";
+import type { RunFormRead, RunFormTexts, RunStart } from "@/lib/runs/start";
 
 interface Props {
   cables: { id: string; designation: string; name: string; condition: string | null }[];
@@ -23,17 +23,17 @@ interface Props {
   start: RunStart;
 }
 
-const quantities = { length: "length", frequency: "frequency", power: "power", temperature: "temperature" } as const;
+// Reading what people type needs mathjs: it is fetched when the page has woken up, not with the page.
+const reader = () => import("@/lib/runs/start");
 
-/** What a text was understood as, where that says more than the text. */
-function understood(name: keyof RunFormTexts, text: string): string | undefined {
-  if (name === "source" || name === "load") {
-    const read = readImpedance(text);
-    return read.ok ? `= ${read.understood}` : undefined;
-  }
-  if (!(name in quantities) || !/[a-z'"°]/i.test(text)) return undefined;
-  const read = readQuantity(quantities[name as keyof typeof quantities], text);
-  return read.ok ? `= ${read.understood}` : undefined;
+const resolver: Resolver<RunFormTexts, unknown, RunFormRead> = async (values, context, options) =>
+  zodResolver((await reader()).runFormSchema)(values, context, options);
+
+/** The reader's own account of a text, once it is there. */
+function useUnderstood(): (name: keyof RunFormTexts, text: string) => string | undefined {
+  const [read, setRead] = useState<Awaited<ReturnType<typeof reader>> | null>(null);
+  useEffect(() => void reader().then(setRead), []);
+  return (name, text) => read?.understood(name, text);
 }
 
 /** What goes along with the first cable, in words. */
@@ -49,7 +49,7 @@ export function NewRunForm({ cables, start }: Props) {
   const { texts: brought, line, piece } = start;
   const isTyped = start.cableId === typedCable;
   const { register, handleSubmit, control, setError, formState } = useForm<RunFormTexts, unknown, RunFormRead>({
-    resolver: zodResolver(runFormSchema),
+    resolver,
     defaultValues: {
       name: "",
       site: "",
@@ -65,12 +65,13 @@ export function NewRunForm({ cables, start }: Props) {
     mode: "onTouched",
   });
   const texts = useWatch({ control });
+  const understood = useUnderstood();
   const { errors, isSubmitting } = formState;
   const condition = cables.find((cable) => cable.id === texts.cableId)?.condition;
 
   const send = handleSubmit(async (read) => {
     try {
-      const run = await call<Run>("/runs", { method: "POST", body: startedRun(read, start) });
+      const run = await call<Run>("/runs", { method: "POST", body: (await reader()).startedRun(read, start) });
       router.push(`/runs/${run.id}` as Route);
     } catch (error) {
       const detail =

@@ -17,6 +17,9 @@ export interface CableLine {
   limits: Limits;
 }
 
+/** Stands for the cable's id where a cable is typed. */
+export const typedCable = "typed";
+
 /** Sheath diameter as stated in the construction, mm. */
 export function outerDiameterMm(construction: Construction | null): number | null {
   return construction?.outerDiameterMm ?? null;

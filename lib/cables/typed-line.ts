@@ -4,9 +4,6 @@ import { readVelocityFactor } from "@/lib/format/read-velocity-factor";
 import { modelFromNominal } from "@/lib/line/cable";
 import type { LineModel } from "@/lib/line/element";
 
-/** Stands for the cable's id where a cable is typed. */
-export const typedCable = "typed";
-
 export interface TypedLine {
   /** ohm */
   z0: number;

@@ -3,9 +3,10 @@
  * typed; whoever sends someone here (a calculator, the catalogue) only has to know the names. Pure.
  */
 import { z } from "zod";
-import { readTypedLine, typedCable, type TypedLineTexts } from "@/lib/cables/typed-line";
+import { typedCable } from "@/lib/cables/line";
+import { readTypedLine, type TypedLineTexts } from "@/lib/cables/typed-line";
 import { impedanceText, optionalQuantityText, quantityText } from "@/lib/format/quantity-schema";
-import { readQuantity } from "@/lib/format/read-quantity";
+import { readImpedance, readQuantity } from "@/lib/format/read-quantity";
 import type { LineModel } from "@/lib/line/element";
 import type { Element, LineRef } from "@/lib/runs/circuit-schema";
 import type { NewRun } from "@/lib/runs/schema";
@@ -69,6 +70,19 @@ export const runFormSchema = z.object({
 });
 export type RunFormTexts = z.input<typeof runFormSchema>;
 export type RunFormRead = z.output<typeof runFormSchema>;
+
+const quantities = { length: "length", frequency: "frequency", power: "power", temperature: "temperature" } as const;
+
+/** What a text of the form was understood as, where that says more than the text. */
+export function understood(name: keyof RunFormTexts, text: string): string | undefined {
+  if (name === "source" || name === "load") {
+    const read = readImpedance(text);
+    return read.ok ? `= ${read.understood}` : undefined;
+  }
+  if (!(name in quantities) || !/[a-z'"°]/i.test(text)) return undefined;
+  const read = readQuantity(quantities[name as keyof typeof quantities], text);
+  return read.ok ? `= ${read.understood}` : undefined;
+}
 
 /** The run that the filled form means. */
 export function startedRun(read: RunFormRead, start: Pick<RunStart, "line" | "piece">): Partial<NewRun> {
