@@ -65,7 +65,7 @@ export function CableRow({ item, index, href, canStartRun, isHeld, toggleHold, m
       data-cable={item.id}
       data-index={index}
       aria-rowindex={index + 2}
-      className={`relative h-13 phone:grid phone:h-21 phone:grid-cols-[76px_minmax(0,1fr)_auto] phone:content-center phone:gap-x-3 phone:border-b phone:px-4 phone:border-line [&>*]:align-middle [&>*]:phone:border-0 [&>*]:phone:p-0 ${isHeld ? "bg-copper-wash" : "hover:bg-copper-wash/50"}`}
+      className={`relative h-13 phone:grid phone:h-21 phone:grid-cols-[76px_minmax(0,1fr)_auto] phone:grid-rows-[42px_41px] phone:gap-x-3 phone:border-b phone:px-4 phone:border-line [&>*]:align-middle [&>*]:phone:border-0 [&>*]:phone:p-0 ${isHeld ? "bg-copper-wash" : "hover:bg-copper-wash/50"}`}
     >
       <Cell className="w-16 p-0! phone:row-span-2 phone:self-center">
         <span className="flex items-center justify-center">
@@ -88,7 +88,7 @@ export function CableRow({ item, index, href, canStartRun, isHeld, toggleHold, m
       <Cell isRight className="py-0 phone:hidden">
         {figure(item.velocityFactor, 3)}
       </Cell>
-      <Cell isRight className="py-0 phone:col-start-3 phone:row-start-1 phone:text-figure">
+      <Cell isRight className="py-0 phone:col-start-3 phone:row-start-1 phone:self-end phone:text-figure">
         <b className="figures">{digits(item.lossDbPer100m, 2)}</b>
       </Cell>
       <Cell className="py-0 pl-5 folded:hidden">
@@ -128,7 +128,7 @@ export function CableRow({ item, index, href, canStartRun, isHeld, toggleHold, m
           </Link>
         )}
       </Cell>
-      <Cell isRight className="w-12 phone:col-start-3 phone:row-start-2 phone:w-auto">
+      <Cell isRight className="w-12 phone:col-start-3 phone:row-start-2 phone:w-auto phone:self-start">
         <HoldButton designation={item.designation} isHeld={isHeld} toggle={toggleHold} />
       </Cell>
     </tr>

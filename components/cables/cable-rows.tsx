@@ -38,7 +38,7 @@ function Head({ lossAtHz, mmToPx }: { lossAtHz: number; mmToPx: number }) {
   return (
     <thead className="sticky top-0 z-2 bg-paper phone:hidden">
       <tr aria-rowindex={1} className="[&>th]:border-ink [&>th]:align-top">
-        <HeadCell className="w-16 text-center">
+        <HeadCell className="w-16 min-w-16 text-center">
           <span className="block font-normal">10 mm</span>
           <Scale mmToPx={mmToPx} />
         </HeadCell>

@@ -32,7 +32,7 @@ interface Props {
 function ColumnHead({ cable, place, mmToPx, ...props }: ColumnProps) {
   const { word, mark } = stateWords[cable.state];
   return (
-    <HeadCell className="min-w-40 pl-4 align-bottom whitespace-normal">
+    <HeadCell className="min-w-40 pl-4 align-bottom phone:min-w-28 phone:pl-2 whitespace-normal">
       <span className="flex h-24 items-end pb-2">
         <SectionView
           construction={cable.construction}
@@ -64,12 +64,12 @@ function Figures({ cables, lossAtHz }: { cables: readonly Cable[]; lossAtHz: num
   const figures = cables.map((cable) => compareFigures(cable, lossAtHz));
   return toldRows(comparisonRows(lossAtHz), figures).map(({ name, quantity, figure, isBare }) => (
     <tr key={quantity}>
-      <RowHead className="whitespace-nowrap text-ink-2">{name}</RowHead>
+      <RowHead className="whitespace-nowrap text-ink-2 phone:whitespace-normal">{name}</RowHead>
       {figures.map((each, i) => (
-        <Cell key={i} className="pl-4 whitespace-nowrap">
+        <Cell key={i} className="pl-4 whitespace-nowrap phone:pl-2">
           <Figure {...figure(each[quantity])} className="text-control" />
           {i > 0 && !isBare && (
-            <span className="figures ml-2 text-note text-ink-2">
+            <span className="figures ml-2 text-note text-ink-2 phone:ml-0 phone:block">
               {percentWords(differencePercent(each[quantity], figures[0]?.[quantity] ?? null))}
             </span>
           )}
@@ -86,14 +86,14 @@ function Ways({ cables, canStartRun, putBack }: { cables: readonly Cable[] } & P
         <span className="sr-only">What to do</span>
       </RowHead>
       {cables.map(({ id, designation, state }) => (
-        <Cell key={id} className="border-0 pt-3 pl-4">
+        <Cell key={id} className="border-0 pt-3 pl-4 phone:pl-2">
           <span className="flex flex-col items-start gap-2">
             {canStartRun && isUsable(state) && (
               <Link
                 href={`/runs/new?cable=${encodeURIComponent(id)}` as Route}
                 className={buttonClass("plain", "small")}
               >
-                Use {designation} in a run
+                Use in a run<span className="sr-only">: {designation}</span>
               </Link>
             )}
             <button type="button" className="link min-h-6 text-label phone:min-h-11" onClick={() => putBack(id)}>

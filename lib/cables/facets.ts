@@ -4,7 +4,7 @@ import type { Facets } from "@/lib/cables/query";
 
 const mostBins = 14;
 /** Narrowest span a histogram resolves, as a share of the values. */
-const finestShare = 0.01;
+const finestShare = 0.1;
 
 /** The smallest of 1, 2 and 5 times a power of ten that covers a span in at most `mostBins` steps. */
 function binWidth(span: number): number {
