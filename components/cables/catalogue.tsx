@@ -14,6 +14,7 @@ import { useHeld } from "@/components/cables/use-held";
 import { Button } from "@/components/ui/button";
 import { useKeys } from "@/components/ui/keys";
 import { StateNote } from "@/components/ui/state-mark";
+import { useMedia } from "@/components/ui/use-media";
 import { Working } from "@/components/ui/working";
 import { cableRequest } from "@/lib/cables/request";
 import type { CablePage } from "@/lib/cables/query";
@@ -64,6 +65,7 @@ export function Catalogue({ first, canStartRun }: Props) {
   const [asked, change] = useCatalogueAddress();
   const pages = useCablePages(cableRequest(asked), first);
   const { held, waiting, toggle, putBack, exchange } = useHeld(asked.held, change);
+  const [isFolded, isPhone] = [useMedia("folded"), useMedia("phone")];
   const page = pages.data?.pages[0];
   const items = pages.data?.pages.flatMap((each) => each.items) ?? [];
   useHoldKey(items, toggle);
@@ -77,7 +79,7 @@ export function Catalogue({ first, canStartRun }: Props) {
         className={`sticky top-0 -mx-2 self-start overflow-x-hidden overflow-y-auto px-2 pt-0.5 pb-2 folded:hidden ${asked.held.length > 0 ? "max-h-[calc(100dvh-148px)]" : "max-h-dvh"}`}
       >
         <h1>Catalogue</h1>
-        <CatalogueFacets {...facets} />
+        {!isFolded && <CatalogueFacets {...facets} />}
       </div>
       <div className="min-w-0">
         <h1 className="sr-only hidden folded:block">Catalogue</h1>
@@ -87,13 +89,15 @@ export function Catalogue({ first, canStartRun }: Props) {
           <ListOrder asked={asked} change={change} />
         </div>
         <ReadAs asked={asked} change={change} page={page} />
-        <details className="mt-2 hidden folded:block phone:hidden">
-          <summary className="link text-label">Impedance, velocity, loss, diameter, construction, state</summary>
-          <div className="max-w-90">
-            <CatalogueFacets {...facets} />
-          </div>
-        </details>
-        <FacetCards {...facets} />
+        {isFolded && !isPhone && (
+          <details className="mt-2">
+            <summary className="link text-label">Impedance, velocity, loss, diameter, construction, state</summary>
+            <div className="max-w-90">
+              <CatalogueFacets {...facets} />
+            </div>
+          </details>
+        )}
+        {isPhone && <FacetCards {...facets} />}
         {pages.isPending && <Working label="Looking through the catalogue" />}
         {page && page.total === 0 && <NothingFound asked={asked} change={change} page={page} />}
         {items.length > 0 && (

@@ -75,7 +75,7 @@ export function FacetCards(props: FacetsProps) {
   ];
   const opened = measures.find(({ facet }) => facet.measure === open)?.facet;
   return (
-    <div className="mt-2 hidden phone:block">
+    <div className="mt-2">
       <ul className="-mx-4 flex gap-2 overflow-x-auto px-4 pb-1">
         {measures.map(({ facet, title }) => {
           const { measure } = facet;

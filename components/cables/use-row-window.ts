@@ -1,25 +1,14 @@
 "use client";
 
-import { useCallback, useEffect, useRef, useState, useSyncExternalStore } from "react";
+import { useCallback, useEffect, useRef, useState } from "react";
 import { rowsInSight, type InSight } from "@/components/cables/row-window";
+import { useMedia } from "@/components/ui/use-media";
 
-const phone = "(width <= 700px)";
 const rowPx = { desk: 52, phone: 84 };
-
-function subscribe(listener: () => void): () => void {
-  const query = window.matchMedia(phone);
-  query.addEventListener("change", listener);
-  return () => query.removeEventListener("change", listener);
-}
 
 /** Height of a row of the catalogue, px: the same for all, whatever stands in it. */
 export function useRowHeight(): number {
-  const isPhone = useSyncExternalStore(
-    subscribe,
-    () => window.matchMedia(phone).matches,
-    () => false,
-  );
-  return isPhone ? rowPx.phone : rowPx.desk;
+  return useMedia("phone") ? rowPx.phone : rowPx.desk;
 }
 
 /** How many rows before the last one the next page is asked for. */
