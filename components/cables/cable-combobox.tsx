@@ -61,7 +61,7 @@ export function CableCombobox({ label, chosen, cableId, choose, isDisabled, besi
         aria-describedby={`${id}-value`}
         aria-expanded={isOpen}
         disabled={isDisabled}
-        onClick={() => setOpen(!isOpen)}
+        onClick={() => (setTrouble(null), setOpen(!isOpen))}
         className={`${fieldEdge} ${fieldColours(false)} h-7.25 justify-between px-2 text-body phone:h-11 phone:text-section`}
       >
         <span id={`${id}-value`} className="truncate">

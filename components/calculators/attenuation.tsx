@@ -94,7 +94,7 @@ export function AttenuationCalculator({ opened, canStartRun }: Props) {
 function Head({ result }: { result: AttenuationResult | null }) {
   const { whole, share } = result ?? {};
   return (
-    <Readings className="min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
+    <Readings className="min-w-0 flex-1 folded:w-full phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
       <Reading label="Attenuation" {...decibels(whole?.lossDb)} target="between matched ends" />
       <Reading label="Power that arrives" digits={share === undefined ? "–" : percentOf(share)} unit="%" />
       <Reading label="Delay" {...scaled("time", whole?.phaseDelayS)} />

@@ -109,7 +109,7 @@ function spoken({ cutM, whole, line }: LengthResult): string {
 function Head({ result }: { result: LengthResult | null }) {
   const { whole, cutM } = result ?? {};
   return (
-    <Readings className="min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
+    <Readings className="min-w-0 flex-1 folded:w-full phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
       <Reading label="To cut" {...cutLength(cutM)} />
       <Reading label="Phase" digits={short(whole && degreesOf(whole.phaseRad), 6)} unit="°" spoken="degrees" />
       <Reading label="Wavelengths" digits={short(whole?.wavelengths, 5)} unit="λ" spoken="wavelengths" />

@@ -81,7 +81,7 @@ const returnLoss = (value: number): Figure => decibels(Number.isFinite(value) ? 
 function Head({ result: { load, near, magnitude, mismatchLossDb } }: { result: MismatchResult }) {
   const isHidden = near.magnitude < magnitude;
   return (
-    <Readings className="min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
+    <Readings className="min-w-0 flex-1 folded:w-full phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
       <Reading
         label="VSWR at the load"
         {...ratio(load.vswr)}

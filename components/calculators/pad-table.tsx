@@ -22,7 +22,7 @@ export function PadTable({ shape: { topology, exact, standard } }: { shape: PadS
     <Table>
       <thead>
         <tr>
-          <HeadCell>From the source</HeadCell>
+          <HeadCell className="phone:whitespace-normal">From the source</HeadCell>
           <HeadCell isRight>exact</HeadCell>
           <HeadCell isRight className="phone:hidden">
             takes

@@ -95,7 +95,7 @@ function Head({ result, leastDb }: { result: PadResult | null; leastDb: number }
   const share = result && result.shapes[0].exact;
   const most = result ? Math.max(...result.shapes.flatMap(({ standard }) => standard.powersW)) : null;
   return (
-    <Readings className="min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
+    <Readings className="min-w-0 flex-1 folded:w-full phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
       <Reading label="Least loss possible" {...decibels(leastDb)} target={result?.isLeast ? "this is it" : undefined} />
       <Reading label="Power in the load" {...scaled("power", share?.loadW, 3)} />
       <Reading label="Hottest resistor" {...scaled("power", most, 3)} target="of the E24 values" />

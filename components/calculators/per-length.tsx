@@ -77,7 +77,7 @@ function Head({ figures }: { figures: NominalFigures | null }) {
   const say = (value: number | undefined) => significantDigits(value, 4);
   const scaled = (value: number | undefined, scale: number) => say(value === undefined ? undefined : value * scale);
   return (
-    <Readings className="min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
+    <Readings className="min-w-0 flex-1 folded:w-full phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
       <Reading label="Impedance" digits={say(figures?.z0)} unit="Ω" spoken="ohms" />
       <Reading label="Velocity factor" digits={say(figures?.velocityFactor)} />
       <Reading label="Delay" digits={scaled(figures?.delay, 1e9)} unit="ns/m" spoken="nanoseconds per metre" />

@@ -50,7 +50,7 @@ export function PlaneTable({ result, lossDb, given }: Props) {
       <Table className="mt-1">
         <thead>
           <tr>
-            <HeadCell>Within half a wavelength of</HeadCell>
+            <HeadCell className="phone:whitespace-normal">Within half a wavelength of</HeadCell>
             <HeadCell isRight>the near end</HeadCell>
             <HeadCell isRight>the load</HeadCell>
           </tr>

@@ -57,7 +57,7 @@ export function StubCalculator({ opened, canStartRun }: Props) {
       </div>
       {result && (
         <Results calculator={calculator}>
-          <div className="grid grid-cols-3 gap-x-8 gap-y-8 folded:grid-cols-1">
+          <div className="grid grid-cols-3 gap-x-8 gap-y-8 folded:grid-cols-2 phone:grid-cols-1">
             <StubColumn calculator={calculator} result={result} />
             <ReactanceColumn calculator={calculator} result={result} />
             <SectionColumn calculator={calculator} result={result} />
@@ -85,7 +85,7 @@ function spoken({ line, spot }: StubAndSection): string {
 function Head({ result }: { result: StubAndSection | null }) {
   const { stub, section } = result ?? {};
   return (
-    <Readings className="min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
+    <Readings className="min-w-0 flex-1 folded:w-full phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3">
       <Reading label="Stub" {...cutLength(stub?.lengthM)} />
       <Reading label="Its impedance" {...impedance(stub?.impedance, 2)} />
       <Reading label="Takes from the line" {...decibels(stub?.acrossDb)} target="between matched ends" />

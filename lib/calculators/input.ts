@@ -2,7 +2,7 @@
  * What a calculator asks for: how each thing is labelled, the text it starts with, and how a typed text is read. A
  * calculator is a record of these and one function of their values; screens and addresses know nothing more of it. Pure.
  */
-import { quantityText, type QuantityBounds } from "@/lib/format/quantity-schema";
+import { brokenBound, type QuantityBounds } from "@/lib/format/bounds";
 import { readQuantity, type Read } from "@/lib/format/read-quantity";
 import type { QuantityKind } from "@/lib/format/unit-spelling";
 
@@ -78,11 +78,10 @@ export function quantity(
   usual: string,
   options: QuantityOptions = {},
 ): TypedInput<number> {
-  const schema = quantityText(kind, options);
   const read = (text: string): Read<number> => {
-    const parsed = schema.safeParse(text);
-    if (!parsed.success) return { ok: false, message: parsed.error.issues[0]?.message ?? "This cannot be read." };
-    return readQuantity(kind, text);
+    const quantity = readQuantity(kind, text);
+    const message = quantity.ok ? brokenBound(quantity.value, options) : null;
+    return message === null ? quantity : { ok: false, message };
   };
   return typed(label, usual, read, { unit: units[kind], ...options });
 }

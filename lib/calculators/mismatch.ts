@@ -1,6 +1,5 @@
 /** One mismatch in all its figures, what it does to power, voltage and current, and how a line hides it. Pure. */
 import { chosen, found, quantity, typed, type Outcome, type Texts, type Values } from "@/lib/calculators/input";
-import { impedanceText } from "@/lib/format/quantity-schema";
 import { readImpedance, readQuantity, type Read } from "@/lib/format/read-quantity";
 import { abs, complex, type Complex } from "@/lib/line/complex";
 import {
@@ -31,10 +30,8 @@ function readVswr(text: string): Read<number> {
 }
 
 function readLoad(text: string): Read<Complex> {
-  const parsed = impedanceText.safeParse(text);
-  if (!parsed.success) return { ok: false, message: parsed.error.issues[0]?.message ?? "This cannot be read." };
   const read = readImpedance(text);
-  return read;
+  return read.ok && read.value.re < 0 ? { ok: false, message: "The resistance cannot be negative." } : read;
 }
 
 const when = (given: string) => (texts: Texts) => texts.given === given;

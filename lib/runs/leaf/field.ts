@@ -3,7 +3,8 @@
  * being edited. A leaf is a list of these; the screen draws them, and knows nothing of elements.
  */
 import type { z } from "zod";
-import { impedanceText, optionalQuantityText, quantityText, type QuantityBounds } from "@/lib/format/quantity-schema";
+import type { QuantityBounds } from "@/lib/format/bounds";
+import { impedanceText, optionalQuantityText, quantityText } from "@/lib/format/quantity-schema";
 import { asTyped, impedanceAsTyped } from "@/lib/format/read-quantity";
 import type { QuantityKind } from "@/lib/format/unit-spelling";
 
