@@ -44,13 +44,13 @@ export function CandidateColumn({ candidate, place, others, limits, candidates, 
       aria-label={`${letter}: ${candidate.title}`}
       className={`flex min-w-0 flex-col border-t-[1.5px] pt-1.75 ${isKept ? "border-copper border-t-[3px] pt-1.25" : "border-ink"}`}
     >
-      <div className="flex min-h-12 items-baseline gap-2.5">
+      <div className="flex items-baseline gap-2.5">
         <SeriesSwatch look={lookOf(place)} />
         <h2>
           {letter}&ensp;{kind}
         </h2>
       </div>
-      <p className="min-h-9 text-label text-ink-2">{detail}</p>
+      <p className="min-h-10 pt-1 text-label text-ink-2">{detail}</p>
       <CutDrawing
         elements={candidate.elements}
         load={stripEnds(draft).load.kind}
