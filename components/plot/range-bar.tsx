@@ -1,5 +1,3 @@
-import { scaleLog } from "d3-scale";
-
 interface RangeBarProps {
   /** ends of the bar, above 0 */
   range: readonly [number, number];
@@ -16,9 +14,10 @@ interface RangeBarProps {
 const usualDomain = [0.3, 100] as const;
 const ticks = [1, 10, 100];
 
-function placeOn(domain: readonly [number, number], width: number) {
-  const scale = scaleLog([...domain], [0, width]).clamp(true);
-  return (value: number) => Math.round(scale(value) * 10) / 10;
+/** Places on the log axis, px; what lies beyond it is put on its ends. Its own two lines: the list is light without a library of scales. */
+function placeOn([low, high]: readonly [number, number], width: number) {
+  const place = (value: number) => (width * Math.log(value / low)) / Math.log(high / low);
+  return (value: number) => Math.round(10 * Math.max(0, Math.min(width, place(value)))) / 10;
 }
 
 /** One bar on a log axis with a dot at the chosen place: how far a quantity reaches, and where it is now. */
