@@ -30,7 +30,7 @@ const path = "/calculate/attenuation";
 const metresPerFoot = 0.3048;
 
 interface Props {
-  opened: OpenedCalculator;
+  opened: OpenedCalculator<typeof attenuationInputs>;
   canStartRun: boolean;
 }
 

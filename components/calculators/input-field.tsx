@@ -4,7 +4,7 @@ import type { KeyboardEvent } from "react";
 import type { Calculator } from "@/components/calculators/use-calculator";
 import { Field } from "@/components/ui/field";
 import { Select } from "@/components/ui/select";
-import type { Inputs, TypedInput } from "@/lib/calculators/input";
+import type { Inputs, Reader, TypedInput } from "@/lib/calculators/input";
 import { nudge } from "@/lib/format/nudge";
 
 interface Props<I extends Inputs> {
@@ -20,7 +20,15 @@ export function InputField<I extends Inputs>({ of, name }: Props<I>) {
   if (!input || !of.shown.includes(name)) return null;
   const text = of.texts[name] ?? "";
   if (input.input === "typed")
-    return <TypedField input={input} text={text} error={of.problems[name]} set={(next) => of.set(name, next)} />;
+    return (
+      <TypedField
+        input={input}
+        reader={of.reader}
+        text={text}
+        error={of.problems[name]}
+        set={(next) => of.set(name, next)}
+      />
+    );
   if (input.input === "cable") return null;
   return (
     <Select
@@ -41,24 +49,25 @@ export function InputField<I extends Inputs>({ of, name }: Props<I>) {
 
 interface TypedProps {
   input: TypedInput<unknown>;
+  reader: Reader | null;
   text: string;
   error?: string;
   set: (text: string) => void;
 }
 
 /** What a text was understood as, where that says more than the text itself. */
-function understood(input: TypedInput<unknown>, text: string): string | undefined {
+function understood(input: TypedInput<unknown>, text: string, reader: Reader): string | undefined {
   if (/^[\d.\s]*$/.test(text)) {
-    const read = input.read(text);
+    const read = input.read(text, reader);
     return read.ok && read.understood.includes("read as") ? `= ${read.understood}` : undefined;
   }
-  const read = input.read(text);
+  const read = input.read(text, reader);
   const bare = (words: string) => words.replace(/[\s\u00a0\u202f]/g, "").toLowerCase();
   if (!read.ok || !read.understood || read.value === 0) return undefined;
   return bare(read.understood) === bare(text) ? undefined : `= ${read.understood}`;
 }
 
-function TypedField({ input, text, error, set }: TypedProps) {
+function TypedField({ input, reader, text, error, set }: TypedProps) {
   function step(event: KeyboardEvent<HTMLInputElement>) {
     const direction = { ArrowUp: 1, ArrowDown: -1 }[event.key];
     if (!direction) return;
@@ -76,7 +85,7 @@ function TypedField({ input, text, error, set }: TypedProps) {
       spellCheck={false}
       className={widths[input.width]}
       error={error}
-      hint={understood(input, text)}
+      hint={reader ? understood(input, text, reader) : undefined}
       onKeyDown={step}
       onChange={(event) => set(event.target.value)}
     />

@@ -31,7 +31,7 @@ const path = "/calculate/length";
 const metresPerInch = 0.0254;
 
 interface Props {
-  opened: OpenedCalculator;
+  opened: OpenedCalculator<typeof lengthInputs>;
   canStartRun: boolean;
 }
 

@@ -19,7 +19,7 @@ import { arg } from "@/lib/line/complex";
 const path = "/calculate/mismatch";
 
 interface Props {
-  opened: OpenedCalculator;
+  opened: OpenedCalculator<typeof mismatchInputs>;
   canStartRun: boolean;
 }
 

@@ -15,23 +15,24 @@ import { useMeasuredWidth } from "@/components/plot/measured-width";
 import { Button } from "@/components/ui/button";
 import { Reading, Readings } from "@/components/ui/reading";
 import type { Caution } from "@/lib/calculators/cautions";
-import { leastLossDb, pad, padInputs, type PadResult } from "@/lib/calculators/pad";
+import { pad, padInputs, type PadResult } from "@/lib/calculators/pad";
 import { newRunAddress } from "@/lib/calculators/start";
 import { decibels, digits, inWords, scaled, trimmed, withoutTrailingZeros } from "@/lib/format/quantity";
+import { minimumPadLossDb } from "@/lib/line/pad";
 
 const path = "/calculate/pad";
 
 interface Props {
-  opened: OpenedCalculator;
+  opened: OpenedCalculator<typeof padInputs>;
   canStartRun: boolean;
 }
 
 /** A resistive pad between two resistances. */
 export function PadCalculator({ opened, canStartRun }: Props) {
   const calculator = useCalculator({ path, inputs: padInputs, compute: pad }, opened);
-  const { values, texts, result } = calculator;
+  const { values, attempted, texts, result } = calculator;
   // Of the resistances as typed: the result may still be that of others.
-  const leastDb = leastLossDb(texts) ?? result?.leastDb ?? 0;
+  const leastDb = minimumPadLossDb(attempted.source, attempted.load);
   const lossDb = result?.isLeast ? result.leastDb : values.loss;
   const start = newRunAddress(
     {},

@@ -22,7 +22,7 @@ const names = ["z0", "vf", "delay", "c", "l"] as const;
 const metresPerFoot = 0.3048;
 
 interface Props {
-  opened: OpenedCalculator;
+  opened: OpenedCalculator<typeof perLengthInputs>;
   canStartRun: boolean;
 }
 

@@ -19,7 +19,7 @@ import { cutLength, decibels, frequency, impedance, inWords, scaled } from "@/li
 const path = "/calculate/stub";
 
 interface Props {
-  opened: OpenedCalculator;
+  opened: OpenedCalculator<typeof stubInputs>;
   canStartRun: boolean;
 }
 

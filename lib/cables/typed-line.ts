@@ -1,34 +1,8 @@
-/** A cable that is typed rather than chosen: five figures as people write them -> the engine's model. Pure. */
+/** The five figures of a typed cable as people write them -> the engine's model. Loads mathjs; the model alone is in `typed-model.ts`. */
 import { readQuantity, type Read } from "@/lib/format/read-quantity";
+import { typedLineModel } from "@/lib/cables/typed-model";
 import { readVelocityFactor } from "@/lib/format/read-velocity-factor";
-import { modelFromNominal } from "@/lib/line/cable";
 import type { LineModel } from "@/lib/line/element";
-
-export interface TypedLine {
-  /** ohm */
-  z0: number;
-  velocityFactor: number;
-  /** dc resistance out and back, ohm per metre */
-  loopResistance: number;
-  /** hertz; without one the resistance stays at its dc value */
-  skinCorner: number | undefined;
-  lossTangent: number;
-}
-
-/** One lumped conductor term: all that is known of a typed cable is its resistance and where the skin effect begins. */
-export function typedLineModel({ z0, velocityFactor, loopResistance, skinCorner, lossTangent }: TypedLine): LineModel {
-  const hasSkin = skinCorner !== undefined && loopResistance > 0;
-  return modelFromNominal({
-    z0,
-    velocityFactor,
-    lossTangent,
-    conductors: [
-      hasSkin
-        ? { form: "sqrt", r0OhmPerM: loopResistance, skinCornerRadPerS: 2 * Math.PI * skinCorner }
-        : { form: "constant", r0OhmPerM: loopResistance },
-    ],
-  });
-}
 
 /** The names under which the five figures stand in an address. */
 export type TypedLineTexts = { z0: string; vf: string; r0: string; corner: string; tan: string };

@@ -1,5 +1,5 @@
 /** The address of a calculator <-> what stands in its fields, texts as they were typed, so that any state can be sent. Pure. */
-import { readInput, shownInputs, type Inputs, type Texts } from "@/lib/calculators/input";
+import { readInput, shownInputs, type Inputs, type Reader, type Texts } from "@/lib/calculators/input";
 
 export type Parameters = Record<string, string | string[] | undefined>;
 
@@ -15,7 +15,7 @@ const most = 3;
  * What a calculator opens with. Without any of its own names in the address everything is usual; with some, what may be
  * empty is empty unless named. What cannot be read, or means nothing, is said.
  */
-export function readAddress(inputs: Inputs, parameters: Parameters): Opened {
+export function readAddress(inputs: Inputs, parameters: Parameters, reader: Reader): Opened {
   const given = Object.keys(parameters).filter((name) => parameters[name] !== undefined);
   const isOwn = (name: string) => Object.hasOwn(inputs, name);
   const hasOwn = given.some(isOwn);
@@ -25,7 +25,7 @@ export function readAddress(inputs: Inputs, parameters: Parameters): Opened {
     const text = [parameters[name]].flat()[0];
     const isEmptied = hasOwn && input.input === "typed" && input.isOptional;
     texts[name] = text ?? (isEmptied ? "" : input.usual);
-    const read = readInput(input, texts[name]);
+    const read = readInput(input, texts[name], reader);
     if (read.ok) continue;
     texts[name] = isEmptied ? "" : input.usual;
     const usual = input.input === "typed" ? `The usual ${texts[name]} stands here.` : "The usual one stands here.";

@@ -1,6 +1,7 @@
 /** A length as people give it for a line: degrees, wavelengths, time, or metres of cable. Pure. */
 import { significantDigits, withoutTrailingZeros } from "@/lib/format/quantity";
-import { readQuantity, type Read } from "@/lib/format/read-quantity";
+import type { Reader } from "@/lib/calculators/input";
+import type { Read } from "@/lib/format/read-quantity";
 
 /** An angle is in radians; a delay in seconds; a length, of cable, in metres. */
 export type GivenLength =
@@ -41,7 +42,7 @@ function shortened(value: number): string {
 }
 
 /** Reads a length of line; a bare figure is refused, since degrees and metres are both usual. */
-export function readGivenLength(text: string): Read<GivenLength> {
+export function readGivenLength(text: string, { readQuantity }: Reader): Read<GivenLength> {
   const typed = text.trim();
   if (typed === "") return { ok: false, message: `Type a length, for example ${example}.` };
   const inDegrees = degrees.exec(typed);

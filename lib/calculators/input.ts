@@ -3,8 +3,17 @@
  * calculator is a record of these and one function of their values; screens and addresses know nothing more of it. Pure.
  */
 import { brokenBound, type QuantityBounds } from "@/lib/format/bounds";
-import { readQuantity, type Read } from "@/lib/format/read-quantity";
+import type { Read, readImpedance, readQuantity } from "@/lib/format/read-quantity";
 import type { QuantityKind } from "@/lib/format/unit-spelling";
+
+/**
+ * What reads numbers with units. It carries mathjs, so it is handed in: the server has it at once, a page fetches it
+ * when it has woken up.
+ */
+export interface Reader {
+  readQuantity: typeof readQuantity;
+  readImpedance: typeof readImpedance;
+}
 
 interface Common {
   label: string;
@@ -16,7 +25,7 @@ interface Common {
 
 export interface TypedInput<V> extends Common {
   input: "typed";
-  read: (text: string) => Read<V>;
+  read: (text: string, reader: Reader) => Read<V>;
   /** shown in the field while the text has no unit of its own */
   unit: string;
   width: "narrow" | "normal" | "wide";
@@ -49,7 +58,7 @@ type Options = Partial<Pick<TypedInput<unknown>, "unit" | "width" | "isShown">>;
 export function typed<V>(
   label: string,
   usual: string,
-  read: (text: string) => Read<V>,
+  read: (text: string, reader: Reader) => Read<V>,
   { unit = "", width = "normal", isShown }: Options = {},
 ): TypedInput<V> {
   return { input: "typed", label, usual, read, unit, width, isShown, isOptional: false };
@@ -78,8 +87,8 @@ export function quantity(
   usual: string,
   options: QuantityOptions = {},
 ): TypedInput<number> {
-  const read = (text: string): Read<number> => {
-    const quantity = readQuantity(kind, text);
+  const read = (text: string, reader: Reader): Read<number> => {
+    const quantity = reader.readQuantity(kind, text);
     const message = quantity.ok ? brokenBound(quantity.value, options) : null;
     return message === null ? quantity : { ok: false, message };
   };
@@ -88,8 +97,8 @@ export function quantity(
 
 /** What reads only texts that are there, made to take an empty one too. */
 export function optional<V>(input: TypedInput<V>): TypedInput<V | undefined> {
-  const read = (text: string): Read<V | undefined> =>
-    text.trim() === "" ? { ok: true, value: undefined, understood: "" } : input.read(text);
+  const read = (text: string, reader: Reader): Read<V | undefined> =>
+    text.trim() === "" ? { ok: true, value: undefined, understood: "" } : input.read(text, reader);
   return { ...input, read, isOptional: true };
 }
 
@@ -105,9 +114,9 @@ export function chosen<const V extends string>(
 const longest = 80;
 
 /** Reads the text of any input; a choice and a cable are read as they stand. */
-export function readInput(input: Input, text: string): Read<unknown> {
+export function readInput(input: Input, text: string, reader: Reader): Read<unknown> {
   if (text.length > longest) return { ok: false, message: `At most ${longest} characters.` };
-  if (input.input === "typed") return input.read(text);
+  if (input.input === "typed") return input.read(text, reader);
   if (input.input === "cable")
     return text ? { ok: true, value: text, understood: "" } : { ok: false, message: "Choose a cable." };
   const isKnown = input.options.some(({ value }) => value === text);
@@ -122,18 +131,18 @@ export function shownInputs<I extends Inputs>(inputs: I, texts: Texts): (keyof I
 }
 
 /** The texts, each that cannot be read replaced by its last that could. */
-export function readableTexts(inputs: Inputs, texts: Texts, last: Texts): Texts {
+export function readableTexts(inputs: Inputs, texts: Texts, last: Texts, reader: Reader): Texts {
   const entries = Object.entries(inputs).map(([name, input]) => {
     const text = texts[name] ?? input.usual;
-    return [name, readInput(input, text).ok ? text : (last[name] ?? input.usual)];
+    return [name, readInput(input, text, reader).ok ? text : (last[name] ?? input.usual)];
   });
   return Object.fromEntries(entries) as Texts;
 }
 
 /** The values of texts that can all be read; what is not asked for just now has its value all the same. */
-export function valuesOf<I extends Inputs>(inputs: I, texts: Texts): Values<I> {
+export function valuesOf<I extends Inputs>(inputs: I, texts: Texts, reader: Reader): Values<I> {
   const entries = Object.entries(inputs).map(([name, input]) => {
-    const read = readInput(input, texts[name] ?? input.usual);
+    const read = readInput(input, texts[name] ?? input.usual, reader);
     if (!read.ok) throw new Error(`valuesOf: ${name} cannot be read: ${texts[name]}`);
     return [name, read.value];
   });

@@ -1,7 +1,7 @@
 /** The cable of a calculator: chosen from the catalogue or typed. Pure. */
 import type { CableLine } from "@/lib/cables/line";
 import { typedCable } from "@/lib/cables/line";
-import { typedLineModel } from "@/lib/cables/typed-line";
+import { typedLineModel } from "@/lib/cables/typed-model";
 import { optional, quantity, typed, type Texts, type Values } from "@/lib/calculators/input";
 import { readVelocityFactor } from "@/lib/format/read-velocity-factor";
 import type { LineModel } from "@/lib/line/element";

@@ -1,6 +1,15 @@
 /** One mismatch in all its figures, what it does to power, voltage and current, and how a line hides it. Pure. */
-import { chosen, found, quantity, typed, type Outcome, type Texts, type Values } from "@/lib/calculators/input";
-import { readImpedance, readQuantity, type Read } from "@/lib/format/read-quantity";
+import {
+  chosen,
+  found,
+  quantity,
+  typed,
+  type Outcome,
+  type Reader,
+  type Texts,
+  type Values,
+} from "@/lib/calculators/input";
+import type { Read } from "@/lib/format/read-quantity";
 import { abs, complex, type Complex } from "@/lib/line/complex";
 import {
   powersOnLine,
@@ -23,13 +32,13 @@ import {
 } from "@/lib/line/reflection";
 
 /** "1.5", "1.5:1", "1.5 to 1". */
-function readVswr(text: string): Read<number> {
+function readVswr(text: string, { readQuantity }: Reader): Read<number> {
   const read = readQuantity("number", text.replace(/\s*(?::|to)\s*1\s*$/i, ""));
   if (!read.ok) return { ok: false, message: `“${text.trim()}” is not a VSWR. Try 1.5 or 1.5:1.` };
   return read.value >= 1 ? read : { ok: false, message: "At least 1." };
 }
 
-function readLoad(text: string): Read<Complex> {
+function readLoad(text: string, { readImpedance }: Reader): Read<Complex> {
   const read = readImpedance(text);
   return read.ok && read.value.re < 0 ? { ok: false, message: "The resistance cannot be negative." } : read;
 }

@@ -1,5 +1,5 @@
 /** Resistive pads between two resistances, T and pi: exact, in the next E24 values, and where the power goes. Pure. */
-import { fault, found, quantity, type Outcome, type Texts, type Values } from "@/lib/calculators/input";
+import { fault, found, quantity, type Outcome, type Values } from "@/lib/calculators/input";
 import { inWords, decibels } from "@/lib/format/quantity";
 import type { PadElement } from "@/lib/line/element";
 import { minimumPadLossDb, padResistors, type PadResistors } from "@/lib/line/pad";
@@ -13,13 +13,6 @@ export const padInputs = {
   load: quantity("resistance", "Load side", "50", resistance),
   power: quantity("power", "Power into the pad", "1 W", { isNotNegative: true, most: 1e9 }),
 };
-
-/** The least loss between two resistances as they are typed; null while one of them cannot be read. */
-export function leastLossDb(texts: Texts): number | null {
-  const source = padInputs.source.read(texts.source ?? "");
-  const load = padInputs.load.read(texts.load ?? "");
-  return source.ok && load.ok ? minimumPadLossDb(source.value, load.value) : null;
-}
 
 /** One way of building the pad. A resistor of Infinity is left out, one of 0 is a wire. */
 export interface PadBuild {

@@ -1,6 +1,7 @@
 /** A wanted reactance as people give it: ohms, or the part that would have it. Pure. */
 import { significantDigits, withoutTrailingZeros } from "@/lib/format/quantity";
-import { readQuantity, type Read } from "@/lib/format/read-quantity";
+import type { Reader } from "@/lib/calculators/input";
+import type { Read } from "@/lib/format/read-quantity";
 import { reactanceOfPart, type ReactivePart } from "@/lib/line/reactance";
 
 /** Ohm, inductive above 0; or a coil or capacitor, whose reactance depends on the frequency. */
@@ -9,7 +10,7 @@ export type WantedReactance = { kind: "ohm"; ohm: number } | { kind: "part"; par
 const example = "j50, -j35, 350 nH or 132 pF";
 const ohms = /^([+-])?\s*(j|i)?\s*(\d+(?:[.,]\d*)?|[.,]\d+)\s*(j|i)?\s*(?:Ω|\u2126|ohms?)?$/i;
 
-export function readWantedReactance(text: string): Read<WantedReactance> {
+export function readWantedReactance(text: string, { readQuantity }: Reader): Read<WantedReactance> {
   const typed = text.trim().replace(/[\u2212\u2013]/g, "-");
   if (typed === "") return { ok: false, message: `Type a reactance, for example ${example}.` };
   const found = ohms.exec(typed);

@@ -2,13 +2,16 @@
 import type { Actor } from "@/lib/auth/actor";
 import { requirePermission } from "@/lib/auth/permission";
 import { readAddress, type Opened, type Parameters } from "@/lib/calculators/address";
-import type { Inputs } from "@/lib/calculators/input";
+import { valuesOf, type Inputs, type Values } from "@/lib/calculators/input";
 import { lineOf, type CableLine } from "@/lib/cables/line";
 import { getCable, listCables } from "@/lib/cables/service";
 import { typedCable } from "@/lib/cables/line";
+import * as reader from "@/lib/format/read-quantity";
 import { AppError } from "@/lib/http/errors";
 
-export interface OpenedCalculator extends Opened {
+export interface OpenedCalculator<I extends Inputs> extends Opened {
+  /** of the texts, read already */
+  values: Values<I>;
   /** the cable of the address, or the usual one */
   line: CableLine | null;
 }
@@ -18,10 +21,20 @@ export interface OpenedCalculator extends Opened {
  * replaced by the usual one: a preferred cable, else the first, else one that is typed.
  * @throws AppError `forbidden` where the actor may not compute
  */
-export function openCalculator(actor: Actor, inputs: Inputs, parameters: Parameters): OpenedCalculator {
+export function openCalculator<I extends Inputs>(actor: Actor, inputs: I, parameters: Parameters): OpenedCalculator<I> {
   requirePermission(actor, "compute.use");
-  const opened = readAddress(inputs, parameters);
-  if (!("cable" in inputs)) return { ...opened, line: null };
+  const opened = "cable" in inputs ? openLine(actor, inputs, parameters) : withoutLine(inputs, parameters);
+  return { ...opened, values: valuesOf(inputs, opened.texts, reader) };
+}
+
+type OpenedLine = Opened & { line: CableLine | null };
+
+function withoutLine(inputs: Inputs, parameters: Parameters): OpenedLine {
+  return { ...readAddress(inputs, parameters, reader), line: null };
+}
+
+function openLine(actor: Actor, inputs: Inputs, parameters: Parameters): OpenedLine {
+  const opened = readAddress(inputs, parameters, reader);
   const named = [parameters.cable].flat()[0];
   // What readAddress could not take has been noted by it.
   const asked = named === opened.texts.cable ? named : undefined;

@@ -1,5 +1,6 @@
 import { expect, test } from "vitest";
-import { readTypedLine, typedLineModel } from "@/lib/cables/typed-line";
+import { readTypedLine } from "@/lib/cables/typed-line";
+import { typedLineModel } from "@/lib/cables/typed-model";
 import { lineModelSchema } from "@/lib/cables/schema";
 import { nominalFigures } from "@/lib/line/cable";
 

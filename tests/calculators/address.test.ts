@@ -8,6 +8,7 @@ import { mismatchInputs } from "@/lib/calculators/mismatch";
 import { padInputs } from "@/lib/calculators/pad";
 import { perLengthInputs } from "@/lib/calculators/per-length";
 import { stubInputs } from "@/lib/calculators/stub";
+import * as reader from "@/lib/format/read-quantity";
 
 const calculators: [string, Inputs][] = [
   ["/calculate/per-length", perLengthInputs],
@@ -42,10 +43,10 @@ test.each(calculators)("%s: every state that can be typed comes back from its ow
       const texts = Object.fromEntries(
         Object.entries(inputs).map(([name, input]) => {
           const text = typed[name] ?? "";
-          return [name, readInput(input, text).ok ? text : input.usual];
+          return [name, readInput(input, text, reader).ok ? text : input.usual];
         }),
       );
-      const opened = readAddress(inputs, parametersOf(calculatorAddress(path, inputs, texts)));
+      const opened = readAddress(inputs, parametersOf(calculatorAddress(path, inputs, texts)), reader);
       expect(opened.notes).toEqual([]);
       for (const name of shownInputs(inputs, texts)) expect(opened.texts[name]).toBe(texts[name]);
       expect(calculatorAddress(path, inputs, opened.texts)).toBe(calculatorAddress(path, inputs, texts));
@@ -62,21 +63,25 @@ test.each(calculators)("%s: an address mangled in any way opens, with texts that
   const known = Object.fromEntries(Object.keys(inputs).map((name) => [name, value]));
   fc.assert(
     fc.property(fc.record(known, { requiredKeys: [] }), fc.dictionary(fc.string(), value), (own, stray) => {
-      const { texts, notes } = readAddress(inputs, { ...stray, ...own });
-      expect(() => valuesOf(inputs, texts)).not.toThrow();
+      const { texts, notes } = readAddress(inputs, { ...stray, ...own }, reader);
+      expect(() => valuesOf(inputs, texts, reader)).not.toThrow();
       for (const note of notes) expect(note).toMatch(/\.$/);
     }),
   );
 });
 
 test.each(calculators)("%s: without anything in the address everything is usual and nothing is noted", (_p, inputs) => {
-  const { texts, notes } = readAddress(inputs, {});
+  const { texts, notes } = readAddress(inputs, {}, reader);
   expect(notes).toEqual([]);
   for (const [name, input] of Object.entries(inputs)) expect(texts[name]).toBe(input.usual);
 });
 
 test("what cannot be read says what it was, why not, and what stands in its place", () => {
-  const { texts, notes } = readAddress(lengthInputs, { frequency: "27.2 parsnips", ends: "10 mm", lenght: "3" });
+  const { texts, notes } = readAddress(
+    lengthInputs,
+    { frequency: "27.2 parsnips", ends: "10 mm", lenght: "3" },
+    reader,
+  );
   expect(texts).toMatchObject({ frequency: "100 MHz", ends: "10 mm" });
   expect(notes).toEqual([
     "Frequency: the address held “27.2 parsnips”. “parsnips” is not a unit of frequency. Try 27.2 MHz. The usual 100 MHz stands here.",
@@ -85,7 +90,7 @@ test("what cannot be read says what it was, why not, and what stands in its plac
 });
 
 test("with some figures in the address, those that may be left out are left out", () => {
-  expect(readAddress(perLengthInputs, { z0: "75", c: "67 pF/m" }).texts).toEqual({
+  expect(readAddress(perLengthInputs, { z0: "75", c: "67 pF/m" }, reader).texts).toEqual({
     z0: "75",
     vf: "",
     delay: "",
@@ -95,12 +100,12 @@ test("with some figures in the address, those that may be left out are left out"
 });
 
 test("names that every object has mean nothing in an address", () => {
-  const { notes } = readAddress(padInputs, { constructor: "x", __proto__: "y", toString: "z" } as never);
+  const { notes } = readAddress(padInputs, { constructor: "x", __proto__: "y", toString: "z" } as never, reader);
   expect(notes.join(" ")).toContain("“constructor”");
 });
 
 test("the address of a typed cable carries its figures, that of a chosen one only its name", () => {
-  const texts = readAddress(attenuationInputs, {}).texts;
+  const texts = readAddress(attenuationInputs, {}, reader).texts;
   expect(calculatorAddress("/x", attenuationInputs, { ...texts, cable: "c50-f10" })).not.toContain("z0=");
   expect(calculatorAddress("/x", attenuationInputs, { ...texts, cable: "typed", z0: "75" })).toContain("z0=75&vf=");
 });

@@ -2,7 +2,7 @@ import { expect, test } from "vitest";
 import { entryCautions, modelCautions, voltageCautions } from "@/lib/calculators/cautions";
 import type { ChosenLine } from "@/lib/calculators/line-inputs";
 import type { CableLine } from "@/lib/cables/line";
-import { typedLineModel } from "@/lib/cables/typed-line";
+import { typedLineModel } from "@/lib/cables/typed-model";
 import { spotFigures } from "@/lib/line/spot-figures";
 
 const model = typedLineModel({

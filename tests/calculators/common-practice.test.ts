@@ -15,6 +15,7 @@ import type { Construction } from "@/lib/cables/schema";
 import { coaxCutoff } from "@/lib/line/coax-cutoff";
 import data from "@/seeds/data/cables.json";
 import { seededModel } from "@/tests/support/seeded-cables";
+import * as reader from "@/lib/format/read-quantity";
 
 function entry(id: string): CableLine {
   const cable = data.cables.find((each) => each.id === id)!;
@@ -30,7 +31,7 @@ const entries = new Map(data.cables.map(({ id }) => [id, entry(id)]));
 /** The result of a calculator whose usual texts are changed as told. */
 function ask<I extends Inputs, R>(inputs: I, compute: (values: Values<I>) => Outcome<R>, typed: Texts): R {
   const usual = Object.fromEntries(Object.entries(inputs).map(([name, input]) => [name, input.usual]));
-  const outcome = compute(valuesOf(inputs, { ...usual, ...typed }));
+  const outcome = compute(valuesOf(inputs, { ...usual, ...typed }, reader));
   if (!outcome.ok) throw new Error(JSON.stringify(outcome.faults));
   return outcome.result;
 }

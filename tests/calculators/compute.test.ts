@@ -7,6 +7,7 @@ import { mismatch, mismatchInputs } from "@/lib/calculators/mismatch";
 import { pad, padInputs } from "@/lib/calculators/pad";
 import { perLength, perLengthInputs } from "@/lib/calculators/per-length";
 import { stubAndSection, stubInputs } from "@/lib/calculators/stub";
+import * as reader from "@/lib/format/read-quantity";
 
 const none = new Map<string, never>();
 const calculators: [string, Inputs, (values: never) => Outcome<unknown>][] = [
@@ -31,7 +32,7 @@ const anyText = fc.oneof(
 function textsFrom(inputs: Inputs, typed: Texts): Texts {
   const entries = Object.entries(inputs).map(([name, input]) => {
     const text = typed[name] ?? input.usual;
-    return [name, readInput(input, text).ok ? text : input.usual];
+    return [name, readInput(input, text, reader).ok ? text : input.usual];
   });
   return { ...(Object.fromEntries(entries) as Texts), ...(inputs.cable ? { cable: "typed" } : {}) };
 }
@@ -55,7 +56,7 @@ test.each(calculators)(
     const anyTexts = fc.record(Object.fromEntries(Object.keys(inputs).map((name) => [name, anyText])));
     fc.assert(
       fc.property(anyTexts, (typed) => {
-        const outcome = of(valuesOf(inputs, textsFrom(inputs, typed as Texts)) as never);
+        const outcome = of(valuesOf(inputs, textsFrom(inputs, typed as Texts), reader) as never);
         if (outcome.ok) {
           const undefinedOnes = numbersIn(outcome.result)
             .filter(([place, value]) => Number.isNaN(value) && !mayBeUndefined.some((allowed) => allowed.test(place)))
@@ -76,5 +77,5 @@ test.each(calculators)(
 
 test.each(calculators)("%s: what is usual gives a result", (_name, inputs, of) => {
   const usual = Object.fromEntries(Object.entries(inputs).map(([name, { usual: text }]) => [name, text]));
-  expect(of(valuesOf(inputs, usual) as never).ok).toBe(true);
+  expect(of(valuesOf(inputs, usual, reader) as never).ok).toBe(true);
 });

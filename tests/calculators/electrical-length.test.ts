@@ -1,6 +1,7 @@
 import { expect, test } from "vitest";
 import { readGivenLength } from "@/lib/calculators/electrical-length";
 import { readWantedReactance, wantedOhm } from "@/lib/calculators/reactance-wanted";
+import * as reader from "@/lib/format/read-quantity";
 
 test.each([
   ["90°", Math.PI / 2, "90° or 0.25 λ"],
@@ -16,7 +17,7 @@ test.each([
   ["2 wavelengths", 4 * Math.PI, "720° or 2 λ"],
   ["1.5 rad", 1.5, "85.944° or 0.23873 λ"],
 ])("readGivenLength(%j) is an angle", (text, radians, understood) => {
-  const read = readGivenLength(text);
+  const read = readGivenLength(text, reader);
   expect(read).toMatchObject({ ok: true, understood, value: { kind: "angle" } });
   if (read.ok && read.value.kind === "angle") expect(read.value.radians).toBeCloseTo(radians, 12);
 });
@@ -28,7 +29,7 @@ test.each([
   ["610 mm", { kind: "length", metres: 0.61 }],
   ["2 ft", { kind: "length", metres: 0.6096 }],
 ])("readGivenLength(%j) tells metres from time", (text, value) => {
-  const read = readGivenLength(text);
+  const read = readGivenLength(text, reader);
   expect(read.ok && read.value).toEqual(value);
 });
 
@@ -41,7 +42,7 @@ test.each([
   ["λ/0", /More than 0/],
   ["90 parsnips", /not a length of line/],
 ])("readGivenLength(%j) is refused with a sentence", (text, message) => {
-  expect(readGivenLength(text)).toEqual({ ok: false, message: expect.stringMatching(message) });
+  expect(readGivenLength(text, reader)).toEqual({ ok: false, message: expect.stringMatching(message) });
 });
 
 test.each([
@@ -55,7 +56,7 @@ test.each([
   ["350 nH", 2 * Math.PI * 27.2e6 * 350e-9, "350\u00a0nH"],
   ["132 pF", -1 / (2 * Math.PI * 27.2e6 * 132e-12), "132\u00a0pF"],
 ])("readWantedReactance(%j) is that reactance at 27.2 MHz", (text, ohm, understood) => {
-  const read = readWantedReactance(text);
+  const read = readWantedReactance(text, reader);
   expect(read).toMatchObject({ ok: true, understood });
   if (read.ok) expect(wantedOhm(read.value, 27.2e6)).toBeCloseTo(ohm, 9);
 });
@@ -63,6 +64,6 @@ test.each([
 test.each(["", "j", "jj50", "j50j", "50-35j", "350 nH m", "much", "1e12"])(
   "readWantedReactance(%j) is refused with a sentence",
   (text) => {
-    expect(readWantedReactance(text)).toEqual({ ok: false, message: expect.stringMatching(/reactance|GΩ/) });
+    expect(readWantedReactance(text, reader)).toEqual({ ok: false, message: expect.stringMatching(/reactance|GΩ/) });
   },
 );

@@ -1,14 +1,16 @@
 import { expect, test } from "vitest";
 import { valuesOf, type Texts } from "@/lib/calculators/input";
-import { leastLossDb, pad, padInputs, type PadResult, type PadShape } from "@/lib/calculators/pad";
+import { pad, padInputs, type PadResult, type PadShape } from "@/lib/calculators/pad";
+import { minimumPadLossDb } from "@/lib/line/pad";
 import { checks } from "@/tests/support/line-checks";
 import { agrees, number, published, type PublishedCheck } from "@/tests/support/published";
 import { closeTo } from "@/tests/support/tolerance";
+import * as reader from "@/lib/format/read-quantity";
 
 const usual = { loss: "10", source: "50", load: "50", power: "1 W" };
 
 function asked(typed: Texts): PadResult {
-  const outcome = pad(valuesOf(padInputs, { ...usual, ...typed }));
+  const outcome = pad(valuesOf(padInputs, { ...usual, ...typed }, reader));
   if (!outcome.ok) throw new Error(JSON.stringify(outcome.faults));
   return outcome.result;
 }
@@ -21,7 +23,7 @@ const named = (topic: string) =>
 
 test.each(named("minimum-loss pad"))("the least-loss pad agrees with print, typed to two decimals: %s", (_n, check) => {
   const [source, load] = [number(check.inputs, "R_high_ohm"), number(check.inputs, "R_low_ohm")];
-  const leastDb = leastLossDb({ source: `${source}`, load: `${load} Ω` })!;
+  const leastDb = minimumPadLossDb(source, load);
   const result = asked({ loss: leastDb.toFixed(2), source: `${source}`, load: `${load}` });
   expect(result.isLeast).toBe(true);
   const [series, shunt, gone] = shape(result, "T").exact.resistors;
@@ -61,7 +63,7 @@ test("a loss below the least is refused at the loss, with the least, whichever s
     ["75", "50"],
     ["50", "75"],
   ])
-    expect(pad(valuesOf(padInputs, { ...usual, loss: "4", source: source!, load: load! }))).toEqual({
+    expect(pad(valuesOf(padInputs, { ...usual, loss: "4", source: source!, load: load! }, reader))).toEqual({
       ok: false,
       faults: { loss: "At least 5.72\u00a0dB between these two resistances." },
     });

@@ -3,9 +3,10 @@ import { valuesOf, type Texts } from "@/lib/calculators/input";
 import { perLength, perLengthInputs } from "@/lib/calculators/per-length";
 import { insulationsOf } from "@/lib/calculators/dielectrics";
 import { published, number, type PublishedCheck } from "@/tests/support/published";
+import * as reader from "@/lib/format/read-quantity";
 
 const empty = { z0: "", vf: "", delay: "", c: "", l: "" };
-const of = (typed: Texts) => perLength(valuesOf(perLengthInputs, { ...empty, ...typed }));
+const of = (typed: Texts) => perLength(valuesOf(perLengthInputs, { ...empty, ...typed }, reader));
 
 function result(typed: Texts) {
   const outcome = of(typed);

@@ -41,6 +41,7 @@ test("a typed cable is left as typed, and a calculator without a cable asks for 
   expect(open({ cable: "typed", z0: "93" })).toMatchObject({ texts: { cable: "typed", z0: "93" }, line: null });
   expect(openCalculator(actor("auditor"), padInputs, { loss: "6" })).toEqual({
     texts: { loss: "6", source: "50", load: "50", power: "1 W" },
+    values: { loss: 6, source: 50, load: 50, power: 1 },
     notes: [],
     line: null,
   });
