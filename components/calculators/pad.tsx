@@ -31,6 +31,7 @@ interface Props {
 export function PadCalculator({ opened, canStartRun }: Props) {
   const calculator = useCalculator({ path, inputs: padInputs, compute: pad }, opened);
   const { values, attempted, texts, result } = calculator;
+  const { ref, width } = useMeasuredWidth(1384);
   // Of the resistances as typed: the result may still be that of others.
   const leastDb = minimumPadLossDb(attempted.source, attempted.load);
   const lossDb = result?.isLeast ? result.leastDb : values.loss;
@@ -50,11 +51,11 @@ export function PadCalculator({ opened, canStartRun }: Props) {
       head={<Head result={result} leastDb={leastDb} />}
       start={canStartRun && result ? start : null}
     >
-      <div className="mt-4">
-        <PadOnLine sourceOhm={values.source} loadOhm={values.load} lossDb={lossDb} />
+      <div ref={ref} className="mt-4">
+        <PadOnLine width={width} sourceOhm={values.source} loadOhm={values.load} lossDb={lossDb} />
       </div>
       <div className="mt-3">
-        <Leaf name="The pad" notchX={300}>
+        <Leaf name="The pad" notchX={padPlace(width).middle}>
           <div className="flex flex-wrap items-start gap-3">
             <InputField of={calculator} name="loss" />
             <InputField of={calculator} name="source" />
@@ -104,31 +105,40 @@ function Head({ result, leastDb }: { result: PadResult | null; leastDb: number }
   );
 }
 
-/** The pad where it stands: between two lines of the two resistances. */
-function PadOnLine({ sourceOhm, loadOhm, lossDb }: { sourceOhm: number; loadOhm: number; lossDb: number }) {
-  const { ref, width } = useMeasuredWidth(1384);
+/** Where the line with the pad begins and ends, and the pad's middle, px. */
+function padPlace(width: number) {
   const [fromX, toX] = [58, Math.min(width, 760) - 30];
-  const middle = (fromX + toX) / 2;
+  return { fromX, toX, middle: (fromX + toX) / 2 };
+}
+
+interface PadOnLineProps {
+  width: number;
+  sourceOhm: number;
+  loadOhm: number;
+  lossDb: number;
+}
+
+/** The pad where it stands: between two lines of the two resistances. */
+function PadOnLine({ width, sourceOhm, loadOhm, lossDb }: PadOnLineProps) {
+  const { fromX, toX, middle } = padPlace(width);
   const y = 36;
   const ohms = (value: number) => trimmed(scaled("resistance", value, 4));
   return (
-    <div ref={ref}>
-      <svg
-        width={width}
-        height="74"
-        role="img"
-        aria-label={`A pad of ${digits(lossDb, 2)} decibels between ${inWords(ohms(sourceOhm))} and ${inWords(ohms(loadOhm))}`}
-        className="block overflow-visible"
-      >
-        <SourceSymbol x={fromX} y={y} />
-        <CableLengthwise {...plainCoax} fromX={fromX} toX={middle - 40} y={y} mmToPx={2.7} />
-        <CableLengthwise {...plainCoax} fromX={middle + 40} toX={toX} y={y} mmToPx={2.7} />
-        <Box x={middle} y={y} inside={`${withoutTrailingZeros(digits(lossDb, 2))} dB`} width={80} />
-        <LoadSymbol x={toX} y={y} kind="resistor" />
-        <CutWords x={(fromX + middle - 40) / 2} y={y + 32} figure={ohms(sourceOhm)} />
-        <CutWords x={(middle + 40 + toX) / 2} y={y + 32} figure={ohms(loadOhm)} />
-      </svg>
-    </div>
+    <svg
+      width={width}
+      height="74"
+      role="img"
+      aria-label={`A pad of ${digits(lossDb, 2)} decibels between ${inWords(ohms(sourceOhm))} and ${inWords(ohms(loadOhm))}`}
+      className="block overflow-visible"
+    >
+      <SourceSymbol x={fromX} y={y} />
+      <CableLengthwise {...plainCoax} fromX={fromX} toX={middle - 40} y={y} mmToPx={2.7} />
+      <CableLengthwise {...plainCoax} fromX={middle + 40} toX={toX} y={y} mmToPx={2.7} />
+      <Box x={middle} y={y} inside={`${withoutTrailingZeros(digits(lossDb, 2))} dB`} width={80} />
+      <LoadSymbol x={toX} y={y} kind="resistor" />
+      <CutWords x={(fromX + middle - 40) / 2} y={y + 32} figure={ohms(sourceOhm)} />
+      <CutWords x={(middle + 40 + toX) / 2} y={y + 32} figure={ohms(loadOhm)} />
+    </svg>
   );
 }
 

@@ -16,6 +16,8 @@ const pages = [
   "/runs/new",
   "/cables",
   "/calculate",
+  "/calculate/pad",
+  "/calculate/stub",
   "/runs/mast-m2-telemetry",
   "/runs/mast-m2-telemetry/match",
 ];
