@@ -56,8 +56,16 @@ export function fitWords({ k1, k2 }: LossFit): string {
   return parts.join(" + ");
 }
 
-function Sentence({ table, fit, modelRms }: { table: LossTable; fit: LossFit | undefined; modelRms: number | null }) {
+interface SentenceProps {
+  table: LossTable;
+  fit: LossFit | undefined;
+  modelRms: number | null;
+  isLossless: boolean;
+}
+
+function Sentence({ table, fit, modelRms, isLossless }: SentenceProps) {
   const range = tableRange(table);
+  if (isLossless) return <>The model has no loss at any frequency.</>;
   if (table.points.length === 0)
     return <>No loss table is stored with this entry: the curve is the model’s alone, dotted throughout.</>;
   if (!range || !fit)
@@ -112,6 +120,7 @@ export function Attenuation(props: Props) {
   const given = [...table.points, ...table.limits].map(({ lossDbPer100m: loss }) => loss);
   const beyond = range && range[1] < xDomain[1] ? Math.sqrt(range[1] * xDomain[1]) : null;
   const at = inWords(frequency(lossAtHz));
+  const isLossless = series.every(({ values }) => values.every((value) => value === 0)) && given.length === 0;
   return (
     <ChartFrame
       title="Attenuation"
@@ -128,26 +137,28 @@ export function Attenuation(props: Props) {
         ]),
       }}
     >
-      <CurvePlot
-        xs={xs}
-        series={series}
-        xDomain={xDomain}
-        yDomain={decadesAround([...series.flatMap(({ values }) => values), ...given])}
-        formatX={megahertz}
-        formatY={(value) => significantDigits(value, 1)}
-        readX={(f) => inWords(frequency(Number(f.toPrecision(3))))}
-        readY={(value) => significantDigits(value, 3)}
-        points={[
-          ...table.limits.map((row) => ({ x: row.frequencyHz, y: row.lossDbPer100m, shape: "bar" as const })),
-          ...table.points.map((row) => ({ x: row.frequencyHz, y: row.lossDbPer100m, shape: "ring" as const })),
-        ]}
-        mark={lossAtHz}
-        limit={rated === undefined ? undefined : { x: rated, label: `rated to ${inWords(frequency(rated))}` }}
-        note={beyond === null ? undefined : { x: beyond, label: "beyond the data" }}
-        xUnit={fit ? undefined : "MHz"}
-        height={fit ? 236 : 262}
-        labelRoom={84}
-      />
+      {!isLossless && (
+        <CurvePlot
+          xs={xs}
+          series={series}
+          xDomain={xDomain}
+          yDomain={decadesAround([...series.flatMap(({ values }) => values), ...given])}
+          formatX={megahertz}
+          formatY={(value) => significantDigits(value, 1)}
+          readX={(f) => inWords(frequency(Number(f.toPrecision(3))))}
+          readY={(value) => significantDigits(value, 3)}
+          points={[
+            ...table.limits.map((row) => ({ x: row.frequencyHz, y: row.lossDbPer100m, shape: "bar" as const })),
+            ...table.points.map((row) => ({ x: row.frequencyHz, y: row.lossDbPer100m, shape: "ring" as const })),
+          ]}
+          mark={lossAtHz}
+          limit={rated === undefined ? undefined : { x: rated, label: `rated to ${inWords(frequency(rated))}` }}
+          note={beyond === null ? undefined : { x: beyond, label: "beyond the data" }}
+          xUnit={fit ? undefined : "MHz"}
+          height={fit ? 236 : 262}
+          labelRoom={84}
+        />
+      )}
       {fit && (
         <ResidualStrip
           residuals={fit.rows.map(({ frequency: x, errorPercent }) => ({ x, percent: errorPercent }))}
@@ -161,7 +172,7 @@ export function Attenuation(props: Props) {
         />
       )}
       <p className="mt-1 text-label text-ink-2">
-        <Sentence table={table} fit={fit} modelRms={rms(left)} />
+        <Sentence table={table} fit={fit} modelRms={rms(left)} isLossless={isLossless} />
       </p>
     </ChartFrame>
   );

@@ -68,7 +68,7 @@ export function CableRow({ item, index, href, canStartRun, isHeld, toggleHold, m
       className={`relative h-13 phone:grid phone:h-21 phone:grid-cols-[76px_minmax(0,1fr)_auto] phone:grid-rows-[42px_41px] phone:gap-x-3 phone:border-b phone:px-4 phone:border-line [&>*]:align-middle [&>*]:phone:border-0 [&>*]:phone:p-0 ${isHeld ? "bg-copper-wash" : "hover:bg-copper-wash/50"}`}
     >
       <Cell className="w-16 p-0! phone:row-span-2 phone:self-center">
-        <span className="flex items-center justify-center">
+        <span className="flex max-h-12 items-center justify-center overflow-hidden phone:max-h-20">
           <SectionView
             construction={item.construction}
             build={item.build}

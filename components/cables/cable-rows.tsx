@@ -72,10 +72,12 @@ function Head({ lossAtHz, mmToPx }: { lossAtHz: number; mmToPx: number }) {
 
 const columns = 12;
 const mostMmToPx = 3;
+/** Thicker ones than this are cut off at the edge of their row: one of them must not make dots of all the others. */
+const thickestDrawnMm = 60;
 
 /** px per millimetre, the same for every row: as large as the thickest cable lets it be. */
 function scaleFor(thickestMm: number, rowHeight: number): number {
-  return Math.round(10 * Math.min(mostMmToPx, (rowHeight - 6) / thickestMm)) / 10;
+  return Math.round(10 * Math.min(mostMmToPx, (rowHeight - 6) / Math.min(thickestMm, thickestDrawnMm))) / 10;
 }
 
 /** Arrow keys go from one cable to the next, whatever in the row has the focus. */

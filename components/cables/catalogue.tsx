@@ -46,6 +46,21 @@ function Count({ page }: { page: CablePage | undefined }) {
   );
 }
 
+/** The server did not answer. What was found before stays, greyed. */
+function Trouble({ pages }: { pages: ReturnType<typeof useCablePages> }) {
+  const isNext = pages.isFetchNextPageError;
+  return (
+    <div className="my-3 flex flex-wrap items-center gap-3" role="alert">
+      <StateNote state="fail">
+        {pages.error?.message} {!isNext && pages.data && "The list below is of the search before."}
+      </StateNote>
+      <Button size="small" onClick={() => void (isNext ? pages.fetchNextPage() : pages.refetch())}>
+        Try again
+      </Button>
+    </div>
+  );
+}
+
 /** Holds or puts back the cable whose row has the focus, else the one under the pointer. */
 function useHoldKey(items: readonly CableItem[], toggle: (item: CableItem) => void) {
   function run() {
@@ -98,7 +113,8 @@ export function Catalogue({ first, canStartRun }: Props) {
           </details>
         )}
         {isPhone && <FacetCards {...facets} />}
-        {pages.isPending && <Working label="Looking through the catalogue" />}
+        {pages.error && !pages.isFetchNextPageError && <Trouble pages={pages} />}
+        {pages.isPending && !page && <Working label="Looking through the catalogue" />}
         {page && page.total === 0 && <NothingFound asked={asked} change={change} page={page} />}
         {items.length > 0 && (
           <p className="mt-2 hidden justify-between border-b border-rule pb-1 text-label text-ink-2 phone:flex">
@@ -120,17 +136,7 @@ export function Catalogue({ first, canStartRun }: Props) {
             />
           </div>
         )}
-        {pages.error && (
-          <div className="mt-4" role="alert">
-            <StateNote state="fail">{pages.error.message}</StateNote>
-            <Button
-              className="mt-2"
-              onClick={() => void (pages.isFetchNextPageError ? pages.fetchNextPage() : pages.refetch())}
-            >
-              Try again
-            </Button>
-          </div>
-        )}
+        {pages.isFetchNextPageError && <Trouble pages={pages} />}
         {pages.hasNextPage && !pages.error && (
           <p className="py-3 text-label text-ink-3">
             {items.length} of {page?.total} so far; more come as you scroll.

@@ -104,7 +104,7 @@ export function DimensionedSection(cable: DrawnCable) {
   if (!shape)
     return (
       <p className="mt-2 flex items-center gap-4 text-label text-ink-2">
-        <svg width="120" height="120" aria-hidden="true">
+        <svg width="120" height="120" aria-hidden="true" className="shrink-0">
           <circle cx="60" cy="60" r="52" fill="none" stroke="var(--rule)" strokeWidth="1.5" strokeDasharray="4 4" />
         </svg>
         The construction is not known: nothing is drawn that nobody stated.

@@ -24,11 +24,14 @@ const frequencies = Array.from(
   (_, i) => span[0] * 10 ** (i / perDecade),
 );
 
+const longest = 12;
+const shortened = (name: string) => (name.length > longest ? `${name.slice(0, longest - 1)}…` : name);
+
 /** Loss of several cables over three decades, with the figures behind it; beyond a cable's own table it is dotted. */
 export function LossCurves({ cables, lossAtHz, height, level = 3 }: Props) {
   const series = cables.map(({ cable, look }): CurveSeries => ({
     id: cable.id,
-    label: cable.designation,
+    label: shortened(cable.designation),
     look,
     values: frequencies.map((f) => lossDbPer100m(cable.model, f)),
     data: tableRange(lossTable(cable.figures)),

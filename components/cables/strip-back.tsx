@@ -72,7 +72,6 @@ export function StripBack({ designation, ...cable }: DrawnCable & { designation:
   if (!shape) return null;
   const parts = sectionParts(cable);
   const places = stretches(parts.length);
-  const letters = Math.floor(((places[0]?.[1] ?? 0) - 20) / 7.6);
   return (
     <svg
       width={width}
@@ -101,9 +100,12 @@ export function StripBack({ designation, ...cable }: DrawnCable & { designation:
         );
       })}
       {shape.hasJacket && (
-        <text x="10" y={middleY + 4} style={{ fill: "light-dark(var(--paper), var(--ink))", fontWeight: 600 }}>
-          {designation.length > letters ? `${designation.slice(0, letters - 1)}…` : designation}
-        </text>
+        // A drawing of its own, so that a long name ends with the sheath.
+        <svg width={(places[0]?.[1] ?? 0) - 8} height="60">
+          <text x="10" y={middleY + 4} style={{ fill: "light-dark(var(--paper), var(--ink))", fontWeight: 600 }}>
+            {designation}
+          </text>
+        </svg>
       )}
     </svg>
   );

@@ -38,5 +38,9 @@ export function useCablePages(request: string, first: FirstPage) {
     // Comparing thousands of rows with themselves at each page would be felt.
     structuralSharing: false,
   });
-  return { ...query, isBehind: query.isPlaceholderData || rested !== request };
+  // An answer that fails leaves what was there before: it is said to be old, but it is not taken away.
+  const [last, setLast] = useState(query.data);
+  if (query.data !== undefined && query.data !== last) setLast(query.data);
+  const isOld = query.data === undefined || query.isPlaceholderData;
+  return { ...query, data: query.data ?? last, isBehind: isOld || rested !== request };
 }

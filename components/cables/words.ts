@@ -20,7 +20,7 @@ export const familyWords: Record<Family, string> = {
 
 /** "Solid copper 2.70 mm, foam PE, foil and braid, PE jacket" */
 export function buildWords(build: Build | null): string {
-  if (!build) return "construction not given";
+  if (!build) return "Construction not given";
   const parts = [build.conductor, build.dielectricName, build.screenName, build.jacket ? `${build.jacket} jacket` : ""];
   const text = parts.filter(Boolean).join(", ");
   return text.charAt(0).toUpperCase() + text.slice(1);
