@@ -21,6 +21,10 @@ export interface TypedQuantity {
 
 interface Typed {
   text: string;
+  /** not read yet: the reader is still on its way */
+  isUnread?: boolean;
+  /** the field has been left meanwhile */
+  isLeft?: boolean;
   error?: string;
   understood?: string;
 }
@@ -38,15 +42,21 @@ export function useTypedQuantity(props: TypedQuantity) {
   const shown = typed?.text ?? (value === undefined ? "" : text(value));
 
   async function take(next: string) {
-    setTyped({ text: next });
-    if (next.trim() === "" && isOptional) return onValue(undefined);
+    setTyped({ text: next, isUnread: true });
+    if (next.trim() === "" && isOptional) {
+      setTyped({ text: next });
+      return onValue(undefined);
+    }
     const { readQuantity } = await reader();
     const isBare = /^[\s\d.,+\-\u2212]*$/.test(next);
     const read = readQuantity(kind, isBare && next.trim() ? `${next} ${usualUnit}` : next);
     const error = read.ok ? refuse?.(read.value) : read.message;
     const understood = read.ok && !isBare ? `= ${read.understood}` : undefined;
     // What was typed since then is not overwritten.
-    setTyped((now) => (now?.text === next ? { text: next, error, understood } : now));
+    setTyped((now) => {
+      if (now?.text !== next) return now;
+      return now.isLeft && !error ? null : { text: next, error, understood };
+    });
     if (read.ok && !error) onValue(read.value);
   }
   function press(event: KeyboardEvent<HTMLInputElement>) {
@@ -67,7 +77,7 @@ export function useTypedQuantity(props: TypedQuantity) {
       autoComplete: "off",
       onFocus: () => void reader(),
       onChange: (event: ChangeEvent<HTMLInputElement>) => void take(event.target.value),
-      onBlur: () => !typed?.error && setTyped(null),
+      onBlur: () => setTyped((now) => (now?.isUnread ? { ...now, isLeft: true } : now?.error ? now : null)),
       onKeyDown: press,
     },
   };
