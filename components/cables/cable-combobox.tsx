@@ -22,15 +22,8 @@ export function CableCombobox({ label, chosen, cableId, choose, isDisabled, besi
   const [isOpen, setOpen] = useState(false);
   const [trouble, setTrouble] = useState<string | null>(null);
   const id = useId();
-  const box = useRef<HTMLDivElement>(null);
   const button = useRef<HTMLButtonElement>(null);
-
-  useEffect(() => {
-    if (!isOpen) return;
-    const close = (event: PointerEvent) => !box.current?.contains(event.target as Node) && setOpen(false);
-    document.addEventListener("pointerdown", close);
-    return () => document.removeEventListener("pointerdown", close);
-  }, [isOpen]);
+  const box = usePressOutside(isOpen, () => setOpen(false));
 
   function close() {
     setOpen(false);
@@ -85,4 +78,20 @@ export function CableCombobox({ label, chosen, cableId, choose, isDisabled, besi
       )}
     </div>
   );
+}
+
+/** Calls when something outside an element is pressed. Give the answer to the element as its ref. */
+function usePressOutside(isWatching: boolean, onPress: () => void) {
+  const box = useRef<HTMLDivElement>(null);
+  const latest = useRef(onPress);
+  useEffect(() => {
+    latest.current = onPress;
+  });
+  useEffect(() => {
+    if (!isWatching) return;
+    const press = (event: PointerEvent) => !box.current?.contains(event.target as Node) && latest.current();
+    document.addEventListener("pointerdown", press);
+    return () => document.removeEventListener("pointerdown", press);
+  }, [isWatching]);
+  return box;
 }

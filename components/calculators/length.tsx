@@ -6,7 +6,7 @@ import { CutLengthSketch } from "@/components/calculators/cut-length-sketch";
 import { FigureRows, type FigureRow } from "@/components/calculators/figure-rows";
 import { InputField } from "@/components/calculators/input-field";
 import { LineFields } from "@/components/calculators/line-fields";
-import { useCalculator, type OpenedCalculator } from "@/components/calculators/use-calculator";
+import { useCalculator, type Calculator, type OpenedCalculator } from "@/components/calculators/use-calculator";
 import { Leaf } from "@/components/line/leaf";
 import { Reading, Readings } from "@/components/ui/reading";
 import { Section } from "@/components/ui/section";
@@ -38,7 +38,7 @@ interface Props {
 /** Electrical length of a cable and the length to cut, either from the other. */
 export function LengthCalculator({ opened, canStartRun }: Props) {
   const calculator = useCalculator({ path, inputs: lengthInputs, compute: electricalLength }, opened);
-  const { values, texts, result } = calculator;
+  const { texts, result } = calculator;
   const start = newRunAddress(texts, {
     length: result ? `${Number(result.cutM.toPrecision(6))} m` : "",
     frequency: texts.frequency ?? "",
@@ -57,43 +57,58 @@ export function LengthCalculator({ opened, canStartRun }: Props) {
         </div>
       )}
       <div className="mt-3">
-        <Leaf name="The length" notchX={160}>
-          <div className="flex flex-wrap items-start gap-3">
-            <LineFields of={calculator} />
-            <InputField of={calculator} name="frequency" />
-            <InputField of={calculator} name="wanted" />
-            <InputField of={calculator} name="ends" />
-            <InputField of={calculator} name="temperature" />
-            <p className="max-w-90 self-center text-note text-ink-3">
-              Degrees, wavelengths or time for what it shall be; metres or feet for what is cut already. The ends take
-              off what plugs, tees and caps count for, as cable.
-            </p>
-          </div>
-        </Leaf>
+        <LengthFields calculator={calculator} />
       </div>
       {result && (
         <Results calculator={calculator}>
-          <Trim result={result} />
-          <div className="mt-5 grid grid-cols-3 gap-x-10 gap-y-6 folded:grid-cols-1">
-            <Section title="The length" note={`at ${inWords(frequency(result.spot.frequency))}`}>
-              <FigureRows rows={wholeRows(result)} />
-            </Section>
-            <Section title="To cut" note={`of ${result.line.label}`}>
-              <FigureRows rows={cutRows(result)} />
-            </Section>
-            <Section title="When it is off" note="small errors, each alone">
-              <FigureRows rows={offRows(result)} />
-            </Section>
-          </div>
-          <Cautions
-            cautions={[
-              ...entryCautions(result.line, values.frequency, values.temperature),
-              ...modelCautions(result.line, result.spot),
-            ]}
-          />
+          <LengthResults result={result} />
         </Results>
       )}
     </CalculatorFrame>
+  );
+}
+
+function LengthFields({ calculator }: { calculator: Calculator<typeof lengthInputs> }) {
+  return (
+    <Leaf name="The length" notchX={160}>
+      <div className="flex flex-wrap items-start gap-3">
+        <LineFields of={calculator} />
+        <InputField of={calculator} name="frequency" />
+        <InputField of={calculator} name="wanted" />
+        <InputField of={calculator} name="ends" />
+        <InputField of={calculator} name="temperature" />
+        <p className="max-w-90 self-center text-note text-ink-3">
+          Degrees, wavelengths or time for what it shall be; metres or feet for what is cut already. The ends take off
+          what plugs, tees and caps count for, as cable.
+        </p>
+      </div>
+    </Leaf>
+  );
+}
+
+function LengthResults({ result }: { result: LengthResult }) {
+  const { spot } = result;
+  return (
+    <>
+      <Trim result={result} />
+      <div className="mt-5 grid grid-cols-3 gap-x-10 gap-y-6 folded:grid-cols-1">
+        <Section title="The length" note={`at ${inWords(frequency(spot.frequency))}`}>
+          <FigureRows rows={wholeRows(result)} />
+        </Section>
+        <Section title="To cut" note={`of ${result.line.label}`}>
+          <FigureRows rows={cutRows(result)} />
+        </Section>
+        <Section title="When it is off" note="small errors, each alone">
+          <FigureRows rows={offRows(result)} />
+        </Section>
+      </div>
+      <Cautions
+        cautions={[
+          ...entryCautions(result.line, spot.frequency, spot.temperature.temperatureC),
+          ...modelCautions(result.line, spot),
+        ]}
+      />
+    </>
   );
 }
 

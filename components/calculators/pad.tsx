@@ -4,7 +4,7 @@ import { CalculatorFrame, Results } from "@/components/calculators/calculator-fr
 import { Cautions } from "@/components/calculators/cautions";
 import { InputField } from "@/components/calculators/input-field";
 import { PadColumn } from "@/components/calculators/pad-column";
-import { useCalculator, type OpenedCalculator } from "@/components/calculators/use-calculator";
+import { useCalculator, type Calculator, type OpenedCalculator } from "@/components/calculators/use-calculator";
 import { Box } from "@/components/line/symbols";
 import { LoadSymbol, SourceSymbol } from "@/components/line/end-symbols";
 import { CableLengthwise } from "@/components/line/cable-lengthwise";
@@ -55,23 +55,7 @@ export function PadCalculator({ opened, canStartRun }: Props) {
         <PadOnLine width={width} sourceOhm={values.source} loadOhm={values.load} lossDb={lossDb} />
       </div>
       <div className="mt-3">
-        <Leaf name="The pad" notchX={padPlace(width).middle}>
-          <div className="flex flex-wrap items-start gap-3">
-            <InputField of={calculator} name="loss" />
-            <InputField of={calculator} name="source" />
-            <InputField of={calculator} name="load" />
-            <InputField of={calculator} name="power" />
-            {leastDb > 0 && !(result?.isLeast && calculator.problems.loss === undefined) && (
-              <Button
-                kind="quiet"
-                className="self-center"
-                onClick={() => calculator.set("loss", String(Number(leastDb.toFixed(3))))}
-              >
-                Take the least loss, {inWords(decibels(leastDb))}
-              </Button>
-            )}
-          </div>
-        </Leaf>
+        <PadFields calculator={calculator} leastDb={leastDb} notchX={padPlace(width).middle} />
       </div>
       {result && (
         <Results calculator={calculator}>
@@ -90,6 +74,35 @@ export function PadCalculator({ opened, canStartRun }: Props) {
         </Results>
       )}
     </CalculatorFrame>
+  );
+}
+
+interface PadFieldsProps {
+  calculator: Calculator<typeof padInputs, PadResult>;
+  leastDb: number;
+  notchX: number;
+}
+
+function PadFields({ calculator, leastDb, notchX }: PadFieldsProps) {
+  const isLeast = calculator.result?.isLeast && calculator.problems.loss === undefined;
+  return (
+    <Leaf name="The pad" notchX={notchX}>
+      <div className="flex flex-wrap items-start gap-3">
+        <InputField of={calculator} name="loss" />
+        <InputField of={calculator} name="source" />
+        <InputField of={calculator} name="load" />
+        <InputField of={calculator} name="power" />
+        {leastDb > 0 && !isLeast && (
+          <Button
+            kind="quiet"
+            className="self-center"
+            onClick={() => calculator.set("loss", String(Number(leastDb.toFixed(3))))}
+          >
+            Take the least loss, {inWords(decibels(leastDb))}
+          </Button>
+        )}
+      </div>
+    </Leaf>
   );
 }
 
