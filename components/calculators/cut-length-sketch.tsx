@@ -22,10 +22,10 @@ const mostWaves = 40;
 /** Quarter marks are set while they are this far apart, px. */
 const leastMarkPx = 26;
 
-/** A sine from one end of the cable to the other, zero at its near end. */
-function Wave({ fromX, toX, waves }: { fromX: number; toX: number; waves: number }) {
-  if (waves > mostWaves)
-    return (
+/** The band that too many waves to be told apart fill. */
+function Envelope({ fromX, toX }: { fromX: number; toX: number }) {
+  return (
+    <g>
       <rect
         x={fromX}
         y={waveY - amplitude}
@@ -34,7 +34,16 @@ function Wave({ fromX, toX, waves }: { fromX: number; toX: number; waves: number
         fill="var(--copper-wash)"
         stroke="var(--copper)"
       />
-    );
+      <text x={(fromX + toX) / 2} y={waveY + 4} textAnchor="middle">
+        too many waves to draw: the band they fill
+      </text>
+    </g>
+  );
+}
+
+/** A sine from one end of the cable to the other, zero at its near end. */
+function Wave({ fromX, toX, waves }: { fromX: number; toX: number; waves: number }) {
+  if (waves > mostWaves) return <Envelope fromX={fromX} toX={toX} />;
   const count = Math.max(24, Math.ceil(waves * 24));
   const points = Array.from({ length: count + 1 }, (_, k) => {
     const share = k / count;

@@ -6,7 +6,16 @@ import type { Calculator } from "@/components/calculators/use-calculator";
 import { CutDrawing, plainCoax } from "@/components/line/cut-drawing";
 import { Section } from "@/components/ui/section";
 import type { StubAndSection, stubInputs } from "@/lib/calculators/stub";
-import { cutLength, decibels, impedance, inWords, scaled, significantDigits, type Figure } from "@/lib/format/quantity";
+import {
+  cutLength,
+  decibels,
+  frequency,
+  impedance,
+  inWords,
+  scaled,
+  significantDigits,
+  type Figure,
+} from "@/lib/format/quantity";
 
 export interface StubColumnProps {
   calculator: Calculator<typeof stubInputs>;
@@ -50,7 +59,7 @@ function partRow({ stub, spot }: StubAndSection): FigureRow[] {
     ];
   const figure = "lH" in stub.part ? scaled("inductance", stub.part.lH, 3) : scaled("capacitance", stub.part.cF, 3);
   const kind = "lH" in stub.part ? "a coil" : "a capacitor";
-  return [{ label: `Stands for ${kind}`, figure, note: `at ${inWords(scaled("frequency", spot.frequency))} only` }];
+  return [{ label: `Stands for ${kind}`, figure, note: `at ${inWords(frequency(spot.frequency))} only` }];
 }
 
 function rowsOf(result: StubAndSection): FigureRow[] {
