@@ -32,6 +32,8 @@ test("Everything on the line is done without a mouse", async ({ page }) => {
   await page.keyboard.press("Control+z");
   await expect(length).toHaveValue(/^18/);
   await page.getByRole("heading", { name: "Where the power goes" }).click();
+  await page.keyboard.press("]");
+  await expect(page.getByText(/^0\.[2-4]\d\sm$/).first()).toBeVisible();
   await page.keyboard.press("?");
   await expect(page.getByRole("dialog", { name: "Keys" })).toContainText("split the cable");
   await page.keyboard.press("Escape");
