@@ -11,8 +11,8 @@ export default defineConfig({
   outputDir: path.join(root, "test-results"),
   fullyParallel: false,
   workers: 1,
-  timeout: 60_000,
-  expect: { timeout: 10_000 },
+  timeout: 120_000,
+  expect: { timeout: 15_000 },
   use: {
     ...devices["Desktop Chrome"],
     baseURL: base,
