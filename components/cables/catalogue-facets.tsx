@@ -1,7 +1,6 @@
 "use client";
 
 import { FamilyChecks, StateChecks } from "@/components/cables/facet-checks";
-import { MeasureRange } from "@/components/cables/measure-range";
 import {
   diameterFacet,
   impedanceFacet,
@@ -9,6 +8,8 @@ import {
   velocityFacet,
   type MeasureFacet,
 } from "@/components/cables/measure-facets";
+import { MeasureRange } from "@/components/cables/measure-range";
+import type { ChangeAsked } from "@/components/cables/use-catalogue-address";
 import type { HistogramRange } from "@/components/plot/histogram-range";
 import { QuantityField } from "@/components/ui/quantity-field";
 import type { CatalogueAsked } from "@/lib/cables/address";
@@ -17,7 +18,7 @@ import { frequency } from "@/lib/format/quantity";
 
 export interface FacetsProps {
   asked: CatalogueAsked;
-  change: (part: Partial<CatalogueAsked>) => void;
+  change: ChangeAsked;
   facets: Facets | undefined;
 }
 
@@ -50,10 +51,11 @@ export function LossFrequency({ asked, change, className }: Omit<FacetsProps, "f
 
 /** One range of the catalogue's figures. */
 export function MeasureFacetRange({ facet, asked, change, facets }: FacetsProps & { facet: MeasureFacet }) {
-  const set = (range: HistogramRange | undefined) => {
-    const { [facet.measure]: _before, ...rest } = asked.ranges;
-    change({ ranges: range ? { ...rest, [facet.measure]: range } : rest });
-  };
+  const set = (range: HistogramRange | undefined) =>
+    change(({ ranges }) => {
+      const { [facet.measure]: _before, ...rest } = ranges;
+      return { ranges: range ? { ...rest, [facet.measure]: range } : rest };
+    });
   return (
     <MeasureRange facet={facet} bins={facets?.[facet.measure] ?? []} range={asked.ranges[facet.measure]} change={set} />
   );

@@ -1,6 +1,7 @@
 "use client";
 
 import { frequencyText } from "@/components/cables/catalogue-facets";
+import type { ChangeLook } from "@/components/cables/use-entry-address";
 import { QuantityField } from "@/components/ui/quantity-field";
 import { StateNote } from "@/components/ui/state-mark";
 import type { EntryAsked } from "@/lib/cables/entry-address";
@@ -14,7 +15,7 @@ interface Props {
   cable: Cable;
   warm: ModelAtTemperature;
   asked: EntryAsked;
-  change: (part: Partial<EntryAsked>) => void;
+  change: ChangeLook;
 }
 
 const celsius = (value: number) => `${digits(value, Number.isInteger(value) ? 0 : 1).replace("\u2212", "-")} °C`;

@@ -3,6 +3,7 @@
 import type { Route } from "next";
 import Link from "next/link";
 import { HoldHere } from "@/components/cables/hold-here";
+import type { ChangeLook } from "@/components/cables/use-entry-address";
 import { buildWords, familyWords, stateWords } from "@/components/cables/words";
 import { Button, ButtonLink } from "@/components/ui/button";
 import { StateMark, StateNote } from "@/components/ui/state-mark";
@@ -18,7 +19,7 @@ export interface EntryHeadProps {
   /** the entry that takes its place, where the reader may see it */
   successor: Cable | null;
   asked: EntryAsked;
-  change: (part: Partial<EntryAsked>) => void;
+  change: ChangeLook;
   canStartRun: boolean;
 }
 

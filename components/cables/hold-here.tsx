@@ -2,6 +2,7 @@
 
 import type { Route } from "next";
 import Link from "next/link";
+import type { ChangeLook } from "@/components/cables/use-entry-address";
 import { Button } from "@/components/ui/button";
 import { useKeys } from "@/components/ui/keys";
 import { catalogueAddress, mostHeld, readCatalogueAddress } from "@/lib/cables/address";
@@ -11,7 +12,7 @@ import type { Cable } from "@/lib/cables/schema";
 interface Props {
   cable: Cable;
   asked: EntryAsked;
-  change: (part: Partial<EntryAsked>) => void;
+  change: ChangeLook;
 }
 
 /** Holds the entry that is open, and leads to what is held with it. */
@@ -19,9 +20,11 @@ export function HoldHere({ cable, asked, change }: Props) {
   const { held, lossAtHz } = asked;
   const isHeld = held.includes(cable.id);
   const isFull = !isHeld && held.length >= mostHeld;
-  const toggle = () => {
-    if (!isFull) change({ held: isHeld ? held.filter((id) => id !== cable.id) : [...held, cable.id] });
-  };
+  const toggle = () =>
+    change(({ held: now }) => {
+      if (now.includes(cable.id)) return { held: now.filter((id) => id !== cable.id) };
+      return now.length < mostHeld ? { held: [...now, cable.id] } : {};
+    });
   useKeys([{ key: "h", does: "hold it to compare, or put it back", run: toggle }]);
   const compare = catalogueAddress({
     ...readCatalogueAddress({}),

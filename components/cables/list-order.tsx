@@ -1,10 +1,11 @@
+import type { ChangeAsked } from "@/components/cables/use-catalogue-address";
 import { Select } from "@/components/ui/select";
 import type { CatalogueAsked, CatalogueSort } from "@/lib/cables/address";
 import { frequency, inWords } from "@/lib/format/quantity";
 
 interface Props {
   asked: CatalogueAsked;
-  change: (part: Partial<CatalogueAsked>) => void;
+  change: ChangeAsked;
 }
 
 /** What the list is ordered by, and which end of it comes first. */

@@ -1,12 +1,13 @@
-import { measureNames, usualSort, type CatalogueAsked, type Measure } from "@/lib/cables/address";
-import type { CablePage, Facets } from "@/lib/cables/query";
+import type { ChangeAsked } from "@/components/cables/use-catalogue-address";
 import { stateWords } from "@/components/cables/words";
 import { Button } from "@/components/ui/button";
 import { Hook } from "@/components/ui/hook";
+import { measureNames, usualSort, type CatalogueAsked, type Measure } from "@/lib/cables/address";
+import type { CablePage, Facets } from "@/lib/cables/query";
 
 interface Props {
   asked: CatalogueAsked;
-  change: (part: Partial<CatalogueAsked>) => void;
+  change: ChangeAsked;
   page: CablePage;
 }
 

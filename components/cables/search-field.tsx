@@ -1,15 +1,16 @@
 "use client";
 
-import type { CatalogueAsked } from "@/lib/cables/address";
-import { usualSort } from "@/lib/cables/address";
-import type { CablePage } from "@/lib/cables/query";
+import type { ChangeAsked } from "@/components/cables/use-catalogue-address";
 import { fieldColours, fieldEdge } from "@/components/ui/field";
 import { KeyCap } from "@/components/ui/key-cap";
 import { useDraft } from "@/components/ui/use-draft";
+import type { CatalogueAsked } from "@/lib/cables/address";
+import { usualSort } from "@/lib/cables/address";
+import type { CablePage } from "@/lib/cables/query";
 
 interface Props {
   asked: CatalogueAsked;
-  change: (part: Partial<CatalogueAsked>) => void;
+  change: ChangeAsked;
 }
 
 /** What is searched for, as it is typed. Esc clears it, the arrow down goes to the first cable found. */

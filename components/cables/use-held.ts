@@ -2,7 +2,8 @@
 
 import { useQueries } from "@tanstack/react-query";
 import { useState } from "react";
-import { mostHeld, type CatalogueAsked } from "@/lib/cables/address";
+import type { ChangeAsked } from "@/components/cables/use-catalogue-address";
+import { mostHeld } from "@/lib/cables/address";
 import type { Cable } from "@/lib/cables/schema";
 import { call } from "@/lib/http/call";
 
@@ -15,7 +16,7 @@ export interface HeldCable {
 }
 
 /** The cables held up to compare. Their ids stand in the address; a fifth waits until one has been put back. */
-export function useHeld(ids: readonly string[], change: (part: Partial<CatalogueAsked>) => void) {
+export function useHeld(ids: readonly string[], change: ChangeAsked) {
   const [waiting, setWaiting] = useState<{ id: string; designation: string } | null>(null);
   const answers = useQueries({
     queries: ids.map((id) => ({
@@ -28,19 +29,21 @@ export function useHeld(ids: readonly string[], change: (part: Partial<Catalogue
     cable: answers[i]?.data,
     trouble: answers[i]?.error?.message,
   }));
-  const set = (next: string[]) => change({ held: next, ...(next.length === 0 && { isCompared: false }) });
   return {
     held,
     waiting,
-    putBack: (id: string) => set(ids.filter((other) => other !== id)),
-    toggle: (item: { id: string; designation: string }) => {
-      if (ids.includes(item.id)) set(ids.filter((other) => other !== item.id));
-      else if (ids.length < mostHeld) set([...ids, item.id]);
-      else setWaiting(item);
-    },
+    putBack: (id: string) => change((now) => ({ held: now.held.filter((other) => other !== id) })),
+    toggle: (item: { id: string; designation: string }) =>
+      change(({ held: now }) => {
+        if (now.includes(item.id)) return { held: now.filter((id) => id !== item.id) };
+        if (now.length < mostHeld) return { held: [...now, item.id] };
+        setWaiting(item);
+        return {};
+      }),
     /** Hangs the waiting cable in the place of another, or lets it go. */
     exchange: (id: string | null) => {
-      if (waiting && id !== null) set(ids.map((other) => (other === id ? waiting.id : other)));
+      if (waiting && id !== null)
+        change((now) => ({ held: now.held.map((other) => (other === id ? waiting.id : other)) }));
       setWaiting(null);
     },
   };
