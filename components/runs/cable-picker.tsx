@@ -10,12 +10,14 @@ interface Props {
   cableId: string;
   choose: (cableId: string) => void;
   label?: string;
+  /** what stands in the field where the line is none of the catalogue's */
+  whenNone?: string;
   /** choosing changes nothing in the run, so readers may */
   isAlwaysOpen?: boolean;
 }
 
 /** The cable of a piece. One that is new to the run is fetched before it is put in. */
-export function CablePicker({ cableId, choose, label = "Cable", isAlwaysOpen = false }: Props) {
+export function CablePicker({ cableId, choose, label = "Cable", whenNone, isAlwaysOpen = false }: Props) {
   const { lines, addLine, canEdit } = useRunEditor();
   async function take(chosen: string) {
     if (!lines.has(chosen)) addLine(lineOf(await call<Cable>(`/cables/${chosen}`)));
@@ -24,7 +26,7 @@ export function CablePicker({ cableId, choose, label = "Cable", isAlwaysOpen = f
   return (
     <CableCombobox
       label={label}
-      chosen={lines.get(cableId)?.designation ?? null}
+      chosen={lines.get(cableId)?.designation ?? whenNone ?? null}
       cableId={cableId}
       choose={take}
       isDisabled={!canEdit && !isAlwaysOpen}

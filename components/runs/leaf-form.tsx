@@ -52,6 +52,7 @@ export function LeafForm<T>({ fields, edited, path, write, isInline = false }: L
             return (
               <CablePicker
                 key={field.name}
+                whenNone="own model"
                 cableId={field.text(edited)}
                 choose={(cableId) => put(field.write(edited, { cableId }), field.name)}
               />
