@@ -2,6 +2,7 @@
 import { fileURLToPath } from "node:url";
 import { database } from "@/db/client";
 import { teams } from "@/db/schema/team";
+import { isDemo } from "@/lib/team/demo";
 import { seedCables } from "@/seeds/cables";
 import { seedRuns } from "@/seeds/runs";
 import demo from "@/seeds/data/team.json";
@@ -32,9 +33,9 @@ export function refuseMixing(isDemo: boolean): void {
 }
 
 async function seed(): Promise<string | undefined> {
-  const isDemo = process.env.DEMO !== "off";
-  refuseMixing(isDemo);
-  if (!isDemo) return seedFirstAdmin(process.env);
+  const asDemo = isDemo();
+  refuseMixing(asDemo);
+  if (!asDemo) return seedFirstAdmin(process.env);
   await seedDemo();
   return "The demo is in place.";
 }

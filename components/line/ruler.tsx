@@ -8,6 +8,7 @@ interface RulerProps {
 }
 
 const niceSteps = [1, 2, 5];
+const mostMarks = 1000;
 
 /** Step between figures of a ruler of `totalM` metres that has room for about `count` of them. */
 export function rulerStep(totalM: number, count: number): number {
@@ -21,7 +22,8 @@ export function rulerStep(totalM: number, count: number): number {
 export function rulerMarks(scale: LineScale, perMark = 90): { m: number; isMajor: boolean }[] {
   const step = rulerStep(scale.totalM, (scale.endX - scale.startX) / perMark);
   const minor = step / 5;
-  const count = Math.floor(scale.totalM / minor + 1e-9);
+  // A line too short to be divided has one mark.
+  const count = minor > 0 ? Math.min(mostMarks, Math.floor(scale.totalM / minor + 1e-9)) : 0;
   return Array.from({ length: count + 1 }, (_, i) => ({ m: i * minor, isMajor: i % 5 === 0 }));
 }
 

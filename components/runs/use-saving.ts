@@ -86,8 +86,8 @@ export function useSaving({ opened, draft, canSave, key, take }: Given): UseSavi
 
   useKept({ opened, key, take, onConflict: () => setSaving({ kind: "conflict", theirs: opened }) });
   useEffect(() => {
-    if (canSave) hold(key, isChanged ? { draft, version: saved.version } : null);
-  }, [canSave, key, isChanged, draft, saved.version]);
+    if (canSave) hold(key, isChanged ? { draft, base: sent, version: saved.version } : null);
+  }, [canSave, key, isChanged, draft, sent, saved.version]);
   useAskingAgain(saving.kind === "unsaved" && saving.isAway, () => setAttempt((n) => n + 1));
   useAskingBeforeLeaving(isChanged);
 
@@ -115,8 +115,10 @@ function useKept({
     if (isLookedAt.current) return;
     isLookedAt.current = true;
     const held = readHeld(key);
-    if (!held || Object.keys(changeBetween(draftOf(opened), held.draft)).length === 0) return;
-    take(held.draft);
+    if (!held) return;
+    const mine = { ...draftOf(opened), ...changeBetween(held.base, held.draft) };
+    if (Object.keys(changeBetween(draftOf(opened), mine)).length === 0) return;
+    take(mine);
     if (held.version !== opened.version) onConflict();
   });
 }

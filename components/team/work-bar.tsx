@@ -2,8 +2,8 @@
 
 import type { Route } from "next";
 import { Bar } from "@/components/ui/bar";
-import { call } from "@/lib/http/call";
-import { forgetHeld } from "@/lib/runs/held";
+import { call, ProblemError } from "@/lib/http/call";
+import { countHeld, forgetHeld } from "@/lib/runs/held";
 import type { SignedIn } from "@/lib/team/schema";
 
 interface Props {
@@ -22,9 +22,17 @@ const places: { href: Route; label: string }[] = [
 ];
 
 /** Ends the session and leaves nothing of the team's in the browser's memory: the door is loaded afresh. */
-async function signOut() {
-  await call("/session", { method: "DELETE" });
-  forgetHeld();
+async function signOut(personId: string) {
+  const unsent = countHeld(personId);
+  const question = `Changes in ${unsent} of your runs are not on the server yet. Sign out and lose them?`;
+  if (unsent > 0 && !window.confirm(question)) return;
+  try {
+    await call("/session", { method: "DELETE" });
+  } catch (error) {
+    // A session that has ended by itself is signed out already.
+    if (!(error instanceof ProblemError && error.problem.status === 401)) throw error;
+  }
+  forgetHeld(personId);
   // A full load on purpose: nothing of the team stays in memory.
   // eslint-disable-next-line @next/next/no-location-assign-relative-destination
   window.location.assign("/sign-in");
@@ -38,7 +46,7 @@ export function WorkBar({ signedIn, current, title, back, hasOwnFoot }: Props) {
       home="/runs"
       teamName={signedIn.team.name}
       member={{ name: signedIn.person.name, email: signedIn.person.email, role: signedIn.role }}
-      signOut={signOut}
+      signOut={() => signOut(signedIn.person.id)}
       title={title}
       back={back}
       hasOwnFoot={hasOwnFoot}

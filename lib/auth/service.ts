@@ -124,10 +124,13 @@ export async function changePassword(actor: Actor, input: PasswordChange, from: 
     });
   forgetAttempts(attempt);
   const passwordHash = await hashPassword(input.next);
-  db.transaction((tx) => {
-    tx.update(people).set({ passwordHash }).where(eq(people.id, actor.personId)).run();
-    tx.delete(sessions)
-      .where(and(eq(sessions.personId, actor.personId), ne(sessions.id, sessionId)))
-      .run();
-  });
+  db.transaction(
+    (tx) => {
+      tx.update(people).set({ passwordHash }).where(eq(people.id, actor.personId)).run();
+      tx.delete(sessions)
+        .where(and(eq(sessions.personId, actor.personId), ne(sessions.id, sessionId)))
+        .run();
+    },
+    { behavior: "immediate" },
+  );
 }

@@ -95,7 +95,8 @@ function range(quantity: RangeQuantity, value: number, typed: string): SearchTer
 
 function unitOf(word: string, isExact: boolean): RangeQuantity | undefined {
   const bare = searchWord(word);
-  if (unitWords[bare] || isExact || bare.length < 5 || /\d/.test(bare)) return unitWords[bare];
+  if (Object.hasOwn(unitWords, bare)) return unitWords[bare];
+  if (isExact || bare.length < 5 || /\d/.test(bare)) return undefined;
   const nearest = unitFuse.search(bare, { limit: 1 })[0];
   return nearest && unitWords[nearest.item];
 }

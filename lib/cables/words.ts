@@ -44,7 +44,7 @@ export function searchWord(typed: string): string {
     .toLowerCase()
     .replace(/[Ωω\u2126]/g, "ohm")
     .replace(/[^\p{L}\p{N}]/gu, "");
-  return synonyms[bare] ?? bare;
+  return Object.hasOwn(synonyms, bare) ? (synonyms[bare] ?? bare) : bare;
 }
 
 /** Words of a text: each part alone and each hyphenated compound joined, so that "low-loss" answers to low, loss, lowloss. */

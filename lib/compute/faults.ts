@@ -1,7 +1,19 @@
 /** What the schema cannot see: whether the parts of a request go together. Each fault at its path. Pure. */
 import type { Plane, Termination } from "@/lib/line/element";
 import type { CircuitFault } from "@/lib/runs/circuit";
-import type { Circuit } from "@/lib/runs/circuit-schema";
+import type { MatchesRequest } from "@/lib/compute/schema";
+import type { Circuit, Element } from "@/lib/runs/circuit-schema";
+
+/** The most one request may ask, so that a single one never holds everybody up: seconds of work, as measured. */
+const mostLinePoints = 2_500_000;
+const mostPlanePoints = 500_000;
+const mostMatchWork = 2_500;
+const toleranceWork = 8;
+
+/** How many lines are computed for some elements: each branch of lines in parallel is one. */
+function linesIn(elements: readonly Element[]): number {
+  return elements.reduce((sum, element) => sum + (element.kind === "parallel" ? element.branches.length : 1), 0);
+}
 
 /** Whether a source has a resistance at every frequency. */
 function hasResistance(source: Termination): boolean {
@@ -53,6 +65,16 @@ export function sweepFaults(circuit: Circuit, frequencies: number[], planes: Pla
       path: "circuit.referenceOhm",
       message: "The source has no resistance, so a reference is needed for reflections.",
     });
+  if (linesIn(circuit.elements) * frequencies.length > mostLinePoints)
+    faults.push({
+      path: "circuit.elements",
+      message: `${linesIn(circuit.elements)} lines at ${frequencies.length} frequencies is too much for one request; ask for fewer frequencies.`,
+    });
+  if (planes.length * frequencies.length > mostPlanePoints)
+    faults.push({
+      path: "planes",
+      message: `${planes.length} planes at ${frequencies.length} frequencies is too much for one request; ask for fewer of either.`,
+    });
   planes.forEach((plane, i) => {
     if ("beforeElement" in plane && plane.beforeElement >= circuit.elements.length)
       faults.push({
@@ -61,6 +83,22 @@ export function sweepFaults(circuit: Circuit, frequencies: number[], planes: Pla
       });
   });
   return faults;
+}
+
+/**
+ * @param request - as asked
+ * @param lines - how many lines there are to cut from
+ */
+export function matchesFaults({ place, tolerance }: MatchesRequest, lines: number): CircuitFault[] {
+  const behind = linesIn(place?.behind ?? []);
+  if (lines * (1 + behind) * (tolerance ? toleranceWork : 1) <= mostMatchWork) return [];
+  const path = behind > 0 ? "place.behind" : "lines";
+  return [
+    {
+      path,
+      message: `${lines} lines to cut from with ${behind} lines behind the network is too much for one request; name fewer lines to cut from.`,
+    },
+  ];
 }
 
 /** @param frequency - hertz */

@@ -5,7 +5,7 @@ import { requirePermission } from "@/lib/auth/permission";
 import type { Cable } from "@/lib/cables/schema";
 import { cableFinder, listUsableCables } from "@/lib/cables/service";
 import { lineAnswer, matchesAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
-import { profileFaults, sweepFaults } from "@/lib/compute/faults";
+import { matchesFaults, profileFaults, sweepFaults } from "@/lib/compute/faults";
 import { frequenciesOf } from "@/lib/compute/frequencies";
 import type { lineRequestSchema, MatchesRequest, ProfileRequest, SweepRequest } from "@/lib/compute/schema";
 import { AppError } from "@/lib/http/errors";
@@ -120,6 +120,7 @@ export function computeMatches(actor: Actor, request: MatchesRequest) {
   const { load, targetOhm, designHz, bandHz, returnLossDb, methods, partQ, tolerance, temperatureC } = request;
   const lines = linesToCutFrom(actor, request);
   const [feeder] = request.feeder ? linesOf(actor, [{ path: "feeder", ref: request.feeder }]) : [];
+  refuse(matchesFaults(request, lines.length));
   const behind = request.place && resolved(actor, request.place.behind, "place.behind");
   const asked = { load, targetOhm, designHz, bandHz, returnLossDb, methods, partQ, tolerance, temperatureC };
   return computed(() => matchesAnswer({ ...asked, lines, feeder, behind }));

@@ -3,6 +3,8 @@
  * this file does not load mathjs, so that a page which only shows figures stays light.
  */
 
+import { withPowerOfTen } from "@/lib/format/power-of-ten";
+
 /** A figure ready to show: the digits, the unit beside them, and the unit in words for a screen reader. */
 export interface Figure {
   digits: string;
@@ -13,27 +15,29 @@ export interface Figure {
 export const notComputed = "–";
 const minus = "\u2212";
 const thinSpace = "\u202f";
+const mostDecimals = 20;
 
 /** Digits with a true minus and thin spaces between thousands; a dash for what has no finite number. */
 export function digits(value: number | null | undefined, decimals: number): string {
   if (value == null || !Number.isFinite(value)) return notComputed;
-  const rounded = Math.abs(value).toFixed(decimals);
+  const rounded = Math.abs(value).toFixed(Math.min(decimals, mostDecimals));
   const [whole = "0", fraction] = rounded.split(".");
   const grouped = whole.length > 4 ? whole.replace(/\B(?=(\d{3})+$)/g, thinSpace) : whole;
   const isZero = Number(rounded) === 0;
   return `${value < 0 && !isZero ? minus : ""}${grouped}${fraction ? `.${fraction}` : ""}`;
 }
 
-/** Decimals that leave `significant` digits of a value. */
+/** Decimals that leave `significant` digits of a value; never more than can be read. */
 export function decimalsFor(value: number, significant: number): number {
   if (!Number.isFinite(value) || value === 0) return 0;
   const magnitude = Math.floor(Math.log10(Math.abs(Number(value.toPrecision(significant)))));
-  return Math.max(0, significant - 1 - magnitude);
+  return Math.min(mostDecimals, Math.max(0, significant - 1 - magnitude));
 }
 
-/** Digits with a fixed count of significant figures. */
+/** Digits with a fixed count of significant figures; what is too small to write out is written with a power of ten. */
 export function significantDigits(value: number | null | undefined, significant: number): string {
   if (value == null || !Number.isFinite(value)) return notComputed;
+  if (value !== 0 && Math.abs(value) < 1e-12) return withPowerOfTen(value, significant);
   return digits(value, decimalsFor(value, significant));
 }
 
@@ -148,7 +152,7 @@ export function decibels(value: number | null | undefined, decimals = 2): Figure
   return { digits: digits(value, decimals), unit: "dB", spoken: "decibels" };
 }
 
-/** Metres to the centimetre, as on the strip. */
+/** Metres to the centimetre. */
 export function metres(value: number | null | undefined, decimals = 2): Figure {
   return { digits: digits(value, decimals), unit: "m", spoken: "metres" };
 }

@@ -2,13 +2,23 @@
  * Changes of a run that the server does not have yet, kept in the browser so that a closed tab or a dead battery loses
  * nothing. One person's in one browser; signing out forgets them.
  */
+import { z } from "zod";
 import type { RunDraft } from "@/lib/runs/edit";
 
 export interface Held {
   draft: RunDraft;
+  /** what the draft was made from, so that what others changed meanwhile stays theirs */
+  base: RunDraft;
   /** the version the draft was made from */
   version: number;
 }
+
+/** As far as a draft must be whole for a page to draw it; the server checks the rest when it is sent. */
+const draftSchema = z.looseObject({
+  name: z.string(),
+  circuit: z.looseObject({ elements: z.array(z.looseObject({ kind: z.string() })) }),
+});
+const heldSchema = z.looseObject({ draft: draftSchema, base: draftSchema, version: z.number() });
 
 const prefix = "ropewalk-held:";
 
@@ -20,8 +30,8 @@ export function heldKey(personId: string, runId: string): string {
 export function readHeld(key: string): Held | null {
   try {
     const held: unknown = JSON.parse(window.localStorage.getItem(key) ?? "null");
-    const isHeld = typeof held === "object" && held !== null && "draft" in held && "version" in held;
-    return isHeld ? (held as Held) : null;
+    const read = heldSchema.safeParse(held);
+    return read.success ? (held as Held) : null;
   } catch {
     return null;
   }
@@ -42,6 +52,8 @@ export function countHeld(personId: string): number {
   return Object.keys(window.localStorage).filter((key) => key.startsWith(`${prefix}${personId}:`)).length;
 }
 
-export function forgetHeld(): void {
-  for (const key of Object.keys(window.localStorage)) if (key.startsWith(prefix)) window.localStorage.removeItem(key);
+/** Forgets one person's changes; whoever else uses this browser keeps theirs. */
+export function forgetHeld(personId: string): void {
+  for (const key of Object.keys(window.localStorage))
+    if (key.startsWith(`${prefix}${personId}:`)) window.localStorage.removeItem(key);
 }

@@ -93,28 +93,31 @@ function nextNumber(teamId: string): string {
  */
 export function createRun(actor: Actor, input: NewRun): Run {
   requirePermission(actor, "runs.write");
-  return database().transaction((tx) => {
-    const pinned = pinCables(actor, input.circuit, []);
-    const now = new Date().toISOString();
-    const id = crypto.randomUUID();
-    tx.insert(runs)
-      .values({
-        ...input,
-        id,
-        teamId: actor.teamId,
-        number: nextNumber(actor.teamId),
-        state: "draft",
-        ownerId: actor.personId,
-        designHz: designFrequency(input),
-        version: 1,
-        createdAt: now,
-        changedAt: now,
-        changedById: actor.personId,
-      })
-      .run();
-    replacePinned(id, pinned);
-    return keepRevision(actor, getRun(actor, id), "Started the run.");
-  });
+  return database().transaction(
+    (tx) => {
+      const pinned = pinCables(actor, input.circuit, []);
+      const now = new Date().toISOString();
+      const id = crypto.randomUUID();
+      tx.insert(runs)
+        .values({
+          ...input,
+          id,
+          teamId: actor.teamId,
+          number: nextNumber(actor.teamId),
+          state: "draft",
+          ownerId: actor.personId,
+          designHz: designFrequency(input),
+          version: 1,
+          createdAt: now,
+          changedAt: now,
+          changedById: actor.personId,
+        })
+        .run();
+      replacePinned(id, pinned);
+      return keepRevision(actor, getRun(actor, id), "Started the run.");
+    },
+    { behavior: "immediate" },
+  );
 }
 
 /** The refusal to write over what somebody else has saved; it carries the run as it now stands. */
@@ -139,20 +142,23 @@ function getChangeable(actor: Actor, runId: string, version: number): Run {
  * @throws AppError `not_found`, `forbidden`, `stale` with the current run, `conflict` once issued, `invalid_input`
  */
 export function updateRun(actor: Actor, runId: string, version: number, change: RunChange): Run {
-  return database().transaction((tx) => {
-    const before = getChangeable(actor, runId, version);
-    const pinned = pinCables(actor, change.circuit ?? before.circuit, before.pinned);
-    const sentence = saveSentence(before, { ...before, ...change });
-    if (sentence === undefined) return before;
-    const changedAt = new Date().toISOString();
-    const stamp = { version: version + 1, changedAt, changedById: actor.personId };
-    tx.update(runs)
-      .set({ ...change, ...stamp })
-      .where(eq(runs.id, runId))
-      .run();
-    replacePinned(runId, pinned);
-    return keepRevision(actor, getRun(actor, runId), sentence);
-  });
+  return database().transaction(
+    (tx) => {
+      const before = getChangeable(actor, runId, version);
+      const pinned = pinCables(actor, change.circuit ?? before.circuit, before.pinned);
+      const sentence = saveSentence(before, { ...before, ...change });
+      if (sentence === undefined) return before;
+      const changedAt = new Date().toISOString();
+      const stamp = { version: version + 1, changedAt, changedById: actor.personId };
+      tx.update(runs)
+        .set({ ...change, ...stamp })
+        .where(eq(runs.id, runId))
+        .run();
+      replacePinned(runId, pinned);
+      return keepRevision(actor, getRun(actor, runId), sentence);
+    },
+    { behavior: "immediate" },
+  );
 }
 
 /**
@@ -160,9 +166,12 @@ export function updateRun(actor: Actor, runId: string, version: number, change: 
  * @throws AppError as `updateRun`
  */
 export function deleteRun(actor: Actor, runId: string, version: number): void {
-  database().transaction((tx) => {
-    getChangeable(actor, runId, version);
-    const removedAt = new Date().toISOString();
-    tx.update(runs).set({ removedAt, removedById: actor.personId }).where(eq(runs.id, runId)).run();
-  });
+  database().transaction(
+    (tx) => {
+      getChangeable(actor, runId, version);
+      const removedAt = new Date().toISOString();
+      tx.update(runs).set({ removedAt, removedById: actor.personId }).where(eq(runs.id, runId)).run();
+    },
+    { behavior: "immediate" },
+  );
 }

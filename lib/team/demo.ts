@@ -7,8 +7,15 @@ export interface DemoSignIn {
   role: string;
 }
 
-function isDemo(): boolean {
-  return process.env.DEMO !== "off";
+/**
+ * Whether this is the demo: DEMO unset or "on" is, "off" is not.
+ * @throws Error for anything else, so that a slip of the pen never opens the demo's public passwords
+ */
+export function isDemo(): boolean {
+  const said = process.env.DEMO ?? "";
+  if (said === "" || said === "on") return true;
+  if (said === "off") return false;
+  throw new Error(`DEMO is "on" or "off", not "${said}".`);
 }
 
 /** The demo's people, or null outside the demo. */

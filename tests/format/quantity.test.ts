@@ -2,6 +2,7 @@ import { expect, test } from "vitest";
 import {
   cutLength,
   decibels,
+  decimalsFor,
   digits,
   frequency,
   impedance,
@@ -9,6 +10,7 @@ import {
   metres,
   ratio,
   scaled,
+  significantDigits,
   spoken,
 } from "@/lib/format/quantity";
 
@@ -69,4 +71,15 @@ test("VSWR beyond a hundred says so instead of giving digits", () => {
 
 test("a screen reader hears the unit in words", () => {
   expect(spoken(metres(38.6))).toBe("38.60 metres");
+});
+
+test("every finite number can be written, however small or large", () => {
+  for (let power = -323; power <= 308; power++)
+    for (const value of [Number(`1e${power}`), Number(`-7.77e${power}`)]) {
+      expect(significantDigits(value, 4)).not.toMatch(/NaN|Infinity/);
+      expect(digits(value, 3)).not.toMatch(/NaN|Infinity/);
+      expect(scaled("power", value).digits).not.toMatch(/NaN|Infinity/);
+    }
+  expect(significantDigits(1.234e-110, 3)).toBe("1.23×10⁻¹¹⁰");
+  expect(Number.isFinite(decimalsFor(5e-324, 4))).toBe(true);
 });

@@ -16,3 +16,8 @@ test("outside the demo nobody's address and no password is given away", () => {
   expect(demoSignIns()).toBeNull();
   expect(demoPassword()).toBeNull();
 });
+
+test.each(["OFF", "false", "0", " off"])("DEMO=%s is a slip of the pen, and opens nothing", (said) => {
+  vi.stubEnv("DEMO", said);
+  expect(() => demoPassword()).toThrow(/"on" or "off"/);
+});

@@ -23,29 +23,32 @@ export function createDraft(actor: Actor, input: NewCable): Cable {
     throw new AppError("invalid_input", "The entry was not added.", {
       model: ["These values give no finite impedance, velocity or loss."],
     });
-  return database().transaction((tx) => {
-    const isTaken = tx
-      .select({ id: cables.id })
-      .from(cables)
-      .where(and(eq(cables.teamId, actor.teamId), eq(cables.designation, designation)))
-      .get();
-    if (isTaken)
-      throw new AppError("conflict", `The catalogue already has ${designation}.`, {
-        designation: ["Already in the catalogue."],
-      });
-    const id = crypto.randomUUID();
-    const createdAt = new Date().toISOString();
-    tx.insert(cables).values({ id, teamId: actor.teamId, designation, aliases, currentRevision: 1, createdAt }).run();
-    tx.insert(cableRevisions)
-      .values({
-        ...{ cableId: id, revision: 1, state: "draft", reason: "First entry.", authorId: actor.personId, createdAt },
-        ...{ name, family, model, construction, build, figures, limits },
-        ...derived,
-        words: cableWords(input),
-      })
-      .run();
-    return getCable(actor, id);
-  });
+  return database().transaction(
+    (tx) => {
+      const isTaken = tx
+        .select({ id: cables.id })
+        .from(cables)
+        .where(and(eq(cables.teamId, actor.teamId), eq(cables.designation, designation)))
+        .get();
+      if (isTaken)
+        throw new AppError("conflict", `The catalogue already has ${designation}.`, {
+          designation: ["Already in the catalogue."],
+        });
+      const id = crypto.randomUUID();
+      const createdAt = new Date().toISOString();
+      tx.insert(cables).values({ id, teamId: actor.teamId, designation, aliases, currentRevision: 1, createdAt }).run();
+      tx.insert(cableRevisions)
+        .values({
+          ...{ cableId: id, revision: 1, state: "draft", reason: "First entry.", authorId: actor.personId, createdAt },
+          ...{ name, family, model, construction, build, figures, limits },
+          ...derived,
+          words: cableWords(input),
+        })
+        .run();
+      return getCable(actor, id);
+    },
+    { behavior: "immediate" },
+  );
 }
 
 /**
@@ -54,17 +57,20 @@ export function createDraft(actor: Actor, input: NewCable): Cable {
  */
 export function deleteDraft(actor: Actor, cableId: string): void {
   requirePermission(actor, "cables.propose");
-  database().transaction((tx) => {
-    const cable = getCable(actor, cableId);
-    const revision = tx
-      .select({ authorId: cableRevisions.authorId })
-      .from(cableRevisions)
-      .where(and(eq(cableRevisions.cableId, cableId), eq(cableRevisions.revision, cable.revision)))
-      .get();
-    if (cable.state !== "draft" || cable.revision !== 1)
-      throw new AppError("conflict", "Only a draft that was never submitted can be taken back.");
-    if (revision?.authorId !== actor.personId && !may(actor, "team.tidy"))
-      throw new AppError("forbidden", "A draft is taken back by its author, a librarian or an admin.");
-    tx.delete(cables).where(eq(cables.id, cableId)).run();
-  });
+  database().transaction(
+    (tx) => {
+      const cable = getCable(actor, cableId);
+      const revision = tx
+        .select({ authorId: cableRevisions.authorId })
+        .from(cableRevisions)
+        .where(and(eq(cableRevisions.cableId, cableId), eq(cableRevisions.revision, cable.revision)))
+        .get();
+      if (cable.state !== "draft" || cable.revision !== 1)
+        throw new AppError("conflict", "Only a draft that was never submitted can be taken back.");
+      if (revision?.authorId !== actor.personId && !may(actor, "team.tidy"))
+        throw new AppError("forbidden", "A draft is taken back by its author, a librarian or an admin.");
+      tx.delete(cables).where(eq(cables.id, cableId)).run();
+    },
+    { behavior: "immediate" },
+  );
 }

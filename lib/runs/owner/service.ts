@@ -38,22 +38,25 @@ export function mayHandOver(actor: Actor, run: Run): boolean {
  */
 export function handOver(actor: Actor, runId: string, version: number, ownerId: string): Run {
   requirePermission(actor, "runs.write");
-  return database().transaction((tx) => {
-    const before = getRun(actor, runId);
-    if (!mayHandOver(actor, before))
-      throw new AppError("forbidden", "A run is handed over by its owner, a librarian or an admin.");
-    if (before.version !== version) throw staleRun(before);
-    const owner = listPossibleOwners(actor).find(({ personId }) => personId === ownerId);
-    if (!owner)
-      throw new AppError("invalid_input", "The run was not handed over.", {
-        ownerId: ["Nobody of the team with this id may own a run."],
-      });
-    if (owner.personId === before.ownerId) return before;
-    const changedAt = new Date().toISOString();
-    tx.update(runs)
-      .set({ ownerId: owner.personId, version: version + 1, changedAt, changedById: actor.personId })
-      .where(eq(runs.id, runId))
-      .run();
-    return keepRevision(actor, getRun(actor, runId), `Handed over from ${before.ownerName} to ${owner.name}.`);
-  });
+  return database().transaction(
+    (tx) => {
+      const before = getRun(actor, runId);
+      if (!mayHandOver(actor, before))
+        throw new AppError("forbidden", "A run is handed over by its owner, a librarian or an admin.");
+      if (before.version !== version) throw staleRun(before);
+      const owner = listPossibleOwners(actor).find(({ personId }) => personId === ownerId);
+      if (!owner)
+        throw new AppError("invalid_input", "The run was not handed over.", {
+          ownerId: ["Nobody of the team with this id may own a run."],
+        });
+      if (owner.personId === before.ownerId) return before;
+      const changedAt = new Date().toISOString();
+      tx.update(runs)
+        .set({ ownerId: owner.personId, version: version + 1, changedAt, changedById: actor.personId })
+        .where(eq(runs.id, runId))
+        .run();
+      return keepRevision(actor, getRun(actor, runId), `Handed over from ${before.ownerName} to ${owner.name}.`);
+    },
+    { behavior: "immediate" },
+  );
 }
