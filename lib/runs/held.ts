@@ -2,7 +2,6 @@
  * Changes of a run that the server does not have yet, kept in the browser so that a closed tab or a dead battery loses
  * nothing. One person's in one browser; signing out forgets them.
  */
-import { z } from "zod";
 import type { RunDraft } from "@/lib/runs/edit";
 
 export interface Held {
@@ -13,12 +12,16 @@ export interface Held {
   version: number;
 }
 
-/** As far as a draft must be whole for a page to draw it; the server checks the rest when it is sent. */
-const draftSchema = z.looseObject({
-  name: z.string(),
-  circuit: z.looseObject({ elements: z.array(z.looseObject({ kind: z.string() })) }),
-});
-const heldSchema = z.looseObject({ draft: draftSchema, base: draftSchema, version: z.number() });
+/**
+ * Whether something is whole enough for a page to draw; the server checks the rest when it is sent. By hand, since every
+ * page loads this file and the schemas would come with it.
+ */
+function isDraft(value: unknown): boolean {
+  if (typeof value !== "object" || value === null || !("name" in value) || !("circuit" in value)) return false;
+  const { name, circuit } = value;
+  const isCircuit = typeof circuit === "object" && circuit !== null && "elements" in circuit;
+  return typeof name === "string" && isCircuit && Array.isArray(circuit.elements);
+}
 
 const prefix = "ropewalk-held:";
 
@@ -30,8 +33,9 @@ export function heldKey(personId: string, runId: string): string {
 export function readHeld(key: string): Held | null {
   try {
     const held: unknown = JSON.parse(window.localStorage.getItem(key) ?? "null");
-    const read = heldSchema.safeParse(held);
-    return read.success ? (held as Held) : null;
+    if (typeof held !== "object" || held === null || !("draft" in held && "base" in held && "version" in held))
+      return null;
+    return isDraft(held.draft) && isDraft(held.base) ? (held as Held) : null;
   } catch {
     return null;
   }
