@@ -4,7 +4,7 @@
  */
 import { alike } from "@/lib/runs/alike";
 import type { Element, LineRef } from "@/lib/runs/circuit-schema";
-import type { Run, RunChange } from "@/lib/runs/schema";
+import type { RunChange } from "@/lib/runs/schema";
 
 export type NewKind = Element["kind"];
 
@@ -70,7 +70,7 @@ export function split(elements: readonly Element[], index: number, at?: number):
 /** The part of a run that people edit. */
 export type RunDraft = Required<RunChange>;
 
-export function draftOf(run: Run): RunDraft {
+export function draftOf(run: RunDraft): RunDraft {
   const {
     name,
     site,

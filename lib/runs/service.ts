@@ -9,6 +9,7 @@ import { requirePermission } from "@/lib/auth/permission";
 import { visibleRuns } from "@/lib/auth/visibility/service";
 import { AppError } from "@/lib/http/errors";
 import { entityTag } from "@/lib/http/etag";
+import { draftOf } from "@/lib/runs/edit";
 import { listPinned, pinCables, replacePinned } from "@/lib/runs/cables/service";
 import { saveSentence } from "@/lib/runs/revision";
 import type { NewRun, Run, RunChange } from "@/lib/runs/schema";
@@ -31,24 +32,9 @@ export function getRun(actor: Actor, runId: string): Run {
     .get();
   if (!row) throw new AppError("not_found", "There is no such run.");
   const { ownerName, changedByName } = row;
-  const { id, number, name, site, folder, state, condition, ownerId, circuit, temperatureC, designHz } = row.run;
-  const { availablePowerW, bandHz, targets, sourceName, loadName, version, changedAt } = row.run;
+  const { id, number, state, condition, ownerId, version, changedAt } = row.run;
   return {
-    ...{
-      id,
-      number,
-      name,
-      site,
-      folder,
-      circuit,
-      temperatureC,
-      designHz,
-      availablePowerW,
-      bandHz,
-      targets,
-      sourceName,
-      loadName,
-    },
+    ...{ id, number, ...draftOf(row.run) },
     ...{ state, condition, ownerId, ownerName, version, changedAt, changedByName },
     pinned: listPinned(id),
   };

@@ -185,6 +185,15 @@ describe("/compute/sweep", () => {
     const result = await answer(sweep, { circuit: circuit(elements), ...span }, sweepAnswerSchema);
     expect(result.returnLossDb).toHaveLength(10_001);
   });
+
+  test("that would hold everybody up is refused where it is too much", async () => {
+    const span = { startHz: 1e6, stopHz: 1e9, points: 10_001, spacing: "log" };
+    const branches = Array.from({ length: 20 }, () => ({ line: { cableId: "feeder" }, lengthM: 3 }));
+    const wide = circuit(Array.from({ length: 13 }, () => ({ kind: "parallel", branches })));
+    expect(await pathsOf(await asked(sweep, { circuit: wide, ...span }))).toEqual(["circuit.elements"]);
+    const planes = Array.from({ length: 50 }, () => ({ at: "load" }));
+    expect(await pathsOf(await asked(sweep, { circuit: circuit([cable(3)]), planes, ...span }))).toEqual(["planes"]);
+  });
 });
 
 describe("/compute/profile", () => {
@@ -263,6 +272,12 @@ describe("/compute/matches", () => {
       if (designReturnLossDb === null) expect(seen, title).toBeGreaterThan(150);
       else expect(seen, title).toBeCloseTo(designReturnLossDb, 4);
     }
+  });
+
+  test("of many cables before a long run is refused where it is too much", async () => {
+    const lines = Array.from({ length: 50 }, () => ({ cableId: "feeder" }));
+    const much = { ...job, lines, place: { behind: Array.from({ length: 60 }, () => cable(1)) } };
+    expect(await pathsOf(await asked(matches, much))).toEqual(["place.behind"]);
   });
 
   test("does the methods asked only, and says why one cannot work", async () => {

@@ -1,36 +1,10 @@
 import fc from "@/tests/support/property";
 import { describe, expect, test } from "vitest";
 import { modelFromNominal } from "@/lib/line/cable";
-import type { Circuit, Element, Plane, Termination } from "@/lib/line/element";
-import { sweep, type Sweep } from "@/lib/line/run";
+import type { Element, Plane } from "@/lib/line/element";
+import { sweep } from "@/lib/line/run";
 import { anyElement, anyFrequency, anyRun } from "@/tests/support/arbitrary-run";
-
-const rope = modelFromNominal({
-  z0: 50,
-  velocityFactor: 0.66,
-  lossTangent: 3e-4,
-  conductors: [{ form: "round", r0OhmPerM: 0.05, skinCornerRadPerS: 2.4e5 }],
-});
-const cable = (lengthM: number): Element => ({ kind: "cable", line: { model: rope }, lengthM });
-const ohm = (reOhm: number, imOhm = 0): Termination => ({ kind: "constant", reOhm, imOhm });
-const run = (elements: Element[], load: Termination = ohm(22, -35), source: Termination = ohm(50)): Circuit => ({
-  source: source as Circuit["source"],
-  elements,
-  load,
-});
-
-const numbers = (result: Sweep) => [
-  ...result.inputImpedance.re,
-  ...result.inputImpedance.im,
-  ...result.returnLossDb,
-  ...result.transducerLossDb,
-  ...result.matchedLossDb,
-  ...result.mismatchLossDb,
-  ...result.extraLossDb,
-  ...result.groupDelayS,
-  ...result.loadVoltage.re,
-  ...result.elementLossDb.flatMap((each) => [...each]),
-];
+import { cable, numbers, ohm, run } from "@/tests/support/lossy-run";
 
 test("a passive run never reflects more than all, and its losses add up", () => {
   fc.assert(
