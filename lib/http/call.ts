@@ -43,17 +43,19 @@ export async function call<T>(path: string, { method = "GET", body, ifMatch, sig
   const headers: Record<string, string> = {};
   if (body !== undefined) headers["Content-Type"] = "application/json";
   if (ifMatch !== undefined) headers["If-Match"] = ifMatch;
+  // No answer, or one cut off on its way.
+  const broken = (error: unknown): never => {
+    if (signal?.aborted) throw error;
+    throw new AwayError();
+  };
   const response = await fetch(`/api/v1${path}`, {
     method,
     headers,
     body: body === undefined ? undefined : JSON.stringify(body),
     signal,
-  }).catch((error: unknown) => {
-    if (signal?.aborted) throw error;
-    throw new AwayError();
-  });
+  }).catch(broken);
   const isJson = /json/.test(response.headers.get("Content-Type") ?? "");
-  const answer: unknown = isJson ? await response.json() : undefined;
+  const answer: unknown = isJson ? await response.json().catch(broken) : undefined;
   if (response.ok) return answer as T;
   throw new ProblemError(
     (answer as Problem | undefined) ?? {
