@@ -27,6 +27,8 @@ export function CableFinder({ current, take, besides }: Props) {
     placeholderData: (before) => before,
   });
   const items = list.data?.items ?? [];
+  // What was found before stands there greyed until the answer comes, and cannot be taken for it.
+  const isStale = list.isPlaceholderData;
 
   function step(event: KeyboardEvent) {
     const by = { ArrowDown: 1, ArrowUp: -1 }[event.key];
@@ -34,6 +36,7 @@ export function CableFinder({ current, take, besides }: Props) {
     const to = stops[stops.indexOf(event.target as HTMLElement) + (by ?? 0)];
     if (!by || !to) return;
     event.preventDefault();
+    if (isStale) return;
     to.focus();
   }
   return (
@@ -61,10 +64,16 @@ export function CableFinder({ current, take, besides }: Props) {
           {besides.label}
         </button>
       )}
-      <ul className="max-h-72 overflow-y-auto">
+      <ul aria-busy={isStale} className="max-h-72 overflow-y-auto aria-busy:opacity-60">
         {items.map((item) => (
           <li key={item.id}>
-            <button type="button" aria-current={item.id === current} onClick={() => take(item.id)} className={row}>
+            <button
+              type="button"
+              disabled={isStale}
+              aria-current={item.id === current}
+              onClick={() => take(item.id)}
+              className={row}
+            >
               <FoundCable item={item} />
             </button>
           </li>
