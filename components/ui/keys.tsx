@@ -37,9 +37,9 @@ function isTaken(event: KeyboardEvent): boolean {
   const { target } = event;
   if (event.defaultPrevented || event.ctrlKey || event.metaKey || event.altKey || !(target instanceof HTMLElement))
     return true;
-  return (
-    target.matches("input, select, textarea, [contenteditable], [role=slider]") || target.closest("dialog") !== null
-  );
+  // What had the focus in a dialog keeps it for a moment after the dialog has closed.
+  const dialog = target.closest("dialog");
+  return dialog?.open ?? target.matches("input, select, textarea, [contenteditable], [role=slider]");
 }
 
 /** The keys of the page: those that views inside add, and the list of them on “?”. */
@@ -123,6 +123,8 @@ function KeyList({ isOpen, close, bindings, isOff }: KeyListProps) {
       ref={dialog}
       aria-label="Keys"
       onClose={close}
+      // The browser closes a dialog on Esc a moment later; a key pressed right after would still belong to it.
+      onKeyDown={({ key, currentTarget }) => key === "Escape" && currentTarget.close()}
       className="w-[min(30rem,calc(100vw-2rem))] rounded border border-ink bg-paper p-5"
     >
       <h2>Keys</h2>
