@@ -5,6 +5,7 @@ import type { CableLine } from "@/lib/cables/line";
 import { draftOf, edited, faultsAfter, history, redone, undone, type Faults, type RunDraft } from "@/lib/runs/edit";
 import { heldKey } from "@/lib/runs/held";
 import type { Run } from "@/lib/runs/schema";
+import { useNewerRun } from "@/components/runs/use-newer-run";
 import { useSaving, type Saving } from "@/components/runs/use-saving";
 
 /** What is selected on the strip: an element by its place, or an end. */
@@ -78,7 +79,13 @@ export function RunEditorProvider({ run, lines: given, cannotEditBecause, people
     canSave: canEdit && isReadable,
     key: heldKey(people.personId, run.id),
     take: (next) => setSteps((before) => edited(before, next, null)),
+    restart: (next) => {
+      setSteps(history(next));
+      setLines((known) => new Map([...known, ...given.map((line): [string, CableLine] => [line.cableId, line])]));
+    },
   });
+
+  useNewerRun(run);
 
   const setFault = (path: string, fault: Faults[string] | null) =>
     setFaults((before) => {

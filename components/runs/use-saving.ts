@@ -1,6 +1,7 @@
 "use client";
 
 import { useEffect, useRef, useState } from "react";
+import { useSendingOnLeave, type OnServer } from "@/components/runs/use-sending-on-leave";
 import { AwayError, call, ProblemError } from "@/lib/http/call";
 import { changeBetween, draftOf, type RunDraft } from "@/lib/runs/edit";
 import { hold, readHeld } from "@/lib/runs/held";
@@ -40,43 +41,51 @@ interface Given {
   canSave: boolean;
   /** where changes are kept that the server does not have */
   key: string;
-  /** puts another draft on the screen */
+  /** puts another draft on the screen, as an edit that can be undone */
   take: (draft: RunDraft) => void;
+  /** puts a newer run in place of the one that was opened, with nothing to undo */
+  restart: (draft: RunDraft) => void;
 }
 
 /**
  * Saves a draft a moment after its last edit, one request at a time, each against the version it was made from, so that
  * two people never overwrite each other unseen. What is not saved is kept in the browser and sent later.
  */
-export function useSaving({ opened, draft, canSave, key, take }: Given): UseSaving {
+export function useSaving({ opened, draft, canSave, key, take, restart }: Given): UseSaving {
   const [saved, setSaved] = useState(opened);
   // What the server last took, as it was sent: how the server spells it back never counts as a change.
   const [sent, setSent] = useState(() => draftOf(opened));
   const [saving, setSaving] = useState<Saving>({ kind: "saved" });
   const [attempt, setAttempt] = useState(0);
-  const isUnderWay = useRef(false);
+  const underWay = useRef<Promise<OnServer | null> | null>(null);
   const change = changeBetween(sent, draft);
   const isChanged = Object.keys(change).length > 0;
   const isStuck = saving.kind === "conflict" || (saving.kind === "unsaved" && saving.draft === draft && attempt === 0);
   const isWaiting = canSave && isChanged && !isStuck;
 
   useEffect(() => {
-    if (!isWaiting || isUnderWay.current) return;
-    const timer = setTimeout(() => void save(), attempt > 0 ? 0 : pause);
+    if (!isWaiting || underWay.current) return;
+    const timer = setTimeout(
+      () => {
+        underWay.current = save();
+      },
+      attempt > 0 ? 0 : pause,
+    );
     return () => clearTimeout(timer);
 
-    async function save() {
-      isUnderWay.current = true;
+    async function save(): Promise<OnServer | null> {
       setSaving({ kind: "saving" });
       try {
-        const ifMatch = `"${saved.version}"`;
-        setSaved(await call<Run>(`/runs/${saved.id}`, { method: "PATCH", body: change, ifMatch }));
+        const now = await saveChange(saved, change, draft);
+        setSaved(now);
         setSent(draft);
         setSaving({ kind: "saved" });
+        return { version: now.version, sent: draft };
       } catch (error) {
         setSaving(trouble(error, draft));
+        return null;
       } finally {
-        isUnderWay.current = false;
+        underWay.current = null;
         setAttempt(0);
       }
     }
@@ -84,7 +93,18 @@ export function useSaving({ opened, draft, canSave, key, take }: Given): UseSavi
     // eslint-disable-next-line react-hooks/exhaustive-deps
   }, [draft, sent, isWaiting, attempt]);
 
+  if (opened.version > saved.version && !isChanged && saving.kind === "saved") {
+    // The page was made anew with what others, or another tab, have saved since.
+    const newer = draftOf(opened);
+    setSaved(opened);
+    setSent(newer);
+    restart(newer);
+  }
   useKept({ opened, key, take, onConflict: () => setSaving({ kind: "conflict", theirs: opened }) });
+  useSendingOnLeave(
+    { runId: saved.id, key, draft, canSave: isWaiting, onServer: { version: saved.version, sent } },
+    underWay,
+  );
   useEffect(() => {
     if (canSave) hold(key, isChanged ? { draft, base: sent, version: saved.version } : null);
   }, [canSave, key, isChanged, draft, sent, saved.version]);
@@ -147,6 +167,17 @@ function useAskingBeforeLeaving(isChanged: boolean) {
     window.addEventListener("beforeunload", ask);
     return () => window.removeEventListener("beforeunload", ask);
   }, [isChanged]);
+}
+
+/** Sends a change. Where the answer to an earlier try was lost, the server may have it already: that is as good. */
+async function saveChange(saved: Run, body: Partial<RunDraft>, draft: RunDraft): Promise<Run> {
+  try {
+    return await call<Run>(`/runs/${saved.id}`, { method: "PATCH", body, ifMatch: `"${saved.version}"` });
+  } catch (error) {
+    const current = error instanceof ProblemError ? (error.problem.current as Run | undefined) : undefined;
+    if (current && Object.keys(changeBetween(draftOf(current), draft)).length === 0) return current;
+    throw error;
+  }
 }
 
 function trouble(error: unknown, draft: RunDraft): Saving {

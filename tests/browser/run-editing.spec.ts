@@ -119,3 +119,41 @@ test("When the server is away the work stays, says since when, and is saved on a
   await expect(page.getByText("Saved, revision 2")).toBeVisible();
   expect(await storedRun(page, address)).toMatchObject({ name: "Server away and back" });
 });
+
+test("A change followed at once by a link is saved; going back shows it, and typing goes on from there", async ({
+  page,
+}) => {
+  await signedIn(page, "ines.hartwell");
+  const address = await makeRun(page, "Leaving at once");
+  await page.goto(address);
+  await expect(page.getByText("Saved, revision 1")).toBeVisible();
+  await page.getByLabel("Name of the run").fill("Left at once");
+  await page.getByRole("navigation", { name: "Places" }).getByRole("link", { name: "Catalogue" }).click();
+  await expect(page).toHaveURL(/\/cables/);
+  await expect.poll(async () => (await storedRun(page, address)).name).toBe("Left at once");
+
+  await page.goBack();
+  await expect(page.getByLabel("Name of the run")).toHaveValue("Left at once");
+  await expect(page.getByText("Saved, revision 2")).toBeVisible();
+  await page.getByLabel("Name of the run").fill("Left and back");
+  await expect(page.getByText("Saved, revision 3")).toBeVisible();
+  await expect(page.getByRole("alertdialog")).toBeHidden();
+});
+
+test("A save whose answer is lost is not taken for somebody else's", async ({ page }) => {
+  await signedIn(page, "ines.hartwell");
+  const address = await makeRun(page, "Lost answer");
+  await page.goto(address);
+  await expect(page.getByText("Saved, revision 1")).toBeVisible();
+  let isLost = false;
+  await page.route("**/api/v1/runs/*", async (route) => {
+    if (route.request().method() !== "PATCH" || isLost) return route.continue();
+    isLost = true;
+    await route.fetch();
+    await route.abort();
+  });
+  await page.getByLabel("Name of the run").fill("Answer lost");
+  await page.getByRole("button", { name: "Try again" }).click();
+  await expect(page.getByText("Saved, revision 2")).toBeVisible();
+  await expect(page.getByRole("alertdialog")).toBeHidden();
+});
