@@ -28,6 +28,10 @@ export function openDatabase(file: string): Database {
   client.pragma("foreign_keys = ON");
   client.pragma("busy_timeout = 5000");
   client.pragma("cache_size = -32000"); // 32 MB
+  // SQLite's own lower() knows the letters of ASCII only.
+  client.function("lower_unicode", { deterministic: true }, (text) =>
+    typeof text === "string" ? text.toLowerCase() : text,
+  );
   // Counts the rows where nobody has counted them: without the counts SQLite overlooks the index made for searching.
   client.pragma("optimize = 0x10002");
   return drizzle(client);

@@ -123,7 +123,7 @@ export function StripDown({ pieces, source, load, scale, width, height, children
   const place = selected === null ? undefined : scale.places[selected];
   const line = { pieces, scale, selected, y: 0, mmToPx: thicknessScale(pieces) * 1.1 };
   return (
-    <div className="relative" style={{ height }}>
+    <div className="relative overflow-x-clip" style={{ height }}>
       <svg
         width="100%"
         height={height}

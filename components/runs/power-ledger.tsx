@@ -69,7 +69,7 @@ export function PowerLedger({ analysis, names, designHz, sourceName, loadName }:
         <tbody>
           {rows.map((row, i) => (
             <tr key={i}>
-              <RowHead>{row.name}</RowHead>
+              <RowHead className="wrap-anywhere">{row.name}</RowHead>
               <Cell isRight className="figures">
                 {row.lengthM === null ? "" : digits(row.lengthM, 2)}
               </Cell>
@@ -98,7 +98,7 @@ export function PowerLedger({ analysis, names, designHz, sourceName, loadName }:
         </tbody>
         <tfoot>
           <tr className="font-[640]">
-            <RowHead className="border-0">
+            <RowHead className="wrap-anywhere border-0">
               <b>
                 {sourceName} to {loadName}
               </b>

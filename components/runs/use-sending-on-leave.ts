@@ -27,7 +27,10 @@ interface Leaving {
  * Sends what waits when one leaves the run for another page of the product, rather than when it is opened next. What
  * cannot be sent stays kept in the browser.
  */
-export function useSendingOnLeave(leaving: Omit<Leaving, "underWay">, underWay: { current: Leaving["underWay"] }): void {
+export function useSendingOnLeave(
+  leaving: Omit<Leaving, "underWay">,
+  underWay: { current: Leaving["underWay"] },
+): void {
   const latest = useRef(leaving);
   useEffect(() => {
     latest.current = leaving;

@@ -15,6 +15,7 @@ export const statusOf = {
   precondition_required: 428,
   too_many_requests: 429,
   internal: 500,
+  busy: 503,
 } as const;
 
 export type ErrorCode = keyof typeof statusOf;
@@ -67,6 +68,7 @@ export const titleOf: Record<ErrorCode, string> = {
   precondition_required: "Precondition Required",
   too_many_requests: "Too Many Requests",
   internal: "Internal Server Error",
+  busy: "Service Unavailable",
 };
 
 export const problemSchema = z
@@ -106,9 +108,25 @@ export function problem(error: AppError): Response {
   });
 }
 
+/** Whether the database was held by somebody else for longer than it is waited for. */
+function isBusy(thrown: unknown): boolean {
+  return thrown instanceof Error && "code" in thrown && /^SQLITE_(BUSY|LOCKED)/.test(String(thrown.code));
+}
+
 /** Whatever was thrown, as an answer. What is not an `AppError` is a bug: it is logged and told as a fixed sentence. */
 export function problemOf(thrown: unknown): Response {
   if (thrown instanceof AppError) return problem(thrown);
+  if (isBusy(thrown))
+    return problem(
+      new AppError(
+        "busy",
+        "Somebody else is writing just now. Nothing was changed; try again in a moment.",
+        {},
+        {
+          headers: { "Retry-After": "5" },
+        },
+      ),
+    );
   console.error(thrown);
   return problem(new AppError("internal", "Something went wrong on our side. Nothing was changed."));
 }

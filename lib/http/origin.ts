@@ -41,7 +41,12 @@ export function refuseOtherPage(request: Request): void {
   if (isFromOwnPage(request) === false) throw new AppError("forbidden", "Sign in from this site.");
 }
 
-/** The network address a request came from: what the nearest proxy, or the server itself, says it is. */
+/**
+ * The network address a request came from. The server itself listens on this machine only, so whoever asks from elsewhere
+ * came through a proxy; what that proxy says (the last of `X-Forwarded-For`) counts only where `TRUST_PROXY` is on, since
+ * otherwise anybody may write that header.
+ */
 export function networkAddress(request: Request): string {
+  if (process.env.TRUST_PROXY !== "on") return "this machine";
   return request.headers.get("x-forwarded-for")?.split(",").at(-1)?.trim() || "unknown";
 }

@@ -341,6 +341,8 @@ describe("The list of runs", () => {
     expect((await list("q=100%20%25")).total).toBe(1);
     expect((await list("q=K_A")).total).toBe(1);
     expect((await list("q=pier%203&limit=1")).total).toBeGreaterThan(1);
+    expect((await list("q=%C3%B8st")).total).toBe(1);
+    expect((await list("q=%C3%98ST")).total).toBe(1);
     expect((await list("q=nothing%20like%20it")).items).toEqual([]);
   });
 

@@ -16,7 +16,7 @@ function found(text: string | undefined): SQL | undefined {
   if (!text) return undefined;
   const pattern = `%${text.toLowerCase().replaceAll(/[\\%_]/g, (character) => `\\${character}`)}%`;
   const columns = [runs.number, runs.name, runs.site, runs.folder];
-  return or(...columns.map((column) => sql`lower(${column}) like ${pattern} escape '\\'`));
+  return or(...columns.map((column) => sql`lower_unicode(${column}) like ${pattern} escape '\\'`));
 }
 
 // Times are ISO 8601 in one zone, so their order is that of the text.
