@@ -19,6 +19,7 @@ export default defineConfig({
           include: ["tests/**/*.test.ts"],
           exclude: ["tests/browser/**"],
           setupFiles: ["tests/setup.ts"],
+          execArgv: ["--import", path.join(root, "tests/support/threads.mjs")],
         },
       },
       {

@@ -10,9 +10,9 @@ export function refuse(faults: CircuitFault[]): void {
 }
 
 /** The engine refuses with a RangeError what no schema foresaw; for the caller that is input like any other. */
-export function computed<Answer>(compute: () => Answer): Answer {
+export async function computed<Answer>(answer: Promise<Answer>): Promise<Answer> {
   try {
-    return compute();
+    return await answer;
   } catch (error) {
     if (!(error instanceof RangeError)) throw error;
     throw new AppError("invalid_input", `This cannot be computed: ${error.message.replace(/^\w+: /, "")}.`);

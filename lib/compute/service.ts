@@ -3,7 +3,7 @@ import type { z } from "zod";
 import type { Actor } from "@/lib/auth/actor";
 import { requirePermission } from "@/lib/auth/permission";
 import { listUsableCables } from "@/lib/cables/service";
-import { lineAnswer, matchesAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
+import { computeApart } from "@/lib/compute/apart/compute-apart";
 import { matchesFaults, profileFaults, sweepFaults } from "@/lib/compute/faults";
 import { frequenciesOf } from "@/lib/compute/frequencies";
 import { linesOf, resolved, resolvedCircuit, toLine } from "@/lib/compute/lines/service";
@@ -17,21 +17,21 @@ export function computeLine(actor: Actor, request: z.output<typeof lineRequestSc
   requirePermission(actor, "compute.use");
   const [line] = linesOf(actor, [{ path: "line", ref: request.line }]);
   if (!line) throw new Error("computeLine: a line neither found nor refused");
-  return computed(() => lineAnswer(line.model, request));
+  return computed(computeApart("line", line.model, request));
 }
 
 export function computeSweep(actor: Actor, request: SweepRequest) {
   requirePermission(actor, "compute.use");
   const circuit = resolvedCircuit(actor, request.circuit);
   refuse(sweepFaults(request.circuit, frequenciesOf(request), request.planes));
-  return computed(() => sweepAnswer(circuit, request));
+  return computed(computeApart("sweep", circuit, request));
 }
 
 export function computeProfile(actor: Actor, request: ProfileRequest) {
   requirePermission(actor, "compute.use");
   const circuit = resolvedCircuit(actor, request.circuit);
   refuse(profileFaults(request.circuit, request.frequencyHz));
-  return computed(() => profileAnswer(circuit, request));
+  return computed(computeApart("profile", circuit, request));
 }
 
 function linesToCutFrom(actor: Actor, request: MatchesRequest): MatchLine[] {
@@ -59,5 +59,5 @@ export function computeMatches(actor: Actor, request: MatchesRequest) {
   refuse(matchesFaults(request, lines.length));
   const behind = request.place && resolved(actor, request.place.behind, "place.behind");
   const asked = { load, targetOhm, designHz, bandHz, returnLossDb, methods, partQ, tolerance, temperatureC };
-  return computed(() => matchesAnswer({ ...asked, lines, feeder, behind }));
+  return computed(computeApart("matches", { ...asked, lines, feeder, behind }));
 }

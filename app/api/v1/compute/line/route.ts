@@ -1,7 +1,8 @@
 import { lineOperation } from "@/lib/compute/operations";
 import { computeLine } from "@/lib/compute/service";
 import { handle, route } from "@/lib/http/handle";
+import { jsonAnswer } from "@/lib/http/json-answer";
 
 export const { GET, POST, PUT, PATCH, DELETE, OPTIONS } = route({
-  POST: handle(lineOperation, async ({ actor, body }) => Response.json(computeLine(actor, await body()))),
+  POST: handle(lineOperation, async ({ actor, body }) => jsonAnswer(await computeLine(actor, await body()))),
 });

@@ -1,0 +1,22 @@
+/** What can be computed apart from the thread that serves: pure functions of plain data, by name. */
+import { lineAnswer, matchesAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
+
+export const jobs = {
+  line: lineAnswer,
+  sweep: sweepAnswer,
+  profile: profileAnswer,
+  matches: matchesAnswer,
+};
+
+export type Jobs = typeof jobs;
+export type JobName = keyof Jobs;
+
+/** What a worker is sent. */
+export interface Task {
+  id: number;
+  name: JobName;
+  given: unknown[];
+}
+
+/** What it sends back: the answer as JSON, the engine's refusal, or a fault of ours. */
+export type Outcome = { id: number } & ({ json: Uint8Array<ArrayBuffer> } | { refused: string } | { fault: string });
