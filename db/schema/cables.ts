@@ -10,6 +10,7 @@ import {
   text,
   uniqueIndex,
 } from "drizzle-orm/sqlite-core";
+import type { EntryInputs } from "@/lib/cables/inputs";
 import type { Build, Construction, Figure, Limits } from "@/lib/cables/schema";
 import type { LineModel } from "@/lib/line/element";
 import { people, teams } from "@/db/schema/team";
@@ -28,6 +29,8 @@ export const cables = sqliteTable(
     currentRevision: integer("current_revision").notNull(),
     successorId: text("successor_id").references((): AnySQLiteColumn => cables.id),
     equivalence: text("equivalence", { enum: ["dropIn", "electricallyEqual", "needsRedesign"] }),
+    /** when the entry should be looked at again, ISO 8601; null before it has been approved */
+    reviewDueAt: text("review_due_at"),
     createdAt: text("created_at").notNull(),
   },
   (table) => [uniqueIndex("cables_designation").on(table.teamId, table.designation)],
@@ -58,6 +61,11 @@ export const cableRevisions = sqliteTable(
     createdAt: text("created_at").notNull(),
     approvedById: text("approved_by_id").references(() => people.id),
     approvedAt: text("approved_at"),
+    /** one more at every edit and change of state: what If-Match is held against */
+    version: integer("version").notNull().default(1),
+    submittedAt: text("submitted_at"),
+    /** what was typed, by each of the ways in, and which of them rules; the model and figures follow from it */
+    inputs: text("inputs", { mode: "json" }).$type<EntryInputs>(),
 
     name: text("name").notNull(),
     family: text("family", { enum: ["coaxial", "twistedPair", "twinaxial"] }).notNull(),

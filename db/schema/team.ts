@@ -1,5 +1,6 @@
 /** Who there is: teams, people, which role a person has in a team, and what proves who is asking. */
 import { index, integer, primaryKey, sqliteTable, text } from "drizzle-orm/sqlite-core";
+import type { HouseRules } from "@/lib/team/rules";
 
 export const teams = sqliteTable("teams", {
   id: text("id").primaryKey(),
@@ -10,6 +11,8 @@ export const teams = sqliteTable("teams", {
   wordsVersion: integer("words_version").notNull().default(0),
   /** one more whenever an entry of the team or a revision changes (kept by triggers): tells a stale copy in memory */
   catalogueVersion: integer("catalogue_version").notNull().default(0),
+  /** what the team has agreed on; null: as usual (`lib/team/rules.ts`) */
+  rules: text("rules", { mode: "json" }).$type<HouseRules>(),
   /** ISO 8601 */
   createdAt: text("created_at").notNull(),
 });

@@ -21,10 +21,28 @@ export const permissions = {
   "runs.comment": ["designer", "librarian", "admin"],
   /** draft an entry of one's own; take back a draft that was never submitted */
   "cables.propose": ["designer", "librarian", "admin"],
+  /** approve, return, restrict, quarantine, release, supersede and withdraw; what the house rules forbid still holds */
+  "cables.review": ["librarian", "admin"],
+  /** say that something is wrong with a cable */
+  "cables.report": ["designer", "librarian", "admin", "installer"],
+  /** bring in many entries at once */
+  "cables.import": ["librarian", "admin"],
+  /** take the catalogue out */
+  "cables.export": ["designer", "librarian", "admin", "auditor"],
+  /** every run a cable is used in; a designer, of their own runs */
+  "cables.readUses": ["designer", "librarian", "admin", "auditor"],
+  /** the letters the team has sent and those that wait */
+  "team.readLetters": ["admin", "auditor"],
+  /** what the team has agreed on */
+  "team.rules": ["admin"],
+  /** limit lines of the team's own */
+  "limits.write": ["librarian", "admin"],
   /** take back anybody's draft; hand over anybody's run */
   "team.tidy": ["librarian", "admin"],
   /** computing, which stores nothing */
   "compute.use": everyone,
+  /** one's own notices */
+  "notices.own": everyone,
   /** one's own sign-in and password */
   "account.own": everyone,
 } as const satisfies Record<string, readonly Role[]>;
