@@ -45,7 +45,6 @@ export function cannotTake(step: LifeStep, state: CableState): string | null {
 }
 
 interface Standing {
-  state: CableState;
   /** whether the revision was ever approved: an import that was quarantined at once was not */
   wasApproved: boolean;
   /** the use condition given with the step, or carried over from the revision before */

@@ -8,20 +8,24 @@ import {
   limitsSchema,
   lineModelSchema,
 } from "@/lib/cables/schema";
+import { plain } from "@/lib/http/plain-text";
 
 /** A new entry: it starts as its author's draft. */
 export const newCableSchema = z
   .strictObject({
-    designation: z
-      .string({ error: "The designation must be text." })
-      .trim()
-      .min(1, { error: "Give the cable a designation." })
-      .max(40, { error: "A designation has at most 40 characters." }),
+    designation: plain(
+      z
+        .string({ error: "The designation must be text." })
+        .trim()
+        .min(1, { error: "Give the cable a designation." })
+        .max(40, { error: "A designation has at most 40 characters." }),
+      "The designation",
+    ),
     aliases: z
-      .array(z.string().trim().min(1).max(60, { error: "An alias has at most 60 characters." }))
+      .array(plain(z.string().trim().min(1).max(60, { error: "An alias has at most 60 characters." }), "An alias"))
       .max(20, { error: "An entry has at most 20 aliases." })
       .default([]),
-    name: z.string().trim().max(120, { error: "A name has at most 120 characters." }).default(""),
+    name: plain(z.string().trim().max(120, { error: "A name has at most 120 characters." }), "The name").default(""),
     family: familySchema,
     model: lineModelSchema,
     construction: constructionSchema.nullable().default(null),

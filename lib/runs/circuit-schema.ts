@@ -7,10 +7,11 @@ import type { Circuit as EngineCircuit, Element as EngineElement } from "@/lib/l
 import { minimumPadLossDb } from "@/lib/line/pad";
 import { lineModelSchema, notNegative, positive, temperature } from "@/lib/cables/schema";
 import { sourceSchema, terminationSchema } from "@/lib/runs/termination-schema";
+import { plain } from "@/lib/http/plain-text";
 
 export const maxElements = 200;
 
-const name = z.string().max(80, { error: "A name has at most 80 characters." }).optional();
+const name = plain(z.string().max(80, { error: "A name has at most 80 characters." }), "The name").optional();
 
 export const lineRefSchema = z
   .union(

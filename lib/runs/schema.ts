@@ -4,6 +4,7 @@
  */
 import { z } from "zod";
 import { positive, temperature } from "@/lib/cables/schema";
+import { plain } from "@/lib/http/plain-text";
 import { circuitSchema, planeSchema } from "@/lib/runs/circuit-schema";
 
 const finite = (what: string) => z.number({ error: `${what} must be a number.` });
@@ -36,16 +37,15 @@ export type Target = z.infer<typeof targetSchema>;
 export const runStateSchema = z.enum(["draft", "issued", "verified"]);
 export type RunState = z.infer<typeof runStateSchema>;
 
-const title = z
-  .string({ error: "The name must be text." })
-  .trim()
-  .min(1, { error: "Give the run a name." })
-  .max(120, { error: "A name has at most 120 characters." });
 const words = (what: string, most: number) =>
-  z
-    .string({ error: `${what} must be text.` })
-    .trim()
-    .max(most, { error: `${what} has at most ${most} characters.` });
+  plain(
+    z
+      .string({ error: `${what} must be text.` })
+      .trim()
+      .max(most, { error: `${what} has at most ${most} characters.` }),
+    what,
+  );
+const title = words("The name", 120).min(1, { error: "Give the run a name." });
 
 const runFields = {
   name: title,

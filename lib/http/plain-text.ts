@@ -1,0 +1,14 @@
+/** Text that shows all it holds. Pure. */
+import type { z } from "zod";
+
+/** Control characters but tab and line end, and marks that turn the direction of what follows. */
+const unseen = /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f-\u009f\u200e\u200f\u2028-\u202e\u2066-\u2069]/;
+
+export function isPlainText(text: string): boolean {
+  return !unseen.test(text);
+}
+
+/** A schema of text that refuses characters nobody sees: a name must not read differently from what it is. */
+export function plain(schema: z.ZodString, what: string): z.ZodString {
+  return schema.refine(isPlainText, { error: `${what} holds characters that cannot be seen; type it anew.` });
+}
