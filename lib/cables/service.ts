@@ -1,5 +1,5 @@
 /** The catalogue as its reader may see it. */
-import { and, eq, inArray } from "drizzle-orm";
+import { and, desc, eq, inArray } from "drizzle-orm";
 import { database } from "@/db/client";
 import { cableRevisions, cables } from "@/db/schema/cables";
 import type { Actor } from "@/lib/auth/actor";
@@ -34,15 +34,21 @@ export function getCable(actor: Actor, cableId: string): Cable {
   return toCable(row);
 }
 
-/** Every entry that may go into a new run, whole: what a run is edited and matched with. */
-export function listUsableCables(actor: Actor): Cable[] {
+/**
+ * The entries that may go into a new run, whole: what a run is edited and matched with. By designation, the preferred
+ * first where there are more than asked for.
+ * @param most - of a large catalogue, no more than this
+ */
+export function listUsableCables(actor: Actor, most = -1): Cable[] {
   requirePermission(actor, "cables.read");
   return selectWhole()
     .innerJoin(cableRevisions, currentRevision)
     .where(and(knownCables(actor), inArray(cableRevisions.state, ["approved", "restricted"])))
-    .orderBy(cables.designation)
+    .orderBy(desc(cables.preferred), cables.designation)
+    .limit(most)
     .all()
-    .map(toCable);
+    .map(toCable)
+    .sort((a, b) => (a.designation < b.designation ? -1 : 1));
 }
 
 /** A reference to a cable; without a revision it means the current one. */

@@ -7,6 +7,9 @@ import { listPossibleOwners, mayHandOver, type PossibleOwner } from "@/lib/runs/
 import { getRun } from "@/lib/runs/service";
 import type { Run } from "@/lib/runs/schema";
 
+/** Of a large catalogue a run is opened with this many; any other is fetched when it is chosen. */
+const mostOthers = 300;
+
 export interface OpenedRun {
   run: Run;
   lines: CableLine[];
@@ -27,7 +30,7 @@ function refusal(actor: Actor, run: Run): string | null {
 export function openRun(actor: Actor, runId: string): OpenedRun {
   const run = getRun(actor, runId);
   const pinned = listReferredCables(actor, run.pinned);
-  const others = may(actor, "cables.readCatalogue") ? listUsableCables(actor) : [];
+  const others = may(actor, "cables.readCatalogue") ? listUsableCables(actor, mostOthers) : [];
   const ids = new Set(pinned.map(({ id }) => id));
   const lines = [...pinned, ...others.filter(({ id }) => !ids.has(id))].map(lineOf);
   const canHandOver = mayHandOver(actor, run);
