@@ -2,7 +2,8 @@
 
 import type { Route } from "next";
 import { Bar } from "@/components/ui/bar";
-import { call, ProblemError } from "@/lib/http/call";
+import { useEffect } from "react";
+import { call, ProblemError, speakFor } from "@/lib/http/call";
 import { countHeld, forgetHeld } from "@/lib/runs/held";
 import type { SignedIn } from "@/lib/team/schema";
 
@@ -29,8 +30,8 @@ async function signOut(personId: string) {
   try {
     await call("/session", { method: "DELETE" });
   } catch (error) {
-    // A session that has ended by itself is signed out already.
-    if (!(error instanceof ProblemError && error.problem.status === 401)) throw error;
+    // A session that has ended by itself, or given way to somebody else's, is signed out already.
+    if (!(error instanceof ProblemError && [401, 409].includes(error.problem.status))) throw error;
   }
   forgetHeld(personId);
   // A full load on purpose: nothing of the team stays in memory.
@@ -39,6 +40,7 @@ async function signOut(personId: string) {
 }
 
 export function WorkBar({ signedIn, current, title, back, hasOwnFoot }: Props) {
+  useEffect(() => speakFor(signedIn.person.id), [signedIn.person.id]);
   return (
     <Bar
       places={places}

@@ -1,5 +1,8 @@
 /** Calls of the browser to the API: one place that knows what a refusal looks like. */
 
+/** Names the person a page was made for. */
+export const madeForHeader = "Page-Made-For";
+
 export interface Problem {
   title: string;
   status: number;
@@ -27,6 +30,13 @@ export class AwayError extends Error {
   }
 }
 
+let speaker: string | undefined;
+
+/** Who the page was made for: a change is refused where somebody else has signed in since, in another tab. */
+export function speakFor(personId: string): void {
+  speaker = personId;
+}
+
 interface Call {
   method?: "GET" | "POST" | "PATCH" | "DELETE";
   body?: unknown;
@@ -43,6 +53,7 @@ export async function call<T>(path: string, { method = "GET", body, ifMatch, sig
   const headers: Record<string, string> = {};
   if (body !== undefined) headers["Content-Type"] = "application/json";
   if (ifMatch !== undefined) headers["If-Match"] = ifMatch;
+  if (speaker !== undefined && method !== "GET") headers[madeForHeader] = speaker;
   // No answer, or one cut off on its way.
   const broken = (error: unknown): never => {
     if (signal?.aborted) throw error;

@@ -5,7 +5,7 @@ import { requirePermission } from "@/lib/auth/permission";
 import { readJson } from "@/lib/http/body";
 import { AppError, problem, problemOf } from "@/lib/http/errors";
 import type { Method, Operation, ParameterNames } from "@/lib/http/operation";
-import { refuseCrossSite } from "@/lib/http/origin";
+import { refuseCrossSite, refuseOtherPerson } from "@/lib/http/origin";
 import { parse } from "@/lib/http/parse";
 
 type Context = { params: Promise<Record<string, string | string[] | undefined>> };
@@ -72,6 +72,7 @@ export function handle<Path extends string, Query extends z.ZodType, Body extend
     try {
       const actor = await requestActor(request);
       refuseCrossSite(request);
+      refuseOtherPerson(request, actor);
       requirePermission(actor, permission);
       return await answer({ ...(await read(declared, request, context)), actor });
     } catch (error) {

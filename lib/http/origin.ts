@@ -1,5 +1,7 @@
 /** Where a request comes from: the page behind it, and the network address. */
 import { bearerToken } from "@/lib/auth/bearer";
+import type { Actor } from "@/lib/auth/actor";
+import { madeForHeader } from "@/lib/http/call";
 import { AppError } from "@/lib/http/errors";
 
 function ownOrigins(request: Request): string[] {
@@ -31,6 +33,17 @@ const changing = (request: Request) => request.method !== "GET" && request.metho
 export function refuseCrossSite(request: Request): void {
   if (changing(request) && bearerToken(request.headers) === undefined && isFromOwnPage(request) !== true)
     throw new AppError("forbidden", "A change made with the sign-in cookie must come from this site.");
+}
+
+/**
+ * Refuses a change from a page that was made for somebody else than the cookie now says: two tabs share one cookie.
+ * @throws AppError `conflict`
+ */
+export function refuseOtherPerson(request: Request, { personId, name }: Actor): void {
+  const madeFor = request.headers.get(madeForHeader);
+  if (madeFor === null || madeFor === personId || !changing(request)) return;
+  const message = `${name} has signed in in this browser since this page was opened. Nothing was changed; load the page again.`;
+  throw new AppError("conflict", message);
 }
 
 /**
