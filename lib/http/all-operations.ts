@@ -2,10 +2,11 @@
 import * as account from "@/lib/auth/operations";
 import * as cables from "@/lib/cables/operations";
 import * as compute from "@/lib/compute/operations";
+import * as geometry from "@/lib/compute/geometry/operations";
 import * as service from "@/lib/http/operations";
 import type { Operation } from "@/lib/http/operation";
 import * as runs from "@/lib/runs/operations";
 
-export const operations: Operation[] = [account, cables, runs, compute, service].flatMap((noun) =>
+export const operations: Operation[] = [account, cables, runs, compute, geometry, service].flatMap((noun) =>
   Object.values<Operation>(noun),
 );

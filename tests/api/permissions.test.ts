@@ -40,6 +40,7 @@ const expected: Record<string, Access> = {
   computeSweep: roles,
   computeProfile: roles,
   computeMatches: roles,
+  computeGeometry: roles,
   readHealth: "anyone",
   readDescription: "anyone",
 };

@@ -1,4 +1,4 @@
-/** Published values in tests/fixtures/line/published-lines.json, with their sources, and how to compare with them. */
+/** Published values in tests/fixtures/line, with their sources, and how to compare with them. */
 import { readFileSync } from "node:fs";
 import path from "node:path";
 import { expect } from "vitest";
@@ -18,9 +18,12 @@ export interface PublishedCheck {
   note: string;
 }
 
-/** The checks whose id or topic passes. */
-export function published(choose: (id: string, topic: string) => boolean): PublishedCheck[] {
-  const file = path.resolve(import.meta.dirname, "../fixtures/line/published-lines.json");
+/** The checks whose id or topic passes; `fixture` without ".json". */
+export function published(
+  choose: (id: string, topic: string) => boolean,
+  fixture = "published-lines",
+): PublishedCheck[] {
+  const file = path.resolve(import.meta.dirname, "../fixtures/line", `${fixture}.json`);
   const { checks } = JSON.parse(readFileSync(file, "utf8")) as { checks: PublishedCheck[] };
   return checks.filter(({ id, topic }) => choose(id, topic));
 }

@@ -1,0 +1,7 @@
+import { geometryOperation } from "@/lib/compute/geometry/operations";
+import { computeGeometry } from "@/lib/compute/geometry/service";
+import { handle, route } from "@/lib/http/handle";
+
+export const { GET, POST, PUT, PATCH, DELETE, OPTIONS } = route({
+  POST: handle(geometryOperation, async ({ actor, body }) => Response.json(computeGeometry(actor, await body()))),
+});
