@@ -4,9 +4,10 @@ import * as cables from "@/lib/cables/operations";
 import * as compute from "@/lib/compute/operations";
 import * as geometry from "@/lib/compute/geometry/operations";
 import * as service from "@/lib/http/operations";
+import * as touchstone from "@/lib/compute/touchstone/operations";
 import type { Operation } from "@/lib/http/operation";
 import * as runs from "@/lib/runs/operations";
 
-export const operations: Operation[] = [account, cables, runs, compute, geometry, service].flatMap((noun) =>
+export const operations: Operation[] = [account, cables, runs, compute, geometry, touchstone, service].flatMap((noun) =>
   Object.values<Operation>(noun),
 );

@@ -1,22 +1,23 @@
-/** Reading a request's body: JSON of at most 1 MB. */
+/** Reading a request's body: JSON of at most 1 MB, unless the operation takes more. */
 import type { z } from "zod";
 import { AppError } from "@/lib/http/errors";
 import { parse } from "@/lib/http/parse";
 
 export const mostBodyBytes = 1_048_576;
 
-const tooLarge = () => new AppError("too_large", "A body has at most 1 MB.");
+const tooLarge = (most: number) =>
+  new AppError("too_large", `A body has at most ${Math.round(most / mostBodyBytes)} MB.`);
 
-async function readBytes(request: Request): Promise<Uint8Array> {
-  if (Number(request.headers.get("content-length")) > mostBodyBytes) throw tooLarge();
+async function readBytes(request: Request, most: number): Promise<Uint8Array> {
+  if (Number(request.headers.get("content-length")) > most) throw tooLarge(most);
   const chunks: Uint8Array[] = [];
   let size = 0;
   const reader = request.body?.getReader();
   for (let step = await reader?.read(); step && !step.done; step = await reader?.read()) {
     size += step.value.byteLength;
-    if (size > mostBodyBytes) {
+    if (size > most) {
       await reader?.cancel();
-      throw tooLarge();
+      throw tooLarge(most);
     }
     chunks.push(step.value);
   }
@@ -33,11 +34,16 @@ function parseJson(bytes: Uint8Array): unknown {
 
 /**
  * The request's JSON as the schema reads it.
+ * @param mostBytes - of the body as it is sent
  * @throws AppError `unsupported_media_type`, `too_large`, `malformed`, or `invalid_input` with every field that is wrong
  */
-export async function readJson<Schema extends z.ZodType>(request: Request, schema: Schema): Promise<z.output<Schema>> {
+export async function readJson<Schema extends z.ZodType>(
+  request: Request,
+  schema: Schema,
+  mostBytes = mostBodyBytes,
+): Promise<z.output<Schema>> {
   const mediaType = request.headers.get("content-type")?.split(";")[0]?.trim().toLowerCase();
   if (mediaType !== "application/json")
     throw new AppError("unsupported_media_type", "Send JSON, with Content-Type: application/json.");
-  return parse(schema, parseJson(await readBytes(request)));
+  return parse(schema, parseJson(await readBytes(request, mostBytes)));
 }

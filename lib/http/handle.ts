@@ -48,7 +48,7 @@ async function read<Path extends string, Query extends z.ZodType, Body extends z
     query: declared.query ? parse(declared.query, given) : (undefined as z.output<Query>),
     body: () => {
       if (!declared.body) throw new Error(`handle: ${declared.id} declares no body`);
-      return readJson(request, declared.body);
+      return readJson(request, declared.body, declared.mostBodyBytes);
     },
   };
 }

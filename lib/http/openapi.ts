@@ -75,6 +75,7 @@ function describe(declared: Operation, parts: SchemaParts): Json {
     ...(declared.body && {
       requestBody: {
         required: true,
+        ...(declared.mostBodyBytes && { description: `At most ${Math.round(declared.mostBodyBytes / 1_048_576)} MB.` }),
         content: { "application/json": { schema: parts.reference(declared.body, "input") } },
       },
     }),
@@ -97,7 +98,7 @@ export function openApiDocument(operations: Operation[]): Json {
       version: "1",
       description:
         "SI units, named in the keys. A complex quantity is { re, im }. A value that has no finite number is null. " +
-        "Errors are RFC 9457 problem documents. A body has at most 1 MB.",
+        "Errors are RFC 9457 problem documents. A body has at most 1 MB unless its operation says otherwise.",
     },
     servers: [{ url: base }],
     paths,

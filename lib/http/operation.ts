@@ -20,6 +20,8 @@ export interface Operation<
   permission: Permission | null;
   query?: Query;
   body?: Body;
+  /** most bytes of a body; default 1 MB */
+  mostBodyBytes?: number;
   answer: { status: 200 | 201 | 204; description: string; schema?: z.ZodType; mediaType?: string; hasEntityTag?: true };
   /** whether If-Match is needed */
   needsMatch?: true;

@@ -2,9 +2,11 @@
 import { benchEngine } from "@/tests/bench/engine";
 import { benchFirstLoad } from "@/tests/bench/first-load";
 import { benchSearch } from "@/tests/bench/search";
+import { benchTouchstone } from "@/tests/bench/touchstone";
 import { row } from "@/tests/bench/timing";
 
 row("", "ours", "other", "ratio");
 benchEngine();
+benchTouchstone();
 await benchSearch();
 await benchFirstLoad();
