@@ -29,18 +29,24 @@ export interface LossFit {
   range: [number, number];
 }
 
-/** k1 and k2 of the least Σ w·(k1·x + k2·y − 1)², x and y being √f and f over the given loss. */
-function coefficients(rows: readonly LossRow[]): { k1: number; k2: number } {
-  let [a, b, c, d, e] = [0, 0, 0, 0, 0];
-  for (const { frequency, lossDbPerM, weight = 1 } of rows) {
-    const x = Math.sqrt(frequency) / lossDbPerM;
-    const y = frequency / lossDbPerM;
-    a += weight * x * x;
-    b += weight * x * y;
-    c += weight * y * y;
-    d += weight * x;
-    e += weight * y;
-  }
+/** Sums of the normal equations of a table, x and y being √f and f over the given loss: w·xx, w·xy, w·yy, w·x, w·y. */
+export type FitSums = readonly [number, number, number, number, number];
+
+/** What one row adds to the sums. */
+export function sumsOf({ frequency, lossDbPerM, weight = 1 }: LossRow): FitSums {
+  const x = Math.sqrt(frequency) / lossDbPerM;
+  const y = frequency / lossDbPerM;
+  return [weight * x * x, weight * x * y, weight * y * y, weight * x, weight * y];
+}
+
+export function addSums(first: FitSums, second: FitSums): FitSums {
+  return first.map((value, i) => value + (second[i] ?? NaN)) as unknown as FitSums;
+}
+
+export const noSums: FitSums = [0, 0, 0, 0, 0];
+
+/** k1 and k2 of the least Σ w·(k1·x + k2·y − 1)², both at least 0. */
+export function coefficientsOf([a, b, c, d, e]: FitSums): { k1: number; k2: number } {
   const determinant = a * c - b * b;
   // With one frequency only the two parts cannot be told apart: it is all put down to the conductors.
   if (!(determinant > 1e-12 * a * c)) return { k1: d / a, k2: 0 };
@@ -64,7 +70,7 @@ export function fitLossTable(rows: readonly LossRow[]): LossFit | undefined {
     for (const [name, value] of Object.entries({ frequency, lossDbPerM, weight }))
       if (!(value > 0 && value < Infinity))
         throw new RangeError(`fitLossTable: ${name} must be positive, got ${value}`);
-  const { k1, k2 } = coefficients(rows);
+  const { k1, k2 } = coefficientsOf(rows.map(sumsOf).reduce(addSums, noSums));
   const fitted = rows.map((row): FittedRow => {
     const fittedDbPerM = k1 * Math.sqrt(row.frequency) + k2 * row.frequency;
     return { ...row, fittedDbPerM, errorPercent: (100 * (row.lossDbPerM - fittedDbPerM)) / row.lossDbPerM };

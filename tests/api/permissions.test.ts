@@ -41,6 +41,7 @@ const expected: Record<string, Access> = {
   computeProfile: roles,
   computeMatches: roles,
   computeGeometry: roles,
+  computeFit: roles,
   computeTouchstone: roles,
   readHealth: "anyone",
   readDescription: "anyone",
