@@ -5,10 +5,19 @@ import * as compute from "@/lib/compute/operations";
 import * as fit from "@/lib/compute/fit/operations";
 import * as geometry from "@/lib/compute/geometry/operations";
 import * as service from "@/lib/http/operations";
+import * as readings from "@/lib/compute/readings/operations";
 import * as touchstone from "@/lib/compute/touchstone/operations";
 import type { Operation } from "@/lib/http/operation";
 import * as runs from "@/lib/runs/operations";
 
-export const operations: Operation[] = [account, cables, runs, compute, geometry, fit, touchstone, service].flatMap((noun) =>
-  Object.values<Operation>(noun),
-);
+export const operations: Operation[] = [
+  account,
+  cables,
+  runs,
+  compute,
+  geometry,
+  fit,
+  readings,
+  touchstone,
+  service,
+].flatMap((noun) => Object.values<Operation>(noun));

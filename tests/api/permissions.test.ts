@@ -42,6 +42,7 @@ const expected: Record<string, Access> = {
   computeMatches: roles,
   computeGeometry: roles,
   computeFit: roles,
+  computeReadings: roles,
   computeTouchstone: roles,
   readHealth: "anyone",
   readDescription: "anyone",
