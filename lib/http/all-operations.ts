@@ -2,6 +2,7 @@
 import * as account from "@/lib/auth/operations";
 import * as cables from "@/lib/cables/operations";
 import * as compute from "@/lib/compute/operations";
+import * as extract from "@/lib/compute/extract/operations";
 import * as fit from "@/lib/compute/fit/operations";
 import * as geometry from "@/lib/compute/geometry/operations";
 import * as service from "@/lib/http/operations";
@@ -18,6 +19,7 @@ export const operations: Operation[] = [
   geometry,
   fit,
   readings,
+  extract,
   touchstone,
   service,
 ].flatMap((noun) => Object.values<Operation>(noun));

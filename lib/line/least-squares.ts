@@ -19,6 +19,10 @@ export type Residuals = (at: readonly number[], into: Float64Array) => void;
 
 const mostRounds = 60;
 const smallStep = 1e-13;
+/** Mean square of residuals that are rounding. */
+const nothing = 1e-24;
+/** Relative gain of a round below which there is nothing left to gain. */
+const smallGain = 1e-10;
 
 /**
  * The place within bounds where Σ residual² is least, near the start. Unknowns should be of the order of 1 (logarithms,
@@ -38,10 +42,11 @@ export function leastSquares(residuals: Residuals, count: number, unknowns: read
   let sum = squared(value);
   if (!(sum < Infinity)) throw new RangeError("leastSquares: the residuals at the start are not finite");
   let damping = 1e-3;
-  for (let round = 0; round < mostRounds && sum > 0; round++) {
+  for (let round = 0; round < mostRounds && sum > nothing * count; round++) {
     const { matrix, gradient } = normalEquations(residuals, count, unknowns, at, value);
     let isBetter = false;
     let length = 0;
+    const before = sum;
     for (let attempt = 0; attempt < 12 && !isBetter; attempt++) {
       const next = stepped(matrix, gradient, damping, at, unknowns);
       length = Math.max(...next.map((each, i) => Math.abs(each - (at[i] ?? 0)) / Math.max(1, Math.abs(each))));
@@ -52,7 +57,7 @@ export function leastSquares(residuals: Residuals, count: number, unknowns: read
       damping = isBetter ? Math.max(damping / 9, 1e-14) : Math.max(damping * 8, 1e-12);
       if (isBetter) [at, sum, value, trial] = [next, reached, trial, value];
     }
-    if (!isBetter || length < smallStep) break;
+    if (!isBetter || length < smallStep || before - sum < smallGain * before) break;
   }
   const isAtBound = unknowns.map(({ low, high }, i) => at[i] === low || at[i] === high);
   return { at, sum, isAtBound };
@@ -80,6 +85,7 @@ function normalEquations(
     const step = 1e-6 * Math.max(1, Math.abs(here));
     const [from, to] = [Math.max(low, here - step), Math.min(high, here + step)];
     const column = new Float64Array(count);
+    if (!(to > from)) return column;
     residuals(at.with(i, to), up);
     residuals(at.with(i, from), column);
     for (let k = 0; k < count; k++) column[k] = ((up[k] ?? NaN) - (column[k] ?? NaN)) / (to - from);

@@ -43,6 +43,7 @@ const expected: Record<string, Access> = {
   computeGeometry: roles,
   computeFit: roles,
   computeReadings: roles,
+  computeExtract: roles,
   computeTouchstone: roles,
   readHealth: "anyone",
   readDescription: "anyone",
