@@ -5,6 +5,7 @@
 import { availableParallelism } from "node:os";
 import { Worker } from "node:worker_threads";
 import type { JobName, Jobs, Outcome, Task } from "@/lib/compute/apart/jobs";
+import { Refusal } from "@/lib/compute/apart/refusal";
 import { AppError } from "@/lib/http/errors";
 
 const deadlineMs = 30_000;
@@ -51,9 +52,13 @@ function settle(thread: Thread, outcome: Outcome): void {
   thread.current = undefined;
   thread.worker.unref();
   if ("json" in outcome) current.take(outcome.json);
-  else if ("refused" in outcome) current.fail(new RangeError(outcome.refused));
+  else if ("refused" in outcome) current.fail(refusalOf(outcome));
   else current.fail(new Error(outcome.fault));
   next();
+}
+
+function refusalOf({ refused, members }: { refused: string; members?: Record<string, unknown> }): RangeError {
+  return members ? new Refusal(refused, members) : new RangeError(refused);
 }
 
 /** Ends a thread, and what it was at with the error. */
@@ -86,7 +91,7 @@ function next(): void {
  * @param name - see `jobs`
  * @param given - the job's arguments, plain data
  * @returns the answer as JSON, UTF-8
- * @throws RangeError what the engine refuses; AppError `invalid_input` past the deadline, `busy` where too many wait
+ * @throws RangeError what the engine refuses, `Refusal` where there is more to say; AppError `invalid_input` past the deadline, `busy` where too many wait
  */
 export function computeApart<Name extends JobName>(
   name: Name,

@@ -1,6 +1,7 @@
 /** A file's text -> the answer of the wire. Pure. */
+import { Refusal } from "@/lib/compute/apart/refusal";
 import type { TouchstoneAnswer, TouchstoneRequest } from "@/lib/compute/touchstone/schema";
-import type { FileLimits } from "@/lib/touchstone/network-file";
+import { FileFault, type FileLimits, type NetworkFile } from "@/lib/touchstone/network-file";
 import { readNetworkFile } from "@/lib/touchstone/read";
 
 /** What one answer can carry. */
@@ -15,9 +16,17 @@ function matricesOf(values: Float64Array, ports: number): number[][][] {
   );
 }
 
-/** @throws FileFault where the file is refused */
-export function touchstoneAnswer({ fileName, text }: TouchstoneRequest): TouchstoneAnswer {
-  const { re, im, noise, frequenciesHz, ...file } = readNetworkFile(fileName, text, answeredLimits);
+function read({ fileName, text }: TouchstoneRequest): NetworkFile {
+  try {
+    return readNetworkFile(fileName, text, answeredLimits);
+  } catch (error) {
+    throw error instanceof FileFault ? new Refusal(error.message, { line: error.line }) : error;
+  }
+}
+
+/** @throws Refusal with the line where the file is refused */
+export function touchstoneAnswer(request: TouchstoneRequest): TouchstoneAnswer {
+  const { re, im, noise, frequenciesHz, ...file } = read(request);
   return {
     ...file,
     frequenciesHz: Array.from(frequenciesHz),
