@@ -38,7 +38,17 @@ function newest(entry) {
   return readdirSync(full).reduce((latest, name) => Math.max(latest, newest(path.join(entry, name))), own);
 }
 
-const sources = ["app", "components", "lib", "db", "public", "proxy.ts", "next.config.ts", "tsconfig.json"];
+const sources = [
+  "app",
+  "components",
+  "lib",
+  "db",
+  "public",
+  "proxy.ts",
+  "instrumentation.ts",
+  "next.config.ts",
+  "tsconfig.json",
+];
 const isBuilt = () =>
   existsSync(path.join(root, ".next/BUILD_ID")) &&
   [...sources, "postcss.config.mjs", "package-lock.json"].every(

@@ -10,7 +10,7 @@ const config: NextConfig = {
   reactStrictMode: true,
   reactCompiler: true,
   typedRoutes: true,
-  serverExternalPackages: ["better-sqlite3", "@node-rs/argon2"],
+  serverExternalPackages: ["better-sqlite3", "@node-rs/argon2", "nodemailer"],
   async headers() {
     return [
       {

@@ -9,12 +9,16 @@ import * as service from "@/lib/http/operations";
 import * as readings from "@/lib/compute/readings/operations";
 import * as touchstone from "@/lib/compute/touchstone/operations";
 import type { Operation } from "@/lib/http/operation";
+import * as mail from "@/lib/mail/operations";
+import * as notices from "@/lib/notices/operations";
 import * as runs from "@/lib/runs/operations";
 
 export const operations: Operation[] = [
   account,
   cables,
   runs,
+  notices,
+  mail,
   compute,
   geometry,
   fit,

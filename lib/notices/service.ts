@@ -4,6 +4,7 @@ import { database } from "@/db/client";
 import { letters, notices } from "@/db/schema/notices";
 import { members, people, teams } from "@/db/schema/team";
 import type { Actor } from "@/lib/auth/actor";
+import { oneLine } from "@/lib/mail/letter";
 
 export type NoticeKind = (typeof notices.$inferInsert)["kind"];
 
@@ -41,7 +42,7 @@ export function notify(actor: Actor, personIds: readonly string[], notice: Notic
       .values({
         ...{ id: crypto.randomUUID(), teamId: actor.teamId, toAddress: email, state: "waiting" },
         ...{ writtenAt: at, nextTryAt: at },
-        subject: `${teamName}: ${notice.text}`.slice(0, 200),
+        subject: oneLine(`${teamName}: ${notice.text}`, 200),
         body: `${notice.text}\n\n${publicUrl()}${notice.link}\n`,
       })
       .run();

@@ -1,5 +1,5 @@
 /** The list of runs, a page at a time. */
-import { and, count, desc, eq, inArray, lt, or, sql, type SQL } from "drizzle-orm";
+import { and, count, desc, eq, inArray, or, sql, type SQL } from "drizzle-orm";
 import { database } from "@/db/client";
 import { runs } from "@/db/schema/runs";
 import { people } from "@/db/schema/team";
@@ -7,7 +7,8 @@ import type { Actor } from "@/lib/auth/actor";
 import { requirePermission } from "@/lib/auth/permission";
 import { visibleRuns } from "@/lib/auth/visibility/service";
 import { listDesignations } from "@/lib/cables/service";
-import { type Cursor, defaultLimit, encodeCursor } from "@/lib/http/list";
+import { olderThan } from "@/lib/http/latest-first";
+import { defaultLimit, encodeCursor } from "@/lib/http/list";
 import { cableIdsOf, totalLength } from "@/lib/runs/circuit";
 import type { RunPage, RunQuery } from "@/lib/runs/query";
 import type { RunItem } from "@/lib/runs/schema";
@@ -17,13 +18,6 @@ function found(text: string | undefined): SQL | undefined {
   const pattern = `%${text.toLowerCase().replaceAll(/[\\%_]/g, (character) => `\\${character}`)}%`;
   const columns = [runs.number, runs.name, runs.site, runs.folder];
   return or(...columns.map((column) => sql`lower_unicode(${column}) like ${pattern} escape '\\'`));
-}
-
-// Times are ISO 8601 in one zone, so their order is that of the text.
-function after(cursor: Cursor | undefined): SQL | undefined {
-  if (!cursor) return undefined;
-  const changedAt = String(cursor.key);
-  return or(lt(runs.changedAt, changedAt), and(eq(runs.changedAt, changedAt), lt(runs.id, cursor.id)));
 }
 
 function toItem(row: typeof runs.$inferSelect, ownerName: string, names: Map<string, string>): RunItem {
@@ -46,7 +40,7 @@ export function listRuns(actor: Actor, query: RunQuery = {}): RunPage {
     .select({ run: runs, ownerName: people.name })
     .from(runs)
     .innerJoin(people, eq(people.id, runs.ownerId))
-    .where(and(matching, after(query.cursor)))
+    .where(and(matching, olderThan(query.cursor, runs.changedAt, runs.id)))
     .orderBy(desc(runs.changedAt), desc(runs.id))
     .limit(limit + 1)
     .all();
