@@ -4,15 +4,17 @@ import { database } from "@/db/client";
 import { teams } from "@/db/schema/team";
 import { isDemo } from "@/lib/team/demo";
 import { seedCables } from "@/seeds/cables";
+import { seedNotices } from "@/seeds/notices";
 import { seedRuns } from "@/seeds/runs";
 import demo from "@/seeds/data/team.json";
 import { seedFirstAdmin, seedTeam } from "@/seeds/team";
 
-/** The demo team with its people, catalogue and runs. */
+/** The demo team with its people, catalogue, runs and notices. */
 export async function seedDemo(): Promise<void> {
   await seedTeam();
   seedCables();
   seedRuns();
+  seedNotices();
 }
 
 /**

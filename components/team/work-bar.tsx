@@ -1,6 +1,7 @@
 "use client";
 
 import type { Route } from "next";
+import { NoticesLink } from "@/components/team/notices-link";
 import { Bar } from "@/components/ui/bar";
 import { useEffect } from "react";
 import { call, ProblemError, speakFor } from "@/lib/http/call";
@@ -9,7 +10,7 @@ import type { SignedIn } from "@/lib/team/schema";
 
 interface Props {
   signedIn: SignedIn;
-  current: "/cables" | "/runs" | "/calculate";
+  current: "/cables" | "/runs" | "/calculate" | "/notices" | "/team/letters";
   /** what a phone shows in place of the name */
   title: string;
   back?: Route;
@@ -48,6 +49,7 @@ export function WorkBar({ signedIn, current, title, back, hasOwnFoot }: Props) {
       home="/runs"
       teamName={signedIn.team.name}
       member={{ name: signedIn.person.name, email: signedIn.person.email, role: signedIn.role }}
+      beside={<NoticesLink isCurrent={current === "/notices"} />}
       signOut={() => signOut(signedIn.person.id)}
       title={title}
       back={back}

@@ -17,6 +17,8 @@ interface BarProps {
   signOut: () => void | Promise<void>;
   /** the find field */
   find?: ReactNode;
+  /** stands before the team's name, on a phone too */
+  beside?: ReactNode;
   /** what stands in the bar of a phone in place of the name; the page's own title */
   title?: string;
   /** on a phone an arrow back stands in place of the mark */
@@ -77,6 +79,7 @@ export function Bar({
   member,
   signOut,
   find,
+  beside,
   title,
   back,
   hasOwnFoot = false,
@@ -94,6 +97,7 @@ export function Bar({
         <Places places={places} current={current} />
         <div className="flex flex-1 items-center justify-end gap-6.5 phone:flex-none phone:gap-3">
           {find}
+          {beside}
           <span className="text-label whitespace-nowrap text-ink-2 folded:hidden">{teamName}</span>
           <MemberMenu member={member} teamName={teamName} signOut={signOut} />
         </div>

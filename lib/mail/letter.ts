@@ -1,7 +1,7 @@
 /** What may stand in a letter. Pure. */
 
-/** Line ends, tabs, and every other character that steers something rather than being read. */
-const steering = /[\p{Cc}\p{Zl}\p{Zp}]+/gu;
+/** Line ends, tabs, marks of direction, and every other character that steers something rather than being read. */
+const steering = /[\p{Cc}\p{Zl}\p{Zp}\p{Bidi_Control}]+/gu;
 
 /** Halves of characters, which no encoding can write. */
 const halves = /\p{Cs}/gu;

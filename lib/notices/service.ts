@@ -23,6 +23,7 @@ const publicUrl = () => (process.env.PUBLIC_URL ?? `http://127.0.0.1:${process.e
  * so that neither happens without the other.
  */
 export function notify(actor: Actor, personIds: readonly string[], notice: Notice): void {
+  if (!/^\/(?!\/)/.test(notice.link)) throw new Error(`notify: ${notice.link} is no address within the product`);
   const others = [...new Set(personIds)].filter((id) => id !== actor.personId);
   if (others.length === 0) return;
   const db = database();

@@ -15,6 +15,7 @@ const pages = [
   "/runs",
   "/runs/new",
   "/cables",
+  "/notices",
   "/calculate",
   "/calculate/pad",
   "/calculate/stub",

@@ -9,6 +9,8 @@ import { lossDbPer100m } from "@/lib/cables/model";
 import { cableSchema } from "@/lib/cables/schema";
 import { getCable } from "@/lib/cables/service";
 import { circuitSchema } from "@/lib/runs/circuit-schema";
+import { listNotices } from "@/lib/notices/inbox/service";
+import { noticeSchema } from "@/lib/notices/schema";
 import { getRun } from "@/lib/runs/service";
 import { refuseMixing, seedDemo } from "@/seeds/index";
 import cableData from "@/seeds/data/cables.json";
@@ -44,6 +46,16 @@ describe("The demo", () => {
   test("It holds twelve people, 25 entries and runs R1 and R5", () => {
     expect(database().select().from(people).all()).toHaveLength(12);
     expect(database().select().from(cables).all()).toHaveLength(25);
+  });
+
+  test("What its people were told leads to pages of the product, and is of a kind it has", async () => {
+    const librarian = await signedIn("nils.ferrant@quillhaven.example");
+    const { items, unread } = listNotices(librarian);
+    expect(unread).toBeGreaterThan(0);
+    for (const notice of items) {
+      noticeSchema.parse(notice);
+      expect(getCable(librarian, notice.link.replace("/cables/", "")).state).toBe("inReview");
+    }
   });
 
   test.each(teamData.people)("$name can sign in as $role", async ({ email, role }) => {

@@ -7,9 +7,11 @@ describe("A line of a letter", () => {
     fc.assert(
       fc.property(
         fc.string({ unit: "binary" }),
-        fc.constantFrom("\r\n", "\n", "\r", "\u2028", "\u0085", "\0", "\v"),
+        fc.constantFrom("\r\n", "\n", "\r", "\u2028", "\u0085", "\0", "\v", "\u202e"),
         (a, end) => {
-          expect(oneLine(`${a}${end}Bcc: x@y.example`, 1000)).not.toMatch(/[\p{Cc}\p{Zl}\p{Zp}\p{Cs}]/u);
+          expect(oneLine(`${a}${end}Bcc: x@y.example`, 1000)).not.toMatch(
+            /[\p{Cc}\p{Zl}\p{Zp}\p{Cs}\p{Bidi_Control}]/u,
+          );
         },
       ),
     );
