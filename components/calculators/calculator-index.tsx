@@ -5,8 +5,13 @@ import { Vignette } from "@/components/calculators/vignettes";
 import { KeyCap } from "@/components/ui/key-cap";
 import { calculatorPlaces } from "@/lib/calculators/places";
 
+interface Props {
+  /** whether the reader may see the limit lines */
+  hasLimits: boolean;
+}
+
 /** The calculators, each drawn and in a sentence. */
-export function CalculatorIndex() {
+export function CalculatorIndex({ hasLimits }: Props) {
   return (
     <>
       <CalculatorKeys />
@@ -33,6 +38,14 @@ export function CalculatorIndex() {
           </li>
         ))}
       </ul>
+      {hasLimits && (
+        <p className="mt-8 border-t border-line pt-3 text-label">
+          <Link href={"/limits" as Route} className="link">
+            Limit lines
+          </Link>{" "}
+          of the standards and of your team: what a cable, link or channel may lose, reflect and delay.
+        </p>
+      )}
     </>
   );
 }

@@ -9,6 +9,7 @@ import * as service from "@/lib/http/operations";
 import * as readings from "@/lib/compute/readings/operations";
 import * as touchstone from "@/lib/compute/touchstone/operations";
 import type { Operation } from "@/lib/http/operation";
+import * as limitLines from "@/lib/limit-lines/operations";
 import * as mail from "@/lib/mail/operations";
 import * as notices from "@/lib/notices/operations";
 import * as runs from "@/lib/runs/operations";
@@ -17,6 +18,7 @@ export const operations: Operation[] = [
   account,
   cables,
   runs,
+  limitLines,
   notices,
   mail,
   compute,

@@ -4,9 +4,11 @@ import type { Role } from "@/lib/auth/actor";
 import type { Handler } from "@/lib/http/handle";
 import { operations } from "@/lib/http/all-operations";
 import type { Run } from "@/lib/runs/schema";
+import { addLimitLine } from "@/lib/limit-lines/service";
 import { createRun } from "@/lib/runs/service";
 import { addCable, newRun } from "@/tests/support/cables";
 import { withDatabase } from "@/tests/support/database";
+import { newLimitLine } from "@/tests/support/limit-lines";
 import { actor, addPeople, other, roles } from "@/tests/support/people";
 import { send } from "@/tests/support/requests";
 import { routeFiles } from "@/tests/support/routes";
@@ -36,6 +38,9 @@ const expected: Record<string, Access> = {
   handOverRun: ["designer", "librarian", "admin"],
   listRunComments: ["designer", "librarian", "admin", "auditor"], // an installer only of runs assigned to them
   addRunComment: ["designer", "librarian", "admin"],
+  listLimitLines: ["designer", "librarian", "admin", "auditor"],
+  addLimitLine: ["librarian", "admin"],
+  removeLimitLine: ["librarian", "admin"],
   listNotices: roles,
   readNotices: roles,
   listLetters: ["admin", "auditor"],
@@ -71,9 +76,12 @@ function ask(id: string, as: ReturnType<typeof actor> | undefined, run: Run): Pr
   const operation = operations.find((one) => one.id === id);
   const handler = handlers.get(id);
   if (!operation || !handler) throw new Error(`no operation ${id}`);
+  // The same for a limit line, of which a team holds only so many.
+  const isOfLine = operation.path.includes("{limitLineId}");
+  const limitLineId = isOfLine ? addLimitLine(actor("admin"), newLimitLine(`Line of ${run.id}`)).id : "";
   return send(handler, operation.method, {
     as,
-    params: { cableId: "feeder", runId: run.id },
+    params: { cableId: "feeder", runId: run.id, limitLineId },
     headers: operation.needsMatch ? { "if-match": "*" } : {},
     // An impossible body: whoever may is told so (422), whoever may not never gets that far.
     body: operation.body ? { impossible: true } : undefined,

@@ -16,6 +16,7 @@ const pages = [
   "/runs/new",
   "/cables",
   "/notices",
+  "/limits",
   "/calculate",
   "/calculate/pad",
   "/calculate/stub",

@@ -7,7 +7,16 @@ test.use({ ...phone, viewport: { width: 390, height: 844 }, browserName: "chromi
 test("On a phone every screen fits its width, and the line runs down the page", async ({ page }) => {
   await signedIn(page, "ines.hartwell");
   const address = await makeRun(page, "A run with a rather long name that will not fit on the bar of any phone");
-  for (const path of ["/runs", "/cables", "/notices", "/runs/new", address, `${address}/match`, "/sign-in"]) {
+  for (const path of [
+    "/runs",
+    "/cables",
+    "/notices",
+    "/limits",
+    "/runs/new",
+    address,
+    `${address}/match`,
+    "/sign-in",
+  ]) {
     await page.goto(path);
     await page.waitForLoadState("networkidle");
     const overflow = await page.evaluate(

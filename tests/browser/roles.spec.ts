@@ -55,7 +55,7 @@ for (const theme of ["paper", "tar"])
     await check("sign in");
     await signedIn(page, "ines.hartwell");
     const address = await makeRun(page, `Accessible on ${theme}`);
-    for (const path of ["/runs", "/cables", "/notices", "/runs/new", address, `${address}/match`]) {
+    for (const path of ["/runs", "/cables", "/notices", "/limits", "/runs/new", address, `${address}/match`]) {
       await page.goto(path);
       await expect(page.getByRole("heading", { level: 1 }).first()).toBeAttached();
       if (path === "/cables") await expect(page.getByRole("row", { name: /C50-F10/ })).toBeVisible();

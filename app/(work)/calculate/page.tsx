@@ -2,6 +2,7 @@ import type { Metadata } from "next";
 import { CalculatorIndex } from "@/components/calculators/calculator-index";
 import { WorkBar } from "@/components/team/work-bar";
 import { currentActor } from "@/lib/auth/actor";
+import { may } from "@/lib/auth/permission";
 import { describeActor } from "@/lib/team/service";
 
 export const metadata: Metadata = { title: "Calculate" };
@@ -12,7 +13,7 @@ export default async function CalculatePage() {
     <>
       <WorkBar signedIn={describeActor(actor)} current="/calculate" title="Calculate" />
       <main id="main" className="page-margin pt-3.5 pb-20">
-        <CalculatorIndex />
+        <CalculatorIndex hasLimits={may(actor, "cables.readCatalogue")} />
       </main>
     </>
   );

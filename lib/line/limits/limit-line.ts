@@ -44,6 +44,9 @@ export interface StandardLimit {
   seen: Seen;
 }
 
+/** What a limit is worked out from, whoever set it. */
+export type Limit = Pick<StandardLimit, "bound" | "scale" | "pieces">;
+
 /** What to say beside a limit that was recalled. */
 export const checkYourEdition = "Recalled without the page at hand: check your edition.";
 
@@ -52,7 +55,7 @@ export const checkYourEdition = "Recalled without the page at hand: check your e
  * @param frequency - hertz, above 0
  * @throws RangeError when the frequency is not positive
  */
-export function limitAt(limit: StandardLimit, frequency: number): number {
+export function limitAt(limit: Limit, frequency: number): number {
   if (!(frequency > 0)) throw new RangeError(`limitAt: frequency must be positive, got ${frequency}`);
   const f = frequency / 1e6;
   const piece = limit.pieces.find(({ fromMhz, toMhz }) => f >= fromMhz && f <= toMhz);
@@ -68,14 +71,14 @@ function valueOf(piece: LimitPiece, f: number): number {
  * How far a value is inside a limit, in its unit: negative outside, NaN where there is no limit.
  * @param value - of the same length of cable as the limit
  */
-export function marginTo(limit: StandardLimit, frequency: number, value: number): number {
+export function marginTo(limit: Limit, frequency: number, value: number): number {
   const bound = limitAt(limit, frequency);
   return limit.bound === "atMost" ? bound - value : value - bound;
 }
 
 /** The margin that is least over a sweep, and where; undefined where no frequency has a limit. */
 export function worstMargin(
-  limit: StandardLimit,
+  limit: Limit,
   frequencies: ArrayLike<number>,
   values: ArrayLike<number>,
 ): { margin: number; frequency: number } | undefined {
