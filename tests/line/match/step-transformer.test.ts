@@ -167,11 +167,14 @@ test("published D87: the ripple of two equal-ripple sections of a given band", (
   closeTo(got.fractionalBandwidth, { value: 0.6, ...within });
 });
 
-test("published D91: the reflection at the band's edge of two binomial sections", () => {
+test("published D91 adds small reflections, (R − 1)/(R + 1)·cos^N θ; the exact design reflects 6 % more at that band's edge", () => {
   const { gamma_max, vswr } = entry("D91").expected as unknown as { gamma_max: number; vswr: number };
+  const edge = (Math.PI / 4) * (2 - 0.375);
   const within = { rel_tolerance: 0.003, abs_tolerance: 0 };
-  closeTo(binomialTransformer(2, 2, gamma_max).fractionalBandwidth, { value: 0.375, ...within });
+  closeTo(Math.cos(edge) ** 2 / 3, { value: gamma_max, ...within });
   closeTo((1 + gamma_max) / (1 - gamma_max), { value: vswr, ...within });
+  const exact = reflectionAt(binomialTransformer(2, 2, 0.1).sectionsOverFirst, 2, edge);
+  expect(exact / gamma_max).toBeCloseTo(1.06, 2);
 });
 
 test("published D88: three lines of no length reflect 0.3846 where small reflections add to 0.4", () => {
