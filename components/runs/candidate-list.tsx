@@ -10,10 +10,18 @@ import type { MatchesFound } from "@/lib/runs/matching";
 export const methodWords: Record<MatchMethod, string> = {
   shuntStub: "Stub across the line",
   seriesStub: "Stub in the line",
+  doubleStub: "Two stubs across the line",
   quarterWave: "Quarter-wave section",
   seriesSection: "Series section",
   parallelCables: "Cables in parallel",
+  binomial: "Binomial transformer",
+  equalRipple: "Equal-ripple transformer",
+  alternatingSections: "Two alternating sections",
   lSection: "L-section",
+  piNetwork: "Pi network",
+  tNetwork: "T network",
+  pad: "Resistive pad",
+  notchStub: "Notch stub",
 };
 
 interface Props {

@@ -1,6 +1,13 @@
 import { abs } from "@/lib/line/complex";
 import type { Element } from "@/lib/line/element";
-import { leadName, lengthNotes, placeText, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
+import {
+  cutText,
+  leadName,
+  lengthNotes,
+  placeText,
+  type DesignLine,
+  type DesignPoint,
+} from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
 import { reflectionAgainst } from "@/lib/line/match/line-angle";
 import { realPoints, sectionImpedance } from "@/lib/line/match/quarter-wave";
@@ -94,8 +101,8 @@ function proposal(
     elements: build(length),
     needs: [
       count > 1 ? `2 junctions of ${count} cables` : "2 joints",
-      `${count > 1 ? `${count} × ` : ""}${lengthText(length)} of ${line.label} for the section`,
-      ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to ${point.words.place}`] : []),
+      `${count > 1 ? `${count} × ` : ""}${cutText(point, length)} of ${line.label} for the section`,
+      ...(distance > 0 ? [`${cutText(point, distance)} of ${feeder.label} to ${point.words.place}`] : []),
     ],
     notes: [
       ...lengthNotes(point, distance > 0 ? [line, feeder] : [line]),

@@ -5,10 +5,13 @@ import { c50F10, c50F7, c75F7, circuitOf, everyday, lengthsOf } from "@/tests/su
 
 test("candidates carry the catalogue's reference of their lines and no label, names for every element, and their cable counted", () => {
   const { candidates } = findMatches({ ...everyday, lines: [c75F7] });
-  for (const { elements, totalLengthM } of candidates) {
+  for (const { elements, totalLengthM, needs } of candidates) {
     expect(elements.every((each) => Boolean(each.name))).toBe(true);
     const cables = elements.filter((each) => each.kind === "cable" || each.kind === "stub");
-    for (const { line } of cables) expect(Object.keys(line).sort()).toEqual(["cableId", "model"]);
+    const named = cables.filter(({ line }) => line.cableId !== undefined);
+    for (const { line } of named) expect(Object.keys(line).sort()).toEqual(["cableId", "model"]);
+    // What no cable is, is named as an ideal line.
+    expect(cables.length === named.length || needs.some((each) => each.includes("ideal line"))).toBe(true);
     const sum = cables.reduce((total, each) => total + each.lengthM * (each.paralleled ?? 1), 0);
     expect(totalLengthM).toBeCloseTo(sum, 12);
   }

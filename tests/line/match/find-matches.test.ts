@@ -2,7 +2,7 @@ import { expect, test } from "vitest";
 import fc from "fast-check";
 import { complex } from "@/lib/line/complex";
 import { findMatches } from "@/lib/line/match/find-matches";
-import { matchMethods, type MatchRequest } from "@/lib/line/match/match-request";
+import { matchMethods, type MatchMethod, type MatchRequest } from "@/lib/line/match/match-request";
 import { quarterWaveBandwidth } from "@/lib/line/match/quarter-wave";
 import { seriesSection } from "@/lib/line/match/series-section";
 import { sweep } from "@/lib/line/run";
@@ -86,7 +86,8 @@ test.each(sections.cases.filter((each) => each.name === "quarter-wave, real load
 
 test("every exact candidate, for any load and lossy lines, shows the target when its run is computed, lengths under a half wave", () => {
   const halfWave = (0.9 * 299792458) / (2 * 145e6);
-  const exact = matchMethods.filter((method) => method !== "quarterWave");
+  const near: MatchMethod[] = ["quarterWave", "binomial", "equalRipple"];
+  const exact = matchMethods.filter((method) => !near.includes(method));
   const tenths = (min: number, max: number) => fc.integer({ min: 10 * min, max: 10 * max }).map((each) => each / 10);
   const resistance = tenths(2, 1000);
   const reactance = tenths(-500, 500);
@@ -102,7 +103,7 @@ test("every exact candidate, for any load and lossy lines, shows the target when
       };
       const { candidates } = findMatches(request);
       for (const candidate of candidates.filter(
-        (each) => !each.title.includes("E24") && !each.title.startsWith("One"),
+        ({ title }) => !title.includes("E24") && !title.startsWith("One") && !title.startsWith("Even pad"),
       )) {
         const { inputImpedance } = sweep(circuitOf(request, candidate), [145e6]);
         expect(inputImpedance.re[0]).toBeCloseTo(50, 5);
@@ -111,6 +112,34 @@ test("every exact candidate, for any load and lossy lines, shows the target when
       }
     }),
     { numRuns: 60 },
+  );
+});
+
+test("every candidate of every method shows at the design frequency the return loss it states, computed as a run", () => {
+  const tenths = (min: number, max: number) => fc.integer({ min: 10 * min, max: 10 * max }).map((each) => each / 10);
+  fc.assert(
+    fc.property(tenths(2, 1000), tenths(-500, 500), (reOhm, imOhm) => {
+      const request: MatchRequest = {
+        ...everyday,
+        load: { kind: "constant", reOhm, imOhm },
+        lines: [c50F7, c75F7],
+        notchHz: 40e6,
+      };
+      const { candidates, refused } = findMatches(request);
+      for (const candidate of candidates) {
+        const { returnLossDb } = sweep(circuitOf(request, candidate), [request.designHz]);
+        const stated = candidate.designReturnLossDb;
+        if (stated === null) expect(returnLossDb[0]!, candidate.title).toBeGreaterThan(170);
+        else expect(returnLossDb[0]! / stated, candidate.title).toBeCloseTo(1, 6);
+      }
+      const found = new Set(candidates.map(({ method }) => method));
+      for (const { method, why } of refused) {
+        expect(found.has(method)).toBe(false);
+        expect(why).toMatch(/\.$/);
+      }
+      expect(found.size + refused.length).toBe(matchMethods.length);
+    }),
+    { numRuns: 40 },
   );
 });
 

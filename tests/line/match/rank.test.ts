@@ -14,6 +14,7 @@ function candidate(title: string, figures: Partial<Candidate>): Candidate {
     worstTransducerLossDb: 0.1,
     worstMatchLossDb: 0.1,
     totalLengthM: 1,
+    cuts: [],
     needs: [],
     notes: [],
     ...figures,
