@@ -1,5 +1,6 @@
 /** What can be computed apart from the thread that serves: pure functions of plain data, by name. */
-import { lineAnswer, matchesAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
+import { lineAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
+import { matchesAnswer } from "@/lib/compute/matches/answer";
 
 export const jobs = {
   line: lineAnswer,

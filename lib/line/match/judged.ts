@@ -40,10 +40,12 @@ export function asMade(candidate: Candidate, point: DesignPoint): Candidate {
   const { tolerance } = point.request;
   if (!tolerance) return candidate;
   const made = [candidate.elements, tolerance, endsOf(point), bandOf(point.request)] as const;
+  const worst = worstAtLimits(...made);
   return {
     ...candidate,
-    worstReturnLossAtLimitsDb: finite(worstAtLimits(...made)),
-    yieldPercent: yieldPercent(...made),
+    worstReturnLossAtLimitsDb: finite(worst),
+    // What keeps the return loss at its limits keeps it between them, and needs no draws.
+    yieldPercent: worst >= point.request.returnLossDb ? 100 : yieldPercent(...made),
   };
 }
 

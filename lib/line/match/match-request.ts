@@ -43,6 +43,8 @@ export interface MatchRequest {
   feeder?: MatchLine;
   /** for stubs and sections */
   lines: readonly MatchLine[];
+  /** among series sections also two of the lines one after the other, neither of them the feeder */
+  pairs?: boolean;
   /** default all */
   methods?: readonly MatchMethod[];
   /** of a double stub: wavelengths of the feeder from stub to stub, above 0 and under a half; default an eighth */

@@ -9,6 +9,8 @@ import {
   type DesignPoint,
 } from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
+import { cablePairs } from "@/lib/line/match/cable-pairs";
+import { mostCables } from "@/lib/line/match/fit-line";
 import { reflectionAgainst } from "@/lib/line/match/line-angle";
 import { realPoints, sectionImpedance } from "@/lib/line/match/quarter-wave";
 import { sectionScan } from "@/lib/line/match/section-scan";
@@ -18,15 +20,14 @@ import { solveLengths, type Lengths, type Network } from "@/lib/line/match/solve
 import { trimNotes } from "@/lib/line/match/trim";
 import { countWord, lengthText, listText, ohmText } from "@/lib/line/match/wording";
 
-/** Lengths side by side that are still joined by hand. */
-const mostCables = 4;
-
 /**
  * A length of feeder at the load, then a length of another line, both solutions for every line given, solved with
- * their loss.
+ * their loss; where the request asks for pairs, two other lines one after the other too.
  */
 export function seriesSections(point: DesignPoint): Outcome {
-  return sections(point, [1]);
+  const own = sections(point, [1]);
+  const pairs = point.request.pairs ? cablePairs(point) : [];
+  return pairs.length > 0 ? { proposals: [...own.proposals, ...pairs], why: "" } : own;
 }
 
 /**

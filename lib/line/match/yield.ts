@@ -26,7 +26,10 @@ export function yieldPercent(elements: readonly Element[], tolerance: CutToleran
   const { figures, magnitude } = madeNetwork(network, tolerance, ends, frequencies);
   const limit = magnitudeOfReturnLoss(band.returnLossDb) * (1 + rounding);
   const shares = new Float64Array(figures);
-  const keeps = () => frequencies.every((_, k) => magnitude(k, shares) <= limit);
+  const keeps = () => {
+    for (let k = 0; k < frequencies.length; k++) if (!(magnitude(k, shares) <= limit)) return false;
+    return true;
+  };
   if (figures === 0) return keeps() ? 100 : 0;
   const draw = uniformDraws(seed);
   let kept = 0;
