@@ -17,7 +17,15 @@ function partFigure({ rOhm, lH, cF }: PartElement) {
   return { shape: "resistor", figure: scaled("resistance", rOhm, 3) } as const;
 }
 
-function Part({ part, x, reach }: { part: PartElement; x: number; reach: number }) {
+interface PartProps {
+  part: PartElement;
+  x: number;
+  reach: number;
+  /** another part across follows toward the load */
+  isLeft: boolean;
+}
+
+function Part({ part, x, reach, isLeft }: PartProps) {
   const { shape, figure } = partFigure(part);
   if (part.connection === "series") {
     return (
@@ -28,7 +36,7 @@ function Part({ part, x, reach }: { part: PartElement; x: number; reach: number 
     );
   }
   // Beside the load there is no room to the right.
-  const isByTheEdge = x > cutFrame.loadX - 60;
+  const isByTheEdge = isLeft || x > cutFrame.loadX - 60;
   return (
     <g>
       <path d={`M${x - reach} ${y}H${x + reach}`} stroke="var(--ink)" strokeWidth="1.6" />
@@ -67,6 +75,8 @@ function Group({ fromX, toX, cables, lengthM, mmToPx }: GroupProps) {
 interface CutElementProps<L> {
   item: CutItem<L>;
   hang: StubHang;
+  /** of a part across the line: another one follows toward the load */
+  isLeft: boolean;
   draw: (line: L) => DrawnCable;
   mmToPx: number;
 }
@@ -114,7 +124,7 @@ export function CutElement<L>(props: CutElementProps<L>) {
         />
       );
     case "part":
-      return <Part part={element} x={x} reach={(toX - fromX) / 2 + 5} />;
+      return <Part part={element} x={x} reach={(toX - fromX) / 2 + 5} isLeft={props.isLeft} />;
     case "pad":
       return <Box x={x} y={y} inside={`${digits(element.lossDb, 1)} dB`} width={toX - fromX} />;
     case "joint":

@@ -5,6 +5,7 @@ import { CandidateColumn } from "@/components/runs/candidate-column";
 import { CandidateList } from "@/components/runs/candidate-list";
 import { MatchCharts } from "@/components/runs/match-charts";
 import { MatchConditions } from "@/components/runs/match-conditions";
+import { MatchSpecial } from "@/components/runs/match-special";
 import { useRunEditor } from "@/components/runs/run-editor";
 import { RunFrame } from "@/components/runs/run-frame";
 import { MatchAskedFor } from "@/components/runs/match-asked-for";
@@ -29,6 +30,7 @@ export function MatchView() {
   return (
     <RunFrame head={<MatchAskedFor matching={matching} />}>
       <MatchConditions matching={matching} />
+      <MatchSpecial matching={matching} />
       <LeftBehind asked={matching.asked} />
       {trouble && (
         <div className="mt-5">
