@@ -105,7 +105,9 @@ export function nearestPlaces({ load, lineOhm, targetOhm, firstDistance, spacing
     each,
     far: turnsApart(each, firstDistance),
   }));
-  const nearest = distances.sort((a, b) => a.far - b.far || a.each - b.each)[0];
+  // Of two equally near ones that which needs less line.
+  const isTie = (a: number, b: number) => Math.abs(a - b) < 1e-9;
+  const nearest = distances.sort((a, b) => (isTie(a.far, b.far) ? a.each - b.each : a.far - b.far))[0];
   return {
     ...(away > 0 && { spacing: turnsApart(away, spacing) <= turnsApart(0.5 - away, spacing) ? away : 0.5 - away }),
     ...(nearest && { firstDistance: nearest.each }),

@@ -10,8 +10,8 @@ import { withoutReactance } from "@/lib/line/match/without-reactance";
 import { frequencyText, listText, ohmText } from "@/lib/line/match/wording";
 import { portReflection, returnLossDb } from "@/lib/line/reflection";
 
-/** A stub whose admittance at the design frequency is over this many of the target's leaves nothing to pass. */
-const shorting = 300;
+/** A stub that without loss has over this many times its line's admittance at the design frequency leaves nothing to pass. */
+const shorting = 100;
 
 const ends: readonly StubEnd[] = ["open", "short"];
 
@@ -36,7 +36,7 @@ export function notchStubs(point: DesignPoint): Outcome {
   if (notchHz === undefined) return { proposals: [], why: "No notch frequency was named." };
   if (!feeder || lines.length === 0) return { proposals: [], why: "No line was named to cut a stub from." };
   const all = lines.flatMap((line) => ends.map((end) => notchOf(point, feeder, line, end, notchHz)));
-  const able = all.filter(({ susceptanceS }) => Math.abs(susceptanceS) * request.targetOhm < shorting);
+  const able = all.filter((notch) => !isShortAtDesign(notch));
   const proposals = able.flatMap((notch) =>
     ends.flatMap((second) =>
       [...besideMatched(point, notch, second), ...matching(point, notch, second)].map(([distance, length]) =>
@@ -56,6 +56,12 @@ function notchOf(point: DesignPoint, feeder: DesignLine, line: DesignLine, end: 
   const length = (end === "open" ? Math.PI / 2 : Math.PI) / phaseAt(line, point.request, notchHz);
   const { v, i } = stubPair(line, length, end);
   return { feeder, line, end, length, susceptanceS: divide(i, v).im };
+}
+
+/** Whether the stub shorts the design frequency as it does the notch: what a lossy stub shows there is no measure. */
+function isShortAtDesign({ line, end, length }: Notch): boolean {
+  const tangent = Math.abs(Math.tan(line.gamma.im * length));
+  return (end === "open" ? tangent : 1 / tangent) > shorting;
 }
 
 /** The pair at the place of what keeps the asked return loss already: the second stub cancels the first. */
