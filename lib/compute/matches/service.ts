@@ -7,6 +7,7 @@ import { linesOf, resolved, toLine } from "@/lib/compute/lines/service";
 import { matchesFaults } from "@/lib/compute/matches/faults";
 import type { MatchesRequest } from "@/lib/compute/matches/schema";
 import { computed, refuse } from "@/lib/compute/refuse";
+import { bandOf, bandSamples } from "@/lib/line/match/extreme";
 import type { MatchLine, MatchRequest } from "@/lib/line/match/match-request";
 import { shortlist } from "@/lib/line/match/shortlist";
 
@@ -18,9 +19,10 @@ export function computeMatches(actor: Actor, request: MatchesRequest) {
   const { lines: named, catalogue, feeder: feederRef, place, ...asked } = request;
   const known = named ? namedLines(actor, named) : listUsableCables(actor).map(toLine);
   const [feeder] = feederRef ? linesOf(actor, [{ path: "feeder", ref: feederRef }]) : [];
-  refuse(matchesFaults(request, catalogue ? Math.min(known.length, mostOfCatalogue) : known.length));
   const behind = place && resolved(actor, place.behind, "place.behind");
   const whole: Omit<MatchRequest, "lines"> = { ...asked, feeder, behind, pairs: catalogue };
+  const samples = bandSamples(bandOf({ ...whole, lines: [] })).length;
+  refuse(matchesFaults(request, catalogue ? Math.min(known.length, mostOfCatalogue) : known.length, samples));
   return computed(matched(whole, known, catalogue ? mostOfCatalogue : known.length));
 }
 
