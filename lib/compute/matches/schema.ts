@@ -119,6 +119,10 @@ export const matchesAnswerSchema = z
             .number()
             .optional()
             .describe("of 500 seeded draws within the tolerance, those that keep returnLossDb; with tolerance only"),
+          hasIdealLine: z
+            .literal(true)
+            .optional()
+            .describe("a section is a line that no cable given has the impedance of, and has to be made"),
           resistorsOhm: z
             .array(z.number())
             .length(3)

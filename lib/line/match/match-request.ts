@@ -85,6 +85,8 @@ export interface Candidate {
   worstReturnLossAtLimitsDb?: number | null;
   /** share of seeded draws within the tolerance that keep the asked return loss over the band; only with a tolerance */
   yieldPercent?: number;
+  /** a section is a line that no cable given has the impedance of, and has to be made; absent where none is */
+  hasIdealLine?: true;
   /** resistors of a pad from the source side, ohm: series, shunt, series, or shunt, series, shunt; 0 is a wire */
   resistorsOhm?: [number, number, number];
   /** available source power over power in the load at the notch; null where no power arrives; notch stubs only */
@@ -122,7 +124,10 @@ export interface Refusal {
 }
 
 /** A way to match before it is judged over the band. */
-export type Proposal = Pick<Candidate, "method" | "title" | "elements" | "needs" | "notes" | "resistorsOhm">;
+export type Proposal = Pick<
+  Candidate,
+  "method" | "title" | "elements" | "needs" | "notes" | "resistorsOhm" | "hasIdealLine"
+>;
 
 /** What a method found; where that is nothing, `why` is the reason. */
 export interface Outcome {

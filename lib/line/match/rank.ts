@@ -17,11 +17,12 @@ const yieldStep = 5;
  * Candidates best first:
  * 1. those that keep the asked return loss over the whole band come before those that do not;
  * 2. then those that waste less in the match, in steps of 1 dB, so that a pad never stands before a match;
- * 3. where a tolerance is given, then those that keep the asked return loss at their limits, then the better yield, in
+ * 3. then those made of what is at hand, before those with a line that has to be made;
+ * 4. where a tolerance is given, then those that keep the asked return loss at their limits, then the better yield, in
  *    steps of 5 %;
- * 4. then the better worst return loss over the band, in steps of 0.5 dB;
- * 5. then the lower worst transducer loss over the band, in steps of 0.005 dB;
- * 6. then the wider bandwidth, then less cable, then the title, so that the order never depends on that of the request.
+ * 5. then the better worst return loss over the band, in steps of 0.5 dB;
+ * 6. then the lower worst transducer loss over the band, in steps of 0.005 dB;
+ * 7. then the wider bandwidth, then less cable, then the title, so that the order never depends on that of the request.
  * Steps are fixed classes rather than differences, which keeps the order the same whichever pair is compared first.
  * @param returnLossDb - asked over the band
  */
@@ -36,6 +37,7 @@ function keyOf(candidate: Candidate, returnLossDb: number): number[] {
   return [
     worst >= returnLossDb ? 0 : 1,
     Math.floor(orInfinite(candidate.worstMatchLossDb) / wasteStep),
+    candidate.hasIdealLine ? 1 : 0,
     candidate.worstReturnLossAtLimitsDb === undefined || orInfinite(candidate.worstReturnLossAtLimitsDb) >= returnLossDb
       ? 0
       : 1,

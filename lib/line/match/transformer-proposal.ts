@@ -41,6 +41,7 @@ export function transformerProposal(point: DesignPoint, transformer: Transformer
     method: kind,
     title: `${words[kind]} of ${count}, ${made} ${placeText(point, place.distance)}`,
     elements: [...sections, ...lead],
+    ...(lines.some(({ isIdeal }) => isIdeal) && { hasIdealLine: true as const }),
     needs: [
       `${lines.length + 1} joints`,
       ...lines.map((each, n) => needOf(point, each, n)),

@@ -96,7 +96,8 @@ test("a piece shorter than its ends has nothing left to cut", () => {
 test("with a tolerance the ranking puts what keeps the band at its limits first, then the better yield", () => {
   const { candidates } = findMatches({ ...request, returnLossDb: 24, tolerance: { lengthM: 0.02, valuePercent: 5 } });
   const kept = candidates.filter(
-    (each) => (each.worstReturnLossDb ?? Infinity) >= 24 && (each.worstMatchLossDb ?? Infinity) < 1,
+    (each) =>
+      (each.worstReturnLossDb ?? Infinity) >= 24 && (each.worstMatchLossDb ?? Infinity) < 1 && !each.hasIdealLine,
   );
   const atLimits = kept.map((each) => (each.worstReturnLossAtLimitsDb ?? Infinity) >= 24);
   expect(atLimits).toEqual([...atLimits].sort((a, b) => Number(b) - Number(a)));

@@ -111,7 +111,7 @@ test("every exact candidate, for any load and lossy lines, shows the target when
         for (const length of lengthsOf(candidate).filter(Number.isFinite)) expect(length).toBeLessThan(halfWave);
       }
     }),
-    { numRuns: 25 },
+    { numRuns: 12 },
   );
 });
 
@@ -139,7 +139,7 @@ test("every candidate of every method shows at the design frequency the return l
       }
       expect(found.size + refused.length).toBe(matchMethods.length);
     }),
-    { numRuns: 15 },
+    { numRuns: 8 },
   );
 });
 

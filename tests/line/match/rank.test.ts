@@ -33,6 +33,24 @@ test("the better worst return loss comes first, and a perfect match before any n
   expect(titles([...all, candidate("perfect", { worstReturnLossDb: null })])).toEqual(["perfect", "better", "good"]);
 });
 
+test("what wastes whole decibels comes after what wastes less, and a line that has to be made after what is at hand", () => {
+  const pad = candidate("pad", { worstReturnLossDb: 60, worstMatchLossDb: 5.7, worstTransducerLossDb: 5.7 });
+  const made = candidate("made", { worstReturnLossDb: 50, hasIdealLine: true });
+  expect(titles([pad, made, candidate("cut", { worstReturnLossDb: 20 })])).toEqual(["cut", "made", "pad"]);
+});
+
+test("with a tolerance those that keep it at their limits come first, then the better yield in steps of 5 %", () => {
+  const made = (title: string, worstReturnLossAtLimitsDb: number, yieldPercent: number, worstReturnLossDb: number) =>
+    candidate(title, { worstReturnLossAtLimitsDb, yieldPercent, worstReturnLossDb });
+  const all = [
+    made("few", 9, 61, 40),
+    made("most", 12, 96, 30),
+    made("also most", 12, 97, 20),
+    made("all", 15, 100, 18),
+  ];
+  expect(titles(all)).toEqual(["all", "most", "also most", "few"]);
+});
+
 test("where return loss differs by less than half a decibel the lower loss comes first", () => {
   const lossy = candidate("lossy", { worstReturnLossDb: 20.4, worstTransducerLossDb: 0.3 });
   const thrifty = candidate("thrifty", { worstReturnLossDb: 20.1, worstTransducerLossDb: 0.1 });
