@@ -5,7 +5,7 @@ import { cutFrame, type CutItem, type StubHang } from "@/components/line/cut-lay
 import { CutStub } from "@/components/line/cut-stub";
 import { CutWords, Dimension } from "@/components/line/dimension";
 import { Box, Joint, Plate, SeriesPart, ShuntPart, Transformer } from "@/components/line/symbols";
-import { cutLength, digits, scaled } from "@/lib/format/quantity";
+import { cutLength, digits, inWords, scaled } from "@/lib/format/quantity";
 import type { PartElement } from "@/lib/line/element";
 
 const { axisY: y } = cutFrame;
@@ -51,15 +51,18 @@ interface GroupProps {
   toX: number;
   cables: DrawnCable[];
   lengthM: number;
+  /** of the second cable, where it is not that of the first */
+  otherM?: number | undefined;
   mmToPx: number;
 }
 
 /** Cables side by side between two plates, with one dimension under them. */
-function Group({ fromX, toX, cables, lengthM, mmToPx }: GroupProps) {
+function Group({ fromX, toX, cables, lengthM, otherM, mmToPx }: GroupProps) {
   const drawn = cables.slice(0, 3);
   const half = drawn.length * 7.5 + 3;
   const at = (i: number) => y + (i - (drawn.length - 1) / 2) * 15;
-  const words = cables.length === 2 ? "both" : `all ${cables.length}`;
+  const alike = cables.length === 2 ? "both" : `all ${cables.length}`;
+  const words = otherM === undefined ? alike : `below ${inWords(cutLength(otherM))}`;
   return (
     <g>
       {drawn.map((cable, i) => (
@@ -84,14 +87,12 @@ interface CutElementProps<L> {
 /** What takes length along the line. */
 function Laid<L>({ item: { element, fromX, toX }, draw, mmToPx }: CutElementProps<L>) {
   const at = { fromX, toX, mmToPx };
-  if (element.kind === "parallel")
-    return (
-      <Group
-        {...at}
-        cables={element.branches.map(({ line }) => draw(line))}
-        lengthM={element.branches[0]?.lengthM ?? 0}
-      />
-    );
+  if (element.kind === "parallel") {
+    const [first, second] = element.branches.map(({ lengthM }) => lengthM);
+    const otherM = second === first ? undefined : second;
+    const cables = element.branches.map(({ line }) => draw(line));
+    return <Group {...at} cables={cables} lengthM={first ?? 0} otherM={otherM} />;
+  }
   if (element.kind !== "cable") return null;
   const count = element.paralleled ?? 1;
   if (count > 1)

@@ -16,9 +16,11 @@ export interface AtLimits {
   words: string;
 }
 
+const cutKinds: Element["kind"][] = ["cable", "stub", "parallel"];
+
 /** "cut ±5 mm", "parts ±5 %"; null where nothing of the match can be off. */
 function looseWords(elements: readonly Element[], { lengthM = 0, valuePercent = 0 }: CutTolerance): string | null {
-  const isCut = lengthM > 0 && elements.some(({ kind }) => kind === "cable" || kind === "stub");
+  const isCut = lengthM > 0 && elements.some(({ kind }) => cutKinds.includes(kind));
   const hasParts = valuePercent > 0 && elements.some(({ kind }) => kind === "part" || kind === "pad");
   const words = [
     ...(isCut ? [`cut ±${inWords(cutLength(lengthM))}`] : []),

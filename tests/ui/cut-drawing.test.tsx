@@ -38,6 +38,15 @@ test("cables in parallel say for how many of them the length holds", () => {
   expect(screen.getByRole("img").textContent).toContain("210mm, both");
 });
 
+test("different cables in parallel have a length each", () => {
+  const branches = [
+    { line, lengthM: 0.21 },
+    { line: "C75-F7", lengthM: 0.2304 },
+  ];
+  render(<CutDrawing elements={[{ kind: "parallel", branches }]} load="antenna" name="Beside" />);
+  expect(screen.getByRole("img").textContent?.replaceAll("\u00a0", " ")).toContain("210mm, below 230 mm");
+});
+
 test("two stubs are both drawn with their lengths, at their own tees or at one, and neither's words stand on the other", () => {
   const stub = (lengthM: number): Piece => ({ kind: "stub", connection: "shunt", end: "open", line, lengthM });
   const apart: Piece[] = [stub(3.756), { kind: "cable", line, lengthM: 1.167 }, stub(0.111)];

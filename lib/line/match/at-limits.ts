@@ -1,4 +1,4 @@
-import type { Element } from "@/lib/line/element";
+import type { Element, ParallelElement } from "@/lib/line/element";
 import { bandSamples, greatest, type Band } from "@/lib/line/match/extreme";
 import { isLoose, madeNetwork } from "@/lib/line/match/made-network";
 import { padAsParts } from "@/lib/line/match/pad-as-parts";
@@ -78,6 +78,12 @@ function worstCorners(network: Element[], tolerance: CutTolerance, ends: Ends, b
     .map(({ corner }) => corner);
 }
 
+/** Lengths side by side are never nothing. */
+const branchOff = (off: number) => (branch: ParallelElement["branches"][number]) => ({
+  ...branch,
+  lengthM: Math.max(1e-9, branch.lengthM + off),
+});
+
 /** The network made off by shares of its tolerances, in the order of the elements that can be off. */
 function offBy(network: readonly Element[], tolerance: CutTolerance, shares: readonly number[]): Element[] {
   const { lengthM = 0, valuePercent = 0 } = tolerance;
@@ -87,6 +93,7 @@ function offBy(network: readonly Element[], tolerance: CutTolerance, shares: rea
     const share = shares[figure++]!;
     if (element.kind === "cable" || element.kind === "stub")
       return { ...element, lengthM: Math.max(0, element.lengthM + share * lengthM) };
+    if (element.kind === "parallel") return { ...element, branches: element.branches.map(branchOff(share * lengthM)) };
     if (element.kind !== "part") return element;
     const factor = 1 + (share * valuePercent) / 100;
     return {

@@ -6,12 +6,15 @@ import { ohmText } from "@/lib/line/match/wording";
 
 /** The pieces of cable of a network, from the target side to the load, each with what is to be cut. */
 export function cutsOf(elements: readonly Element[], point: DesignPoint): Cut[] {
-  const { endAllowanceM = 0 } = point.request;
+  const cut = (name: string, line: Line, lengthM: number, count = 1): Cut => {
+    const left = lengthM - (point.request.endAllowanceM ?? 0);
+    return { name, line: labelOf(line, point), count, lengthM, cutM: left > 0 ? left : null };
+  };
   return elements.flatMap((element): Cut[] => {
+    const { name = "" } = element;
+    if (element.kind === "parallel") return element.branches.map(({ line, lengthM }) => cut(name, line, lengthM));
     if (element.kind !== "cable" && element.kind !== "stub") return [];
-    const { name = "", line, lengthM, paralleled: count = 1 } = element;
-    const left = lengthM - endAllowanceM;
-    return [{ name, line: labelOf(line, point), count, lengthM, cutM: left > 0 ? left : null }];
+    return [cut(name, element.line, element.lengthM, element.paralleled)];
   });
 }
 

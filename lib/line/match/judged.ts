@@ -62,5 +62,6 @@ const exact = 180;
 const finite = (value: number): number | null => (Number.isFinite(value) ? value : null);
 
 function cableIn(element: Element): number {
+  if (element.kind === "parallel") return element.branches.reduce((sum, { lengthM }) => sum + lengthM, 0);
   return element.kind === "cable" || element.kind === "stub" ? element.lengthM * (element.paralleled ?? 1) : 0;
 }

@@ -38,14 +38,14 @@ export function madeLine(
   const isSeries = isStub && element.connection === "series";
   return (walk, k, share) => {
     const length = Math.max(0, lengthM + share * most);
-    fill(matrix, gamma[2 * k]! * length, gamma[2 * k + 1]! * length, impedance[2 * k]!, impedance[2 * k + 1]!);
+    fillLine(matrix, gamma[2 * k]! * length, gamma[2 * k + 1]! * length, impedance[2 * k]!, impedance[2 * k + 1]!);
     if (isStub) asBranch(matrix, isOpen, isSeries);
     chainWalk(walk, matrix, 0);
   };
 }
 
 /** Writes cosh γl, Zc·sinh γl, sinh γl/Zc and cosh γl, re and im of each. */
-function fill(m: Float64Array, loss: number, phase: number, zRe: number, zIm: number): void {
+export function fillLine(m: Float64Array, loss: number, phase: number, zRe: number, zIm: number): void {
   const grown = Math.exp(loss);
   const even = (grown + 1 / grown) / 2;
   const odd = (grown - 1 / grown) / 2;

@@ -5,6 +5,7 @@
 import type { Element, PartElement } from "@/lib/line/element";
 import { prepareElement } from "@/lib/line/element-two-port";
 import type { CutTolerance } from "@/lib/line/match/at-limits";
+import { madeBeside } from "@/lib/line/match/made-beside";
 import { chainWalk, madeLine } from "@/lib/line/match/made-line";
 import type { Ends } from "@/lib/line/match/response";
 import type { TwoPortAt } from "@/lib/line/two-port";
@@ -26,7 +27,7 @@ const axis = (frequency: number) => ({ re: 0, im: 2 * Math.PI * frequency });
 
 /** Whether something of an element can be off. */
 export function isLoose(element: Element, { lengthM = 0, valuePercent = 0 }: CutTolerance): boolean {
-  if (element.kind === "cable" || element.kind === "stub") return lengthM > 0;
+  if (element.kind === "cable" || element.kind === "stub" || element.kind === "parallel") return lengthM > 0;
   return element.kind === "part" && valuePercent > 0;
 }
 
@@ -73,6 +74,8 @@ function stepOf(
 ): Step {
   if (element.kind === "cable" || (element.kind === "stub" && typeof element.end === "string"))
     return madeLine(element, lengthM, element.temperatureC ?? temperatureC, frequencies);
+  if (element.kind === "parallel")
+    return madeBeside(element, lengthM, element.temperatureC ?? temperatureC, frequencies);
   const twoPort = prepareElement(element, { temperatureC });
   if (element.kind === "part") return partStep(element, twoPort, valuePercent / 100, frequencies);
   return fixedStep(twoPort, frequencies);

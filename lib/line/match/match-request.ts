@@ -43,7 +43,7 @@ export interface MatchRequest {
   feeder?: MatchLine;
   /** for stubs and sections */
   lines: readonly MatchLine[];
-  /** among series sections also two of the lines one after the other, neither of them the feeder */
+  /** two of the lines one after the other among series sections, and side by side among paralleled cables */
   pairs?: boolean;
   /** default all */
   methods?: readonly MatchMethod[];

@@ -9,6 +9,7 @@ import {
   type DesignPoint,
 } from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
+import { besidePairs } from "@/lib/line/match/beside-pairs";
 import { cablePairs } from "@/lib/line/match/cable-pairs";
 import { mostCables } from "@/lib/line/match/fit-line";
 import { reflectionAgainst } from "@/lib/line/match/line-angle";
@@ -32,13 +33,16 @@ export function seriesSections(point: DesignPoint): Outcome {
 
 /**
  * The same with two, three or four equal lengths of one line side by side as the section: a low impedance that no
- * single cable has.
+ * single cable has; where the request asks for pairs, two different ones too.
  */
 export function parallelCables(point: DesignPoint): Outcome {
-  return sections(
+  const alike = sections(
     point,
     Array.from({ length: mostCables - 1 }, (_, k) => k + 2),
   );
+  const { feeder, request } = point;
+  const different = request.pairs && feeder ? besidePairs(point, feeder) : [];
+  return different.length > 0 ? { proposals: [...alike.proposals, ...different], why: "" } : alike;
 }
 
 function sections(point: DesignPoint, counts: number[]): Outcome {

@@ -62,6 +62,29 @@ test("where pairs are asked for, two cables one after the other match too, solve
   }
 });
 
+test("where pairs are asked for, two different cables side by side match too, each in the cut list, off together", () => {
+  const asked: MatchRequest = {
+    ...request,
+    lines: [c50F10, c75F7, lossless(40)],
+    methods: ["parallelCables"],
+    tolerance: { lengthM: 0.01 },
+  };
+  const { candidates } = findMatches({ ...asked, pairs: true });
+  const pairs = candidates.filter(({ title }) => title.startsWith("Two different cables in parallel"));
+  expect(pairs.length).toBeGreaterThan(0);
+  for (const candidate of pairs) {
+    const [section] = candidate.elements;
+    if (section?.kind !== "parallel") throw new Error("not a section of cables side by side");
+    const { inputImpedance } = sweep(circuitOf(asked, candidate), [27.2e6]);
+    expect(Math.hypot(inputImpedance.re[0]! - 50, inputImpedance.im[0]!)).toBeLessThan(1e-6);
+    expect(candidate.cuts.slice(0, 2).map(({ lengthM }) => lengthM)).toEqual(
+      section.branches.map(({ lengthM }) => lengthM),
+    );
+    expect(candidate.cuts.reduce((sum, { lengthM }) => sum + lengthM, 0)).toBeCloseTo(candidate.totalLengthM, 12);
+    expect(candidate.worstReturnLossAtLimitsDb!).toBeLessThan(candidate.worstReturnLossDb!);
+  }
+});
+
 test("cuts list every piece of cable with its line, and take the ends' allowance off, which needs repeat", () => {
   const { candidates } = findMatches({ ...request, endAllowanceM: 0.012, methods: ["shuntStub", "parallelCables"] });
   const stub = candidates.find(({ title }) => title.startsWith("Shorted stub, 951"))!;

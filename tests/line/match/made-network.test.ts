@@ -24,6 +24,13 @@ const oddments: Element[] = [
   { kind: "transformer", turnsRatio: 1.5 },
   { kind: "stub", connection: "series", end: "open", line: c75F7, lengthM: 0.4, paralleled: 2 },
   { kind: "cable", line: c50F10, lengthM: 0.3, temperatureC: 60 },
+  {
+    kind: "parallel",
+    branches: [
+      { line: c50F10, lengthM: 1.1 },
+      { line: c75F7, lengthM: 1.3 },
+    ],
+  },
 ];
 const networks = [...candidates.map(({ elements }) => elements), oddments];
 
@@ -31,6 +38,10 @@ const networks = [...candidates.map(({ elements }) => elements), oddments];
 function off(element: Element, share: number): Element {
   if (element.kind === "cable" || element.kind === "stub")
     return { ...element, lengthM: Math.max(0, element.lengthM + share * tolerance.lengthM) };
+  if (element.kind === "parallel") {
+    const branches = element.branches.map((each) => ({ ...each, lengthM: each.lengthM + share * tolerance.lengthM }));
+    return { ...element, branches };
+  }
   if (element.kind !== "part") return element;
   const factor = 1 + (share * tolerance.valuePercent) / 100;
   const { rOhm, lH, cF } = element;
