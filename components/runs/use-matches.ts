@@ -91,15 +91,20 @@ interface Request {
   isWhole: boolean;
 }
 
-function useRequest(choices: MatchChoices): Request {
-  const { place, targetOhm, returnLossDb, coilQ, capacitorQ, stubCableId } = choices;
+/** What only some methods ask, the same object while nothing of it changes. */
+function useSpecial(choices: MatchChoices) {
   const { notchHz, spacingWavelengths, firstDistanceWavelengths, sections, endAllowanceM } = choices;
-  const { draft, lines } = useRunEditor();
-  const { circuit, designHz, bandHz, temperatureC } = draft;
-  const special = useMemo(
+  return useMemo(
     () => ({ notchHz, spacingWavelengths, firstDistanceWavelengths, sections, endAllowanceM }),
     [notchHz, spacingWavelengths, firstDistanceWavelengths, sections, endAllowanceM],
   );
+}
+
+function useRequest(choices: MatchChoices): Request {
+  const { place, targetOhm, returnLossDb, coilQ, capacitorQ, stubCableId } = choices;
+  const special = useSpecial(choices);
+  const { draft, lines } = useRunEditor();
+  const { circuit, designHz, bandHz, temperatureC } = draft;
   return useMemo(() => {
     const ref = feederTo(circuit.elements, place);
     const feeder = (ref && lineNamed(ref, lines)) ?? null;
