@@ -140,6 +140,7 @@ export const matchesAnswerSchema = z
                 count: z.int(),
                 lengthM: z.number().describe("as drawn and computed"),
                 cutM: figure.describe("less endAllowanceM; null where nothing would be left"),
+                trimHzPerM: figure.describe("how the best frequency moves for each metre taken off, up above 0"),
               }),
             )
             .describe("pieces of cable to cut, from the target side to the load"),

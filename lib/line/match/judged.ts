@@ -25,7 +25,7 @@ export function judged(proposal: Proposal, point: DesignPoint): Candidate {
     worstTransducerLossDb: finite(verdict.worstTransducerLossDb),
     worstMatchLossDb: finite(verdict.worstMatchLossDb),
     totalLengthM: proposal.elements.reduce((sum, element) => sum + cableIn(element), 0),
-    cuts: cutsOf(proposal.elements, point),
+    cuts: [],
     notes: verdict.isAtLeast ? [...proposal.notes, atLeast] : proposal.notes,
   };
 }
@@ -35,17 +35,19 @@ function endsOf({ request, seen }: DesignPoint): Ends {
   return { seen, targetOhm, temperatureC };
 }
 
-/** A candidate with what it keeps when it is not made as drawn, where the request says how well it will be made. */
+/** A candidate with its cut list and, where the request says how well it will be made, what it keeps when it is off. */
 export function asMade(candidate: Candidate, point: DesignPoint): Candidate {
-  const { tolerance } = point.request;
-  if (!tolerance) return candidate;
-  const made = [candidate.elements, tolerance, endsOf(point), bandOf(point.request)] as const;
+  const { tolerance, returnLossDb } = point.request;
+  const { elements, designReturnLossDb } = candidate;
+  const whole = { ...candidate, cuts: cutsOf(elements, point, designReturnLossDb) };
+  if (!tolerance) return whole;
+  const made = [elements, tolerance, endsOf(point), bandOf(point.request)] as const;
   const worst = worstAtLimits(...made);
   return {
-    ...candidate,
+    ...whole,
     worstReturnLossAtLimitsDb: finite(worst),
     // What keeps the return loss at its limits keeps it between them, and needs no draws.
-    yieldPercent: worst >= point.request.returnLossDb ? 100 : yieldPercent(...made),
+    yieldPercent: worst >= returnLossDb ? 100 : yieldPercent(...made),
   };
 }
 

@@ -115,6 +115,8 @@ export interface Cut {
   lengthM: number;
   /** the same less what its joints and ends add, metre; null where nothing would be left */
   cutM: number | null;
+  /** how the best frequency moves for each metre taken off, hertz, up above 0; null where no exact match is left to move */
+  trimHzPerM: number | null;
 }
 
 export interface Refusal {

@@ -88,14 +88,23 @@ test("where pairs are asked for, two different cables side by side match too, ea
 test("cuts list every piece of cable with its line, and take the ends' allowance off, which needs repeat", () => {
   const { candidates } = findMatches({ ...request, endAllowanceM: 0.012, methods: ["shuntStub", "parallelCables"] });
   const stub = candidates.find(({ title }) => title.startsWith("Shorted stub, 951"))!;
+  const trimHzPerM = expect.any(Number) as number;
   expect(stub.cuts).toEqual([
-    { name: "Stub", line: "C50-F10", count: 1, lengthM: expect.closeTo(0.951, 3), cutM: expect.closeTo(0.939, 3) },
+    {
+      name: "Stub",
+      line: "C50-F10",
+      count: 1,
+      lengthM: expect.closeTo(0.951, 3),
+      cutM: expect.closeTo(0.939, 3),
+      trimHzPerM,
+    },
     {
       name: "Stub to load",
       line: "C50-F10",
       count: 1,
       lengthM: expect.closeTo(0.269, 3),
       cutM: expect.closeTo(0.257, 3),
+      trimHzPerM,
     },
   ]);
   expect(stub.needs.map((each) => each.replaceAll("\u00a0", " "))).toContain("939 mm of C50-F10 for the stub");
@@ -108,6 +117,36 @@ test("cuts list every piece of cable with its line, and take the ends' allowance
     );
     expect(cuts.reduce((sum, { lengthM, count }) => sum + lengthM * count, 0)).toBeCloseTo(totalLengthM, 12);
   }
+});
+
+test("the trim of each piece is how the best frequency really moves when it alone is shortened", () => {
+  const asked: MatchRequest = { ...request, lines: [c50F10], methods: ["shuntStub", "doubleStub"] };
+  const { candidates } = findMatches(asked);
+  const frequencies = Array.from({ length: 4001 }, (_, k) => 27.1e6 + k * 50);
+  for (const { elements, cuts, title } of candidates.slice(0, 4)) {
+    cuts.forEach(({ trimHzPerM }, k) => {
+      const off = 0.002;
+      const trimmed = elements.map((each, n) =>
+        n === k && "lengthM" in each ? { ...each, lengthM: each.lengthM - off } : each,
+      );
+      const { returnLossDb } = sweep(circuitOf(asked, { elements: trimmed }), frequencies);
+      const best = frequencies[returnLossDb.indexOf(Math.max(...returnLossDb))]!;
+      const moved = trimHzPerM! * off;
+      expect(Math.abs(best - 27.2e6 - moved), title).toBeLessThan(0.05 * Math.abs(moved) + 100);
+    });
+  }
+});
+
+test("a match that is not exact has no best frequency to be trimmed to", () => {
+  const { candidates } = findMatches({
+    ...request,
+    lines: [],
+    methods: ["equalRipple"],
+    sections: 2,
+    rippleReturnLossDb: 20,
+  });
+  expect(candidates.length).toBeGreaterThan(0);
+  for (const { cuts } of candidates) expect(cuts.map(({ trimHzPerM }) => trimHzPerM)).toEqual(cuts.map(() => null));
 });
 
 test("a piece shorter than its ends has nothing left to cut", () => {
