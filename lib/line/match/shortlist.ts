@@ -26,11 +26,8 @@ export function shortlist(
   most: number,
 ): MatchLine[] {
   if (lines.length <= most) return [...lines];
-  const impedances = lines.map(({ model }) => nominalFigures(model).z0);
-  const queues = wantedOhms(request).map((wanted) => {
-    const away = impedances.map((z0) => distance(z0, wanted));
-    return [...lines.keys()].sort((a, b) => away[a]! - away[b]!);
-  });
+  const logs = Float64Array.from(lines, ({ model }) => Math.log(nominalFigures(model).z0));
+  const queues = wantedOhms(request).map((wanted) => nearest(logs, Math.log(wanted), most));
   const kept = new Set<number>();
   for (let turn = 0; kept.size < most; turn++)
     for (const queue of queues) {
@@ -40,9 +37,19 @@ export function shortlist(
   return lines.filter((_, index) => kept.has(index));
 }
 
-function distance(z0: number, wanted: number): number {
-  const counts = Array.from({ length: mostCables }, (_, k) => k + 1);
-  return Math.min(...counts.map((count) => Math.abs(Math.log(z0 / count / wanted)) + joining * (count - 1)));
+const logCounts = Array.from({ length: mostCables }, (_, k) => Math.log(k + 1));
+
+/** The places of the impedances nearest to a wanted one, nearest first, all as logarithms; no more than `most`. */
+function nearest(logs: Float64Array, wanted: number, most: number): number[] {
+  const away = logs.map((log) => {
+    let least = Infinity;
+    for (let k = 0; k < mostCables; k++) least = Math.min(least, Math.abs(log - logCounts[k]! - wanted) + joining * k);
+    return least;
+  });
+  // The order of all need not be known, only where the nearest end.
+  const edge = away.toSorted()[most - 1]!;
+  const near = [...away.keys()].filter((k) => away[k]! <= edge);
+  return near.sort((a, b) => away[a]! - away[b]! || a - b).slice(0, most);
 }
 
 /** The impedances that matches of a load are made with, ohm; the target's alone where nothing else is known. */
