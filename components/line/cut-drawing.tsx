@@ -1,6 +1,6 @@
 import { CableLengthwise } from "@/components/line/cable-lengthwise";
 import { cableShape, type DrawnCable } from "@/components/line/cable-shape";
-import { cutFrame, cutLayout, hangOf, type CutItem } from "@/components/line/cut-layout";
+import { cutFrame, cutLayout, hangOf, isLeftOfAnother, teeLinks, type CutItem } from "@/components/line/cut-layout";
 import { CutElement } from "@/components/line/cut-pieces";
 import { LoadSymbol } from "@/components/line/end-symbols";
 import type { StripEnd } from "@/components/line/strip-piece";
@@ -102,9 +102,13 @@ export function CutDrawing<L>({ elements, load, cableOf, lead, onward, name }: C
     >
       <CableLengthwise {...leading} fromX={leadX} toX={layout.startX} y={y} mmToPx={mmToPx} />
       <path d={`M${leadX - 2} ${y - 12}q6 6 0 12t0 12`} fill="none" stroke="var(--ink)" strokeWidth="1.2" />
+      {teeLinks(layout).map(([from, to]) => (
+        <path key={from} d={`M${from} ${y}H${to}`} stroke="var(--conductor)" strokeWidth="2.4" />
+      ))}
       {drawingOrder(layout.items).map((index) => {
         const item = layout.items[index];
-        return item && <CutElement key={index} item={item} hang={hangOf(layout, index)} draw={draw} mmToPx={mmToPx} />;
+        const shape = { hang: hangOf(layout, index), isLeft: isLeftOfAnother(layout, index) };
+        return item && <CutElement key={index} item={item} {...shape} draw={draw} mmToPx={mmToPx} />;
       })}
       {seams(layout.items).map((x) => (
         <path key={x} d={`M${x} ${y - 9}v18`} stroke="var(--ink)" strokeWidth="1.4" />

@@ -13,6 +13,10 @@ export interface CutItem<L> {
 
 export interface StubHang {
   isFolded: boolean;
+  /** where its words stand, of one that hangs */
+  words: "left" | "right" | "below" | "under";
+  /** words below it stand below this much of another stub too */
+  clearPx: number;
   /** px drawn */
   lengthPx: number;
   isBroken: boolean;
@@ -35,6 +39,11 @@ const leastCablePx = 26;
 const leastBesideCablePx = 58;
 const mostHangPx = 52;
 const gapPx = 10;
+/** between two stubs at one tee, so that both can be seen */
+const besideStubPx = 26;
+/** words to the right of what hangs nearer to the load than this do not fit, nor to the left of what is this far left */
+const wordsPx = 70;
+const leftWordsPx = 105;
 
 function lengthOf<L>(element: Element<L>): number {
   if (element.kind === "cable" || element.kind === "stub") return element.lengthM;
@@ -102,6 +111,8 @@ export function cutLayout<L>(elements: readonly Element<L>[]): CutLayout<L> {
     const width = widthOf(element, pxPerM, isBesideCable(elements, index));
     // A part beside the load or beside another part needs a little wire.
     const needsWire = element.kind === "part" || element.kind === "pad" || element.kind === "transformer";
+    const isAtOneTee = element.kind === "stub" && elements[index + 1]?.kind === "stub";
+    if (isAtOneTee) x = rounded(x - besideStubPx);
     const gap = needsWire ? gapPx : 0;
     items.unshift({ element, fromX: rounded(x - gap / 2 - width), toX: rounded(x - gap / 2) });
     x = rounded(x - width - gap);
@@ -109,18 +120,38 @@ export function cutLayout<L>(elements: readonly Element<L>[]): CutLayout<L> {
   return squeezed({ items, pxPerM, startX: x });
 }
 
-/** How a stub is drawn: folded back under the line when it is long and has the room, else hanging. */
+/** From one piece to the next across what is left between two stubs at one tee, px along the line. */
+export function teeLinks<L>({ items }: CutLayout<L>): [number, number][] {
+  return items.flatMap(({ element, toX }, i): [number, number][] => {
+    const next = items[i + 1];
+    return next && element.kind === "stub" && next.element.kind === "stub" ? [[toX, next.fromX]] : [];
+  });
+}
+
+/** How a stub is drawn: folded back under the line when it is alone, long and has the room, else hanging. */
 export function hangOf<L>(layout: CutLayout<L>, index: number): StubHang {
   const item = layout.items[index];
-  if (item?.element.kind !== "stub") return { isFolded: false, lengthPx: 0, isBroken: false };
+  if (item?.element.kind !== "stub")
+    return { isFolded: false, words: "right", clearPx: 0, lengthPx: 0, isBroken: false };
   const wanted = item.element.lengthM * layout.pxPerM;
-  const isFirst = layout.items.findIndex(({ element }) => element.kind === "stub") === index;
+  const stubs = layout.items.flatMap(({ element }, i) => (element.kind === "stub" ? [i] : []));
   const middle = (item.fromX + item.toX) / 2;
-  if (wanted > mostHangPx && isFirst && wanted < middle - 28)
-    return { isFolded: true, lengthPx: rounded(wanted), isBroken: false };
+  if (wanted > mostHangPx && stubs.length === 1 && wanted < middle - 28)
+    return { isFolded: true, words: "below", clearPx: 0, lengthPx: rounded(wanted), isBroken: false };
+  const isLeftmost = stubs.length > 1 && stubs[0] === index;
+  const isByTheEdge = middle > cutFrame.loadX - wordsPx;
+  const outer = middle < leftWordsPx ? "under" : "left";
   return {
     isFolded: false,
+    words: isLeftmost ? outer : isByTheEdge ? "below" : "right",
+    clearPx: stubs.length > 1 ? mostHangPx : 0,
     lengthPx: rounded(Math.max(14, Math.min(mostHangPx, wanted))),
     isBroken: wanted > mostHangPx,
   };
+}
+
+/** Whether the words of a part across the line stand at its left: another one follows, whose words need the right. */
+export function isLeftOfAnother<L>({ items }: CutLayout<L>, index: number): boolean {
+  const isAcross = ({ element }: CutItem<L>) => element.kind === "part" && element.connection === "shunt";
+  return items.slice(index + 1).some(isAcross);
 }

@@ -5,7 +5,7 @@ import { cutFrame, type CutItem, type StubHang } from "@/components/line/cut-lay
 import { CutStub } from "@/components/line/cut-stub";
 import { CutWords, Dimension } from "@/components/line/dimension";
 import { Box, Joint, Plate, SeriesPart, ShuntPart, Transformer } from "@/components/line/symbols";
-import { cutLength, digits, scaled } from "@/lib/format/quantity";
+import { cutLength, digits, inWords, scaled } from "@/lib/format/quantity";
 import type { PartElement } from "@/lib/line/element";
 
 const { axisY: y } = cutFrame;
@@ -17,7 +17,15 @@ function partFigure({ rOhm, lH, cF }: PartElement) {
   return { shape: "resistor", figure: scaled("resistance", rOhm, 3) } as const;
 }
 
-function Part({ part, x, reach }: { part: PartElement; x: number; reach: number }) {
+interface PartProps {
+  part: PartElement;
+  x: number;
+  reach: number;
+  /** another part across follows toward the load */
+  isLeft: boolean;
+}
+
+function Part({ part, x, reach, isLeft }: PartProps) {
   const { shape, figure } = partFigure(part);
   if (part.connection === "series") {
     return (
@@ -28,7 +36,7 @@ function Part({ part, x, reach }: { part: PartElement; x: number; reach: number 
     );
   }
   // Beside the load there is no room to the right.
-  const isByTheEdge = x > cutFrame.loadX - 60;
+  const isByTheEdge = isLeft || x > cutFrame.loadX - 60;
   return (
     <g>
       <path d={`M${x - reach} ${y}H${x + reach}`} stroke="var(--ink)" strokeWidth="1.6" />
@@ -43,15 +51,18 @@ interface GroupProps {
   toX: number;
   cables: DrawnCable[];
   lengthM: number;
+  /** of the second cable, where it is not that of the first */
+  otherM?: number | undefined;
   mmToPx: number;
 }
 
 /** Cables side by side between two plates, with one dimension under them. */
-function Group({ fromX, toX, cables, lengthM, mmToPx }: GroupProps) {
+function Group({ fromX, toX, cables, lengthM, otherM, mmToPx }: GroupProps) {
   const drawn = cables.slice(0, 3);
   const half = drawn.length * 7.5 + 3;
   const at = (i: number) => y + (i - (drawn.length - 1) / 2) * 15;
-  const words = cables.length === 2 ? "both" : `all ${cables.length}`;
+  const alike = cables.length === 2 ? "both" : `all ${cables.length}`;
+  const words = otherM === undefined ? alike : `below ${inWords(cutLength(otherM))}`;
   return (
     <g>
       {drawn.map((cable, i) => (
@@ -67,6 +78,8 @@ function Group({ fromX, toX, cables, lengthM, mmToPx }: GroupProps) {
 interface CutElementProps<L> {
   item: CutItem<L>;
   hang: StubHang;
+  /** of a part across the line: another one follows toward the load */
+  isLeft: boolean;
   draw: (line: L) => DrawnCable;
   mmToPx: number;
 }
@@ -74,14 +87,12 @@ interface CutElementProps<L> {
 /** What takes length along the line. */
 function Laid<L>({ item: { element, fromX, toX }, draw, mmToPx }: CutElementProps<L>) {
   const at = { fromX, toX, mmToPx };
-  if (element.kind === "parallel")
-    return (
-      <Group
-        {...at}
-        cables={element.branches.map(({ line }) => draw(line))}
-        lengthM={element.branches[0]?.lengthM ?? 0}
-      />
-    );
+  if (element.kind === "parallel") {
+    const [first, second] = element.branches.map(({ lengthM }) => lengthM);
+    const otherM = second === first ? undefined : second;
+    const cables = element.branches.map(({ line }) => draw(line));
+    return <Group {...at} cables={cables} lengthM={first ?? 0} otherM={otherM} />;
+  }
   if (element.kind !== "cable") return null;
   const count = element.paralleled ?? 1;
   if (count > 1)
@@ -114,7 +125,7 @@ export function CutElement<L>(props: CutElementProps<L>) {
         />
       );
     case "part":
-      return <Part part={element} x={x} reach={(toX - fromX) / 2 + 5} />;
+      return <Part part={element} x={x} reach={(toX - fromX) / 2 + 5} isLeft={props.isLeft} />;
     case "pad":
       return <Box x={x} y={y} inside={`${digits(element.lossDb, 1)} dB`} width={toX - fromX} />;
     case "joint":

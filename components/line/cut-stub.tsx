@@ -1,6 +1,6 @@
 import { CableLengthwise } from "@/components/line/cable-lengthwise";
 import type { DrawnCable } from "@/components/line/cable-shape";
-import { cutFrame, type StubHang } from "@/components/line/cut-layout";
+import type { StubHang } from "@/components/line/cut-layout";
 import { CutWords, Dimension } from "@/components/line/dimension";
 import { BreakMark, Tee } from "@/components/line/symbols";
 import { cutLength } from "@/lib/format/quantity";
@@ -43,10 +43,19 @@ function Folded<L>({ element, x, y, hang, cable, mmToPx }: CutStubProps<L>) {
   );
 }
 
+/** Where the words of a hanging stub begin or end. */
+function wordsAt({ words, clearPx, lengthPx }: StubHang, x: number, y: number) {
+  const end = y + 8 + lengthPx;
+  const beside = Math.max(y + 30, (y + 10 + end) / 2);
+  if (words === "left") return { x: x - 16, y: beside, anchor: "end" } as const;
+  if (words === "right") return { x: x + 16, y: beside, anchor: "start" } as const;
+  if (words === "under") return { x: x - 14, y: end + 16, anchor: "start" } as const;
+  return { x: x + 14, y: y + 24 + Math.max(lengthPx, clearPx), anchor: "end" } as const;
+}
+
 /** Hanging from the tee, its words beside it. */
 function Hanging<L>({ element, x, y, hang, cable, mmToPx }: CutStubProps<L>) {
   const end = y + 8 + hang.lengthPx;
-  const isByTheEdge = x > cutFrame.loadX - 70;
   return (
     <g>
       <g transform={`rotate(90 ${x} ${y})`}>
@@ -54,13 +63,7 @@ function Hanging<L>({ element, x, y, hang, cable, mmToPx }: CutStubProps<L>) {
         {hang.isBroken && <BreakMark x={x + 8 + hang.lengthPx / 2} y={y} half={6} />}
       </g>
       {element.end === "short" && <path d={`M${x - 9} ${end}h18`} stroke="var(--ink)" strokeWidth="3" />}
-      <CutWords
-        x={isByTheEdge ? x + 14 : x + 16}
-        y={isByTheEdge ? end + 16 : Math.max(y + 30, (y + 10 + end) / 2)}
-        figure={cutLength(element.lengthM)}
-        note={endWords(element.end)}
-        anchor={isByTheEdge ? "end" : "start"}
-      />
+      <CutWords {...wordsAt(hang, x, y)} figure={cutLength(element.lengthM)} note={endWords(element.end)} />
     </g>
   );
 }

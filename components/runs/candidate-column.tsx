@@ -12,6 +12,7 @@ import { StateMark } from "@/components/ui/state-mark";
 import { digits, significantDigits } from "@/lib/format/quantity";
 import type { Element, Line } from "@/lib/line/element";
 import type { Candidate } from "@/lib/line/match/match-request";
+import { cutSentence } from "@/lib/runs/match-cuts";
 import type { AtLimits } from "@/lib/runs/match-limits";
 import type { MatchAsked } from "@/lib/runs/matching";
 
@@ -82,6 +83,9 @@ export function CandidateColumn({ candidate, place, others, limits, candidates, 
       <details className="mb-2 text-label text-ink-2">
         <summary className="link w-fit">Before you cut</summary>
         <ul className="mt-1 flex flex-col gap-1">
+          {candidate.cuts.map((cut, i) => (
+            <li key={i}>{cutSentence(cut)}</li>
+          ))}
           {candidate.notes.map((note) => (
             <li key={note}>{note}</li>
           ))}

@@ -10,10 +10,18 @@ import type { MatchesFound } from "@/lib/runs/matching";
 export const methodWords: Record<MatchMethod, string> = {
   shuntStub: "Stub across the line",
   seriesStub: "Stub in the line",
+  doubleStub: "Two stubs across the line",
   quarterWave: "Quarter-wave section",
   seriesSection: "Series section",
   parallelCables: "Cables in parallel",
+  binomial: "Binomial transformer",
+  equalRipple: "Equal-ripple transformer",
+  alternatingSections: "Two alternating sections",
   lSection: "L-section",
+  piNetwork: "Pi network",
+  tNetwork: "T network",
+  pad: "Resistive pad",
+  notchStub: "Notch stub",
 };
 
 interface Props {
@@ -26,7 +34,7 @@ interface Props {
 
 /** Every way found, ranked, and every method that cannot work with its reason. */
 export function CandidateList({ found, compared, toggle, refusal, returnLossDb }: Props) {
-  const { candidates, refused } = found;
+  const { candidates, refused, omitted } = found;
   return (
     <div className="mt-8 grid grid-cols-[minmax(0,1fr)_420px] gap-x-10 gap-y-8 folded:grid-cols-1">
       <Section
@@ -69,6 +77,11 @@ export function CandidateList({ found, compared, toggle, refusal, returnLossDb }
             </tbody>
           </Table>
         </div>
+        {omitted.map(({ method, count }) => (
+          <p key={method} className="py-1 text-label text-ink-2">
+            {methodWords[method]}: {count} more, worse than those above, are left out.
+          </p>
+        ))}
         {candidates.length === 0 && <p className="py-3 text-body">No way was found. The reasons stand beside.</p>}
       </Section>
       <Section title="What cannot work here">

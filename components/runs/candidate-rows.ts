@@ -33,7 +33,8 @@ export function rowsOf(candidate: Candidate, asked: MatchAsked, limits: AtLimits
       figure: scaled("frequency", bandwidthHz, 3),
     },
     ...lossRows(candidate, asked),
-    ...(limits === undefined ? [] : [limitsRow(limits, worst)]),
+    ...(limits === undefined ? [] : [limitsRow(limits, worst), yieldRow(limits, candidate, asked)]),
+    ...(asked.notchHz === undefined ? [] : [notchRow(candidate)]),
     {
       label: "Return loss at the design frequency",
       value: designReturnLossDb ?? Infinity,
@@ -63,6 +64,21 @@ function lossRows({ worstMatchLossDb, worstTransducerLossDb }: Candidate, { behi
 function limitsRow(limits: AtLimits | null, drawn: number): Row {
   const value = limits ? vswrOf(limits.returnLossDb) : drawn;
   return { label: `Worst VSWR, ${limits?.words ?? "nothing off"}`, value, better: "less", figure: ratio(value) };
+}
+
+function yieldRow(limits: AtLimits | null, { worstReturnLossDb }: Candidate, { returnLossDb }: MatchAsked): Row {
+  // With nothing off every one made is as drawn.
+  const drawn = (worstReturnLossDb ?? Infinity) >= returnLossDb ? 100 : 0;
+  const value = limits?.yieldPercent ?? drawn;
+  const label = `Of those made so, keep ${significantDigits(returnLossDb, 3)} dB`;
+  return { label, value, better: "more", figure: { digits: value.toFixed(1), unit: "%", spoken: "percent" } };
+}
+
+/** Only a notch stub keeps anything from the load on purpose. */
+function notchRow({ notchLossDb }: Candidate): Row {
+  const label = "Kept from the load at the notch";
+  if (notchLossDb === undefined) return { label, value: -Infinity, better: "more", figure: word("none") };
+  return { label, value: notchLossDb ?? Infinity, better: "more", figure: decibels(notchLossDb, 1) };
 }
 
 /** Best among those side by side, and not shared by all of them. */

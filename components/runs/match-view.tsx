@@ -5,6 +5,7 @@ import { CandidateColumn } from "@/components/runs/candidate-column";
 import { CandidateList } from "@/components/runs/candidate-list";
 import { MatchCharts } from "@/components/runs/match-charts";
 import { MatchConditions } from "@/components/runs/match-conditions";
+import { MatchSpecial } from "@/components/runs/match-special";
 import { useRunEditor } from "@/components/runs/run-editor";
 import { RunFrame } from "@/components/runs/run-frame";
 import { MatchAskedFor } from "@/components/runs/match-asked-for";
@@ -13,6 +14,7 @@ import { useLimits } from "@/components/runs/use-limits";
 import { useMatches } from "@/components/runs/use-matches";
 import { StateNote } from "@/components/ui/state-mark";
 import type { Candidate } from "@/lib/line/match/match-request";
+import { firstCompared } from "@/lib/runs/first-compared";
 import { isKept } from "@/lib/runs/match-place";
 import { storedElements } from "@/lib/runs/matching";
 
@@ -29,6 +31,7 @@ export function MatchView() {
   return (
     <RunFrame head={<MatchAskedFor matching={matching} />}>
       <MatchConditions matching={matching} />
+      <MatchSpecial matching={matching} />
       <LeftBehind asked={matching.asked} />
       {trouble && (
         <div className="mt-5">
@@ -81,7 +84,7 @@ function useCompared(candidates: Candidate[], place: number) {
   const kept = candidates.find((candidate) =>
     isKept(draft.circuit.elements, storedElements(candidate.elements), place),
   );
-  const titles = chosen ?? firstFour(candidates, kept);
+  const titles = chosen ?? firstCompared(candidates, kept, mostCompared);
   const compared = titles.flatMap((title) => candidates.find((candidate) => candidate.title === title) ?? []);
   function toggle(title: string) {
     const now = compared.map((candidate) => candidate.title);
@@ -91,13 +94,4 @@ function useCompared(candidates: Candidate[], place: number) {
     setChosen([...now, title]);
   }
   return { compared, toggle, refusal };
-}
-
-/** The one kept in the run, then the best of each method, then the next best. */
-function firstFour(candidates: Candidate[], kept: Candidate | undefined): string[] {
-  const bestOfEach = candidates.filter(
-    (candidate, i) => candidates.findIndex(({ method }) => method === candidate.method) === i,
-  );
-  const order = [...(kept ? [kept] : []), ...bestOfEach, ...candidates];
-  return [...new Set(order.map(({ title }) => title))].slice(0, mostCompared);
 }

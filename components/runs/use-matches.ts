@@ -20,6 +20,12 @@ export interface MatchChoices {
   capacitorQ: number | undefined;
   stubCableId: string | null;
   tolerance: CutTolerance;
+  /** see `MatchAsked`; undefined is the usual value, of the notch none */
+  notchHz: number | undefined;
+  spacingWavelengths: number | undefined;
+  firstDistanceWavelengths: number | undefined;
+  sections: number | undefined;
+  endAllowanceM: number | undefined;
 }
 
 export interface Matching {
@@ -33,7 +39,16 @@ export interface Matching {
   choose: (part: Partial<MatchChoices>) => void;
 }
 
-const usual = { coilQ: 120, capacitorQ: 1000, tolerance: { lengthM: 0.005, valuePercent: 5 } };
+const usual = {
+  coilQ: 120,
+  capacitorQ: 1000,
+  tolerance: { lengthM: 0.005, valuePercent: 5 },
+  notchHz: undefined,
+  spacingWavelengths: undefined,
+  firstDistanceWavelengths: undefined,
+  sections: undefined,
+  endAllowanceM: undefined,
+};
 /** VSWR 1.5 where the run asks for nothing. */
 const usualReturnLossDb = 14;
 
@@ -76,7 +91,18 @@ interface Request {
   isWhole: boolean;
 }
 
-function useRequest({ place, targetOhm, returnLossDb, coilQ, capacitorQ, stubCableId }: MatchChoices): Request {
+/** What only some methods ask, the same object while nothing of it changes. */
+function useSpecial(choices: MatchChoices) {
+  const { notchHz, spacingWavelengths, firstDistanceWavelengths, sections, endAllowanceM } = choices;
+  return useMemo(
+    () => ({ notchHz, spacingWavelengths, firstDistanceWavelengths, sections, endAllowanceM }),
+    [notchHz, spacingWavelengths, firstDistanceWavelengths, sections, endAllowanceM],
+  );
+}
+
+function useRequest(choices: MatchChoices): Request {
+  const { place, targetOhm, returnLossDb, coilQ, capacitorQ, stubCableId } = choices;
+  const special = useSpecial(choices);
   const { draft, lines } = useRunEditor();
   const { circuit, designHz, bandHz, temperatureC } = draft;
   return useMemo(() => {
@@ -93,6 +119,7 @@ function useRequest({ place, targetOhm, returnLossDb, coilQ, capacitorQ, stubCab
       coilQ,
       capacitorQ,
       temperatureC,
+      ...special,
     };
     return {
       asked,
@@ -101,7 +128,20 @@ function useRequest({ place, targetOhm, returnLossDb, coilQ, capacitorQ, stubCab
       sections: feeder ? alikeLines(lines, feeder) : [],
       isWhole: "elements" in behind,
     };
-  }, [circuit, place, targetOhm, designHz, bandHz, returnLossDb, coilQ, capacitorQ, temperatureC, stubCableId, lines]);
+  }, [
+    circuit,
+    place,
+    targetOhm,
+    designHz,
+    bandHz,
+    returnLossDb,
+    coilQ,
+    capacitorQ,
+    temperatureC,
+    stubCableId,
+    lines,
+    special,
+  ]);
 }
 
 /** Cables that can be joined to the feeder without changing kind, and may be used. */

@@ -3,7 +3,6 @@ import type { z } from "zod";
 import { type Frequencies, frequenciesOf } from "@/lib/compute/frequencies";
 import type {
   lineAnswerSchema,
-  matchesAnswerSchema,
   ProfileRequest,
   profileAnswerSchema,
   SweepRequest,
@@ -12,11 +11,8 @@ import type {
 import { wireComplex, wireNumber, wireNumbers } from "@/lib/compute/wire";
 import type { Circuit, LineModel } from "@/lib/line/element";
 import { lineFigures } from "@/lib/line/line-figures";
-import { findMatches } from "@/lib/line/match/find-matches";
-import type { MatchRequest } from "@/lib/line/match/match-request";
 import { sweep } from "@/lib/line/run";
 import { standingWave } from "@/lib/line/standing-wave";
-import { referredElement } from "@/lib/runs/circuit";
 
 /** @throws RangeError where the engine refuses, as do all here */
 export function lineAnswer(
@@ -85,24 +81,5 @@ export function profileAnswer(
     maxCurrentAtM: wireNumber(wave.maxCurrentAtM),
     elements: wave.elements.map(({ dissipatedW }) => ({ dissipatedW: wireNumber(dissipatedW) })),
     loadPowerW: wireNumber(wave.loadPowerW),
-  };
-}
-
-export function matchesAnswer(request: MatchRequest): z.infer<typeof matchesAnswerSchema> {
-  const { candidates, refused } = findMatches(request);
-  return {
-    candidates: candidates.map((candidate) => ({
-      ...candidate,
-      elements: candidate.elements.map(referredElement),
-      designReturnLossDb: wireNumber(candidate.designReturnLossDb),
-      bandwidthHz: wireNumber(candidate.bandwidthHz),
-      worstReturnLossDb: wireNumber(candidate.worstReturnLossDb),
-      ...(candidate.worstReturnLossAtLimitsDb !== undefined && {
-        worstReturnLossAtLimitsDb: wireNumber(candidate.worstReturnLossAtLimitsDb),
-      }),
-      worstTransducerLossDb: wireNumber(candidate.worstTransducerLossDb),
-      worstMatchLossDb: wireNumber(candidate.worstMatchLossDb),
-    })),
-    refused,
   };
 }

@@ -1,17 +1,14 @@
 /** What the schema cannot see: whether the parts of a request go together. Each fault at its path. Pure. */
 import type { Plane, Termination } from "@/lib/line/element";
 import type { CircuitFault } from "@/lib/runs/circuit";
-import type { MatchesRequest } from "@/lib/compute/schema";
 import type { Circuit, Element } from "@/lib/runs/circuit-schema";
 
 /** The most one request may ask, so that a single one never holds everybody up: seconds of work, as measured. */
 const mostLinePoints = 2_500_000;
 const mostPlanePoints = 500_000;
-const mostMatchWork = 2_500;
-const toleranceWork = 8;
 
 /** How many lines are computed for some elements: each branch of lines in parallel is one. */
-function linesIn(elements: readonly Element[]): number {
+export function linesIn(elements: readonly Element[]): number {
   return elements.reduce((sum, element) => sum + (element.kind === "parallel" ? element.branches.length : 1), 0);
 }
 
@@ -83,22 +80,6 @@ export function sweepFaults(circuit: Circuit, frequencies: number[], planes: Pla
       });
   });
   return faults;
-}
-
-/**
- * @param request - as asked
- * @param lines - how many lines there are to cut from
- */
-export function matchesFaults({ place, tolerance }: MatchesRequest, lines: number): CircuitFault[] {
-  const behind = linesIn(place?.behind ?? []);
-  if (lines * (1 + behind) * (tolerance ? toleranceWork : 1) <= mostMatchWork) return [];
-  const path = behind > 0 ? "place.behind" : "lines";
-  return [
-    {
-      path,
-      message: `${lines} lines to cut from with ${behind} lines behind the network is too much for one request; name fewer lines to cut from.`,
-    },
-  ];
 }
 
 /** @param frequency - hertz */

@@ -1,4 +1,5 @@
 /** What can be asked of `/compute`. Nothing is stored. */
+import { matchesAnswerSchema, matchesRequestSchema } from "@/lib/compute/matches/schema";
 import * as schemas from "@/lib/compute/schema";
 import { operation } from "@/lib/http/operation";
 
@@ -36,10 +37,10 @@ export const matchesOperation = operation({
   id: "computeMatches",
   path: "/compute/matches",
   summary: "Ways to match a load with the cables at hand, judged over a band.",
-  body: schemas.matchesRequestSchema,
+  body: matchesRequestSchema,
   answer: {
     status: 200,
     description: "The candidates, and the methods that cannot work.",
-    schema: schemas.matchesAnswerSchema,
+    schema: matchesAnswerSchema,
   },
 });

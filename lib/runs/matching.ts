@@ -2,8 +2,8 @@
 import type { CableLine } from "@/lib/cables/line";
 import type { Element as EngineElement, Termination } from "@/lib/line/element";
 import { distinct } from "@/lib/line/match/distinct";
-import { findMatches } from "@/lib/line/match/find-matches";
-import type { Candidate, MatchLine, Refusal } from "@/lib/line/match/match-request";
+import { findMatches, type Matches } from "@/lib/line/match/find-matches";
+import type { MatchLine, MatchMethod } from "@/lib/line/match/match-request";
 import { rank } from "@/lib/line/match/rank";
 import { sweep } from "@/lib/line/run";
 import type { Element, LineRef } from "@/lib/runs/circuit-schema";
@@ -19,16 +19,40 @@ export interface MatchAsked {
   coilQ: number | undefined;
   capacitorQ: number | undefined;
   temperatureC: number;
+  /** what only some methods ask; left out, each has its usual value, and there is no notch */
+  notchHz?: number | undefined;
+  spacingWavelengths?: number | undefined;
+  firstDistanceWavelengths?: number | undefined;
+  sections?: number | undefined;
+  endAllowanceM?: number | undefined;
 }
 
-export interface MatchesFound {
-  candidates: Candidate[];
-  refused: Refusal[];
-}
+export type MatchesFound = Matches;
 
 function matchLine({ cableId, revision, designation, model }: CableLine): MatchLine {
   return { cableId, revision, label: designation, model };
 }
+
+/** What is cut from the one chosen cable, or needs none. */
+const fromOneCable: readonly MatchMethod[] = [
+  "shuntStub",
+  "seriesStub",
+  "doubleStub",
+  "parallelCables",
+  "lSection",
+  "piNetwork",
+  "tNetwork",
+  "pad",
+  "notchStub",
+];
+/** What takes whatever cable has the impedance. */
+const fromAnyCable: readonly MatchMethod[] = [
+  "quarterWave",
+  "seriesSection",
+  "binomial",
+  "equalRipple",
+  "alternatingSections",
+];
 
 /**
  * Stubs and paralleled lengths are cut from one cable, sections from whatever cable has the impedance: so stubs do not
@@ -48,16 +72,18 @@ export function matchesFor(
   const cut = findMatches({
     ...common,
     lines: [matchLine(stubLine)],
-    methods: ["shuntStub", "seriesStub", "parallelCables", "lSection"],
+    methods: fromOneCable,
   });
   const sections = findMatches({
     ...common,
     lines: sectionLines.map(matchLine),
-    methods: ["quarterWave", "seriesSection"],
+    methods: fromAnyCable,
+    pairs: true,
   });
   return {
     candidates: distinct(rank([...cut.candidates, ...sections.candidates], asked.returnLossDb)),
     refused: [...cut.refused, ...sections.refused],
+    omitted: [...cut.omitted, ...sections.omitted],
   };
 }
 

@@ -4,7 +4,8 @@ import { POST as matches } from "@/app/api/v1/compute/matches/route";
 import { POST as profile } from "@/app/api/v1/compute/profile/route";
 import { POST as sweep } from "@/app/api/v1/compute/sweep/route";
 import type { z } from "zod";
-import { lineAnswerSchema, matchesAnswerSchema, profileAnswerSchema, sweepAnswerSchema } from "@/lib/compute/schema";
+import { matchesAnswerSchema } from "@/lib/compute/matches/schema";
+import { lineAnswerSchema, profileAnswerSchema, sweepAnswerSchema } from "@/lib/compute/schema";
 import type { Handler } from "@/lib/http/handle";
 import { circuitSchema } from "@/lib/runs/circuit-schema";
 import { addCable, coaxModel } from "@/tests/support/cables";
@@ -275,9 +276,54 @@ describe("/compute/matches", () => {
   });
 
   test("of many cables before a long run is refused where it is too much", async () => {
-    const lines = Array.from({ length: 50 }, () => ({ cableId: "feeder" }));
+    const lines = Array.from({ length: 200 }, () => ({ cableId: "feeder" }));
     const much = { ...job, lines, place: { behind: Array.from({ length: 60 }, () => cable(1)) } };
     expect(await pathsOf(await asked(matches, much))).toEqual(["place.behind"]);
+    // A kilometre behind ripples so fast that a wide band has to be looked at at thousands of frequencies.
+    const wide = { ...job, lines, bandHz: [1e6, 500e6], tolerance: { lengthM: 0.01 } };
+    expect(await pathsOf(await asked(matches, { ...wide, place: { behind: [cable(1000)] } }))).toEqual([
+      "place.behind",
+    ]);
+  });
+
+  test("of a catalogue of hundreds tries the cables nearest to what is needed, and says of how many", async () => {
+    for (let k = 0; k < 200; k++) addCable({ id: `more-${k}`, designation: `M-${k}` });
+    const { candidates, cutFrom, omitted } = await answer(matches, { ...job, catalogue: true }, matchesAnswerSchema);
+    expect(cutFrom.lines).toBe(60);
+    expect(cutFrom.of).toBeGreaterThan(200);
+    expect(candidates.length).toBeGreaterThan(100);
+    for (const { count } of omitted) expect(count).toBeGreaterThan(0);
+  });
+
+  test("answers every method with what it has of its own: a pad its resistors, a notch its depth, a tolerance the yield", async () => {
+    const fields = { lines: [{ cableId: "feeder" }], notchHz: 40e6, sections: 3, endAllowanceM: 0.01 };
+    const body = { ...job, ...fields, tolerance: { lengthM: 0.005, valuePercent: 5 } };
+    const { candidates } = await answer(matches, body, matchesAnswerSchema);
+    for (const { method, resistorsOhm, notchLossDb, yieldPercent, cuts, elements } of candidates) {
+      expect(resistorsOhm !== undefined).toBe(method === "pad");
+      expect(notchLossDb !== undefined).toBe(method === "notchStub");
+      expect(yieldPercent).toBeGreaterThanOrEqual(0);
+      expect(yieldPercent).toBeLessThanOrEqual(100);
+      expect(cuts).toHaveLength(elements.filter(({ kind }) => kind === "cable" || kind === "stub").length);
+      for (const { lengthM, cutM } of cuts) if (cutM !== null) expect(lengthM - cutM).toBeCloseTo(0.01, 12);
+    }
+    const found = new Set(candidates.map(({ method }) => method));
+    for (const method of [
+      "doubleStub",
+      "binomial",
+      "equalRipple",
+      "piNetwork",
+      "tNetwork",
+      "pad",
+      "notchStub",
+    ] as const)
+      expect(found.has(method), method).toBe(true);
+  });
+
+  test("answers the same for the same request, yields included", async () => {
+    const body = { ...job, lines: [{ cableId: "feeder" }], tolerance: { lengthM: 0.02, valuePercent: 10 } };
+    const first = await answer(matches, body, matchesAnswerSchema);
+    expect(await answer(matches, body, matchesAnswerSchema)).toEqual(first);
   });
 
   test("does the methods asked only, and says why one cannot work", async () => {
@@ -301,6 +347,17 @@ describe("/compute/matches", () => {
     ["a band backwards", { lines: [], bandHz: [2e6, 1e6] }, "bandHz"],
     ["a Q of 0", { lines: [], partQ: { coilQ: 0 } }, "partQ.coilQ"],
     ["an option that is not there", { lines: [], magic: 1 }, "magic"],
+    ["a notch at 0 Hz", { lines: [], notchHz: 0 }, "notchHz"],
+    ["no sections", { lines: [], sections: 0 }, "sections"],
+    ["half a section", { lines: [], sections: 1.5 }, "sections"],
+    ["eleven sections", { lines: [], sections: 11 }, "sections"],
+    ["a ripple of 0 dB", { lines: [], rippleReturnLossDb: 0 }, "rippleReturnLossDb"],
+    ["stubs at one place", { lines: [], spacingWavelengths: 0 }, "spacingWavelengths"],
+    ["stubs half a wavelength apart", { lines: [], spacingWavelengths: 0.5 }, "spacingWavelengths"],
+    ["a first stub behind the load", { lines: [], firstDistanceWavelengths: -0.1 }, "firstDistanceWavelengths"],
+    ["a network of no Q", { lines: [], networkQ: 0 }, "networkQ"],
+    ["ends that take away length", { lines: [], endAllowanceM: -0.01 }, "endAllowanceM"],
+    ["a tolerance of everything", { lines: [], tolerance: { valuePercent: 100 } }, "tolerance.valuePercent"],
   ])("refuses %s at its path", async (_, fields, path) => {
     expect(await pathsOf(await asked(matches, { ...job, ...fields }))).toEqual([path]);
   });

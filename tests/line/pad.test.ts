@@ -140,3 +140,13 @@ test("a pad below its least loss, or without impedance, is refused by name", () 
   // at the least loss itself it is not refused for rounding
   expect(() => padTwoPort({ ...pad, lossDb: minimumPadLossDb(75, 50) })).not.toThrow();
 });
+
+test("published D100 (J. Bird, Electrical Circuit Theory and Technology, 2nd ed. 2003, problem 17 of chapter 41): four T pads of 450 Ω and a ratio of 8 have arms of 350 and 114.3 Ω and lose 72.25 dB", () => {
+  const pad: PadElement = { kind: "pad", lossDb: 20 * Math.log10(8), inputOhm: 450, outputOhm: 450 };
+  const [series, shunt] = padResistors(pad);
+  expect(Math.abs(series - 350)).toBeLessThan(0.001 * 350);
+  expect(Math.abs(shunt - 114.3)).toBeLessThan(0.001 * 114.3);
+  const { a } = chainMatrix([pad, pad, pad, pad].map((each) => padTwoPort(each)).reduce(cascade, THROUGH));
+  // e^{4θ}/2 + e^{−4θ}/2
+  expect(20 * Math.log10(a.re + Math.sqrt(a.re * a.re - 1))).toBeCloseTo(72.25, 2);
+});

@@ -42,7 +42,7 @@ const run: Element[] = [{ kind: "cable", line: { cableId: "f50" }, lengthM: 36 }
 
 test("matchesFor(asked, …) finds stubs, parts and sections and ranks them together", () => {
   const methods = new Set(found.candidates.map(({ method }) => method));
-  for (const method of ["shuntStub", "lSection", "quarterWave"] as const)
+  for (const method of ["shuntStub", "doubleStub", "lSection", "piNetwork", "pad", "quarterWave", "binomial"] as const)
     expect(methods.has(method), method).toBe(true);
   expect(found.candidates.length).toBeGreaterThanOrEqual(6);
 });

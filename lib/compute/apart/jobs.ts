@@ -1,10 +1,11 @@
 /** What can be computed apart from the thread that serves: pure functions of plain data, by name. */
-import { lineAnswer, matchesAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
 import { extractAnswer } from "@/lib/compute/extract/answer";
 import { fitAnswer } from "@/lib/compute/fit/answer";
 import { geometryAnswer } from "@/lib/compute/geometry/answer";
 import { readingsAnswer } from "@/lib/compute/readings/answer";
 import { touchstoneAnswer } from "@/lib/compute/touchstone/answer";
+import { lineAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
+import { matchesAnswer } from "@/lib/compute/matches/answer";
 
 export const jobs = {
   line: lineAnswer,

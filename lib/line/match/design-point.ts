@@ -74,6 +74,12 @@ function placeWords({ behind = [] }: MatchRequest): PlaceWords {
 /** Letters of a piece's name that a title still takes. */
 const longestName = 32;
 
+/** Phase of a line at a frequency and the request's temperature, 1/m. */
+export function phaseAt({ line }: DesignLine, { temperatureC = 20 }: MatchRequest, frequency: number): number {
+  const s = { re: 0, im: 2 * Math.PI * frequency };
+  return propagation(atTemperature(line.model, temperatureC).model, s).gamma.im;
+}
+
 function designLine({ label, ...line }: MatchLine, { designHz, temperatureC = 20 }: MatchRequest): DesignLine {
   const omega = 2 * Math.PI * designHz;
   const { gamma, zc } = propagation(atTemperature(line.model, temperatureC).model, { re: 0, im: omega });
@@ -106,12 +112,19 @@ export function leadName({ request }: DesignPoint, what: "Stub" | "Section"): Ma
   return request.behind?.length ? `${what} to run` : `${what} to load`;
 }
 
+/** A length to cut: the physical one less what its ends and joints add. */
+export function cutText({ request }: DesignPoint, length: number): string {
+  return lengthText(Math.max(0, length - (request.endAllowanceM ?? 0)));
+}
+
 /** The notes every match made of cable carries: how long the lengths are, and what was assumed. */
 export function lengthNotes(point: DesignPoint, used: readonly DesignLine[]): string[] {
   const distinct = used.filter((each, index) => used.findIndex((other) => other.label === each.label) === index);
   const factors = distinct.map((each) => `${each.velocityFactor.toFixed(4)} for ${each.label}`);
+  const { endAllowanceM = 0, designHz } = point.request;
+  const taken = endAllowanceM > 0 ? `${lengthText(endAllowanceM)} of each piece is` : "nothing is";
   const notes = [
-    `Lengths are physical, velocity factor ${listText(factors)} at ${frequencyText(point.request.designHz)}; nothing is taken off for ends and joints.`,
+    `Lengths are physical, velocity factor ${listText(factors)} at ${frequencyText(designHz)}; ${taken} taken off for ends and joints${endAllowanceM > 0 ? " in what to cut" : ""}.`,
   ];
   const feeder = point.feeder;
   if (point.isFeederAssumed && feeder && distinct.includes(feeder))

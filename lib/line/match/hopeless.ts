@@ -13,16 +13,21 @@ const absorbed = 1e-6;
 /** The sentence that says why no method at all can help; undefined where one may. */
 export function hopeless(point: DesignPoint): string | undefined {
   const { load, seen, request, words } = point;
-  const { targetOhm, designHz } = request;
+  const { designHz } = request;
   // Power that a lossy line behind the network takes is no use to a load that takes none.
   const lost = isTappedBehind(request) ? undefined : idle(portImpedance(seen(designHz).end), "load", request);
   if (lost) return lost;
   const what = `The ${words.matched}`;
   const at = frequencyText(designHz);
   if (load.re < Infinity && !isFinite(load)) return `${what} has no impedance at ${at}.`;
-  if (abs(reflectionAgainst(load, targetOhm)) < matched)
-    return `${what} already is ${ohmText(targetOhm)} at ${at}: nothing to match.`;
   return idle(load, words.matched, request);
+}
+
+/** The sentence that says there is nothing to match; undefined where there is. */
+export function alreadyMatched({ load, request, words }: DesignPoint): string | undefined {
+  const { targetOhm, designHz } = request;
+  if (!(abs(reflectionAgainst(load, targetOhm)) < matched)) return undefined;
+  return `The ${words.matched} already is ${ohmText(targetOhm)} at ${frequencyText(designHz)}: nothing to match.`;
 }
 
 /** The sentence that says an impedance takes no power; undefined where it takes some, or is not known. */

@@ -1,11 +1,19 @@
 import { abs, type Complex } from "@/lib/line/complex";
 import type { Element } from "@/lib/line/element";
-import { leadName, lengthNotes, placeText, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
+import {
+  cutText,
+  leadName,
+  lengthNotes,
+  placeText,
+  type DesignLine,
+  type DesignPoint,
+} from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
 import { reflectionAgainst } from "@/lib/line/match/line-angle";
 import { realPoints, sectionImpedance } from "@/lib/line/match/quarter-wave";
 import { along, loadPair } from "@/lib/line/match/pair";
 import { trimNotes } from "@/lib/line/match/trim";
+import { withoutReactance } from "@/lib/line/match/without-reactance";
 import { decibelText, lengthText, listText, ohmText } from "@/lib/line/match/wording";
 import { portReflection, returnLossDb } from "@/lib/line/reflection";
 
@@ -59,20 +67,6 @@ function tryLine(point: DesignPoint, feeder: DesignLine, line: DesignLine, place
   return { ...place, distance, line, returnLossDb: returnLossDb(abs(reflection(distance))) };
 }
 
-/** The distance near the start at which the reflection's imaginary part is zero, by secants; the start where none is. */
-function withoutReactance(imaginary: (distance: number) => number, start: number, reach: number): number {
-  let [a, b] = [start, start + reach / 100];
-  let [atA, atB] = [imaginary(a), imaginary(b)];
-  for (let iteration = 0; iteration < 40 && Math.abs(atA) > 1e-14 && atA !== atB; iteration++) {
-    const next = a - (atA * (b - a)) / (atB - atA);
-    if (!(Math.abs(next - start) < reach)) return start;
-    [b, atB] = [a, atA];
-    a = next;
-    atA = imaginary(a);
-  }
-  return a;
-}
-
 function proposal(point: DesignPoint, feeder: DesignLine, { line, distance, neededOhm }: Try): Proposal {
   const length = line.wavelengthM / 4;
   const build = (lengthM: number): Element[] => [
@@ -88,8 +82,8 @@ function proposal(point: DesignPoint, feeder: DesignLine, { line, distance, need
     elements: build(length),
     needs: [
       "2 joints",
-      `${lengthText(length)} of ${line.label} for the section`,
-      ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to ${point.words.place}`] : []),
+      `${cutText(point, length)} of ${line.label} for the section`,
+      ...(distance > 0 ? [`${cutText(point, distance)} of ${feeder.label} to ${point.words.place}`] : []),
     ],
     notes: [
       `An exact section here would be ${ohmText(neededOhm)}; ${line.label} is ${ohmText(line.zc.re)}.`,

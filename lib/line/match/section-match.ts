@@ -1,7 +1,17 @@
 import { abs } from "@/lib/line/complex";
 import type { Element } from "@/lib/line/element";
-import { leadName, lengthNotes, placeText, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
+import {
+  cutText,
+  leadName,
+  lengthNotes,
+  placeText,
+  type DesignLine,
+  type DesignPoint,
+} from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
+import { besidePairs } from "@/lib/line/match/beside-pairs";
+import { cablePairs } from "@/lib/line/match/cable-pairs";
+import { mostCables } from "@/lib/line/match/fit-line";
 import { reflectionAgainst } from "@/lib/line/match/line-angle";
 import { realPoints, sectionImpedance } from "@/lib/line/match/quarter-wave";
 import { sectionScan } from "@/lib/line/match/section-scan";
@@ -11,26 +21,28 @@ import { solveLengths, type Lengths, type Network } from "@/lib/line/match/solve
 import { trimNotes } from "@/lib/line/match/trim";
 import { countWord, lengthText, listText, ohmText } from "@/lib/line/match/wording";
 
-/** Lengths side by side that are still joined by hand. */
-const mostCables = 4;
-
 /**
  * A length of feeder at the load, then a length of another line, both solutions for every line given, solved with
- * their loss.
+ * their loss; where the request asks for pairs, two other lines one after the other too.
  */
 export function seriesSections(point: DesignPoint): Outcome {
-  return sections(point, [1]);
+  const own = sections(point, [1]);
+  const pairs = point.request.pairs ? cablePairs(point) : [];
+  return pairs.length > 0 ? { proposals: [...own.proposals, ...pairs], why: "" } : own;
 }
 
 /**
  * The same with two, three or four equal lengths of one line side by side as the section: a low impedance that no
- * single cable has.
+ * single cable has; where the request asks for pairs, two different ones too.
  */
 export function parallelCables(point: DesignPoint): Outcome {
-  return sections(
+  const alike = sections(
     point,
     Array.from({ length: mostCables - 1 }, (_, k) => k + 2),
   );
+  const { feeder, request } = point;
+  const different = request.pairs && feeder ? besidePairs(point, feeder) : [];
+  return different.length > 0 ? { proposals: [...alike.proposals, ...different], why: "" } : alike;
 }
 
 function sections(point: DesignPoint, counts: number[]): Outcome {
@@ -94,8 +106,8 @@ function proposal(
     elements: build(length),
     needs: [
       count > 1 ? `2 junctions of ${count} cables` : "2 joints",
-      `${count > 1 ? `${count} × ` : ""}${lengthText(length)} of ${line.label} for the section`,
-      ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to ${point.words.place}`] : []),
+      `${count > 1 ? `${count} × ` : ""}${cutText(point, length)} of ${line.label} for the section`,
+      ...(distance > 0 ? [`${cutText(point, distance)} of ${feeder.label} to ${point.words.place}`] : []),
     ],
     notes: [
       ...lengthNotes(point, distance > 0 ? [line, feeder] : [line]),

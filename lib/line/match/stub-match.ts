@@ -1,5 +1,12 @@
 import type { Element } from "@/lib/line/element";
-import { leadName, lengthNotes, placeText, type DesignLine, type DesignPoint } from "@/lib/line/match/design-point";
+import {
+  cutText,
+  leadName,
+  lengthNotes,
+  placeText,
+  type DesignLine,
+  type DesignPoint,
+} from "@/lib/line/match/design-point";
 import type { Outcome, Proposal } from "@/lib/line/match/match-request";
 import { singleStub, type StubEnd } from "@/lib/line/match/single-stub";
 import { along, loadPair, stubPair, withBranch, withLossShare } from "@/lib/line/match/pair";
@@ -83,7 +90,7 @@ function proposal(
 }
 
 function needs(
-  { words }: DesignPoint,
+  point: DesignPoint,
   feeder: DesignLine,
   stub: DesignLine,
   connection: Connection,
@@ -94,8 +101,8 @@ function needs(
   return [
     connection === "shunt" ? "1 tee" : "1 series joint, insulated",
     end === "short" ? "1 soldered short" : "1 insulated open end",
-    `${lengthText(length)} of ${stub.label} for the stub`,
-    ...(distance > 0 ? [`${lengthText(distance)} of ${feeder.label} to ${words.place}`] : []),
+    `${cutText(point, length)} of ${stub.label} for the stub`,
+    ...(distance > 0 ? [`${cutText(point, distance)} of ${feeder.label} to ${point.words.place}`] : []),
   ];
 }
 

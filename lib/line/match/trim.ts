@@ -32,18 +32,31 @@ function trimSlope(
   return Number.isFinite(slope) ? slope : undefined;
 }
 
-/** The note that says which way to trim; none where the load is not known beside the design frequency. */
+/**
+ * `trimSlope` where it can be told: of a length that is there, with the load known beside the design frequency.
+ * @returns hertz per metre taken off; undefined where it cannot be told, or nothing moves
+ */
+export function trimPerMetre(
+  point: DesignPoint,
+  build: (length: number) => Element[],
+  length: number,
+): number | undefined {
+  const { knownHz } = knownRange(point.request);
+  const { designHz } = point.request;
+  if (length === 0 || designHz * (1 - beside) < knownHz[0] || designHz * (1 + beside) > knownHz[1]) return undefined;
+  const slope = trimSlope(point, build, length);
+  return slope === 0 ? undefined : slope;
+}
+
+/** The note that says which way to trim; none where it cannot be told. */
 export function trimNotes(
   point: DesignPoint,
   what: string,
   build: (length: number) => Element[],
   length: number,
 ): string[] {
-  const { knownHz } = knownRange(point.request);
-  const { designHz } = point.request;
-  if (length === 0 || designHz * (1 - beside) < knownHz[0] || designHz * (1 + beside) > knownHz[1]) return [];
-  const slope = trimSlope(point, build, length);
-  if (slope === undefined || slope === 0) return [];
+  const slope = trimPerMetre(point, build, length);
+  if (slope === undefined) return [];
   const off = length < 0.5 ? 0.001 : 0.01;
   const moved = figure(Math.abs(slope) * off, "Hz");
   return [`${lengthText(off)} off the ${what} moves the best frequency ${slope > 0 ? "up" : "down"} by ${moved}.`];

@@ -39,6 +39,11 @@ export function ohmText(ohms: number): string {
   return figure(ohms, "Ω");
 }
 
+/** A length in wavelengths: "0.125 λ". */
+export function waveText(wavelengths: number): string {
+  return `${wavelengths.toFixed(3)}${space}λ`;
+}
+
 export function decibelText(decibels: number): string {
   return `${decibels.toFixed(1)}${space}dB`;
 }

@@ -14,7 +14,11 @@ const request: MatchRequest = { ...everyday, lines: [c50F10, c75F7] };
 const ends: Ends = { seen: seenLoad(request, 50, c50F10), targetOhm: 50 };
 const band = bandOf(request);
 const tolerance = { lengthM: 0.005, valuePercent: 5 };
-const { candidates } = findMatches({ ...request, tolerance });
+const { candidates } = findMatches({
+  ...request,
+  tolerance,
+  methods: ["shuntStub", "seriesStub", "quarterWave", "seriesSection", "parallelCables", "lSection"],
+});
 const frequencies = Array.from({ length: 201 }, (_, k) => 26.96e6 + (0.45e6 * k) / 200);
 const worstOf = (elements: Element[], asked = request) =>
   Math.min(...sweep(circuitOf(asked, { elements }), frequencies).returnLossDb);

@@ -1,14 +1,19 @@
 import { expect, test } from "vitest";
+import fc from "@/tests/support/property";
 import { findMatches } from "@/lib/line/match/find-matches";
+import { matchMethods, type MatchRequest } from "@/lib/line/match/match-request";
 import { sweep } from "@/lib/line/run";
 import { c50F10, c50F7, c75F7, circuitOf, everyday, lengthsOf } from "@/tests/support/match-lines";
 
 test("candidates carry the catalogue's reference of their lines and no label, names for every element, and their cable counted", () => {
   const { candidates } = findMatches({ ...everyday, lines: [c75F7] });
-  for (const { elements, totalLengthM } of candidates) {
+  for (const { elements, totalLengthM, needs } of candidates) {
     expect(elements.every((each) => Boolean(each.name))).toBe(true);
     const cables = elements.filter((each) => each.kind === "cable" || each.kind === "stub");
-    for (const { line } of cables) expect(Object.keys(line).sort()).toEqual(["cableId", "model"]);
+    const named = cables.filter(({ line }) => line.cableId !== undefined);
+    for (const { line } of named) expect(Object.keys(line).sort()).toEqual(["cableId", "model"]);
+    // What no cable is, is named as an ideal line.
+    expect(cables.length === named.length || needs.some((each) => each.includes("ideal line"))).toBe(true);
     const sum = cables.reduce((total, each) => total + each.lengthM * (each.paralleled ?? 1), 0);
     expect(totalLengthM).toBeCloseTo(sum, 12);
   }
@@ -70,4 +75,32 @@ test("needs list what to fit and cut, in the units of a workshop", () => {
     "1 coil 350 nH, Q at least 120 at 27.2 MHz",
     "1 capacitor 129 pF, Q at least 1000 at 27.2 MHz",
   ]);
+});
+
+test("every candidate of every method shows at the design frequency the return loss it states, computed as a run", () => {
+  const tenths = (min: number, max: number) => fc.integer({ min: 10 * min, max: 10 * max }).map((each) => each / 10);
+  fc.assert(
+    fc.property(tenths(2, 1000), tenths(-500, 500), (reOhm, imOhm) => {
+      const request: MatchRequest = {
+        ...everyday,
+        load: { kind: "constant", reOhm, imOhm },
+        lines: [c50F7, c75F7],
+        notchHz: 40e6,
+      };
+      const { candidates, refused } = findMatches(request);
+      for (const candidate of candidates) {
+        const { returnLossDb } = sweep(circuitOf(request, candidate), [request.designHz]);
+        const stated = candidate.designReturnLossDb;
+        if (stated === null) expect(returnLossDb[0]!, candidate.title).toBeGreaterThan(170);
+        else expect(returnLossDb[0]! / stated, candidate.title).toBeCloseTo(1, 6);
+      }
+      const found = new Set(candidates.map(({ method }) => method));
+      for (const { method, why } of refused) {
+        expect(found.has(method)).toBe(false);
+        expect(why).toMatch(/\.$/);
+      }
+      expect(found.size + refused.length).toBe(matchMethods.length);
+    }),
+    { numRuns: 8 },
+  );
 });

@@ -2,7 +2,7 @@ import { expect, test } from "vitest";
 import fc from "fast-check";
 import { complex } from "@/lib/line/complex";
 import { findMatches } from "@/lib/line/match/find-matches";
-import { matchMethods, type MatchRequest } from "@/lib/line/match/match-request";
+import { matchMethods, type MatchMethod, type MatchRequest } from "@/lib/line/match/match-request";
 import { quarterWaveBandwidth } from "@/lib/line/match/quarter-wave";
 import { seriesSection } from "@/lib/line/match/series-section";
 import { sweep } from "@/lib/line/run";
@@ -86,7 +86,8 @@ test.each(sections.cases.filter((each) => each.name === "quarter-wave, real load
 
 test("every exact candidate, for any load and lossy lines, shows the target when its run is computed, lengths under a half wave", () => {
   const halfWave = (0.9 * 299792458) / (2 * 145e6);
-  const exact = matchMethods.filter((method) => method !== "quarterWave");
+  const near: MatchMethod[] = ["quarterWave", "binomial", "equalRipple"];
+  const exact = matchMethods.filter((method) => !near.includes(method));
   const tenths = (min: number, max: number) => fc.integer({ min: 10 * min, max: 10 * max }).map((each) => each / 10);
   const resistance = tenths(2, 1000);
   const reactance = tenths(-500, 500);
@@ -102,7 +103,7 @@ test("every exact candidate, for any load and lossy lines, shows the target when
       };
       const { candidates } = findMatches(request);
       for (const candidate of candidates.filter(
-        (each) => !each.title.includes("E24") && !each.title.startsWith("One"),
+        ({ title }) => !title.includes("E24") && !title.startsWith("One") && !title.startsWith("Even pad"),
       )) {
         const { inputImpedance } = sweep(circuitOf(request, candidate), [145e6]);
         expect(inputImpedance.re[0]).toBeCloseTo(50, 5);
@@ -110,7 +111,7 @@ test("every exact candidate, for any load and lossy lines, shows the target when
         for (const length of lengthsOf(candidate).filter(Number.isFinite)) expect(length).toBeLessThan(halfWave);
       }
     }),
-    { numRuns: 60 },
+    { numRuns: 12 },
   );
 });
 

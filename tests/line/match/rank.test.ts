@@ -14,6 +14,7 @@ function candidate(title: string, figures: Partial<Candidate>): Candidate {
     worstTransducerLossDb: 0.1,
     worstMatchLossDb: 0.1,
     totalLengthM: 1,
+    cuts: [],
     needs: [],
     notes: [],
     ...figures,
@@ -30,6 +31,24 @@ test("a candidate that keeps the asked return loss over the band comes before a 
 test("the better worst return loss comes first, and a perfect match before any number", () => {
   const all = [candidate("good", { worstReturnLossDb: 22 }), candidate("better", { worstReturnLossDb: 30 })];
   expect(titles([...all, candidate("perfect", { worstReturnLossDb: null })])).toEqual(["perfect", "better", "good"]);
+});
+
+test("what wastes whole decibels comes after what wastes less, and a line that has to be made after what is at hand", () => {
+  const pad = candidate("pad", { worstReturnLossDb: 60, worstMatchLossDb: 5.7, worstTransducerLossDb: 5.7 });
+  const made = candidate("made", { worstReturnLossDb: 50, hasIdealLine: true });
+  expect(titles([pad, made, candidate("cut", { worstReturnLossDb: 20 })])).toEqual(["cut", "made", "pad"]);
+});
+
+test("with a tolerance those that keep it at their limits come first, then the better yield in steps of 5 %", () => {
+  const made = (title: string, worstReturnLossAtLimitsDb: number, yieldPercent: number, worstReturnLossDb: number) =>
+    candidate(title, { worstReturnLossAtLimitsDb, yieldPercent, worstReturnLossDb });
+  const all = [
+    made("few", 9, 61, 40),
+    made("most", 12, 96, 30),
+    made("also most", 12, 97, 20),
+    made("all", 15, 100, 18),
+  ];
+  expect(titles(all)).toEqual(["all", "most", "also most", "few"]);
 });
 
 test("where return loss differs by less than half a decibel the lower loss comes first", () => {

@@ -35,11 +35,15 @@ test.each<[string, Termination, RegExp]>([
   for (const { why } of refused) expect(plain(why)).toMatch(sentence);
 });
 
-test("without any line only the L-section is left, and the rest say what is missing", () => {
-  const { candidates, refused } = findMatches({ ...request, feeder: undefined, lines: [] });
-  expect(new Set(candidates.map((each) => each.method))).toEqual(new Set(["lSection"]));
-  expect(refused.map((each) => each.method)).toEqual(matchMethods.filter((method) => method !== "lSection"));
-  for (const { why } of refused) expect(why).toMatch(/^No line was named to cut a (stub|section) from\.$/);
+test("without any line only parts and resistors are left, and the rest say what is missing", () => {
+  const { candidates, refused } = findMatches({ ...request, feeder: undefined, lines: [], notchHz: 40e6 });
+  const without = ["lSection", "piNetwork", "tNetwork", "pad"];
+  expect(new Set(candidates.map((each) => each.method))).toEqual(new Set(without));
+  expect(refused.map((each) => each.method)).toEqual(matchMethods.filter((method) => !without.includes(method)));
+  for (const { why } of refused)
+    expect(why).toMatch(
+      /^No line was named to cut a (stub|section) from\.$|no line was named that brings the load to one\.$|^No line given brings/,
+    );
 });
 
 test("a quarter-wave section that no line can make names the impedances needed and what the nearest line reaches", () => {
@@ -97,6 +101,15 @@ test.each([
   ["returnLossDb", { returnLossDb: Infinity }],
   ["coilQ", { partQ: { coilQ: 0 } }],
   ["capacitorQ", { partQ: { capacitorQ: -2 } }],
+  ["rippleReturnLossDb", { rippleReturnLossDb: 0 }],
+  ["networkQ", { networkQ: NaN }],
+  ["notchHz", { notchHz: -1 }],
+  ["sections", { sections: 11 }],
+  ["sections", { sections: 2.5 }],
+  ["spacingWavelengths", { spacingWavelengths: 0 }],
+  ["spacingWavelengths", { spacingWavelengths: 0.5 }],
+  ["firstDistanceWavelengths", { firstDistanceWavelengths: -0.1 }],
+  ["endAllowanceM", { endAllowanceM: -0.001 }],
 ])("a request whose %s is out of range throws a RangeError that names it", (name, change: Partial<MatchRequest>) => {
   expect(() => findMatches({ ...request, ...change })).toThrow(RangeError);
   expect(() => findMatches({ ...request, ...change })).toThrow(name);

@@ -1,5 +1,5 @@
 import { matchesOperation } from "@/lib/compute/operations";
-import { computeMatches } from "@/lib/compute/service";
+import { computeMatches } from "@/lib/compute/matches/service";
 import { handle, route } from "@/lib/http/handle";
 import { jsonAnswer } from "@/lib/http/json-answer";
 
