@@ -53,6 +53,7 @@ const expected: Record<string, Access> = {
   computeReadings: roles,
   computeExtract: roles,
   computeTouchstone: roles,
+  computeStep: roles,
   readHealth: "anyone",
   readDescription: "anyone",
 };

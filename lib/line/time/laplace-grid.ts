@@ -26,16 +26,16 @@ export interface Shown {
 
 /** What comes round from the next period is this much smaller. */
 const foldedOver = Math.log(1e7);
-/** Least values of the transform, and least steps to an edge. */
+/** Least values of the transform, and least steps to an edge; the spectrum of a raised cosine falls less steeply. */
 const leastSize = 4096;
-const stepsPerEdge = 16;
-/** How many windows of the longest allowed are edges: 65,536 values at 16 steps an edge, of which half are shown. */
+const stepsPerEdge = { sineSquared: 16, raisedCosine: 32 };
+/** Edges in the longest window allowed: 65,536 values at 16 steps an edge, of which half are shown. */
 export const mostEdges = 2048;
 
 /**
  * The grid for a window. The period is twice the window (a little more, so that what is shown falls on values), the
- * damping makes what folds over from beyond it 10⁻⁷ times smaller, and the spectrum reaches to 16 steps an edge, for a
- * raised cosine, whose own spectrum falls less steeply, to 32.
+ * damping makes what folds over from beyond it 10⁻⁷ times smaller, and the spectrum reaches as far as 16 steps an edge
+ * do, for a raised cosine 32.
  * @throws RangeError when the window holds more than 2,048 edges, or the points are not a whole number of at least 2
  * Source: damped inverse transform, K. S. Crump, J. ACM 23 (1976) 89.
  */
@@ -45,13 +45,13 @@ export function laplaceGrid({ windowS, points }: Shown, riseS: number, edge: Edg
   if (!(points >= 2 && Number.isInteger(points)))
     throw new RangeError(`laplaceGrid: points must be a whole number of at least 2, got ${points}`);
   const shownStep = windowS / (points - 1);
-  const least = Math.ceil((stepsPerEdge * shownStep) / riseS) * 2 * (points - 1);
+  const steps = stepsPerEdge[edge];
+  const least = Math.ceil((steps * shownStep) / riseS) * 2 * (points - 1);
   const size = Math.max(leastSize, 2 ** Math.ceil(Math.log2(least)));
   const every = Math.floor(size / (2 * (points - 1)));
   const stepS = shownStep / every;
   const period = size * stepS;
-  const reach = ((edge === "raisedCosine" ? 2 : 1) * stepsPerEdge) / 2;
-  const count = Math.min(size / 2, Math.max(leastSize / 2, Math.ceil((reach * period) / riseS))) + 1;
+  const count = Math.min(size / 2, Math.max(leastSize / 2, Math.ceil((steps * period) / (2 * riseS)))) + 1;
   const apart = (2 * Math.PI) / period;
   const omega = Float64Array.from({ length: count }, (_, k) => k * apart);
   return { count, damping: foldedOver / period, omega, size, stepS, every };

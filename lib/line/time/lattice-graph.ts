@@ -160,7 +160,8 @@ function jointLink({ lossDb = 0 }: JointElement, k: number, { elements, source, 
   if (lossDb === 0) return { kind: "matrix", a: 1, b: 0, c: 0, d: 1 };
   const resistance = source.kind === "constant" && source.reOhm > 0 ? source.reOhm : undefined;
   const reference = jointReference(elements, k) ?? referenceOhm ?? resistance;
-  if (reference === undefined) throw new RangeError("latticeGraph: a joint in a run without cable needs a referenceOhm");
+  if (reference === undefined)
+    throw new RangeError("latticeGraph: a joint in a run without cable needs a referenceOhm");
   const theta = lossDb / DB_PER_NEPER;
   const [cosh, sinh] = [Math.cosh(theta), Math.sinh(theta)];
   return { kind: "matrix", a: cosh, b: reference * sinh, c: sinh / reference, d: cosh };

@@ -44,7 +44,7 @@ export class LatticeSearch {
    */
   follow(edges: Transition[]): boolean {
     const waitingEdges = [...edges];
-    for (let followed = 0; followed < mostFollowed; ) {
+    for (let followed = 0; followed < mostFollowed;) {
       const edge = waitingEdges[0];
       const next = this.waiting.first;
       if (edge === undefined && next === undefined) return true;

@@ -20,7 +20,7 @@ export interface TimeResponse {
 }
 
 /** Planes of a run whose voltages are signals of their own: shunt stubs are taps, and their voltage is that of the line there. */
-export function tapPlanes({ elements }: Circuit): number[] {
+export function tapPlanes<L>({ elements }: Pick<Circuit<L>, "elements">): number[] {
   return elements.flatMap((element, k) => (element.kind === "stub" && element.connection === "shunt" ? [k] : []));
 }
 
