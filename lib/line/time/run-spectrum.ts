@@ -177,8 +177,9 @@ function overDrive({ v, i }: PortSpectrum, source: PortSpectrum): Spectrum {
   return result;
 }
 
-/** v·e^{−(θ at the source − θ here)} over the drive, written over v. */
+/** v·e^{−(θ at the source − θ here)} over the drive. */
 function transfer({ v, theta }: Passed, atSource: Spectrum, perDrive: Spectrum): Spectrum {
+  const result = spectrum(v.re.length);
   for (let k = 0; k < v.re.length; k++) {
     const decay = Math.exp(theta.re[k]! - atSource.re[k]!);
     const turn = theta.im[k]! - atSource.im[k]!;
@@ -186,8 +187,8 @@ function transfer({ v, theta }: Passed, atSource: Spectrum, perDrive: Spectrum):
     const eIm = decay * Math.sin(turn);
     const hRe = v.re[k]! * perDrive.re[k]! - v.im[k]! * perDrive.im[k]!;
     const hIm = v.re[k]! * perDrive.im[k]! + v.im[k]! * perDrive.re[k]!;
-    v.re[k] = hRe * eRe - hIm * eIm;
-    v.im[k] = hRe * eIm + hIm * eRe;
+    result.re[k] = hRe * eRe - hIm * eIm;
+    result.im[k] = hRe * eIm + hIm * eRe;
   }
-  return v;
+  return result;
 }
