@@ -20,6 +20,8 @@ export interface LatticeGraph {
   lines: LatticeLine[];
   ends: number[];
   junctions: Junction[];
+  /** index of the junction in which the source is */
+  source: number;
 }
 
 const SHORT: Closing = { v: 0, i: 1 };
@@ -34,7 +36,7 @@ function frontOf(termination: Termination): number {
 }
 
 /** Collects lines and junctions while the run is walked from source to load. */
-class Builder implements LatticeGraph {
+class Builder {
   lines: LatticeLine[] = [];
   ends: number[] = [];
   junctions: Junction[] = [];
@@ -121,7 +123,8 @@ export function latticeGraph(circuit: Circuit): LatticeGraph {
   builder.add({ kind: "node", name: "load" });
   builder.finish(closingOf(frontOf(load)));
   const { lines, ends, junctions } = builder;
-  return { lines, ends, junctions };
+  const driven = junctions.findIndex(({ left }) => "isDriven" in left);
+  return { lines, ends, junctions, source: driven };
 }
 
 function addElement(builder: Builder, element: Element, k: number, circuit: Circuit): void {

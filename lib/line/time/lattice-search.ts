@@ -51,7 +51,7 @@ export class LatticeSearch {
       const timeS = Math.min(edge?.atS ?? Infinity, next?.atS ?? Infinity);
       const untilS = timeS + this.limits.sameS;
       while (waitingEdges[0] !== undefined && waitingEdges[0].atS <= untilS)
-        this.pass(0, "source", timeS, waitingEdges.shift()!.jumpV, undefined);
+        this.pass(this.graph.source, "source", timeS, waitingEdges.shift()!.jumpV, undefined);
       for (const wave of this.arriving(untilS)) {
         this.pass(this.graph.ends[wave.end]!, wave.end, timeS, wave.volt, wave.after);
         followed++;
