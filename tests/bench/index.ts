@@ -3,10 +3,12 @@ import { benchEngine } from "@/tests/bench/engine";
 import { benchFirstLoad } from "@/tests/bench/first-load";
 import { benchSearch } from "@/tests/bench/search";
 import { benchTouchstone } from "@/tests/bench/touchstone";
+import { benchStep } from "@/tests/bench/step";
 import { row } from "@/tests/bench/timing";
 
 row("", "ours", "other", "ratio");
 benchEngine();
 benchTouchstone();
+benchStep();
 await benchSearch();
 await benchFirstLoad();

@@ -122,18 +122,18 @@ export function realSignal(re: Float64Array, im: Float64Array, size: number): Fl
   const { cos, sin } = tablesOf(size);
   const outRe = new Float64Array(half);
   const outIm = new Float64Array(half);
-  const given = re.length;
-  const xRe = (k: number) => (k < given ? re[k]! : 0);
-  const xIm = (k: number) => (k < given && k > 0 && k < half ? im[k]! : 0);
-  for (let k = 0; k < half; k++) {
-    const mirrorRe = xRe(half - k);
-    const mirrorIm = -xIm(half - k);
-    const gapRe = xRe(k) - mirrorRe;
-    const gapIm = xIm(k) - mirrorIm;
-    const turnedRe = gapRe * cos[k]! - gapIm * sin[k]!;
-    const turnedIm = gapRe * sin[k]! + gapIm * cos[k]!;
-    outRe[k] = xRe(k) + mirrorRe - turnedIm;
-    outIm[k] = xIm(k) + mirrorIm + turnedRe;
+  // where the spectrum has ended there is 0
+  const xRe = re.length > half ? re : padded(re, half + 1);
+  const xIm = im.length > half ? im : padded(im, half + 1);
+  outRe[0] = xRe[0]! + xRe[half]!;
+  outIm[0] = xRe[0]! - xRe[half]!;
+  for (let k = 1; k < half; k++) {
+    const mirrorRe = xRe[half - k]!;
+    const mirrorIm = -xIm[half - k]!;
+    const gapRe = xRe[k]! - mirrorRe;
+    const gapIm = xIm[k]! - mirrorIm;
+    outRe[k] = xRe[k]! + mirrorRe - (gapRe * sin[k]! + gapIm * cos[k]!);
+    outIm[k] = xIm[k]! + mirrorIm + (gapRe * cos[k]! - gapIm * sin[k]!);
   }
   inverseFft(outRe, outIm);
   const signal = new Float64Array(size);
@@ -142,4 +142,10 @@ export function realSignal(re: Float64Array, im: Float64Array, size: number): Fl
     signal[2 * n + 1] = outIm[n]!;
   }
   return signal;
+}
+
+function padded(values: Float64Array, length: number): Float64Array {
+  const result = new Float64Array(length);
+  result.set(values);
+  return result;
 }

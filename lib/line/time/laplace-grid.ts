@@ -53,7 +53,8 @@ export function laplaceGrid({ windowS, points }: Shown, riseS: number, edge: Edg
   const period = size * stepS;
   const count = Math.min(size / 2, Math.max(leastSize / 2, Math.ceil((steps * period) / (2 * riseS)))) + 1;
   const apart = (2 * Math.PI) / period;
-  const omega = Float64Array.from({ length: count }, (_, k) => k * apart);
+  const omega = new Float64Array(count);
+  for (let k = 0; k < count; k++) omega[k] = k * apart;
   return { count, damping: foldedOver / period, omega, size, stepS, every };
 }
 
@@ -64,8 +65,11 @@ export function laplaceGrid({ windowS, points }: Shown, riseS: number, edge: Edg
 export function signalOf(re: Float64Array, im: Float64Array, grid: LaplaceGrid, points: number): Float64Array {
   const length = (points - 1) * grid.every + 1;
   const signal = realSignal(re, im, grid.size).subarray(0, length);
-  const growth = grid.damping * grid.stepS;
-  const perPeriod = 1 / (grid.size * grid.stepS);
-  for (let n = 0; n < length; n++) signal[n]! *= Math.exp(growth * n) * perPeriod;
+  const growth = Math.exp(grid.damping * grid.stepS);
+  let factor = 1 / (grid.size * grid.stepS);
+  for (let n = 0; n < length; n++) {
+    signal[n]! *= factor;
+    factor *= growth;
+  }
   return signal;
 }

@@ -1,6 +1,7 @@
 /** Voltage and current at one plane over a whole grid of s, and the steps that carry them toward the source. */
 import type { LaplaceGrid } from "@/lib/line/time/laplace-grid";
-import { spectrum, type LineSpectrum, type Spectrum } from "@/lib/line/time/line-spectrum";
+import type { LineSpectrum } from "@/lib/line/time/line-spectrum";
+import { spectrum, type Spectrum } from "@/lib/line/time/spectrum";
 import type { RationalPort } from "@/lib/line/time/rational-port";
 import type { TwoPortAt } from "@/lib/line/two-port";
 
@@ -15,6 +16,10 @@ export interface PortSpectrum {
 }
 
 function putPolynomial(out: Spectrum, [c0, c1, c2]: RationalPort["v"], { count, damping, omega }: LaplaceGrid): void {
+  if (c1 === 0 && c2 === 0) {
+    out.re.fill(c0);
+    return;
+  }
   for (let k = 0; k < count; k++) {
     const w = omega[k]!;
     out.re[k] = c0 + damping * c1 + (damping * damping - w * w) * c2;

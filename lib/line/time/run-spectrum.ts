@@ -5,7 +5,8 @@ import { DB_PER_NEPER } from "@/lib/line/constants";
 import { jointReference, jointTwoPort } from "@/lib/line/joint";
 import { atTemperature } from "@/lib/line/temperature";
 import type { LaplaceGrid } from "@/lib/line/time/laplace-grid";
-import { lineSpectrum, spectrum, type LineSpectrum, type Spectrum } from "@/lib/line/time/line-spectrum";
+import { lineSpectrum, type LineSpectrum } from "@/lib/line/time/line-spectrum";
+import { spectrum, type Spectrum } from "@/lib/line/time/spectrum";
 import * as port from "@/lib/line/time/port-spectrum";
 import type { PortSpectrum } from "@/lib/line/time/port-spectrum";
 import { rationalPart, rationalTermination } from "@/lib/line/time/rational-port";
@@ -38,8 +39,9 @@ interface Passed {
 const normaliseEvery = 8;
 
 /**
- * Voltage at planes of a run per volt of source e.m.f., over a grid.
+ * Voltage at planes of a run over a grid, for an e.m.f. over the same grid.
  * @param planes - 0 is the source, n before element n, the number of elements the load
+ * @param emf - of the source; 1 at every s without it
  * @returns one spectrum a plane, in the order asked; 0 behind what lets nothing through
  * @throws RangeError when an element is impossible, the source is open, or something is known on the imaginary axis only
  */
@@ -47,12 +49,12 @@ export function runSpectrum(
   circuit: Circuit,
   planes: readonly number[],
   grid: LaplaceGrid,
-  temperatureC = 20,
+  options: { temperatureC?: number; emf?: Spectrum } = {},
 ): Spectrum[] {
   const { source, elements, load } = circuit;
   if (source.kind === "open") throw new RangeError("runSpectrum: source must not be open");
-  const sourcePort = port.portSpectrum(rationalTermination(source), grid);
-  const around: Surroundings = { grid, temperatureC, lines: lineSpectra(grid) };
+  const sourcePort = rationalTermination(source);
+  const around: Surroundings = { grid, temperatureC: options.temperatureC ?? 20, lines: lineSpectra(grid) };
   const at = port.portSpectrum(rationalTermination(load), grid);
   const asked = new Set(planes);
   const passed = new Map<number, Passed>();
@@ -62,14 +64,12 @@ export function runSpectrum(
   look(elements.length);
   for (let k = elements.length - 1; k >= 0; k--) {
     if (!step(at, circuit, k, around)) passed.clear();
-    if (k % normaliseEvery === 0) port.normalise(at);
+    if (k % normaliseEvery === normaliseEvery - 1) port.normalise(at);
     look(k);
   }
-  const perDrive = overDrive(at, sourcePort);
-  return planes.map((plane) => {
-    const found = passed.get(plane);
-    return found ? transfer(found, at.theta, perDrive) : spectrum(grid.count);
-  });
+  const perDrive = overDrive(at, port.portSpectrum(sourcePort, grid), options.emf);
+  for (const [plane, { v, theta }] of passed) deliver(v, plane === 0 ? undefined : theta, at.theta, perDrive);
+  return planes.map((plane) => passed.get(plane)?.v ?? spectrum(grid.count));
 }
 
 function copy({ re, im }: Spectrum): Spectrum {
@@ -160,8 +160,8 @@ function jointLine(flatDb: number, rootDb: number, referenceOhm: number, grid: L
   return { gamma: theta, zc, yc };
 }
 
-/** What the e.m.f. is divided by: source.i / (source.i·v + source.v·i). */
-function overDrive({ v, i }: PortSpectrum, source: PortSpectrum): Spectrum {
+/** e.m.f. times source.i / (source.i·v + source.v·i), which every voltage of the walk is multiplied by. */
+function overDrive({ v, i }: PortSpectrum, source: PortSpectrum, emf: Spectrum | undefined): Spectrum {
   const result = spectrum(v.re.length);
   for (let k = 0; k < v.re.length; k++) {
     const sRe = source.i.re[k]!;
@@ -171,24 +171,29 @@ function overDrive({ v, i }: PortSpectrum, source: PortSpectrum): Spectrum {
     const re = sRe * v.re[k]! - sIm * v.im[k]! + (zRe * i.re[k]! - zIm * i.im[k]!);
     const im = sRe * v.im[k]! + sIm * v.re[k]! + (zRe * i.im[k]! + zIm * i.re[k]!);
     const size = re * re + im * im;
-    result.re[k] = (sRe * re + sIm * im) / size;
-    result.im[k] = (sIm * re - sRe * im) / size;
+    const perRe = (sRe * re + sIm * im) / size;
+    const perIm = (sIm * re - sRe * im) / size;
+    const eRe = emf === undefined ? 1 : emf.re[k]!;
+    const eIm = emf === undefined ? 0 : emf.im[k]!;
+    result.re[k] = perRe * eRe - perIm * eIm;
+    result.im[k] = perRe * eIm + perIm * eRe;
   }
   return result;
 }
 
-/** v·e^{−(θ at the source − θ here)} over the drive. */
-function transfer({ v, theta }: Passed, atSource: Spectrum, perDrive: Spectrum): Spectrum {
-  const result = spectrum(v.re.length);
+/** v ← v·perDrive·e^{−(θ at the source − θ here)}; without `here` nothing lies between. */
+function deliver(v: Spectrum, here: Spectrum | undefined, atSource: Spectrum, perDrive: Spectrum): void {
   for (let k = 0; k < v.re.length; k++) {
-    const decay = Math.exp(theta.re[k]! - atSource.re[k]!);
-    const turn = theta.im[k]! - atSource.im[k]!;
-    const eRe = decay * Math.cos(turn);
-    const eIm = decay * Math.sin(turn);
-    const hRe = v.re[k]! * perDrive.re[k]! - v.im[k]! * perDrive.im[k]!;
-    const hIm = v.re[k]! * perDrive.im[k]! + v.im[k]! * perDrive.re[k]!;
-    result.re[k] = hRe * eRe - hIm * eIm;
-    result.im[k] = hRe * eIm + hIm * eRe;
+    const re = v.re[k]! * perDrive.re[k]! - v.im[k]! * perDrive.im[k]!;
+    const im = v.re[k]! * perDrive.im[k]! + v.im[k]! * perDrive.re[k]!;
+    v.re[k] = re;
+    v.im[k] = im;
+    if (here === undefined) continue;
+    const decay = Math.exp(here.re[k]! - atSource.re[k]!);
+    const turn = here.im[k]! - atSource.im[k]!;
+    const cos = decay * Math.cos(turn);
+    const sin = decay * Math.sin(turn);
+    v.re[k] = re * cos - im * sin;
+    v.im[k] = re * sin + im * cos;
   }
-  return result;
 }

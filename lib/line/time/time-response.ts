@@ -1,7 +1,6 @@
 import type { Circuit } from "@/lib/line/element";
 import { driveSpectrum, requireDrive, type Drive } from "@/lib/line/time/drive";
-import { laplaceGrid, signalOf, type LaplaceGrid, type Shown } from "@/lib/line/time/laplace-grid";
-import type { Spectrum } from "@/lib/line/time/line-spectrum";
+import { laplaceGrid, signalOf, type Shown } from "@/lib/line/time/laplace-grid";
 import { runSpectrum } from "@/lib/line/time/run-spectrum";
 
 /** A voltage over time: value n is at n·stepS. */
@@ -43,20 +42,11 @@ export function timeResponse(
   requireDrive("timeResponse", drive);
   const grid = laplaceGrid(shown, drive.riseS, drive.edge ?? "sineSquared");
   const planes = options.planes ?? [0, circuit.elements.length];
-  const transfers = runSpectrum(circuit, planes, grid, options.temperatureC);
   const emf = driveSpectrum(drive, grid);
-  const signals = transfers.map((transfer) => ({
+  const voltages = runSpectrum(circuit, planes, grid, { temperatureC: options.temperatureC ?? 20, emf });
+  const signals = voltages.map(({ re, im }) => ({
     stepS: grid.stepS,
-    values: driven(transfer, emf, grid, shown.points),
+    values: signalOf(re, im, grid, shown.points),
   }));
   return { stepS: grid.stepS, every: grid.every, planes: signals };
-}
-
-function driven({ re, im }: Spectrum, emf: Spectrum, grid: LaplaceGrid, points: number): Float64Array {
-  for (let k = 0; k < grid.count; k++) {
-    const hRe = re[k]!;
-    re[k] = hRe * emf.re[k]! - im[k]! * emf.im[k]!;
-    im[k] = hRe * emf.im[k]! + im[k]! * emf.re[k]!;
-  }
-  return signalOf(re, im, grid, points);
 }
