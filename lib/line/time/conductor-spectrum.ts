@@ -36,17 +36,18 @@ const addSqrt: AddTerm = (r0, corner, { count, damping, omega }, z) => {
 const addRound: AddTerm = (r0, corner, { count, damping, omega }, z) => {
   const pRe = damping / corner;
   const under = 49 + 16 * pRe;
+  const perCorner = 1 / corner;
   for (let k = 0; k < count; k++) {
-    const pIm = omega[k]! / corner;
+    const pIm = omega[k]! * perCorner;
     const larger = Math.sqrt((Math.sqrt(under * under + 256 * pIm * pIm) + under) / 2);
     const rootRe = 5 + larger;
     const rootIm = (8 * pIm) / larger;
-    const rootSize = rootRe * rootRe + rootIm * rootIm;
-    const downRe = 1 + (2 * (pRe * rootRe + pIm * rootIm)) / rootSize;
-    const downIm = (2 * (pIm * rootRe - pRe * rootIm)) / rootSize;
-    const size = 2 * (downRe * downRe + downIm * downIm);
-    z.re[k]! += r0 * (1 + (pRe * downRe + pIm * downIm) / size);
-    z.im[k]! += (r0 * (pIm * downRe - pRe * downIm)) / size;
+    const perRoot = 2 / (rootRe * rootRe + rootIm * rootIm);
+    const downRe = 1 + (pRe * rootRe + pIm * rootIm) * perRoot;
+    const downIm = (pIm * rootRe - pRe * rootIm) * perRoot;
+    const perDown = (0.5 * r0) / (downRe * downRe + downIm * downIm);
+    z.re[k]! += r0 + (pRe * downRe + pIm * downIm) * perDown;
+    z.im[k]! += (pIm * downRe - pRe * downIm) * perDown;
   }
 };
 

@@ -91,6 +91,7 @@ export function requireDrive(where: string, drive: Drive): void {
 export function driveSpectrum(drive: Drive, grid: LaplaceGrid): { re: Float64Array; im: Float64Array } {
   const edge = edgeSpectrum(drive.edge ?? "sineSquared", drive.riseS, grid);
   const { everyS, jumps } = evenJumps(drive);
+  if (drive.kind === "step") return scaled(edge, drive.amplitudeV);
   const later = delay(grid, everyS);
   for (let k = 0; k < grid.count; k++) {
     const stepRe = later.re[k]!;
@@ -108,6 +109,14 @@ export function driveSpectrum(drive: Drive, grid: LaplaceGrid): { re: Float64Arr
     edge.im[k] = edgeRe * im + edge.im[k]! * re;
   }
   return edge;
+}
+
+function scaled(of: { re: Float64Array; im: Float64Array }, factor: number): { re: Float64Array; im: Float64Array } {
+  for (let k = 0; k < of.re.length; k++) {
+    of.re[k]! *= factor;
+    of.im[k]! *= factor;
+  }
+  return of;
 }
 
 /** How many places of a grid are turned on from one that was worked out, so that rounding stays below 10⁻¹⁴. */
@@ -135,8 +144,8 @@ function delay({ count, damping, omega }: LaplaceGrid, tau: number): { re: Float
 
 /** The jumps of a drive at even distances. */
 function evenJumps(drive: Drive): { everyS: number; jumps: number[] } {
-  if (drive.kind !== "bits")
-    return { everyS: drive.kind === "pulse" ? drive.widthS : 0, jumps: transitions(drive).map(({ jumpV }) => jumpV) };
+  if (drive.kind === "step") return { everyS: 0, jumps: [drive.amplitudeV] };
+  if (drive.kind === "pulse") return { everyS: drive.widthS, jumps: [drive.amplitudeV, -drive.amplitudeV] };
   const levels = [...drive.bits].map(Number);
   return {
     everyS: drive.bitS,
@@ -166,9 +175,9 @@ function edgeSpectrum(shape: EdgeShape, riseS: number, grid: LaplaceGrid) {
     const downIm = byRe * squareIm + byIm * (squareRe + square);
     const upRe = factor * (re[k]! + (sine ? -1 : 1));
     const upIm = factor * im[k]!;
-    const size = downRe * downRe + downIm * downIm;
-    re[k] = (upRe * downRe + upIm * downIm) / size;
-    im[k] = (upIm * downRe - upRe * downIm) / size;
+    const perSize = 1 / (downRe * downRe + downIm * downIm);
+    re[k] = (upRe * downRe + upIm * downIm) * perSize;
+    im[k] = (upIm * downRe - upRe * downIm) * perSize;
   }
   return { re, im };
 }

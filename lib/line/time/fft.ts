@@ -63,7 +63,10 @@ function reorder(values: Float64Array, reversed: Uint32Array): void {
 /** The stage of two, whose factors are ±1. */
 function pairs(re: Float64Array, im: Float64Array): void {
   for (let k = 0; k < re.length; k += 2) {
-    const [aRe, aIm, bRe, bIm] = [re[k]!, im[k]!, re[k + 1]!, im[k + 1]!];
+    const aRe = re[k]!;
+    const aIm = im[k]!;
+    const bRe = re[k + 1]!;
+    const bIm = im[k + 1]!;
     re[k] = aRe + bRe;
     im[k] = aIm + bIm;
     re[k + 1] = aRe - bRe;
@@ -76,14 +79,12 @@ function quadruples(re: Float64Array, im: Float64Array, span: number, { cos, sin
   const size = re.length;
   const stride = size / (4 * span);
   for (let j = 0; j < span; j++) {
-    const c2 = cos[j * stride]!;
-    const s2 = sin[j * stride]!;
-    const c1 = cos[2 * j * stride]!;
-    const s1 = sin[2 * j * stride]!;
-    const c3 = cos[3 * j * stride]!;
-    const s3 = sin[3 * j * stride]!;
+    const [k1, k2, k3] = [2 * j * stride, j * stride, 3 * j * stride];
+    const [c1, s1, c2, s2, c3, s3] = [cos[k1]!, sin[k1]!, cos[k2]!, sin[k2]!, cos[k3]!, sin[k3]!];
     for (let at = j; at < size; at += 4 * span) {
-      const [atB, atC, atD] = [at + span, at + 2 * span, at + 3 * span];
+      const atB = at + span;
+      const atC = atB + span;
+      const atD = atC + span;
       const bRe = re[atB]! * c1 - im[atB]! * s1;
       const bIm = re[atB]! * s1 + im[atB]! * c1;
       const cRe = re[atC]! * c2 - im[atC]! * s2;
@@ -112,10 +113,11 @@ function quadruples(re: Float64Array, im: Float64Array, span: number, { cos, sin
  * @param re - real parts of X_0 … X_{N/2}; where fewer are given the rest is 0
  * @param im - imaginary parts; those of X_0 and X_{N/2} count as 0
  * @param size - N, a power of two of at least 4
- * @returns N values
+ * @param length - how many values of the signal are wanted, at most N
+ * @returns that many values
  * @throws RangeError when N is not such a power or more is given than N/2 + 1 values
  */
-export function realSignal(re: Float64Array, im: Float64Array, size: number): Float64Array {
+export function realSignal(re: Float64Array, im: Float64Array, size: number, length = size): Float64Array {
   const half = size / 2;
   requireSize("realSignal", half);
   if (re.length > half + 1) throw new RangeError(`realSignal: at most ${half + 1} values, got ${re.length}`);
@@ -136,11 +138,8 @@ export function realSignal(re: Float64Array, im: Float64Array, size: number): Fl
     outIm[k] = xIm[k]! + mirrorIm + (gapRe * cos[k]! - gapIm * sin[k]!);
   }
   inverseFft(outRe, outIm);
-  const signal = new Float64Array(size);
-  for (let n = 0; n < half; n++) {
-    signal[2 * n] = outRe[n]!;
-    signal[2 * n + 1] = outIm[n]!;
-  }
+  const signal = new Float64Array(length);
+  for (let n = 0; n < length; n++) signal[n] = n % 2 === 0 ? outRe[n >> 1]! : outIm[n >> 1]!;
   return signal;
 }
 

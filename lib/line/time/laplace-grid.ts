@@ -44,6 +44,15 @@ export function laplaceGrid({ windowS, points }: Shown, riseS: number, edge: Edg
     throw new RangeError(`laplaceGrid: windowS must be above 0 and at most ${mostEdges * riseS}, got ${windowS}`);
   if (!(points >= 2 && Number.isInteger(points)))
     throw new RangeError(`laplaceGrid: points must be a whole number of at least 2, got ${points}`);
+  const key = `${windowS} ${points} ${riseS} ${edge}`;
+  if (last?.key !== key) last = { key, grid: gridFor({ windowS, points }, riseS, edge) };
+  return last.grid;
+}
+
+/** The grid asked for last: edits of a run and solves ask for the same one again and again. It is never changed. */
+let last: { key: string; grid: LaplaceGrid } | undefined;
+
+function gridFor({ windowS, points }: Shown, riseS: number, edge: EdgeShape): LaplaceGrid {
   const shownStep = windowS / (points - 1);
   const steps = stepsPerEdge[edge];
   const least = Math.ceil((steps * shownStep) / riseS) * 2 * (points - 1);
@@ -64,7 +73,7 @@ export function laplaceGrid({ windowS, points }: Shown, riseS: number, edge: Edg
  */
 export function signalOf(re: Float64Array, im: Float64Array, grid: LaplaceGrid, points: number): Float64Array {
   const length = (points - 1) * grid.every + 1;
-  const signal = realSignal(re, im, grid.size).subarray(0, length);
+  const signal = realSignal(re, im, grid.size, length);
   const growth = Math.exp(grid.damping * grid.stepS);
   let factor = 1 / (grid.size * grid.stepS);
   for (let n = 0; n < length; n++) {

@@ -27,12 +27,17 @@ function putPolynomial(out: Spectrum, [c0, c1, c2]: RationalPort["v"], { count, 
   }
 }
 
-/** The port of a termination or part. */
-export function portSpectrum(port: RationalPort, grid: LaplaceGrid): PortSpectrum {
-  const result = { v: spectrum(grid.count), i: spectrum(grid.count), theta: spectrum(grid.count) };
+/** Voltage and current of a branch or a source. */
+export function branchSpectrum(port: RationalPort, grid: LaplaceGrid): Pick<PortSpectrum, "v" | "i"> {
+  const result = { v: spectrum(grid.count), i: spectrum(grid.count) };
   putPolynomial(result.v, port.v, grid);
   putPolynomial(result.i, port.i, grid);
   return result;
+}
+
+/** The end that a walk begins at. */
+export function portSpectrum(port: RationalPort, grid: LaplaceGrid): PortSpectrum {
+  return { ...branchSpectrum(port, grid), theta: spectrum(grid.count) };
 }
 
 /**
@@ -43,6 +48,7 @@ export function portSpectrum(port: RationalPort, grid: LaplaceGrid): PortSpectru
 export function throughLine(at: PortSpectrum, line: LineSpectrum, length: number, paralleled: number): void {
   const { v, i, theta } = at;
   const { gamma, zc, yc } = line;
+  const share = 1 / paralleled;
   for (let k = 0; k < v.re.length; k++) {
     const x = gamma.re[k]! * length;
     const phase = gamma.im[k]! * length;
@@ -51,8 +57,8 @@ export function throughLine(at: PortSpectrum, line: LineSpectrum, length: number
     const decay = Math.exp(-2 * x);
     const eRe = decay * Math.cos(2 * phase);
     const eIm = -decay * Math.sin(2 * phase);
-    const zRe = zc.re[k]! / paralleled;
-    const zIm = zc.im[k]! / paralleled;
+    const zRe = zc.re[k]! * share;
+    const zIm = zc.im[k]! * share;
     const iRe = i.re[k]!;
     const iIm = i.im[k]!;
     const ziRe = zRe * iRe - zIm * iIm;
@@ -63,10 +69,10 @@ export function throughLine(at: PortSpectrum, line: LineSpectrum, length: number
     const gapIm = v.im[k]! - ziIm;
     const backRe = gapRe * eRe - gapIm * eIm;
     const backIm = gapRe * eIm + gapIm * eRe;
-    v.re[k] = (awayRe + backRe) / 2;
-    v.im[k] = (awayIm + backIm) / 2;
-    const differenceRe = (awayRe - backRe) / 2;
-    const differenceIm = (awayIm - backIm) / 2;
+    v.re[k] = (awayRe + backRe) * 0.5;
+    v.im[k] = (awayIm + backIm) * 0.5;
+    const differenceRe = (awayRe - backRe) * 0.5;
+    const differenceIm = (awayIm - backIm) * 0.5;
     const yRe = yc.re[k]! * paralleled;
     const yIm = yc.im[k]! * paralleled;
     i.re[k] = yRe * differenceRe - yIm * differenceIm;
@@ -93,9 +99,9 @@ function addRatio(sum: Spectrum, up: Spectrum, down: Spectrum, by: Spectrum): bo
   for (let k = 0; k < sum.re.length; k++) {
     const downRe = down.re[k]!;
     const downIm = down.im[k]!;
-    const size = downRe * downRe + downIm * downIm;
-    const re = (up.re[k]! * downRe + up.im[k]! * downIm) / size;
-    const im = (up.im[k]! * downRe - up.re[k]! * downIm) / size;
+    const perSize = 1 / (downRe * downRe + downIm * downIm);
+    const re = (up.re[k]! * downRe + up.im[k]! * downIm) * perSize;
+    const im = (up.im[k]! * downRe - up.re[k]! * downIm) * perSize;
     sum.re[k]! += re * by.re[k]! - im * by.im[k]!;
     sum.im[k]! += re * by.im[k]! + im * by.re[k]!;
   }

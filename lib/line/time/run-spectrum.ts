@@ -59,7 +59,8 @@ export function runSpectrum(
   const asked = new Set(planes);
   const passed = new Map<number, Passed>();
   const look = (plane: number) => {
-    if (asked.has(plane)) passed.set(plane, { v: copy(at.v), theta: copy(at.theta) });
+    // the walk ends at the source, whose values nothing writes over any more
+    if (asked.has(plane)) passed.set(plane, plane === 0 ? at : { v: copy(at.v), theta: copy(at.theta) });
   };
   look(elements.length);
   for (let k = elements.length - 1; k >= 0; k--) {
@@ -67,7 +68,7 @@ export function runSpectrum(
     if (k % normaliseEvery === normaliseEvery - 1) port.normalise(at);
     look(k);
   }
-  const perDrive = overDrive(at, port.portSpectrum(sourcePort, grid), options.emf);
+  const perDrive = overDrive(at, port.branchSpectrum(sourcePort, grid), options.emf);
   for (const [plane, { v, theta }] of passed) deliver(v, plane === 0 ? undefined : theta, at.theta, perDrive);
   return planes.map((plane) => passed.get(plane)?.v ?? spectrum(grid.count));
 }
@@ -87,10 +88,10 @@ function step(at: PortSpectrum, circuit: Circuit, k: number, around: Surrounding
     case "stub":
       return branch(at, element.connection, stubPort(element, temperatureC, around));
     case "shunt":
-      return branch(at, "shunt", port.portSpectrum(rationalTermination(element.termination), around.grid));
+      return branch(at, "shunt", port.branchSpectrum(rationalTermination(element.termination), around.grid));
     case "part":
       prepareElement(element);
-      return branch(at, element.connection, port.portSpectrum(rationalPart(element), around.grid));
+      return branch(at, element.connection, port.branchSpectrum(rationalPart(element), around.grid));
     case "joint":
       alongJoint(at, element, neededReference(circuit, k), around.grid);
       return true;
@@ -100,7 +101,7 @@ function step(at: PortSpectrum, circuit: Circuit, k: number, around: Surrounding
   }
 }
 
-function branch(at: PortSpectrum, connection: "shunt" | "series", of: PortSpectrum): boolean {
+function branch(at: PortSpectrum, connection: "shunt" | "series", of: Pick<PortSpectrum, "v" | "i">): boolean {
   return connection === "shunt" ? port.acrossBranch(at, of) : port.alongBranch(at, of);
 }
 
@@ -137,7 +138,7 @@ function neededReference({ elements, source, referenceOhm }: Circuit, k: number)
 function alongJoint(at: PortSpectrum, joint: JointElement, referenceOhm: number, grid: LaplaceGrid): void {
   jointTwoPort(joint, referenceOhm);
   const { lossDb = 0, lossDbAtOneGhz = 0, shuntF = 0 } = joint;
-  if (shuntF > 0) port.acrossBranch(at, port.portSpectrum({ v: [1, 0, 0], i: [0, shuntF, 0] }, grid));
+  if (shuntF > 0) port.acrossBranch(at, port.branchSpectrum({ v: [1, 0, 0], i: [0, shuntF, 0] }, grid));
   if (lossDb === 0 && lossDbAtOneGhz === 0) return;
   port.throughLine(at, jointLine(lossDb, lossDbAtOneGhz, referenceOhm, grid), 1, 1);
 }
@@ -161,7 +162,7 @@ function jointLine(flatDb: number, rootDb: number, referenceOhm: number, grid: L
 }
 
 /** e.m.f. times source.i / (source.i·v + source.v·i), which every voltage of the walk is multiplied by. */
-function overDrive({ v, i }: PortSpectrum, source: PortSpectrum, emf: Spectrum | undefined): Spectrum {
+function overDrive({ v, i }: PortSpectrum, source: Pick<PortSpectrum, "v" | "i">, emf: Spectrum | undefined): Spectrum {
   const result = spectrum(v.re.length);
   for (let k = 0; k < v.re.length; k++) {
     const sRe = source.i.re[k]!;
@@ -170,9 +171,9 @@ function overDrive({ v, i }: PortSpectrum, source: PortSpectrum, emf: Spectrum |
     const zIm = source.v.im[k]!;
     const re = sRe * v.re[k]! - sIm * v.im[k]! + (zRe * i.re[k]! - zIm * i.im[k]!);
     const im = sRe * v.im[k]! + sIm * v.re[k]! + (zRe * i.im[k]! + zIm * i.re[k]!);
-    const size = re * re + im * im;
-    const perRe = (sRe * re + sIm * im) / size;
-    const perIm = (sIm * re - sRe * im) / size;
+    const perSize = 1 / (re * re + im * im);
+    const perRe = (sRe * re + sIm * im) * perSize;
+    const perIm = (sIm * re - sRe * im) * perSize;
     const eRe = emf === undefined ? 1 : emf.re[k]!;
     const eIm = emf === undefined ? 0 : emf.im[k]!;
     result.re[k] = perRe * eRe - perIm * eIm;
