@@ -2,7 +2,7 @@
 import { describe, expect, test } from "vitest";
 import { modelFromNominal, nominalFigures } from "@/lib/line/cable";
 import { COPPER_RESISTIVITY } from "@/lib/line/constants";
-import type { Circuit, ConductorForm, Termination } from "@/lib/line/element";
+import type { Circuit, ConductorForm, Element, Termination } from "@/lib/line/element";
 import type { Drive } from "@/lib/line/time/drive";
 import { settledLevels } from "@/lib/line/time/settled";
 import { valueAt } from "@/lib/line/time/signal";
@@ -166,4 +166,22 @@ test("rises add in squares for bell shapes only: a skin-effect tail makes more o
   };
   const [one, two] = [riseOf(50), riseOf(100)];
   expect(two / one).toBeGreaterThan(2);
+});
+
+test("10 to 90 % of a first-order rise are 0.35 over its bandwidth", () => {
+  const [r, c] = [50, 100e-12];
+  const load: Termination = { kind: "network", topology: "parallel", cF: c };
+  const circuit: Circuit = { source: ohm(r), elements: [], load };
+  const { riseS } = stepFigures(circuit, { kind: "step", amplitudeV: 1, riseS: 0.2e-9 }, { windowS: 60e-9 });
+  near(riseS * (1 / (2 * Math.PI * r * c)), 0.35, 0.002, "rise times bandwidth");
+});
+
+test("bias of 560 Ω to either rail of 5 V idles a short bus of 24 nodes of 96 kΩ at 251 mV", () => {
+  const shunt = (reOhm: number): Element => ({ kind: "shunt", termination: ohm(reOhm) });
+  const circuit: Circuit = { source: ohm(2 * 560), elements: [shunt(120), shunt(96e3 / 24)], load: ohm(120) };
+  near(5 * settledLevels(circuit, [2])[0]!, 0.251, 0.0005, "idle");
+});
+
+test("a matched 75 Ω run halves the e.m.f. of its source", () => {
+  near(settledLevels({ source: ohm(75), elements: [], load: ohm(75) }, [0])[0]!, 0.5, 1e-12, "level");
 });
