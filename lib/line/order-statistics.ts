@@ -39,7 +39,8 @@ function putPercentiles(result: Percentiles, k: number, values: Float64Array): v
   let low = Infinity;
   let high = -Infinity;
   let isDefined = last >= 0;
-  for (const value of values) {
+  for (let n = 0; n <= last; n++) {
+    const value = values[n]!;
     if (value < low) low = value;
     if (value > high) high = value;
     if (Number.isNaN(value)) isDefined = false;
