@@ -27,6 +27,8 @@ export interface Solution {
   /** how many values the range was looked at with, and the widest gap between two of them */
   looked: number;
   gap: number;
+  /** of each target at the value; empty where there is none */
+  margins: number[];
 }
 
 /** Figures beside the circuit that may be varied too. */
@@ -50,23 +52,29 @@ export function solve(request: SolveRequest): Solution {
   requireTargets(request.circuit, targets, withCondition(request, values[0]!));
   const judged = values.map(at);
   const gap = values.reduce((widest, value, n) => Math.max(widest, Math.abs(value - (values[n - 1] ?? value))), 0);
-  const seen = { looked: values.length, gap };
+  const seen = { looked: values.length, gap, neverMet: null };
+  const found = (value: number, binds: number | null) => ({ ...seen, value, binds, margins: marginsOf(at(value)) });
   const first = judged.findIndex(holds);
-  if (first === 0) return { value: values[0]!, binds: null, neverMet: null, ...seen };
-  if (first > 0) return { ...edge(at, values[first]!, values[first - 1]!), neverMet: null, ...seen };
-  const found = climb(at, values, targets);
-  if (found !== undefined) {
-    const beyond = values.filter((value) => (want === "largest" ? value > found : value < found)).at(-1)!;
-    return { ...edge(at, found, beyond), neverMet: null, ...seen };
+  if (first === 0) return found(values[0]!, null);
+  const crest = first < 0 ? climb(at, values, targets) : values[first]!;
+  if (crest !== undefined) {
+    const beyond = values.filter((value) => (want === "largest" ? value > crest : value < crest)).at(-1);
+    if (beyond === undefined) return found(crest, null);
+    const { value, binds } = edge(at, crest, beyond);
+    return found(value, binds);
   }
   const never = targets.findIndex((_, index) => judged.every((each) => !each[index]!.isMet));
-  return { value: null, binds: null, neverMet: never < 0 ? null : never, ...seen };
+  return { ...seen, value: null, binds: null, neverMet: never < 0 ? null : never, margins: [] };
 }
 
 type JudgedAt = (value: number) => Judgement[];
 
 function holds(judged: readonly Judgement[]): boolean {
   return judged.every(({ isMet }) => isMet);
+}
+
+function marginsOf(judged: readonly Judgement[]): number[] {
+  return judged.map(({ margin }) => margin);
 }
 
 /** The values looked at, from the wanted end. */

@@ -58,10 +58,13 @@ function inside(upper: number, lower: number): number {
   return upper === lower ? 0 : upper - lower;
 }
 
-/** Indices of the frequencies (hertz) that lie in a band, its ends included; all of them without a band. */
-export function indicesInBand(frequencies: ArrayLike<number>, band: Target["bandHz"]): number[] {
+/**
+ * Indices of the frequencies (hertz) that lie in a band, its ends included; without a band those of the first `asked`,
+ * behind which the ends of other bands may stand.
+ */
+export function indicesInBand(frequencies: ArrayLike<number>, band: Target["bandHz"], asked: number): number[] {
+  if (!band) return Array.from({ length: asked }, (_, k) => k);
   const all = Array.from({ length: frequencies.length }, (_, k) => k);
-  if (!band) return all;
   return all.filter((k) => frequencies[k]! >= band[0] * (1 - 1e-12) && frequencies[k]! <= band[1] * (1 + 1e-12));
 }
 

@@ -73,8 +73,12 @@ export function isSweptAtSource({ quantity, plane }: Target): boolean {
   return quantity === "loss" || ((quantity === "returnLoss" || quantity === "vswr") && isSource);
 }
 
-function over(run: Studied, { bandHz }: Target, values: Float64Array, whyNot: string): Reached | string {
-  const reached = reachedOver(values, indicesInBand(run.frequencies, bandHz));
+function indices({ conditions, frequencies }: Studied, { bandHz }: Target): number[] {
+  return indicesInBand(frequencies, bandHz, conditions.frequencies.length);
+}
+
+function over(run: Studied, target: Target, values: Float64Array, whyNot: string): Reached | string {
+  const reached = reachedOver(values, indices(run, target));
   return Number.isNaN(reached.least) ? whyNot : reached;
 }
 
@@ -100,10 +104,11 @@ function levelAt({ conditions, dc }: Studied, { plane }: Target): Reached | stri
 }
 
 /** The highest peak voltage along the run for a power that is available, at any frequency of the band. */
-function voltageAlong({ circuit, conditions, frequencies }: Studied, { bandHz }: Target): Reached | string {
-  const { availablePowerW, temperatureC } = conditions;
+function voltageAlong(run: Studied, target: Target): Reached | string {
+  const { circuit, frequencies } = run;
+  const { availablePowerW, temperatureC } = run.conditions;
   if (availablePowerW === undefined) return "It needs the available power, availablePowerW.";
-  const peaks = indicesInBand(frequencies, bandHz).map((k) => {
+  const peaks = indices(run, target).map((k) => {
     const wave = standingWave(circuit, frequencies[k]!, availablePowerW, { temperatureC, pointsPerElement: 2 });
     return wave.maxVoltageV * Math.SQRT2;
   });

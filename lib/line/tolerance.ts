@@ -117,7 +117,7 @@ function inPhases(phases: readonly Phase[], result: () => ToleranceResult): Tole
 function drawPhase(request: ToleranceRequest, { respond, moved }: MovedResponse, frequencies: Float64Array) {
   const { circuit, spread, draws, seed, targets = [] } = request;
   const width = frequencies.length;
-  const counter = yieldCounter(circuit, targets, { ...request, frequencies });
+  const counter = yieldCounter(circuit, targets, request, frequencies);
   const drawn = drawsOf(spread, seed);
   const values = new Float64Array(spread.length);
   const returnLoss = new Float64Array(draws * width);

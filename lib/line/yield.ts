@@ -18,14 +18,19 @@ export interface YieldCounter {
 }
 
 /**
- * @param frequencies - hertz, the ends of every target's band among them
+ * @param frequencies - hertz: those of the conditions, then the ends of every target's band
  * @throws RangeError, in words, when a target cannot be worked out for the run as drawn
  */
-export function yieldCounter(circuit: Circuit, targets: readonly Target[], conditions: TargetConditions): YieldCounter {
+export function yieldCounter(
+  circuit: Circuit,
+  targets: readonly Target[],
+  conditions: TargetConditions,
+  frequencies: ArrayLike<number>,
+): YieldCounter {
   requireTargets(circuit, targets, conditions);
-  const { frequencies } = conditions;
+  const asked = conditions.frequencies.length;
   const swept = targets.map((target) => isSweptAtSource(target));
-  const indices = targets.map(({ bandHz }) => indicesInBand(frequencies, bandHz));
+  const indices = targets.map(({ bandHz }) => indicesInBand(frequencies, bandHz, asked));
   const others = targets.filter((_, index) => !swept[index]);
   const kept = targets.map(() => 0);
   let [draws, allKept] = [0, 0];

@@ -54,6 +54,10 @@ const expected: Record<string, Access> = {
   computeExtract: roles,
   computeTouchstone: roles,
   computeStep: roles,
+  computeTolerance: roles,
+  computeDc: roles,
+  computeSwap: roles,
+  computeSolve: roles,
   readHealth: "anyone",
   readDescription: "anyone",
 };

@@ -1,4 +1,8 @@
 /** What can be computed apart from the thread that serves: pure functions of plain data, by name. */
+import { dcAnswer } from "@/lib/compute/dc/answer";
+import { solveAnswer } from "@/lib/compute/solve/answer";
+import { swapAnswer } from "@/lib/compute/swap/answer";
+import { toleranceAnswer } from "@/lib/compute/tolerance/answer";
 import { lineAnswer, matchesAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
 import { extractAnswer } from "@/lib/compute/extract/answer";
 import { fitAnswer } from "@/lib/compute/fit/answer";
@@ -18,6 +22,10 @@ export const jobs = {
   extract: extractAnswer,
   touchstone: touchstoneAnswer,
   step: stepAnswer,
+  tolerance: toleranceAnswer,
+  dc: dcAnswer,
+  swap: swapAnswer,
+  solve: solveAnswer,
 };
 
 export type Jobs = typeof jobs;

@@ -1,0 +1,62 @@
+/** Whether a request to swap goes together, how much work it asks, and which cables are not tried. Pure. */
+import type { Cable } from "@/lib/cables/schema";
+import { sweepFaults } from "@/lib/compute/faults";
+import { frequenciesOf } from "@/lib/compute/frequencies";
+import { targetFaults } from "@/lib/compute/path-faults";
+import { isPlace } from "@/lib/compute/swap/places";
+import type { SwapAsked } from "@/lib/compute/swap/schema";
+import type { Circuit } from "@/lib/line/element";
+import { frequenciesWithBands } from "@/lib/line/target";
+import type { CircuitFault } from "@/lib/runs/circuit";
+
+/** Elements times frequencies times cables. */
+const mostPoints = 25_000_000;
+/** A standing wave is about this many times the work of a sweep. */
+const waveWork = 20;
+
+/**
+ * @param circuit - its lines found
+ * @param cables - how many are to be tried
+ * @returns paths from the request's root
+ */
+export function swapFaults(circuit: Circuit, request: SwapAsked, cables: number): CircuitFault[] {
+  const { paths, targets } = request;
+  const frequencies = Array.from(frequenciesWithBands(frequenciesOf(request), targets));
+  const places = paths.flatMap((path, n) => {
+    if (paths.indexOf(path) < n) return [{ path: `paths.${n}`, message: "This place is named twice." }];
+    return isPlace(circuit, path)
+      ? []
+      : [{ path: `paths.${n}`, message: "No cable stands there that could be swapped." }];
+  });
+  const faults = [...sweepFaults(request.circuit, frequencies, []), ...places];
+  if (faults.length > 0) return faults;
+  const waves = targets.filter(({ quantity }) => quantity === "voltage").length;
+  if (cables * (circuit.elements.length + 1) * frequencies.length * (1 + waveWork * waves) > mostPoints)
+    return [
+      {
+        path: "circuit.elements",
+        message: `${cables} cables in a run of ${circuit.elements.length} elements at ${frequencies.length} frequencies is too much for one request; ask for fewer frequencies.`,
+      },
+    ];
+  return targetFaults(circuit, targets, { ...request, frequencies });
+}
+
+/** Why a usable cable is not put in; undefined where it is. */
+export function whyNotTried(cable: Cable, circuit: Circuit, request: SwapAsked): string | undefined {
+  const { state, condition, limits } = cable;
+  if (state === "restricted") return `Restricted: ${condition ?? "no condition stated."}`;
+  const highest = frequenciesOf(request).reduce((most, each) => Math.max(most, each), 0);
+  if (limits.maxFrequencyHz !== undefined && highest > limits.maxFrequencyHz)
+    return `Stated up to ${limits.maxFrequencyHz} Hz only.`;
+  const temperatures = request.paths.map((path) => temperatureAt(circuit, path, request.temperatureC));
+  if (limits.maxTemperatureC !== undefined && Math.max(...temperatures) > limits.maxTemperatureC)
+    return `Stated up to ${limits.maxTemperatureC} °C only.`;
+  if (limits.minTemperatureC !== undefined && Math.min(...temperatures) < limits.minTemperatureC)
+    return `Stated down to ${limits.minTemperatureC} °C only.`;
+  return undefined;
+}
+
+function temperatureAt({ elements }: Circuit, path: string, runC: number): number {
+  const element = elements[Number(path.split(".")[1])];
+  return (element && "temperatureC" in element ? element.temperatureC : undefined) ?? runC;
+}
