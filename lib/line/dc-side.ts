@@ -66,13 +66,24 @@ export interface Meeting {
   i: number;
 }
 
-/** Voltage and current where what is known from both sides meets. */
+/**
+ * Voltage and current where what is known from both sides meets. Between two opens there is no current, and no voltage
+ * can be told; between two shorts it is the other way round.
+ */
 export function meeting(left: Side, right: Side): Meeting {
   const determinant = left.p * right.q - right.p * left.q;
+  const isCutOff = left.r === 0 && right.r === 0;
+  if (isCutOff && left.p === 0 && right.p === 0) return { v: NaN, i: 0 };
+  if (isCutOff && left.q === 0 && right.q === 0) return { v: 0, i: NaN };
   return {
     v: (left.r * right.q - right.r * left.q) / determinant,
     i: (left.p * right.r - right.p * left.r) / determinant,
   };
+}
+
+/** Power toward the load; none where either voltage or current is none. */
+export function powerAt({ v, i }: Meeting): number {
+  return v === 0 || i === 0 ? 0 : v * i;
 }
 
 /** Resistance of both sides in parallel, without their sources; Infinity where neither conducts. */

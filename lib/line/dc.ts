@@ -6,6 +6,7 @@ import {
   AT_REST,
   endAtRest,
   meeting,
+  powerAt,
   sidesFromLoad,
   sidesFromSource,
   together,
@@ -82,7 +83,7 @@ export function directCurrent(circuit: Circuit, options: DcOptions = {}): Dc {
   const last = planes[elements.length]!;
   return {
     loopResistanceOhm: elements.reduce((sum, element) => sum + loopResistance(element, temperatureC), 0),
-    points: [end(0, (supplyV - first.v) * first.i), ...inside, end(elements.length, last.v * last.i)],
+    points: [end(0, first.i === 0 ? 0 : (supplyV - first.v) * first.i), ...inside, end(elements.length, powerAt(last))],
     elementDissipatedW: dissipated,
     supplyCurrentA: first.i,
   };
@@ -90,7 +91,7 @@ export function directCurrent(circuit: Circuit, options: DcOptions = {}): Dc {
 
 /** Power that goes in and does not come out. */
 function lost(before: Meeting, after: Meeting): number {
-  return before.v * before.i - after.v * after.i;
+  return powerAt(before) - powerAt(after);
 }
 
 function accessPoints(elements: readonly Element[]): { at: "joint" | "tap"; element: number }[] {

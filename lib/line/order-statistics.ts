@@ -35,33 +35,74 @@ const together = 8;
 
 /** @param values - of all curves at one point; reordered */
 function putPercentiles(result: Percentiles, k: number, values: Float64Array): void {
-  const last = values.length - 1;
   let low = Infinity;
   let high = -Infinity;
-  let isDefined = last >= 0;
-  for (let n = 0; n <= last; n++) {
+  let isDefined = values.length > 0;
+  for (let n = 0; n < values.length; n++) {
     const value = values[n]!;
     if (value < low) low = value;
     if (value > high) high = value;
     if (Number.isNaN(value)) isDefined = false;
   }
-  const half = Math.floor(last / 2);
+  const starts = isDefined ? sortIntoBuckets(values, low, high) : undefined;
+  const at = (share: number) => (isDefined ? quantile(values, share, starts) : NaN);
   result.min[k] = isDefined ? low : NaN;
   result.max[k] = isDefined ? high : NaN;
-  // the median first: what is not above it then lies before it
-  result.median[k] = isDefined ? quantile(values, 0.5, 0, last) : NaN;
-  result.p05[k] = isDefined ? quantile(values, 0.05, 0, Math.max(half, Math.ceil(0.05 * last))) : NaN;
-  result.p95[k] = isDefined ? quantile(values, 0.95, Math.min(half, Math.floor(0.95 * last)), last) : NaN;
+  result.p05[k] = at(0.05);
+  result.median[k] = at(0.5);
+  result.p95[k] = at(0.95);
+}
+
+const buckets = 256;
+const bucketStarts = new Int32Array(buckets + 1);
+const bucketEnds = new Int32Array(buckets);
+let sorted = new Float64Array(0);
+
+/**
+ * Sorts values into buckets of equal width, in place, so that a rank need be looked for in one of them only.
+ * @returns where each bucket starts, and the end; undefined where they are too few or reach to infinity
+ * Source: distribution counting, D. E. Knuth, The Art of Computer Programming, vol. 3, 2nd ed., section 5.2.
+ */
+function sortIntoBuckets(values: Float64Array, low: number, high: number): Int32Array | undefined {
+  const scale = (buckets - 1) / (high - low);
+  if (values.length < buckets || !(scale > 0 && scale < Infinity)) return undefined;
+  bucketStarts.fill(0);
+  for (let n = 0; n < values.length; n++) bucketStarts[Math.trunc((values[n]! - low) * scale) + 1]!++;
+  for (let b = 0; b < buckets; b++) {
+    bucketEnds[b] = bucketStarts[b]!;
+    bucketStarts[b + 1]! += bucketStarts[b]!;
+  }
+  if (sorted.length !== values.length) sorted = new Float64Array(values.length);
+  for (let n = 0; n < values.length; n++) {
+    const value = values[n]!;
+    sorted[bucketEnds[Math.trunc((value - low) * scale)]!++] = value;
+  }
+  values.set(sorted);
+  return bucketStarts;
+}
+
+/** The bucket in which a rank lies, as the index of its start among the starts. */
+function bucketOf(starts: Int32Array, rank: number): number {
+  let [low, high] = [0, buckets - 1];
+  while (low < high) {
+    const middle = (low + high + 1) >> 1;
+    if (starts[middle]! <= rank) low = middle;
+    else high = middle - 1;
+  }
+  return low;
 }
 
 /**
- * @param values - reordered; those of rank `from` to `to` must stand at those indices, in any order
+ * @param values - reordered, each within its bucket
  * @param share - 0 to 1
+ * @param starts - of the buckets, where there are any
  */
-function quantile(values: Float64Array, share: number, from: number, to: number): number {
+function quantile(values: Float64Array, share: number, starts: Int32Array | undefined): number {
   const rank = share * (values.length - 1);
   const below = Math.floor(rank);
   const part = rank - below;
+  const from = starts ? starts[bucketOf(starts, below)]! : 0;
+  const to = starts ? starts[bucketOf(starts, Math.min(below + 1, values.length - 1)) + 1]! - 1 : values.length - 1;
   select(values, below, from, to);
   const low = values[below]!;
   if (part === 0) return low;

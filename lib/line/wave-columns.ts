@@ -65,6 +65,8 @@ const quarterSin = Float64Array.of(0, 1, 0, -1);
 export function stepAlongLine(line: LineColumns, length: number, paralleled: number, wave: WaveColumns): void {
   const { gammaRe, gammaIm, zcRe, zcIm, ycRe, ycIm } = line;
   const { vRe, vIm, iRe, iIm, scale } = wave;
+  const share = 1 / paralleled;
+  const half = paralleled / 2;
   for (let k = 0; k < vRe.length; k++) {
     const loss = gammaRe[k]! * length;
     const angle = 2 * gammaIm[k]! * length;
@@ -72,16 +74,16 @@ export function stepAlongLine(line: LineColumns, length: number, paralleled: num
     const r = angle - turns * HALF_PI - turns * HALF_PI_REST;
     const z = r * r;
     // prettier-ignore
-    const s = r - r * z * (1 / 6 - z * (1 / 120 - z * (1 / 5040 - z * (1 / 362880 - z * (1 / 39916800 - z * (1 / 6227020800 - z / 1307674368000))))));
+    const s = r - r * z * (1 / 6 - z * (1 / 120 - z * (1 / 5040 - z * (1 / 362880 - z * (1 / 39916800 - z * (1 / 6227020800 - z * (1 / 1307674368000)))))));
     // prettier-ignore
-    const c = 1 - z * (0.5 - z * (1 / 24 - z * (1 / 720 - z * (1 / 40320 - z * (1 / 3628800 - z * (1 / 479001600 - z * (1 / 87178291200 - z / 20922789888000)))))));
+    const c = 1 - z * (0.5 - z * (1 / 24 - z * (1 / 720 - z * (1 / 40320 - z * (1 / 3628800 - z * (1 / 479001600 - z * (1 / 87178291200 - z * (1 / 20922789888000))))))));
     const quarter = turns & 3;
     const left = Math.exp(-2 * loss);
     const isFar = turns === 0 && angle > 1;
     const eRe = left * (isFar ? Math.cos(angle) : c * quarterCos[quarter]! - s * quarterSin[quarter]!);
     const eIm = -left * (isFar ? Math.sin(angle) : s * quarterCos[quarter]! + c * quarterSin[quarter]!);
-    const zRe = zcRe[k]! / paralleled;
-    const zIm = zcIm[k]! / paralleled;
+    const zRe = zcRe[k]! * share;
+    const zIm = zcIm[k]! * share;
     const uRe = zRe * iRe[k]! - zIm * iIm[k]!;
     const uIm = zRe * iIm[k]! + zIm * iRe[k]!;
     const bRe = vRe[k]! - uRe;
@@ -90,8 +92,8 @@ export function stepAlongLine(line: LineColumns, length: number, paralleled: num
     const backIm = bRe * eIm + bIm * eRe;
     const aRe = vRe[k]! + uRe;
     const aIm = vIm[k]! + uIm;
-    const dRe = (aRe - backRe) * 0.5 * paralleled;
-    const dIm = (aIm - backIm) * 0.5 * paralleled;
+    const dRe = (aRe - backRe) * half;
+    const dIm = (aIm - backIm) * half;
     vRe[k] = (aRe + backRe) * 0.5;
     vIm[k] = (aIm + backIm) * 0.5;
     iRe[k] = dRe * ycRe[k]! - dIm * ycIm[k]!;

@@ -45,6 +45,24 @@ test("every share is that of sorting, whatever the values, ties and infinities a
   );
 });
 
+test("the same holds for many curves, whose ranks are looked for in buckets, and for a few far away", () => {
+  const value = fc.oneof(
+    { weight: 9, arbitrary: fc.double({ min: 0, max: 1, noNaN: true }) },
+    { weight: 1, arbitrary: fc.constantFrom(0.5, -1e6, 1e6) },
+  );
+  fc.assert(
+    fc.property(fc.array(value, { minLength: 256, maxLength: 700 }), (column) => {
+      const found = percentileCurves(Float64Array.from(column), 1);
+      for (const [name, share] of [
+        ["p05", 0.05],
+        ["median", 0.5],
+        ["p95", 0.95],
+      ] as const)
+        expect(found[name][0] === sorted(column, share), `${name} of ${column.length}`).toBe(true);
+    }),
+  );
+});
+
 test("a point at which one curve is not defined has no shares, and leaves its neighbours alone", () => {
   const { min, median } = percentileCurves(Float64Array.of(1, NaN, 3, 4), 2);
   expect([min[0], median[0]]).toEqual([1, 2]);
