@@ -32,16 +32,21 @@ export function pathFaults(
   });
 }
 
-/** Targets that cannot be worked out for the run. */
+/**
+ * Targets that cannot be worked out for the run. One frequency is enough to tell, so that little is computed where
+ * everybody is served.
+ */
 export function targetFaults(
   circuit: Circuit,
   targets: readonly Target[],
   conditions: TargetConditions,
 ): CircuitFault[] {
   if (targets.length === 0) return [];
+  const atOne = { ...conditions, frequencies: [conditions.frequencies[0]!] };
+  const anyBand = targets.map((target) => ({ ...target, bandHz: undefined }));
   let faults: CircuitFault[] = [];
   const impossible = refusal(() => {
-    faults = judgeTargets(circuit, targets, conditions).flatMap(({ why }, index) =>
+    faults = judgeTargets(circuit, anyBand, atOne).flatMap(({ why }, index) =>
       why === undefined ? [] : [{ path: `targets.${index}`, message: `It cannot be worked out here: ${why}` }],
     );
   });
