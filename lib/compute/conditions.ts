@@ -1,6 +1,7 @@
 /** What several requests of `/compute` say beside the circuit: targets, and what stands on the run. Pure. */
 import { z } from "zod";
 import { notNegative, temperature } from "@/lib/cables/schema";
+import { driveSchema } from "@/lib/compute/step/schema";
 import { targetSchema } from "@/lib/runs/schema";
 
 export const figure = z.number().nullable().describe("null where there is no finite number");
@@ -18,6 +19,9 @@ export const supplyFields = {
 export const conditionFields = {
   ...supplyFields,
   availablePowerW: notNegative("The power").optional().describe("for targets on voltage and power"),
+  drive: driveSchema
+    .optional()
+    .describe("for targets on overshoot, settling, tapDip, and on delay without a band or level without a supply"),
   temperatureC: temperature().default(20),
 };
 

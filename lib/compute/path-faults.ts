@@ -1,7 +1,7 @@
 /** Whether paths, values and targets of a request mean anything for its run; each fault at its place. Pure. */
 import { circuitPlace, requireValue } from "@/lib/line/circuit-path";
 import type { Circuit } from "@/lib/line/element";
-import { judgeTargets, type TargetConditions } from "@/lib/line/targets";
+import { isInTime, judgeTargets, type TargetConditions } from "@/lib/line/targets";
 import type { Target } from "@/lib/line/target";
 import type { CircuitFault } from "@/lib/runs/circuit";
 
@@ -33,8 +33,8 @@ export function pathFaults(
 }
 
 /**
- * Targets that cannot be worked out for the run. One frequency is enough to tell, so that little is computed where
- * everybody is served.
+ * Targets that cannot be worked out for the run. One frequency is enough to tell, and what is a question of time is left
+ * to be refused where it is computed, so that little is computed where everybody is served.
  */
 export function targetFaults(
   circuit: Circuit,
@@ -43,12 +43,18 @@ export function targetFaults(
 ): CircuitFault[] {
   if (targets.length === 0) return [];
   const atOne = { ...conditions, frequencies: [conditions.frequencies[0]!] };
-  const anyBand = targets.map((target) => ({ ...target, bandHz: undefined }));
+  const { drive } = conditions;
+  const known = targets.map((target): Target =>
+    drive && isInTime(target) ? harmless : { ...target, bandHz: undefined },
+  );
   let faults: CircuitFault[] = [];
   const impossible = refusal(() => {
-    faults = judgeTargets(circuit, anyBand, atOne).flatMap(({ why }, index) =>
+    faults = judgeTargets(circuit, known, { ...atOne, drive: undefined }).flatMap(({ why }, index) =>
       why === undefined ? [] : [{ path: `targets.${index}`, message: `It cannot be worked out here: ${why}` }],
     );
   });
   return impossible === undefined ? faults : [{ path: "targets", message: impossible }];
 }
+
+/** Stands for a target that is looked at elsewhere. */
+const harmless: Target = { quantity: "returnLoss", atLeast: 0 };

@@ -109,6 +109,7 @@ const positive: Bounds = { above: 0 };
 
 const boundsOf: Record<string, Bounds> = {
   lengthM: notNegative,
+  riseS: positive,
   r0OhmPerM: notNegative,
   skinCornerRadPerS: positive,
   lInfHPerM: positive,

@@ -32,7 +32,7 @@ export interface Solution {
 }
 
 /** Figures beside the circuit that may be varied too. */
-export const conditionPaths = ["temperatureC", "supplyV", "loadCurrentA", "availablePowerW"] as const;
+export const conditionPaths = ["temperatureC", "supplyV", "loadCurrentA", "availablePowerW", "drive.riseS"] as const;
 
 const scanned = 97;
 /** A range that spans more than this is looked at by ratio. */
@@ -98,6 +98,7 @@ function isCondition(path: string): path is (typeof conditionPaths)[number] {
 
 function withCondition(request: SolveRequest, value: number): TargetConditions {
   const { path } = request.vary;
+  if (path === "drive.riseS") return { ...request, drive: request.drive && { ...request.drive, riseS: value } };
   return isCondition(path) ? { ...request, [path]: value } : request;
 }
 

@@ -3,6 +3,9 @@ import { directCurrent, type Dc } from "@/lib/line/dc";
 import type { Circuit, Plane } from "@/lib/line/element";
 import { sweep, type Sweep } from "@/lib/line/run";
 import { standingWave } from "@/lib/line/standing-wave";
+import { dipsOfTaps, readingsAtLoad } from "@/lib/line/targets-in-time";
+import type { Drive } from "@/lib/line/time/drive";
+import type { Readings } from "@/lib/line/time/readings";
 import {
   frequenciesWithBands,
   indicesInBand,
@@ -25,6 +28,8 @@ export interface TargetConditions {
   loadCurrentA?: number | undefined;
   /** available from the source, watt */
   availablePowerW?: number | undefined;
+  /** of the source's e.m.f., for what is a question of time; with it a delay is that of its edge */
+  drive?: Drive | undefined;
 }
 
 /** A run as its targets see it; what several of them need is worked out once, when the first asks. */
@@ -34,6 +39,8 @@ interface Studied {
   frequencies: Float64Array;
   swept: () => Sweep;
   dc: () => Dc;
+  /** at the load; only where there is a drive */
+  read: () => Readings;
 }
 
 /** What is reached, or why that cannot be said. */
@@ -41,18 +48,22 @@ type Row = (run: Studied, target: Target) => Reached | string;
 
 const noPower = "The source has no resistance, so it has no available power to lose.";
 const noSupply = "It needs the supply's voltage, supplyV.";
-const inTime = "It is a question of time: it needs a step or a pulse.";
+const inTime = "It is a question of time: it needs a drive, a step or a pulse.";
 
 const rows: Record<TargetQuantity, Row> = {
   loss: (run, target) => over(run, target, run.swept().transducerLossDb, noPower),
   returnLoss: (run, target) => over(run, target, planeOf(run, target).returnLossDb, "Nothing arrives there."),
   vswr: (run, target) => over(run, target, planeOf(run, target).vswr, "Nothing arrives there."),
-  delay: (run, target) => over(run, target, run.swept().groupDelayS, "No signal arrives at the load."),
+  delay: (run, target) =>
+    run.conditions.drive && !target.bandHz
+      ? fromDrive(run, ({ delayS }) => delayS)
+      : over(run, target, run.swept().groupDelayS, "No signal arrives at the load."),
   skew: () => "It is a difference between two pairs, and this is one run.",
   level: (run, target) => levelAt(run, target),
-  overshoot: () => inTime,
-  settling: () => inTime,
-  tapDip: () => inTime,
+  overshoot: (run) => fromDrive(run, ({ overshoot }) => overshoot),
+  settling: (run) => fromDrive(run, ({ settlingS }) => settlingS),
+  tapDip: ({ circuit, conditions: { drive, temperatureC = 20 } }) =>
+    drive ? dipsOfTaps(circuit, drive, temperatureC) : inTime,
   dcDrop: ({ conditions, dc }) => {
     if (conditions.supplyV === undefined) return noSupply;
     const { points } = dc();
@@ -66,6 +77,12 @@ const rows: Record<TargetQuantity, Row> = {
   voltage: (run, target) => voltageAlong(run, target),
   power: (run, target) => powerInLoad(run, target),
 };
+
+/** Targets that need the run's response over time where it has a drive. */
+export function isInTime({ quantity, bandHz }: Target): boolean {
+  if (quantity === "delay") return !bandHz;
+  return quantity === "overshoot" || quantity === "settling" || quantity === "tapDip" || quantity === "level";
+}
 
 /** Quantities that follow from return loss at the source and transducer loss alone. */
 export function isSweptAtSource({ quantity, plane }: Target): boolean {
@@ -95,8 +112,19 @@ function samePlane(a: Plane, b: Plane): boolean {
   return "beforeElement" in b && a.beforeElement === b.beforeElement;
 }
 
-/** The level a supply settles at: at the load end, or at the source's. */
-function levelAt({ conditions, dc }: Studied, { plane }: Target): Reached | string {
+/** A reading at the load. */
+function fromDrive(run: Studied, of: (readings: Readings) => number): Reached | string {
+  if (!run.conditions.drive) return inTime;
+  const value = of(run.read());
+  return Number.isNaN(value) ? "It does not happen within the time looked at." : single(value);
+}
+
+/** The level a supply settles at, or without one a drive: at the load end, or at the source's. */
+function levelAt(run: Studied, { plane }: Target): Reached | string {
+  const { conditions, dc } = run;
+  const isAtLoad = plane === undefined || ("at" in plane && plane.at === "load");
+  if (conditions.supplyV === undefined && conditions.drive && isAtLoad)
+    return fromDrive(run, ({ settledV }) => settledV);
   if (conditions.supplyV === undefined) return noSupply;
   if (plane && !("at" in plane)) return "A level is that of the source end or of the load end.";
   const { points } = dc();
@@ -145,11 +173,13 @@ function studied(circuit: Circuit, targets: readonly Target[], conditions: Targe
   const planes = targets.flatMap(({ plane }) => plane ?? []);
   let swept: Sweep | undefined;
   let dc: Dc | undefined;
+  let read: Readings | undefined;
   return {
     circuit,
     conditions,
     frequencies,
     swept: () => (swept ??= sweep(circuit, frequencies, { temperatureC: temperatureC ?? 20, planes })),
     dc: () => (dc ??= directCurrent(circuit, conditions)),
+    read: () => (read ??= readingsAtLoad(circuit, conditions.drive!, temperatureC ?? 20)),
   };
 }

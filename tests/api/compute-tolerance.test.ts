@@ -192,6 +192,16 @@ describe("/compute/solve", () => {
     expect(found.why).toContain("loss");
   });
 
+  test("answers the fastest edge with a target on a question of time", async () => {
+    const drive = { kind: "step", amplitudeV: 1, riseS: 1e-7 };
+    const mismatched = circuit([feeder(20)], { kind: "constant", reOhm: 75, imOhm: 0 });
+    const targets = [{ quantity: "settling", atMost: 1e-6 }];
+    const vary = { path: "drive.riseS", between: [1e-8, 1e-5] };
+    const found = await answer(solve, { ...body, circuit: mismatched, drive, targets, vary }, solveAnswerSchema);
+    expect(found.value).toBeGreaterThan(9e-7);
+    expect(found.binds).toBe(0);
+  });
+
   test("says why there is no value", async () => {
     const found = await answer(
       solve,

@@ -1,12 +1,18 @@
 import { describe, expect, test } from "vitest";
+import { tapDips } from "@/lib/line/bus";
 import { directCurrent } from "@/lib/line/dc";
 import type { Element } from "@/lib/line/element";
+import { solve } from "@/lib/line/solve";
 import { sweep } from "@/lib/line/run";
 import { standingWave } from "@/lib/line/standing-wave";
 import { judge, targetQuantities, type Target } from "@/lib/line/target";
 import { judgeTargets } from "@/lib/line/targets";
+import { readings } from "@/lib/line/time/readings";
+import { settledLevels } from "@/lib/line/time/settled";
+import { timeResponse } from "@/lib/line/time/time-response";
+import { usualWindow } from "@/lib/line/time/usual-window";
 import { targetSchema } from "@/lib/runs/schema";
-import { cable, ohm, run } from "@/tests/support/lossy-run";
+import { cable, ohm, rope, run } from "@/tests/support/lossy-run";
 
 const tap: Element = { kind: "shunt", termination: ohm(1000) };
 const circuit = run([cable(12), tap, cable(7)]);
@@ -54,6 +60,66 @@ describe("what decides", () => {
     expect(one({ quantity: "voltage", atMost: 100 }).value).toBeCloseTo(peak, 9);
     const power = Math.min(...frequencies.map((f) => standingWave(circuit, f, 25).loadPowerW));
     expect(one({ quantity: "power", atLeast: 1 }).value).toBeCloseTo(power, 9);
+  });
+});
+
+describe("over time", () => {
+  const drive = { kind: "step", amplitudeV: 2, riseS: 20e-9, edge: "raisedCosine" } as const;
+  const spur: Element = {
+    kind: "stub",
+    connection: "shunt",
+    end: { kind: "network", topology: "parallel", rOhm: 1e4, cF: 2e-11 },
+    line: { model: rope },
+    lengthM: 2,
+  };
+  const bus = run([cable(12), spur, cable(7), spur], ohm(1000));
+  const inTime = (target: Target) => judgeTargets(bus, [target], { frequencies, drive })[0]!;
+
+  test("readings at the load, and the deepest dip of a tap, are those of the response", () => {
+    const windowS = usualWindow(bus, drive);
+    const response = timeResponse(bus, drive, { windowS, points: 2049 }, { planes: [4] });
+    const read = readings(response.planes[0]!, drive, settledLevels(bus, [4])[0]!);
+    expect(read.overshoot).toBeGreaterThan(0.02);
+    expect(inTime({ quantity: "overshoot", atMost: 1 }).value).toBe(read.overshoot);
+    expect(inTime({ quantity: "settling", atMost: 1 }).value).toBe(read.settlingS);
+    expect(inTime({ quantity: "delay", atMost: 1 }).value).toBe(read.delayS);
+    expect(inTime({ quantity: "level", atLeast: 1 }).value).toBe(read.settledV);
+    expect(inTime({ quantity: "tapDip", atMost: 1 }).value).toBe(
+      Math.max(...tapDips(bus, drive).map(({ dip }) => dip)),
+    );
+  });
+
+  test("the level of a drive is that of a supply as large", () => {
+    const [byDrive] = judgeTargets(bus, [{ quantity: "level", atLeast: 1 }], { frequencies, drive });
+    const [bySupply] = judgeTargets(bus, [{ quantity: "level", atLeast: 1 }], { frequencies, supplyV: 2 });
+    expect(byDrive!.value).toBeCloseTo(bySupply!.value, 9);
+  });
+
+  test("a delay with a band of its own is the group delay, drive or not", () => {
+    const target: Target = { quantity: "delay", bandHz: [3e7, 3e7], atMost: 1 };
+    expect(inTime(target).value).toBe(sweep(bus, [3e7]).groupDelayS[0]);
+  });
+
+  test("without a tap there is no dip, without a drive nothing is known", () => {
+    expect(judgeTargets(run([cable(3)]), [{ quantity: "tapDip", atMost: 1 }], { frequencies, drive })[0]!.why).toMatch(
+      /no tap/,
+    );
+    for (const quantity of ["overshoot", "settling", "tapDip"] as const)
+      expect(one({ quantity, atMost: 1 }).why).toMatch(/question of time/);
+  });
+
+  test("the fastest edge that keeps every dip small is solved for", () => {
+    const request = {
+      circuit: bus,
+      frequencies,
+      drive,
+      vary: { path: "drive.riseS", between: [1e-8, 2e-6] as const },
+      want: "smallest" as const,
+    };
+    const { value } = solve({ ...request, targets: [{ quantity: "tapDip", atMost: 0.1 }] });
+    const dipAt = (riseS: number) => Math.max(...tapDips(bus, { ...drive, riseS }).map(({ dip }) => dip));
+    expect(dipAt(value!)).toBeLessThanOrEqual(0.1);
+    expect(dipAt(value!)).toBeGreaterThan(0.099);
   });
 });
 

@@ -2,17 +2,16 @@
 import { sweepFaults } from "@/lib/compute/faults";
 import { frequenciesOf } from "@/lib/compute/frequencies";
 import { pathFaults, targetFaults } from "@/lib/compute/path-faults";
+import { targetWork } from "@/lib/compute/target-work";
 import type { SolveAsked } from "@/lib/compute/solve/schema";
 import type { Circuit } from "@/lib/line/element";
 import { conditionPaths } from "@/lib/line/solve";
+import type { TargetConditions } from "@/lib/line/targets";
 import { frequenciesWithBands } from "@/lib/line/target";
 import type { CircuitFault } from "@/lib/runs/circuit";
 
 /** Elements times frequencies of one look at the run; a range is looked at some 250 times. */
 const mostPoints = 100_000;
-/** A standing wave is about this many times the work of a sweep. */
-const waveWork = 20;
-
 /** @returns paths from the request's root */
 export function solveFaults(circuit: Circuit, request: SolveAsked): CircuitFault[] {
   const { vary, targets } = request;
@@ -23,8 +22,8 @@ export function solveFaults(circuit: Circuit, request: SolveAsked): CircuitFault
     ...(isCondition ? [] : pathFaults(circuit, vary.path, vary.between, { path: "vary.path", limits: "vary.between" })),
   ];
   if (faults.length > 0) return faults;
-  const waves = targets.filter(({ quantity }) => quantity === "voltage").length;
-  const points = (circuit.elements.length + 1) * frequencies.length * (1 + waveWork * waves);
+  const pieces = circuit.elements.length + 1;
+  const points = pieces * frequencies.length + targetWork(request.circuit, targets, request, frequencies.length);
   if (points > mostPoints)
     return [
       {
@@ -32,6 +31,14 @@ export function solveFaults(circuit: Circuit, request: SolveAsked): CircuitFault
         message: `${circuit.elements.length} elements at ${frequencies.length} frequencies, looked at some 250 times, is too much for one request; ask for fewer frequencies.`,
       },
     ];
-  const conditions = { ...request, frequencies, ...(isCondition && { [vary.path]: vary.between[0] }) };
-  return targetFaults(circuit, targets, conditions);
+  return targetFaults(circuit, targets, conditionsAt(request, frequencies, vary.between[1]));
+}
+
+/** Conditions with a value at the path, where that is one of them. */
+function conditionsAt(request: SolveAsked, frequencies: number[], value: number): TargetConditions {
+  const { path } = request.vary;
+  if (path === "drive.riseS")
+    return { ...request, frequencies, drive: request.drive && { ...request.drive, riseS: value } };
+  const isCondition = (conditionPaths as readonly string[]).includes(path);
+  return { ...request, frequencies, ...(isCondition && { [path]: value }) };
 }

@@ -10,7 +10,7 @@ export const solveRequestSchema = z
     ...frequencyFields,
     vary: z.strictObject({
       path: pathSchema.describe(
-        "into the circuit, as of a spread; or temperatureC, supplyV, loadCurrentA, availablePowerW",
+        "into the circuit, as of a spread; or temperatureC, supplyV, loadCurrentA, availablePowerW, drive.riseS",
       ),
       between: limitsSchema("The ends of the range"),
     }),

@@ -4,6 +4,7 @@ import { sweepFaults } from "@/lib/compute/faults";
 import { frequenciesOf } from "@/lib/compute/frequencies";
 import { targetFaults } from "@/lib/compute/path-faults";
 import { isPlace } from "@/lib/compute/swap/places";
+import { targetWork } from "@/lib/compute/target-work";
 import type { SwapAsked } from "@/lib/compute/swap/schema";
 import type { Circuit } from "@/lib/line/element";
 import { frequenciesWithBands } from "@/lib/line/target";
@@ -11,8 +12,6 @@ import type { CircuitFault } from "@/lib/runs/circuit";
 
 /** Elements times frequencies times cables. */
 const mostPoints = 25_000_000;
-/** A standing wave is about this many times the work of a sweep. */
-const waveWork = 20;
 
 /**
  * @param circuit - its lines found
@@ -30,8 +29,9 @@ export function swapFaults(circuit: Circuit, request: SwapAsked, cables: number)
   });
   const faults = [...sweepFaults(request.circuit, frequencies, []), ...places];
   if (faults.length > 0) return faults;
-  const waves = targets.filter(({ quantity }) => quantity === "voltage").length;
-  if (cables * (circuit.elements.length + 1) * frequencies.length * (1 + waveWork * waves) > mostPoints)
+  const pieces = circuit.elements.length + 1;
+  const steps = pieces * frequencies.length + targetWork(request.circuit, targets, request, frequencies.length);
+  if (cables * steps > mostPoints)
     return [
       {
         path: "circuit.elements",

@@ -2,6 +2,7 @@
 import { sweepFaults } from "@/lib/compute/faults";
 import { frequenciesOf } from "@/lib/compute/frequencies";
 import { pathFaults, refusal, targetFaults } from "@/lib/compute/path-faults";
+import { targetWork } from "@/lib/compute/target-work";
 import type { ToleranceAsked } from "@/lib/compute/tolerance/schema";
 import { contributorLevels } from "@/lib/line/contributors";
 import type { Circuit, Element } from "@/lib/line/element";
@@ -51,11 +52,11 @@ function stepsOf(element: Element): number {
 }
 
 /** What the targets cost at every draw that the curves do not tell already. */
-function targetSteps({ elements }: Circuit, { targets }: ToleranceAsked): number {
-  const others = targets.filter((target) => !isSweptAtSource(target));
+function targetSteps(request: ToleranceAsked, frequencies: number): number {
+  const others = request.targets.filter((target) => !isSweptAtSource(target));
   if (others.length === 0) return 0;
-  const waves = others.filter(({ quantity }) => quantity === "voltage").length;
-  return 5 * (elements.length + 2) * (1 + 20 * waves);
+  const swept = 5 * (request.circuit.elements.length + 2) * frequencies;
+  return swept + 2 * targetWork(request.circuit, others, request, frequencies);
 }
 
 function workFaults(
@@ -70,7 +71,7 @@ function workFaults(
     0,
   );
   const responses = draws + (corners ? 2 ** spread.length : 0) + contributorLevels * spread.length;
-  const steps = frequencies * (responses * (2 + moving) + draws * targetSteps(circuit, request));
+  const steps = frequencies * responses * (2 + moving) + draws * targetSteps(request, frequencies);
   if (draws * frequencies <= mostValues && steps <= mostSteps) return [];
   return [
     {
