@@ -26,9 +26,14 @@ export function pathFaults(
 ): CircuitFault[] {
   const unknown = refusal(() => circuitPlace(circuit, path));
   if (unknown !== undefined) return [{ path: at.path, message: unknown }];
+  return limitFaults(path, limits, at.limits);
+}
+
+/** Limits that a figure cannot take. */
+export function limitFaults(path: string, limits: readonly [number, number], at: string): CircuitFault[] {
   return limits.flatMap((limit, n) => {
     const message = refusal(() => requireValue(path, limit));
-    return message === undefined ? [] : [{ path: `${at.limits}.${n}`, message }];
+    return message === undefined ? [] : [{ path: `${at}.${n}`, message }];
   });
 }
 

@@ -224,6 +224,7 @@ describe("/compute/solve", () => {
       { vary: { path: "elements.0.lengthM", between: [-2, -1] } },
       ["vary.between.0", "vary.between.1"],
     ],
+    ["an edge of no time", { vary: { path: "drive.riseS", between: [0, 1] } }, ["vary.between.0"]],
     ["a range the wrong way round", { vary: { path: "elements.0.lengthM", between: [2, 1] } }, ["vary.between"]],
     ["a target on time without a step", { targets: [{ quantity: "overshoot", atMost: 0.1 }] }, ["targets.0"]],
     [

@@ -1,7 +1,7 @@
 /** Whether a request to solve goes together, and how much work it asks. Pure. */
 import { sweepFaults } from "@/lib/compute/faults";
 import { frequenciesOf } from "@/lib/compute/frequencies";
-import { pathFaults, targetFaults } from "@/lib/compute/path-faults";
+import { limitFaults, pathFaults, targetFaults } from "@/lib/compute/path-faults";
 import { targetWork } from "@/lib/compute/target-work";
 import type { SolveAsked } from "@/lib/compute/solve/schema";
 import type { Circuit } from "@/lib/line/element";
@@ -19,7 +19,9 @@ export function solveFaults(circuit: Circuit, request: SolveAsked): CircuitFault
   const isCondition = (conditionPaths as readonly string[]).includes(vary.path);
   const faults = [
     ...sweepFaults(request.circuit, frequencies, []),
-    ...(isCondition ? [] : pathFaults(circuit, vary.path, vary.between, { path: "vary.path", limits: "vary.between" })),
+    ...(isCondition
+      ? limitFaults(vary.path, vary.between, "vary.between")
+      : pathFaults(circuit, vary.path, vary.between, { path: "vary.path", limits: "vary.between" })),
   ];
   if (faults.length > 0) return faults;
   const pieces = circuit.elements.length + 1;

@@ -41,22 +41,30 @@ export function swapFaults(circuit: Circuit, request: SwapAsked, cables: number)
   return targetFaults(circuit, targets, { ...request, frequencies });
 }
 
-/** Why a usable cable is not put in; undefined where it is. */
-export function whyNotTried(cable: Cable, circuit: Circuit, request: SwapAsked): string | undefined {
-  const { state, condition, limits } = cable;
-  if (state === "restricted") return `Restricted: ${condition ?? "no condition stated."}`;
-  const highest = frequenciesOf(request).reduce((most, each) => Math.max(most, each), 0);
-  if (limits.maxFrequencyHz !== undefined && highest > limits.maxFrequencyHz)
-    return `Stated up to ${limits.maxFrequencyHz} Hz only.`;
-  const temperatures = request.paths.map((path) => temperatureAt(circuit, path, request.temperatureC));
-  if (limits.maxTemperatureC !== undefined && Math.max(...temperatures) > limits.maxTemperatureC)
-    return `Stated up to ${limits.maxTemperatureC} °C only.`;
-  if (limits.minTemperatureC !== undefined && Math.min(...temperatures) < limits.minTemperatureC)
-    return `Stated down to ${limits.minTemperatureC} °C only.`;
-  return undefined;
+/** What the places ask of a cable at most. */
+export interface Hardest {
+  frequencyHz: number;
+  hottestC: number;
+  coldestC: number;
 }
 
-function temperatureAt({ elements }: Circuit, path: string, runC: number): number {
-  const element = elements[Number(path.split(".")[1])];
-  return (element && "temperatureC" in element ? element.temperatureC : undefined) ?? runC;
+export function hardest({ elements }: Circuit, request: SwapAsked): Hardest {
+  const temperatures = request.paths.map((path) => {
+    const element = elements[Number(path.split(".")[1])];
+    return (element && "temperatureC" in element ? element.temperatureC : undefined) ?? request.temperatureC;
+  });
+  return {
+    frequencyHz: frequenciesOf(request).reduce((most, each) => Math.max(most, each), 0),
+    hottestC: Math.max(...temperatures),
+    coldestC: Math.min(...temperatures),
+  };
+}
+
+/** Why a usable cable is not put in; undefined where it is. */
+export function whyNotTried({ state, condition, limits }: Cable, place: Hardest): string | undefined {
+  const { maxFrequencyHz = Infinity, maxTemperatureC = Infinity, minTemperatureC = -Infinity } = limits;
+  if (state === "restricted") return `Restricted: ${condition ?? "no condition stated."}`;
+  if (place.frequencyHz > maxFrequencyHz) return `Stated up to ${maxFrequencyHz} Hz only.`;
+  if (place.hottestC > maxTemperatureC) return `Stated up to ${maxTemperatureC} °C only.`;
+  return place.coldestC < minTemperatureC ? `Stated down to ${minTemperatureC} °C only.` : undefined;
 }
