@@ -20,5 +20,22 @@ import * as notices from "@/lib/notices/operations";
 import * as runs from "@/lib/runs/operations";
 
 export const operations: Operation[] = [
-  ...[account, cables, runs, compute, step, tolerance, dc, swap, solve, service],
+  account,
+  cables,
+  runs,
+  limitLines,
+  notices,
+  mail,
+  compute,
+  geometry,
+  fit,
+  readings,
+  extract,
+  touchstone,
+  step,
+  tolerance,
+  dc,
+  swap,
+  solve,
+  service,
 ].flatMap((noun) => Object.values<Operation>(noun));

@@ -1,5 +1,4 @@
 /** Published values in tests/fixtures/line, with their sources, and how to compare with them. */
-/** Published values in tests/fixtures/line/published-*.json, with their sources, and how to compare with them. */
 import { readFileSync } from "node:fs";
 import path from "node:path";
 import { expect } from "vitest";
@@ -25,9 +24,6 @@ export function published(
   fixture = "published-lines",
 ): PublishedCheck[] {
   const file = path.resolve(import.meta.dirname, "../fixtures/line", `${fixture}.json`);
-/** The checks of a fixture whose id or topic passes; `about` without "published-" and ".json". */
-export function published(choose: (id: string, topic: string) => boolean, about = "lines"): PublishedCheck[] {
-  const file = path.resolve(import.meta.dirname, `../fixtures/line/published-${about}.json`);
   const { checks } = JSON.parse(readFileSync(file, "utf8")) as { checks: PublishedCheck[] };
   return checks.filter(({ id, topic }) => choose(id, topic));
 }

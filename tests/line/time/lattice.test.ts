@@ -27,14 +27,14 @@ const sumAt = (fronts: { node: string; amplitudeV: number; timeS: number }[], no
 
 describe("one line", () => {
   test("10 Ω into an open 50 Ω line peaks at 5/3 and then stands at 5/9", () => {
-    const [check] = published((id) => id === "D105-open-line-ringing", "steps");
+    const [check] = published((id) => id === "D105-open-line-ringing", "published-steps");
     const { fronts } = lattice(run([cable(50, 10)], { kind: "open" }, ohm(10)), step, 320e-9);
     expect(sumAt(fronts, "load", 60e-9)).toBeCloseTo(number(check!.expected, "first_peak_V"), 6);
     expect(sumAt(fronts, "load", 160e-9)).toBeCloseTo(number(check!.expected, "second_level_V"), 6);
   });
 
   test("a printed lattice of a pulse on 75 Ω between 25 and 100 Ω has our currents", () => {
-    const [check] = published((id) => id === "D102-sadiku-11.9", "steps");
+    const [check] = published((id) => id === "D102-sadiku-11.9", "published-steps");
     const { inputs, expected, tolerance } = check!;
     const line: Element = {
       kind: "cable",

@@ -13,7 +13,7 @@ import { closeTo } from "@/tests/support/tolerance";
 
 const ohm = (reOhm: number): Termination => ({ kind: "constant", reOhm, imOhm: 0 });
 const cable = (model: LineModel, lengthM: number): Element => ({ kind: "cable", line: { model }, lengthM });
-const check = (id: string): PublishedCheck => published((each) => each === id, "steps")[0]!;
+const check = (id: string): PublishedCheck => published((each) => each === id, "published-steps")[0]!;
 
 test("a step into 25 Ω at the end of a matched 50 Ω line comes to a third after 47.6 ns", () => {
   // R. Blake, Electronic Communication Systems, example 14.4: 10 m, velocity factor 0.7, c taken as 3·10⁸ m/s
