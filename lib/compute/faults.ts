@@ -30,6 +30,11 @@ function terminations({ elements, load }: Circuit): { path: string; termination:
   return [...inside, { path: "load", termination: load }];
 }
 
+/** Where a measured end stands. */
+export function sampledPaths(circuit: Circuit): string[] {
+  return terminations(circuit).flatMap(({ path, termination }) => (termination.kind === "sampled" ? [path] : []));
+}
+
 function beyondSamples(circuit: Circuit, lowest: number, highest: number): CircuitFault[] {
   return terminations(circuit).flatMap(({ path, termination }) => {
     if (termination.kind !== "sampled") return [];

@@ -1,14 +1,19 @@
 /** Every operation of the API, in the order of the description. */
 import * as account from "@/lib/auth/operations";
 import * as cables from "@/lib/cables/operations";
-import * as compute from "@/lib/compute/operations";
+import * as dc from "@/lib/compute/dc/operations";
 import * as extract from "@/lib/compute/extract/operations";
 import * as fit from "@/lib/compute/fit/operations";
 import * as geometry from "@/lib/compute/geometry/operations";
-import * as service from "@/lib/http/operations";
+import * as compute from "@/lib/compute/operations";
 import * as readings from "@/lib/compute/readings/operations";
+import * as solve from "@/lib/compute/solve/operations";
+import * as step from "@/lib/compute/step/operations";
+import * as swap from "@/lib/compute/swap/operations";
+import * as tolerance from "@/lib/compute/tolerance/operations";
 import * as touchstone from "@/lib/compute/touchstone/operations";
 import type { Operation } from "@/lib/http/operation";
+import * as service from "@/lib/http/operations";
 import * as limitLines from "@/lib/limit-lines/operations";
 import * as mail from "@/lib/mail/operations";
 import * as notices from "@/lib/notices/operations";
@@ -27,5 +32,10 @@ export const operations: Operation[] = [
   readings,
   extract,
   touchstone,
+  step,
+  tolerance,
+  dc,
+  swap,
+  solve,
   service,
 ].flatMap((noun) => Object.values<Operation>(noun));

@@ -53,6 +53,11 @@ const expected: Record<string, Access> = {
   computeReadings: roles,
   computeExtract: roles,
   computeTouchstone: roles,
+  computeStep: roles,
+  computeTolerance: roles,
+  computeDc: roles,
+  computeSwap: roles,
+  computeSolve: roles,
   readHealth: "anyone",
   readDescription: "anyone",
 };

@@ -32,6 +32,7 @@ interface Given {
   name?: string;
   aliases?: string[];
   state?: CableState;
+  condition?: string;
   family?: Family;
   team?: { id: string; name: string };
   model?: LineModel;
@@ -72,6 +73,7 @@ export function addCable(given: Given): void {
   db.insert(cableRevisions)
     .values({
       ...{ cableId: id, revision: 1, state, reason: "First entry.", authorId, createdAt, name, family, model },
+      condition: given.condition ?? null,
       ...{ construction, build, figures: [], limits, approvedAt: isApproved ? createdAt : null },
       ...derivedFigures(model, construction, limits),
       words: cableWords({ designation, aliases, name, family, build }),

@@ -1,4 +1,8 @@
 /** What can be computed apart from the thread that serves: pure functions of plain data, by name. */
+import { dcAnswer } from "@/lib/compute/dc/answer";
+import { solveAnswer } from "@/lib/compute/solve/answer";
+import { swapAnswer } from "@/lib/compute/swap/answer";
+import { toleranceAnswer } from "@/lib/compute/tolerance/answer";
 import { extractAnswer } from "@/lib/compute/extract/answer";
 import { fitAnswer } from "@/lib/compute/fit/answer";
 import { geometryAnswer } from "@/lib/compute/geometry/answer";
@@ -6,6 +10,7 @@ import { readingsAnswer } from "@/lib/compute/readings/answer";
 import { touchstoneAnswer } from "@/lib/compute/touchstone/answer";
 import { lineAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
 import { matchesAnswer } from "@/lib/compute/matches/answer";
+import { stepAnswer } from "@/lib/compute/step/answer";
 
 export const jobs = {
   line: lineAnswer,
@@ -17,6 +22,11 @@ export const jobs = {
   readings: readingsAnswer,
   extract: extractAnswer,
   touchstone: touchstoneAnswer,
+  step: stepAnswer,
+  tolerance: toleranceAnswer,
+  dc: dcAnswer,
+  swap: swapAnswer,
+  solve: solveAnswer,
 };
 
 export type Jobs = typeof jobs;

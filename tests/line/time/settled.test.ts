@@ -1,0 +1,57 @@
+import { describe, expect, test } from "vitest";
+import { modelFromNominal } from "@/lib/line/cable";
+import type { Circuit, Element, Termination } from "@/lib/line/element";
+import { settledLevels } from "@/lib/line/time/settled";
+import { cable, ohm, rope, run } from "@/tests/support/lossy-run";
+
+const level = (circuit: Circuit) => settledLevels(circuit, [circuit.elements.length])[0]!;
+const network = (fields: object): Termination => ({ kind: "network", topology: "parallel", ...fields });
+const capacitor: Element = { kind: "part", connection: "series", cF: 1e-9 };
+
+test("a loaded run settles at its resistive divider, cable resistance counted", () => {
+  expect(level(run([cable(100)], ohm(45)))).toBeCloseTo(45 / (45 + 50 + 0.05 * 100), 9);
+  expect(settledLevels(run([cable(100)], ohm(45)), [0])[0]!).toBeCloseTo(50 / 100, 9);
+});
+
+test("warm copper settles lower, by its resistance", () => {
+  const [cold, hot] = [20, 60].map((t) => settledLevels(run([cable(100)], ohm(45)), [1], t)[0]!);
+  expect(cold).toBeCloseTo(45 / 100, 9);
+  expect(hot).toBeCloseTo(45 / (95 + 5 * (1 + 0.00393 * 40)), 9);
+});
+
+describe("ends that are nothing at dc", () => {
+  const lossless = modelFromNominal({ z0: 50, velocityFactor: 2 / 3 });
+  const open = { kind: "open" } as const;
+
+  test("an open end behind no resistance, lossless or not, settles at the e.m.f.", () => {
+    expect(level(run([cable(10)], open, ohm(0)))).toBeCloseTo(1, 9);
+    expect(
+      level(run([{ kind: "cable", line: { model: lossless }, lengthM: 10 }], open, { kind: "short" })),
+    ).toBeCloseTo(1, 9);
+  });
+
+  test("a shorted end settles at nothing, a coil too, a capacitor is an open end", () => {
+    expect(level(run([cable(10)], { kind: "short" }))).toBeCloseTo(0, 12);
+    expect(level(run([cable(10)], network({ lH: 1e-6 })))).toBeCloseTo(0, 9);
+    expect(level(run([cable(10)], network({ cF: 1e-6 })))).toBeCloseTo(1, 9);
+  });
+
+  test("a capacitor in the line leaves nothing to a resistor and its share to an open line", () => {
+    expect(level(run([capacitor, cable(10)], ohm(50)))).toBeCloseTo(0, 9);
+    const line = 10 * rope.cFPerM;
+    // the loss angle makes capacitance grow without bound toward dc: a line without one has the share of its nominal
+    const plain = { ...rope, lossTangent: 0 };
+    const elements: Element[] = [capacitor, { kind: "cable", line: { model: plain }, lengthM: 10 }];
+    expect(level(run(elements, open))).toBeCloseTo(1e-9 / (1e-9 + line), 6);
+  });
+
+  test("a coil across a source without resistance takes nothing from it", () => {
+    const coil: Element = { kind: "part", connection: "shunt", lH: 1e-6 };
+    expect(level(run([coil], ohm(50), ohm(0)))).toBeCloseTo(1, 6);
+    expect(level(run([coil], ohm(50)))).toBeCloseTo(0, 9);
+  });
+
+  test("behind a dead short there is nothing", () => {
+    expect(level(run([{ kind: "shunt", termination: { kind: "short" } }, cable(1)]))).toBe(0);
+  });
+});
