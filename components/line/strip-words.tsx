@@ -39,13 +39,18 @@ function EndWords({ end, x, anchor }: EndWordsProps) {
 export function WordsAbove({ source, load, ...props }: WordsProps & { source: StripEnd; load: StripEnd }) {
   const { pieces, scale, selected, mmToPx, width } = props;
   const sourceX = Math.max(0, endRoomPx.before - 46);
+  // Where the strip leaves room beside it, the ends' words stand next to their symbols.
+  const isInset = scale.startX - endWidth(source) - 24 > sourceX && width - scale.endX - endWidth(load) > 40;
   const sectionPx = (piece: StripPiece) => (piece.cable ? 2 * sectionRadius(piece.cable, mmToPx) : 0);
   const from = Math.max(scale.startX, sourceX + endWidth(source) + 8);
   const to = Math.min(scale.endX + 20, width - endWidth(load) - 14);
   return (
     <g>
-      <EndWords end={source} x={sourceX} anchor="start" />
-      <EndWords end={load} x={width} anchor="end" />
+      <EndWords
+        end={source}
+        {...(isInset ? { x: scale.startX - 14, anchor: "end" } : { x: sourceX, anchor: "start" })}
+      />
+      <EndWords end={load} {...(isInset ? { x: scale.endX + 34, anchor: "start" } : { x: width, anchor: "end" })} />
       {labelsAbove(pieces, scale, selected, from, to, sectionPx).map(({ index, x }) => {
         const piece = pieces[index];
         if (!piece?.cable) return null;

@@ -24,6 +24,7 @@ export function RunFrame({ head, children }: Props) {
   const views = [
     { href: base as Route, label: "Line" },
     { href: `${base}/match` as Route, label: "Match" },
+    { href: `${base}/time` as Route, label: "Time" },
   ];
   useRunKeys(base, undo, redo);
   return (
@@ -105,6 +106,7 @@ function useRunKeys(base: string, undo: (() => void) | null, redo: (() => void) 
   useKeys([
     { key: "1", does: "line", run: () => router.push(base as Route) },
     { key: "2", does: "match", run: () => router.push(`${base}/match` as Route) },
+    { key: "3", does: "time", run: () => router.push(`${base}/time` as Route) },
     { key: "Ctrl z", does: "undo; with Shift, redo" },
   ]);
   useEffect(() => {

@@ -13,6 +13,8 @@ export interface LatticeLine {
   impedance: number;
   /** one way, second */
   delayS: number;
+  /** of the run's elements, which one it is part of */
+  element: number;
 }
 
 export interface LatticeGraph {
@@ -40,6 +42,8 @@ class Builder {
   lines: LatticeLine[] = [];
   ends: number[] = [];
   junctions: Junction[] = [];
+  /** the element that is being added */
+  element = 0;
   private place = "source";
   private left: Closing;
   private links: Link[] = [];
@@ -69,7 +73,8 @@ class Builder {
   /** @returns the end at the source side */
   line(model: LineModel, length: number, paralleled = 1): LineEnd {
     const { z0, delay } = nominalFigures(model);
-    return 2 * (this.lines.push({ impedance: z0 / paralleled, delayS: delay * length }) - 1);
+    const line = { impedance: z0 / paralleled, delayS: delay * length, element: this.element };
+    return 2 * (this.lines.push(line) - 1);
   }
 
   through(lines: LineEnd[], place: string): void {
@@ -118,6 +123,7 @@ export function latticeGraph(circuit: Circuit): LatticeGraph {
   elements.forEach((element, k) => {
     if (element.kind === "stub" && element.connection === "shunt")
       builder.add({ kind: "node", name: `taps.${taps++}` });
+    builder.element = k;
     addElement(builder, element, k, circuit);
   });
   builder.add({ kind: "node", name: "load" });

@@ -19,8 +19,21 @@ const mostFollowed = 30_000;
 /** What rounding leaves of a reflection that is none, per wave. */
 const rounding = 1e-12;
 
+/** A wave on a line, from where it begins to where it arrives; waves that share both are one. */
+export interface Ray {
+  /** which line of the graph */
+  line: number;
+  /** whether it goes from the line's source side to the other */
+  isForward: boolean;
+  startS: number;
+  endS: number;
+  /** height of the front, volt */
+  volt: number;
+}
+
 export class LatticeSearch {
   found: Found[] = [];
+  rays: Ray[] = [];
   /** waves that were not followed: too weak, or too many */
   left = 0;
   private waiting = new WaveQueue();
@@ -53,6 +66,7 @@ export class LatticeSearch {
       while (waitingEdges[0] !== undefined && waitingEdges[0].atS <= untilS)
         this.pass(this.graph.source, "source", timeS, waitingEdges.shift()!.jumpV, undefined);
       for (const wave of this.arriving(untilS)) {
+        this.rays.push(this.rayOf(wave));
         this.pass(this.graph.ends[wave.end]!, wave.end, timeS, wave.volt, wave.after);
         followed++;
       }
@@ -81,6 +95,12 @@ export class LatticeSearch {
       }
     }
     return [...merged.values()];
+  }
+
+  private rayOf({ end, atS, volt }: Wave): Ray {
+    const line = end >> 1;
+    const startS = atS - this.graph.lines[line]!.delayS;
+    return { line, isForward: end % 2 === 1, startS, endS: atS, volt };
   }
 
   private pass(junction: number, from: LineEnd | "source", timeS: number, volt: number, after?: Passage): void {
