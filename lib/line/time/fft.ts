@@ -6,6 +6,9 @@ interface Tables {
   /** cos and sin of 2πk/size, k below size */
   cos: Float64Array;
   sin: Float64Array;
+  /** filled and used up within one call */
+  re: Float64Array;
+  im: Float64Array;
 }
 
 const known = new Map<number, Tables>();
@@ -17,7 +20,7 @@ function tablesOf(size: number): Tables {
   for (let k = 1; k < size; k++) reversed[k] = (reversed[k >> 1]! >> 1) | (k & 1 ? size >> 1 : 0);
   const cos = Float64Array.from({ length: size }, (_, k) => Math.cos((2 * Math.PI * k) / size));
   const sin = Float64Array.from({ length: size }, (_, k) => Math.sin((2 * Math.PI * k) / size));
-  const tables = { reversed, cos, sin };
+  const tables = { reversed, cos, sin, re: new Float64Array(size / 2), im: new Float64Array(size / 2) };
   known.set(size, tables);
   return tables;
 }
@@ -79,8 +82,13 @@ function quadruples(re: Float64Array, im: Float64Array, span: number, { cos, sin
   const size = re.length;
   const stride = size / (4 * span);
   for (let j = 0; j < span; j++) {
-    const [k1, k2, k3] = [2 * j * stride, j * stride, 3 * j * stride];
-    const [c1, s1, c2, s2, c3, s3] = [cos[k1]!, sin[k1]!, cos[k2]!, sin[k2]!, cos[k3]!, sin[k3]!];
+    const k = j * stride;
+    const c1 = cos[2 * k]!;
+    const s1 = sin[2 * k]!;
+    const c2 = cos[k]!;
+    const s2 = sin[k]!;
+    const c3 = cos[3 * k]!;
+    const s3 = sin[3 * k]!;
     for (let at = j; at < size; at += 4 * span) {
       const atB = at + span;
       const atC = atB + span;
@@ -121,9 +129,7 @@ export function realSignal(re: Float64Array, im: Float64Array, size: number, len
   const half = size / 2;
   requireSize("realSignal", half);
   if (re.length > half + 1) throw new RangeError(`realSignal: at most ${half + 1} values, got ${re.length}`);
-  const { cos, sin } = tablesOf(size);
-  const outRe = new Float64Array(half);
-  const outIm = new Float64Array(half);
+  const { cos, sin, re: outRe, im: outIm } = tablesOf(size);
   // where the spectrum has ended there is 0
   const xRe = re.length > half ? re : padded(re, half + 1);
   const xIm = im.length > half ? im : padded(im, half + 1);

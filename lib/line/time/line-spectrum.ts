@@ -4,6 +4,7 @@
  */
 import type { LineModel } from "@/lib/line/element";
 import { addConductor } from "@/lib/line/time/conductor-spectrum";
+import { decayOf } from "@/lib/line/time/decay";
 import type { LaplaceGrid } from "@/lib/line/time/laplace-grid";
 import { spectrum, type Spectrum } from "@/lib/line/time/spectrum";
 
@@ -13,6 +14,24 @@ export interface LineSpectrum {
   /** characteristic impedance, ohm, and admittance, siemens */
   zc: Spectrum;
   yc: Spectrum;
+  /** e^{−2γ·length} of the lengths met last */
+  roundTrips: Map<number, Spectrum>;
+}
+
+/** A bus has many pieces of few lengths. */
+const mostLengths = 4;
+
+/** e^{−2γ·length}. */
+export function roundTripOf(
+  { gamma, roundTrips }: Pick<LineSpectrum, "gamma" | "roundTrips">,
+  length: number,
+): Spectrum {
+  const known = roundTrips.get(length);
+  if (known) return known;
+  if (roundTrips.size >= mostLengths) roundTrips.clear();
+  const found = decayOf(gamma, 2 * length);
+  roundTrips.set(length, found);
+  return found;
 }
 
 /** Frequency at which a model's capacitance is stated, rad/s. */
@@ -59,7 +78,7 @@ function secondary(z: Spectrum, y: Spectrum): LineSpectrum {
     y.re[k] = (yRe * gRe + yIm * gIm) * perSize;
     y.im[k] = (yIm * gRe - yRe * gIm) * perSize;
   }
-  return { gamma, zc: z, yc: y };
+  return { gamma, zc: z, yc: y, roundTrips: new Map() };
 }
 
 /** G0 + s·(C/cos δ)·(s/ωr)^(−2δ/π). */

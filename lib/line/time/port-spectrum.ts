@@ -1,6 +1,6 @@
 /** Voltage and current at one plane over a whole grid of s, and the steps that carry them toward the source. */
 import type { LaplaceGrid } from "@/lib/line/time/laplace-grid";
-import type { LineSpectrum } from "@/lib/line/time/line-spectrum";
+import { roundTripOf, type LineSpectrum } from "@/lib/line/time/line-spectrum";
 import { spectrum, type Spectrum } from "@/lib/line/time/spectrum";
 import type { RationalPort } from "@/lib/line/time/rational-port";
 import type { TwoPortAt } from "@/lib/line/two-port";
@@ -48,15 +48,13 @@ export function portSpectrum(port: RationalPort, grid: LaplaceGrid): PortSpectru
 export function throughLine(at: PortSpectrum, line: LineSpectrum, length: number, paralleled: number): void {
   const { v, i, theta } = at;
   const { gamma, zc, yc } = line;
+  const e = roundTripOf(line, length);
   const share = 1 / paralleled;
   for (let k = 0; k < v.re.length; k++) {
-    const x = gamma.re[k]! * length;
-    const phase = gamma.im[k]! * length;
-    theta.re[k]! += x;
-    theta.im[k]! += phase;
-    const decay = Math.exp(-2 * x);
-    const eRe = decay * Math.cos(2 * phase);
-    const eIm = -decay * Math.sin(2 * phase);
+    theta.re[k]! += gamma.re[k]! * length;
+    theta.im[k]! += gamma.im[k]! * length;
+    const eRe = e.re[k]!;
+    const eIm = e.im[k]!;
     const zRe = zc.re[k]! * share;
     const zIm = zc.im[k]! * share;
     const iRe = i.re[k]!;

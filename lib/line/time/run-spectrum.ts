@@ -1,12 +1,13 @@
 /** Voltages of a run over a whole grid of s: the walk of `walk.ts` from load to source, one element at all s at a time. */
 import { prepareElement } from "@/lib/line/element-two-port";
 import type { CableElement, Circuit, JointElement, LineModel, StubElement } from "@/lib/line/element";
-import { DB_PER_NEPER } from "@/lib/line/constants";
 import { jointReference, jointTwoPort } from "@/lib/line/joint";
 import { atTemperature } from "@/lib/line/temperature";
+import { decayOf } from "@/lib/line/time/decay";
+import { jointLine } from "@/lib/line/time/joint-line";
 import type { LaplaceGrid } from "@/lib/line/time/laplace-grid";
 import { lineSpectrum, type LineSpectrum } from "@/lib/line/time/line-spectrum";
-import { spectrum, type Spectrum } from "@/lib/line/time/spectrum";
+import { copyOf, spectrum, type Spectrum } from "@/lib/line/time/spectrum";
 import * as port from "@/lib/line/time/port-spectrum";
 import type { PortSpectrum } from "@/lib/line/time/port-spectrum";
 import { rationalPart, rationalTermination } from "@/lib/line/time/rational-port";
@@ -32,7 +33,8 @@ function lineSpectra(grid: LaplaceGrid): Surroundings["lines"] {
 /** A plane that is looked at, as the walk passed it. */
 interface Passed {
   v: Spectrum;
-  theta: Spectrum;
+  /** none at the source and at the load */
+  theta?: Spectrum;
 }
 
 /** After this many elements values are brought back to about 1, so that no chain of them overflows. */
@@ -59,8 +61,10 @@ export function runSpectrum(
   const asked = new Set(planes);
   const passed = new Map<number, Passed>();
   const look = (plane: number) => {
-    // the walk ends at the source, whose values nothing writes over any more
-    if (asked.has(plane)) passed.set(plane, plane === 0 ? at : { v: copy(at.v), theta: copy(at.theta) });
+    if (!asked.has(plane)) return;
+    // the walk ends at the source, whose values nothing writes over any more; at the load nothing lies behind
+    const v = plane === 0 ? at.v : copyOf(at.v);
+    passed.set(plane, plane === 0 || plane === elements.length ? { v } : { v, theta: copyOf(at.theta) });
   };
   look(elements.length);
   for (let k = elements.length - 1; k >= 0; k--) {
@@ -69,12 +73,11 @@ export function runSpectrum(
     look(k);
   }
   const perDrive = overDrive(at, port.branchSpectrum(sourcePort, grid), options.emf);
-  for (const [plane, { v, theta }] of passed) deliver(v, plane === 0 ? undefined : theta, at.theta, perDrive);
+  for (const [plane, { v, theta }] of passed) {
+    multiply(v, perDrive);
+    if (plane > 0) multiply(v, decayOf(theta === undefined ? at.theta : between(theta, at.theta), 1));
+  }
   return planes.map((plane) => passed.get(plane)?.v ?? spectrum(grid.count));
-}
-
-function copy({ re, im }: Spectrum): Spectrum {
-  return { re: re.slice(), im: im.slice() };
 }
 
 /** From plane k + 1 to plane k; false where nothing gets through. */
@@ -143,24 +146,6 @@ function alongJoint(at: PortSpectrum, joint: JointElement, referenceOhm: number,
   port.throughLine(at, jointLine(lossDb, lossDbAtOneGhz, referenceOhm, grid), 1, 1);
 }
 
-/** θ = (a + b·√(2s/(2π·1 GHz)))/8.6859 over a real impedance, as a metre of line. */
-function jointLine(flatDb: number, rootDb: number, referenceOhm: number, grid: LaplaceGrid): LineSpectrum {
-  const { count, damping, omega } = grid;
-  const theta = spectrum(count);
-  const zc = spectrum(count);
-  const yc = spectrum(count);
-  const perRoot = rootDb / DB_PER_NEPER / Math.sqrt(1e9 * Math.PI);
-  for (let k = 0; k < count; k++) {
-    const w = omega[k]!;
-    const larger = Math.sqrt((Math.sqrt(damping * damping + w * w) + damping) / 2);
-    theta.re[k] = flatDb / DB_PER_NEPER + perRoot * larger;
-    theta.im[k] = (perRoot * w) / (2 * larger);
-  }
-  zc.re.fill(referenceOhm);
-  yc.re.fill(1 / referenceOhm);
-  return { gamma: theta, zc, yc };
-}
-
 /** e.m.f. times source.i / (source.i·v + source.v·i), which every voltage of the walk is multiplied by. */
 function overDrive({ v, i }: PortSpectrum, source: Pick<PortSpectrum, "v" | "i">, emf: Spectrum | undefined): Spectrum {
   const result = spectrum(v.re.length);
@@ -182,19 +167,19 @@ function overDrive({ v, i }: PortSpectrum, source: Pick<PortSpectrum, "v" | "i">
   return result;
 }
 
-/** v ← v·perDrive·e^{−(θ at the source − θ here)}; without `here` nothing lies between. */
-function deliver(v: Spectrum, here: Spectrum | undefined, atSource: Spectrum, perDrive: Spectrum): void {
+/** What lies between the source and here. */
+function between(here: Spectrum, atSource: Spectrum): Spectrum {
+  for (let k = 0; k < here.re.length; k++) {
+    here.re[k] = atSource.re[k]! - here.re[k]!;
+    here.im[k] = atSource.im[k]! - here.im[k]!;
+  }
+  return here;
+}
+
+function multiply(v: Spectrum, by: Spectrum): void {
   for (let k = 0; k < v.re.length; k++) {
-    const re = v.re[k]! * perDrive.re[k]! - v.im[k]! * perDrive.im[k]!;
-    const im = v.re[k]! * perDrive.im[k]! + v.im[k]! * perDrive.re[k]!;
-    v.re[k] = re;
-    v.im[k] = im;
-    if (here === undefined) continue;
-    const decay = Math.exp(here.re[k]! - atSource.re[k]!);
-    const turn = here.im[k]! - atSource.im[k]!;
-    const cos = decay * Math.cos(turn);
-    const sin = decay * Math.sin(turn);
-    v.re[k] = re * cos - im * sin;
-    v.im[k] = re * sin + im * cos;
+    const re = v.re[k]!;
+    v.re[k] = re * by.re[k]! - v.im[k]! * by.im[k]!;
+    v.im[k] = re * by.im[k]! + v.im[k]! * by.re[k]!;
   }
 }
