@@ -221,7 +221,7 @@ test("a sweep that begins many wavelengths up has its turns from the slope", () 
     turns: Math.round((exact[0]! * length) / (2 * Math.PI)),
   });
   expect(warnings.map(({ warning }) => warning)).toContain("aboveCorner");
-});
+}, 30_000);
 
 test("turns are counted right as long as steps are under seven eighths of one", () => {
   const frequencies = linear(1e6, 2e7, 20);
@@ -260,7 +260,7 @@ test("what is odd about a sweep is said", () => {
   const deep = { length: 60, sweep: onePortsOf(lossy, 60, linear(1e5, 1e9, 2000)) };
   expect(names(deep)).toContain("nothingThrough");
   expect(Number.isNaN(extractLine(deep).measured.attenuation.at(-1)!)).toBe(true);
-});
+}, 30_000);
 
 test.each<[string, (request: ExtractRequest) => void, RegExp]>([
   ["no length", (request) => (request.length = 0), /length must be positive/],

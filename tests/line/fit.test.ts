@@ -129,7 +129,7 @@ test("the refit of a model's own table is the model, whatever the form and the t
       },
     ),
   );
-});
+}, 30_000);
 
 test("far above the corner the closed mapping is the refit, and below it the refit is never worse", () => {
   const known = { z0: 50, velocityFactor: 0.85, r0: 0.0086 };

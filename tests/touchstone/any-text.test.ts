@@ -38,7 +38,7 @@ test("Any text is read, or refused with a line that it has and a sentence; nothi
     fc.property(name, fc.array(pieces, { maxLength: 60 }), (fileName, list) => readOrRefused(fileName, list.join(" "))),
     { numRuns: 3000 },
   );
-});
+}, 30_000);
 
 const sound = [
   "! a\n# MHz S RI R 50\n1 0.1 0 0.9 0 0.9 0 0.1 0\n2 0.1 0 0.9 0 0.9 0 0.1 0\n1 0.8 0.4 31 0.2\n",
@@ -60,7 +60,7 @@ test("A sound file with a piece cut out, doubled or changed is read or refused l
     ),
     { numRuns: 3000 },
   );
-});
+}, 30_000);
 
 test("Figures are read to the last bit, and only figures", () => {
   const read: Figure = { value: 0, fault: undefined };
@@ -84,7 +84,7 @@ test("Figures are read to the last bit, and only figures", () => {
   for (const text of ["inf", "-Infinity", "NaN", "1e400", `${"9".repeat(400)}`])
     expect(reads(text), text).toBe("notFinite");
   expect(reads("1e-999")).toBe(0);
-});
+}, 30_000);
 
 describe("A million lines", () => {
   const lines = 1_000_000;

@@ -57,7 +57,7 @@ describe.each<NetworkParameter>(["S", "Y", "Z"])("What is written of %s paramete
       }),
       { numRuns: 150 },
     );
-  });
+  }, 30_000);
 });
 
 const file: Written = {
