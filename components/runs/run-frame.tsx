@@ -25,6 +25,7 @@ export function RunFrame({ head, children }: Props) {
     { href: base as Route, label: "Line" },
     { href: `${base}/match` as Route, label: "Match" },
     { href: `${base}/time` as Route, label: "Time" },
+    { href: `${base}/tolerance` as Route, label: "Tolerance" },
   ];
   useRunKeys(base, undo, redo);
   return (
@@ -107,6 +108,7 @@ function useRunKeys(base: string, undo: (() => void) | null, redo: (() => void) 
     { key: "1", does: "line", run: () => router.push(base as Route) },
     { key: "2", does: "match", run: () => router.push(`${base}/match` as Route) },
     { key: "3", does: "time", run: () => router.push(`${base}/time` as Route) },
+    { key: "4", does: "tolerance", run: () => router.push(`${base}/tolerance` as Route) },
     { key: "Ctrl z", does: "undo; with Shift, redo" },
   ]);
   useEffect(() => {
