@@ -1,6 +1,7 @@
 /** Every operation of the API, in the order of the description. */
 import * as account from "@/lib/auth/operations";
 import * as cables from "@/lib/cables/operations";
+import * as files from "@/lib/cables/exchange/operations";
 import * as compute from "@/lib/compute/operations";
 import * as extract from "@/lib/compute/extract/operations";
 import * as fit from "@/lib/compute/fit/operations";
@@ -17,6 +18,7 @@ import * as runs from "@/lib/runs/operations";
 export const operations: Operation[] = [
   account,
   cables,
+  files,
   runs,
   limitLines,
   notices,

@@ -7,6 +7,7 @@ import type { Run } from "@/lib/runs/schema";
 import { addLimitLine } from "@/lib/limit-lines/service";
 import { createRun } from "@/lib/runs/service";
 import { addCable, newRun } from "@/tests/support/cables";
+import { addImport } from "@/tests/support/imports";
 import { withDatabase } from "@/tests/support/database";
 import { newLimitLine } from "@/tests/support/limit-lines";
 import { actor, addPeople, other, roles } from "@/tests/support/people";
@@ -16,6 +17,7 @@ import { routeFiles } from "@/tests/support/routes";
 withDatabase(async () => {
   await addPeople();
   addCable({ id: "feeder" });
+  addImport("an-import");
 });
 
 type Access = "anyone" | Role[];
@@ -30,6 +32,11 @@ const expected: Record<string, Access> = {
   readCable: ["designer", "librarian", "admin", "auditor"], // an installer only those in their runs
   createCable: ["designer", "librarian", "admin"],
   removeCable: ["designer", "librarian", "admin"],
+  exportCables: ["designer", "librarian", "admin", "auditor"],
+  importCables: ["librarian", "admin"],
+  listImports: ["librarian", "admin", "auditor"],
+  readImport: ["librarian", "admin", "auditor"],
+  readCatalogueSchema: "anyone",
   listRuns: roles,
   createRun: ["designer", "librarian", "admin"],
   readRun: ["designer", "librarian", "admin", "auditor"], // an installer only issued ones assigned to them
@@ -81,10 +88,10 @@ function ask(id: string, as: ReturnType<typeof actor> | undefined, run: Run): Pr
   const limitLineId = isOfLine ? addLimitLine(actor("admin"), newLimitLine(`Line of ${run.id}`)).id : "";
   return send(handler, operation.method, {
     as,
-    params: { cableId: "feeder", runId: run.id, limitLineId },
+    params: { cableId: "feeder", runId: run.id, limitLineId, importId: "an-import" },
     headers: operation.needsMatch ? { "if-match": "*" } : {},
     // An impossible body: whoever may is told so (422), whoever may not never gets that far.
-    body: operation.body ? { impossible: true } : undefined,
+    body: (operation.body ?? operation.accepts?.["application/json"]) ? { impossible: true } : undefined,
   });
 }
 

@@ -2,7 +2,7 @@
 import { ownColumn } from "@/lib/cables/exchange/csv-own-row";
 import type { OwnColumn } from "@/lib/cables/exchange/csv-columns";
 import { meaningOf, plainHead, type Meaning } from "@/lib/cables/exchange/head-names";
-import { siOf } from "@/lib/cables/exchange/unit";
+import { isUnitOf } from "@/lib/cables/exchange/unit";
 import type { QuantityKind } from "@/lib/format/unit-spelling";
 
 export type ColumnRead = { at: number; head: string } & (
@@ -49,7 +49,7 @@ function unbracketed(name: string): { known: ReturnType<typeof meaningOf>; unit:
 
 /** A unit of the kind; of a velocity factor, per cent. */
 function isUnit(kind: QuantityKind | undefined, unit: string): boolean {
-  return kind === undefined ? /^(%|per ?cent)$/i.test(unit) : siOf(kind, unit) !== undefined;
+  return kind === undefined ? /^(%|per ?cent)$/i.test(unit) : isUnitOf(kind, unit);
 }
 
 function foreign(head: string): Omit<Extract<ColumnRead, { is: "foreign" }>, "at" | "head"> | undefined {
@@ -63,9 +63,15 @@ function foreign(head: string): Omit<Extract<ColumnRead, { is: "foreign" }>, "at
   return { is: "foreign", meaning: known.meaning, kind: known.kind, unit: isTold ? told : known.usual };
 }
 
-export function readHead(heads: readonly string[]): ColumnRead[] {
+/** Whether a table is one that was taken out of here: its rows hold the model itself. */
+export function isOwnTable(heads: readonly string[]): boolean {
+  return heads.some((head) => ownColumn(head)?.path === "model.lInfHPerM");
+}
+
+/** @param isOwn - whether columns of ours are meant where a head is called like one */
+export function readHead(heads: readonly string[], isOwn: boolean): ColumnRead[] {
   return heads.map((head, at): ColumnRead => {
-    const column = ownColumn(head);
+    const column = isOwn ? ownColumn(head) : undefined;
     if (column) return { at, head, is: "own", column };
     const read = foreign(head.trim());
     return read ? { at, head, ...read } : { at, head, is: "unknown" };

@@ -1,5 +1,5 @@
-/** One cell of a foreign table -> a number in SI, with what was understood. Pure; loads mathjs. */
-import { inSi, siOf } from "@/lib/cables/exchange/unit";
+/** One cell of a foreign table -> a number in SI, with what was understood. Pure. */
+import { inSi, isUnitOf, siOf } from "@/lib/cables/exchange/unit";
 import { readVelocityFactor } from "@/lib/format/read-velocity-factor";
 import type { QuantityKind } from "@/lib/format/unit-spelling";
 
@@ -60,7 +60,7 @@ export function readCell(
     return refuse(`is ${quotedCell(figure.trim())} a thousand or a decimal? Nothing in the file tells.`);
   if (number === undefined) return refuse(`${quotedCell(cell)} is not a number.`);
   const own = behind.trim();
-  if (own !== "" && siOf(kind, own) === undefined) return refuse(`${quotedCell(own)} is not a unit for it.`);
+  if (own !== "" && !isUnitOf(kind, own)) return refuse(`${quotedCell(own)} is not a unit for it.`);
   const used = own === "" ? (kind === "number" ? "" : unit) : own;
   if (used === undefined) return refuse(`neither the head nor ${quotedCell(cell)} says in which unit.`);
   const valueSi = inSi(kind, number, used);

@@ -5,7 +5,7 @@
 import { catalogueFileSchema } from "@/lib/cables/exchange/catalogue";
 import { judged, type Judged } from "@/lib/cables/exchange/judge-entry";
 import { decodeTable } from "@/lib/cables/exchange/csv-decode";
-import { readHead, type ColumnRead } from "@/lib/cables/exchange/csv-head";
+import { isOwnTable, readHead, type ColumnRead } from "@/lib/cables/exchange/csv-head";
 import { decimalSignOf, type DecimalSign } from "@/lib/cables/exchange/csv-number";
 import { ownRow, type FoundColumn } from "@/lib/cables/exchange/csv-own-row";
 import { parseTable, type Table } from "@/lib/cables/exchange/csv-parse";
@@ -88,23 +88,30 @@ interface ReadRow {
   notes: string[];
 }
 
-/** How a row of this table becomes an entry: as one of ours where our model stands in it, else as figures stated. */
-function rowReader(table: Table, columns: readonly ColumnRead[], decimal: DecimalSign, asked: FileAsked) {
-  const found = columns.flatMap((column): FoundColumn[] => (column.is === "own" ? [column] : []));
+/**
+ * How a row of this table becomes an entry: as one of ours where our model stands in it, else as figures stated. A row
+ * that somebody has added to a table of ours is one of those.
+ */
+function rowReader({ head, rows }: Table, asked: FileAsked) {
+  const own = isOwnTable(head) ? readHead(head, true) : [];
+  const found = own.flatMap((column): FoundColumn[] => (column.is === "own" ? [column] : []));
   const model = found.find(({ column }) => column.path === "model.lInfHPerM");
-  return ({ row, cells }: Table["rows"][number]): ReadRow => {
+  const stated = readHead(head, false);
+  const decimal = decimalSignOf(cellsToJudge(rows, stated));
+  const read = ({ row, cells }: Table["rows"][number]): ReadRow => {
     if (model && cells[model.at]) return { ...ownRow(cells, found), notes: [] };
-    const stated = statedRow(cells, columns, decimal);
-    const made = statedEntry(stated, asked.family, `${asked.fileName}, row ${row}`);
-    return {
-      entry: made.entry ?? { designation: stated.texts.designation },
-      faults: [...stated.faults, ...made.faults],
-      notes: [...stated.notes, ...made.notes],
-    };
+    const figures = statedRow(cells, stated, decimal);
+    const { faults, notes, texts } = figures;
+    // What cannot be read must be mended first: without it the rest would be found wanting for no reason of its own.
+    if (faults.length > 0) return { entry: { designation: texts.designation }, faults, notes };
+    const made = statedEntry(figures, asked.family, `${asked.fileName}, row ${row}`);
+    const entry = made.entry ?? { designation: texts.designation };
+    return { entry, faults: made.faults, notes: [...notes, ...made.notes] };
   };
+  return { read, decimal, columns: model ? own : stated };
 }
 
-function* cellsToJudge({ rows }: Table, columns: readonly ColumnRead[]): Generator<string> {
+function* cellsToJudge(rows: Table["rows"], columns: readonly ColumnRead[]): Generator<string> {
   const numeric = columns.filter((column) => column.is === "foreign" && column.kind !== undefined);
   for (const { cells } of rows) for (const { at } of numeric) yield cells[at] ?? "";
 }
@@ -112,17 +119,15 @@ function* cellsToJudge({ rows }: Table, columns: readonly ColumnRead[]): Generat
 function* csvRows(bytes: Uint8Array, asked: FileAsked): Generator<FilePart> {
   const { text, encoding } = decodeTable(bytes, asked.charset);
   const table = parseTable(text);
-  const columns = readHead(table.head);
+  const { read, decimal, columns } = rowReader(table, asked);
   if (columns.every(({ is }) => is === "unknown"))
     throw new RangeError("csvRows: No column of the first row is one that is understood; it must name them.");
-  const decimal = decimalSignOf(cellsToJudge(table, columns));
   const notes = [
     ...(encoding === "UTF-8" ? [] : [`The file is in ${encoding}.`]),
     ...(table.delimiter === "," ? [] : [`Its cells are parted by ${delimiterNames[table.delimiter]}.`]),
     ...decimalNotes[decimal],
   ];
   yield { head: { rowCount: table.rows.length, columns: columns.map(columnWords), notes } };
-  const read = rowReader(table, columns, decimal, asked);
   const judge = judged();
   yield* inParts(table.rows, (row) => {
     const { entry, faults, notes: said } = read(row);

@@ -1,4 +1,4 @@
-/** A row of a foreign table -> what it states of a cable, each figure with how it was typed. Pure; loads mathjs. */
+/** A row of a foreign table -> what it states of a cable, each figure with how it was typed. Pure. */
 import type { ColumnRead } from "@/lib/cables/exchange/csv-head";
 import { readCell, readVelocityCell, type CellRead, type DecimalSign } from "@/lib/cables/exchange/csv-number";
 import { readsAsFormula, unguarded } from "@/lib/cables/exchange/formula-guard";
@@ -74,8 +74,6 @@ export function statedRow(cells: readonly string[], columns: readonly ColumnRead
   };
   for (const column of columns) {
     const cell = cells[column.at] ?? "";
-    if (column.is === "own" && cell !== "" && column.column.as === "text" && column.column.path in row.texts)
-      putText(row, { ...column, is: "foreign", meaning: column.column.path as Meaning }, cell);
     if (column.is !== "foreign" || cell.trim() === "") continue;
     if (isText(column.meaning)) row.family = putText(row, column, cell);
     else if (!isBlank(cell)) putNumber(row, column, numberOf(column, cell, decimal));

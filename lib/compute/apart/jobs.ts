@@ -1,4 +1,8 @@
-/** What can be computed apart from the thread that serves: pure functions of plain data, by name. */
+/**
+ * What can be computed apart from the thread that serves: pure functions of plain data, by name. A function that gives its
+ * answer in parts is a generator.
+ */
+import { readRows } from "@/lib/cables/exchange/read-rows";
 import { extractAnswer } from "@/lib/compute/extract/answer";
 import { fitAnswer } from "@/lib/compute/fit/answer";
 import { geometryAnswer } from "@/lib/compute/geometry/answer";
@@ -17,6 +21,7 @@ export const jobs = {
   readings: readingsAnswer,
   extract: extractAnswer,
   touchstone: touchstoneAnswer,
+  importRows: readRows,
 };
 
 export type Jobs = typeof jobs;
@@ -29,7 +34,10 @@ export interface Task {
   given: unknown[];
 }
 
-/** What it sends back: the answer as JSON, the engine's refusal, or a fault of ours. */
+/** What it sends back: parts of the answer, the answer as JSON (of one in parts, null), the engine's refusal, or a fault of ours. */
 export type Outcome = { id: number } & (
-  { json: Uint8Array<ArrayBuffer> } | { refused: string; members?: Record<string, unknown> } | { fault: string }
+  | { part: Uint8Array<ArrayBuffer> }
+  | { json: Uint8Array<ArrayBuffer> }
+  | { refused: string; members?: Record<string, unknown> }
+  | { fault: string }
 );
