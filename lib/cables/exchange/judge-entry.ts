@@ -1,5 +1,5 @@
 /** What becomes of an entry that was read from a file, before the catalogue has been asked. Pure. */
-import { type CatalogueEntry, catalogueEntrySchema, entryInOrder } from "@/lib/cables/exchange/catalogue";
+import { type CatalogueEntry, catalogueEntrySchema } from "@/lib/cables/exchange/catalogue";
 import { cleanedTexts, strangeIn } from "@/lib/cables/exchange/plain-text";
 import { checksOf } from "@/lib/cables/checks";
 import { derivedFigures } from "@/lib/cables/model";
@@ -74,7 +74,7 @@ export function judged(): (read: unknown, faults: readonly string[], notes: read
     const clean = cleanedTexts(read, (what) => notes.push(`A text held ${what}; it was taken out.`));
     const parsed = catalogueEntrySchema.safeParse(clean, { error: plainSentence });
     if (!parsed.success) return no(faultsOf(parsed.error));
-    const entry = entryInOrder(parsed.data);
+    const entry = parsed.data;
     const derived = derivedFigures(entry.model, entry.construction, entry.limits);
     if (!Object.values(derived).every((value) => value === null || Number.isFinite(value)))
       return no(["Its values give no finite impedance, velocity or loss."]);

@@ -46,7 +46,8 @@ export interface RowRead extends Judged {
 
 export type FilePart = { head: FileHead } | { rows: RowRead[] };
 
-export const rowsPerPart = 100;
+/** What is handled in a few milliseconds. */
+export const rowsPerPart = 50;
 
 const namesOfMeaning: Record<string, string> = {
   z0: "impedance",

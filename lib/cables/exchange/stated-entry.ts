@@ -7,8 +7,9 @@ import { modelFromLoss } from "@/lib/line/closed-mapping";
 import { DB_PER_NEPER } from "@/lib/line/constants";
 import type { LineModel } from "@/lib/line/element";
 import { fitLossTable } from "@/lib/line/loss-table";
-import { agreementOf, permittivityOf, type PerLengthQuantity, type Stated } from "@/lib/line/per-length";
+import { figuresFromTwo, permittivityOf, type PerLengthQuantity, type Stated } from "@/lib/line/per-length";
 
+/** In the order in which they are believed, as `lib/line/per-length.ts` has it for these. */
 const perLength: [Meaning, PerLengthQuantity][] = [
   ["z0", "z0"],
   ["velocityFactor", "velocityFactor"],
@@ -18,6 +19,20 @@ const perLength: [Meaning, PerLengthQuantity][] = [
 ];
 
 type Figures = StatedRow["figures"];
+
+/** Impedance and velocity by the first two figures that determine them; whether the rest agrees is for the checks. */
+function lineOf(figures: Figures): { z0: number; velocityFactor: number } | undefined {
+  const stated = perLength.flatMap(([meaning, quantity]): Stated[] => {
+    const value = figures[meaning]?.valueSi;
+    return value !== undefined && value > 0 ? [{ quantity, value }] : [];
+  });
+  const [first, ...rest] = stated;
+  for (const second of rest) {
+    const both = first && figuresFromTwo(first, second);
+    if (both) return both;
+  }
+  return undefined;
+}
 
 /** dc resistance out and back; with a sentence where the row gives only a part of it. */
 function loopOf(figures: Figures, family: Family): { r0?: number; note?: string } {
@@ -60,7 +75,7 @@ function modelOf(known: { z0: number; velocityFactor: number }, row: StatedRow, 
   return { model: modelFromLoss({ ...known, r0: least }, fit.k1, fit.k2), notes };
 }
 
-const quantities: Partial<Record<Meaning, string>> = {
+const quantities: [Meaning, string][] = Object.entries({
   z0: "z0Ohm",
   velocityFactor: "velocityFactor",
   delay: "delaySPerM",
@@ -76,16 +91,16 @@ const quantities: Partial<Record<Meaning, string>> = {
   wire: "wireDiameterM",
   spacing: "spacingM",
   permittivity: "relativePermittivity",
-};
+} satisfies Partial<Record<Meaning, string>>) as [Meaning, string][];
 
 function figuresOf(row: StatedRow, source: string): Figure[] {
   const one = (quantity: string, { valueSi, toleranceSi, asTyped }: StatedFigure): Figure => ({
     ...{ quantity, valueSi, asTyped: asTyped.slice(0, 120), kind: "nominal", source },
     ...(toleranceSi !== undefined && { toleranceSi }),
   });
-  const stated = Object.entries(quantities).flatMap(([meaning, quantity]) => {
-    const figure = row.figures[meaning as Meaning];
-    return figure && quantity ? [one(quantity, figure)] : [];
+  const stated = quantities.flatMap(([meaning, quantity]) => {
+    const figure = row.figures[meaning];
+    return figure ? [one(quantity, figure)] : [];
   });
   const losses = row.losses.map((loss: StatedLoss): Figure => {
     const at = { fromHz: loss.frequencyHz, toHz: loss.frequencyHz };
@@ -152,18 +167,14 @@ export function statedEntry(row: StatedRow, family: Family | undefined, source: 
   const known = row.family ?? family;
   if (!known) faults.push("Say its family: coaxial, twisted pair or twinaxial.");
   if (row.texts.designation.trim() === "") faults.push("It has no designation.");
-  const stated = perLength.flatMap(([meaning, quantity]): Stated[] => {
-    const figure = row.figures[meaning];
-    return figure && figure.valueSi > 0 ? [{ quantity, value: figure.valueSi }] : [];
-  });
-  const agreement = agreementOf(stated);
-  if (!agreement)
+  const line = lineOf(row.figures);
+  if (!line)
     faults.push(
       "Two of impedance, velocity factor (or delay), capacitance and inductance are needed: they make a line.",
     );
   if (row.losses.some(({ valueSi }) => !(valueSi > 0))) faults.push("A loss must be more than 0.");
-  if (faults.length > 0 || !agreement || !known) return { faults, notes: [], entry: undefined };
-  const { z0, velocityFactor } = agreement.figures;
+  if (faults.length > 0 || !line || !known) return { faults, notes: [], entry: undefined };
+  const { z0, velocityFactor } = line;
   const { model, notes } = modelOf({ z0, velocityFactor }, row, known);
   const { designation, aliases, name } = row.texts;
   const entry = {

@@ -67,9 +67,15 @@ function refusalOf({ refused, members }: { refused: string; members?: Record<str
 }
 
 /** Whoever takes a part may refuse it; then the rest is not worked out. */
-function takePart(thread: Thread, { takePart }: Waiting, part: Uint8Array<ArrayBuffer>): void {
+function takePart(thread: Thread, { task, takePart }: Waiting, part: Uint8Array<ArrayBuffer>): void {
   try {
     takePart?.(part);
+    // In a turn of its own, so that whoever else waits comes first.
+    setImmediate(() => {
+      if (!task.taken) return;
+      Atomics.add(task.taken, 0, 1);
+      Atomics.notify(task.taken, 0);
+    });
   } catch (error) {
     drop(thread, error as Error);
   }
@@ -107,7 +113,8 @@ function inTurn(name: JobName, given: unknown[], takePart?: (json: Json) => void
   if (all.waiting.length >= mostWaiting)
     throw new AppError("busy", "Too much is being computed just now; try again in a moment.");
   return new Promise((take, fail) => {
-    all.waiting.push({ task: { id: ++all.count, name, given }, take, fail, takePart });
+    const taken = takePart && new Int32Array(new SharedArrayBuffer(4));
+    all.waiting.push({ task: { id: ++all.count, name, given, taken }, take, fail, takePart });
     next();
   });
 }

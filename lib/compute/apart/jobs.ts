@@ -32,7 +32,12 @@ export interface Task {
   id: number;
   name: JobName;
   given: unknown[];
+  /** of a job that answers in parts: how many have been taken, counted where both threads see it */
+  taken?: Int32Array<SharedArrayBuffer>;
 }
+
+/** How many parts may wait to be taken: more would be handed over in one go, and hold up whoever else is served. */
+export const mostUntaken = 2;
 
 /** What it sends back: parts of the answer, the answer as JSON (of one in parts, null), the engine's refusal, or a fault of ours. */
 export type Outcome = { id: number } & (

@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { catalogueFormat, catalogueVersion, type CatalogueEntry } from "@/lib/cables/exchange/catalogue";
+import { catalogueFormat, catalogueVersion, entryInOrder, type CatalogueEntry } from "@/lib/cables/exchange/catalogue";
 import { byteOrderMark, csvHead, csvRow } from "@/lib/cables/exchange/csv-write";
 import { readRows, type FileAsked, type RowRead } from "@/lib/cables/exchange/read-rows";
 import fc from "@/tests/support/property";
@@ -15,7 +15,8 @@ function rowsOf(text: string, asked: FileAsked): RowRead[] {
 const csvOf = (entries: readonly CatalogueEntry[]) => byteOrderMark + csvHead() + entries.map(csvRow).join("");
 const jsonOf = (entries: readonly CatalogueEntry[]) =>
   JSON.stringify({ format: catalogueFormat, version: catalogueVersion, cables: entries });
-const entriesOf = (rows: readonly RowRead[]) => rows.flatMap(({ prepared }) => (prepared ? [prepared.entry] : []));
+const entriesOf = (rows: readonly RowRead[]) =>
+  rows.flatMap(({ prepared }) => (prepared ? [entryInOrder(prepared.entry)] : []));
 
 const distinct = fc.uniqueArray(arbitraryEntry, {
   selector: ({ designation }) => designation,

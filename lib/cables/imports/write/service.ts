@@ -1,11 +1,13 @@
 /** Writing what an import has read: one transaction. */
-import { and, eq, inArray } from "drizzle-orm";
+import { and, eq, inArray, sql } from "drizzle-orm";
+import type { SQLiteTable } from "drizzle-orm/sqlite-core";
 import { type Database, database } from "@/db/client";
 import { cableEvents } from "@/db/schema/cable-records";
 import { cableRevisions, cables } from "@/db/schema/cables";
 import { cableImportRows, cableImports } from "@/db/schema/imports";
 import type { Actor } from "@/lib/auth/actor";
 import { requirePermission } from "@/lib/auth/permission";
+import type { Prepared } from "@/lib/cables/exchange/judge-entry";
 import type { RowRead } from "@/lib/cables/exchange/read-rows";
 
 export interface Written {
@@ -49,45 +51,80 @@ function stillFree(tx: Transaction, actor: Actor, rows: readonly RowRead[]): Row
   });
 }
 
-function entryRows({ actor, fileName, at }: Writing, { row, outcome, faults, prepared }: RowRead, cableId: string) {
-  if (!prepared) throw new Error("entryRows: a row without an entry");
-  const { entry, derived, words } = prepared;
-  const { designation, aliases, name, family, condition, model, construction, build, figures, limits, inputs } = entry;
-  const state = outcome === "quarantined" ? ("quarantined" as const) : ("draft" as const);
-  const reason = `Import of ${fileName}, row ${row}.`;
-  const event = { cableId, revision: 1, at, personId: actor.personId };
+/** The columns of a table as places to be filled, so that a statement is made once for thousands of rows. */
+function places<Table extends SQLiteTable>(table: Table, names: readonly (keyof Table["$inferInsert"] & string)[]) {
+  return Object.fromEntries(names.map((name) => [name, sql.placeholder(name)])) as Table["$inferInsert"];
+}
+
+function statements(tx: Transaction) {
+  const cable = places(cables, ["id", "teamId", "designation", "aliases", "createdAt"]);
+  const revision = places(cableRevisions, [
+    ...([
+      "cableId",
+      "state",
+      "condition",
+      "reason",
+      "authorId",
+      "createdAt",
+      "inputs",
+      "name",
+      "family",
+      "model",
+    ] as const),
+    ...(["construction", "build", "figures", "limits", "z0Ohm", "velocityFactor", "capacitanceFPerM"] as const),
+    ...(["delaySPerM", "lossLowDbPer100m", "lossHighDbPer100m", "outerDiameterMm", "maxFrequencyHz", "words"] as const),
+  ]);
+  const event = places(cableEvents, ["cableId", "at", "personId", "step", "state", "condition", "note"]);
   return {
-    cable: { id: cableId, teamId: actor.teamId, designation, aliases, currentRevision: 1, createdAt: at },
-    revision: {
-      ...{ cableId, revision: 1, state, condition, reason, authorId: actor.personId, createdAt: at, inputs },
-      ...{ name, family, model, construction, build, figures, limits, ...derived, words },
-    },
-    events: [
-      { ...event, step: "begin" as const, state: "draft" as const, condition, note: reason },
-      ...(state === "quarantined" ? [{ ...event, step: "quarantine" as const, state, note: faults.join(" ") }] : []),
-    ],
+    cable: tx
+      .insert(cables)
+      .values({ ...cable, currentRevision: 1 })
+      .prepare(),
+    revision: tx
+      .insert(cableRevisions)
+      .values({ ...revision, revision: 1 })
+      .prepare(),
+    event: tx
+      .insert(cableEvents)
+      .values({ ...event, revision: 1 })
+      .prepare(),
   };
 }
 
-function insertEntries(tx: Transaction, writing: Writing, rows: readonly RowRead[]): Map<number, string> {
-  const cableIds = new Map<number, string>();
-  for (const some of batches(rows.filter(({ prepared }) => prepared))) {
-    const made = some.map((row) => {
-      const cableId = crypto.randomUUID();
-      cableIds.set(row.row, cableId);
-      return entryRows(writing, row, cableId);
+type Statements = ReturnType<typeof statements>;
+
+/** An entry with its first revision and the steps that led to its state. */
+function insertEntry(into: Statements, writing: Writing, read: RowRead, { entry, derived, words }: Prepared): string {
+  const { actor, fileName, at } = writing;
+  const { designation, aliases, standing: _, ...values } = entry;
+  const cableId = crypto.randomUUID();
+  const isQuarantined = read.outcome === "quarantined";
+  const reason = `Import of ${fileName}, row ${read.row}.`;
+  into.cable.run({ id: cableId, teamId: actor.teamId, designation, aliases, createdAt: at });
+  into.revision.run({
+    ...{ cableId, state: isQuarantined ? "quarantined" : "draft", reason, authorId: actor.personId, createdAt: at },
+    ...values,
+    ...derived,
+    words,
+  });
+  const event = { cableId, at, personId: actor.personId };
+  into.event.run({ ...event, step: "begin", state: "draft", condition: values.condition, note: reason });
+  if (isQuarantined)
+    into.event.run({
+      ...event,
+      step: "quarantine",
+      state: "quarantined",
+      condition: null,
+      note: read.faults.join(" "),
     });
-    tx.insert(cables)
-      .values(made.map(({ cable }) => cable))
-      .run();
-    tx.insert(cableRevisions)
-      .values(made.map(({ revision }) => revision))
-      .run();
-    tx.insert(cableEvents)
-      .values(made.flatMap(({ events }) => events))
-      .run();
-  }
-  return cableIds;
+  return cableId;
+}
+
+function insertEntries(tx: Transaction, writing: Writing, rows: readonly RowRead[]): Map<number, string> {
+  const into = statements(tx);
+  return new Map(
+    rows.flatMap((read) => (read.prepared ? [[read.row, insertEntry(into, writing, read, read.prepared)]] : [])),
+  );
 }
 
 function insertKept(tx: Transaction, importId: string, rows: readonly RowRead[], cableIds: Map<number, string>): void {
