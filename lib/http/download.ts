@@ -27,3 +27,27 @@ export function textDownload(pieces: Iterator<string>, mediaType: string, fileNa
   };
   return new Response(body, { headers });
 }
+
+interface KeptFile {
+  fileName: string;
+  mediaType: string;
+  content: Uint8Array<ArrayBuffer>;
+}
+
+/**
+ * A file that somebody sent in, given out again. Whatever is in it, nothing of it runs: the browser takes its type as said,
+ * keeps it rather than shows it unless asked, and what it shows is shut in a sandbox without scripts.
+ */
+export function fileAnswer({ fileName, mediaType, content }: KeptFile, kind: "attachment" | "inline"): Response {
+  return new Response(content, {
+    headers: {
+      "Content-Type": mediaType.startsWith("text/") ? `${mediaType}; charset=utf-8` : mediaType,
+      "Content-Length": String(content.byteLength),
+      "Content-Disposition": disposition(kind, fileName),
+      "Content-Security-Policy": "default-src 'none'; style-src 'unsafe-inline'; sandbox",
+      "X-Content-Type-Options": "nosniff",
+      "Cross-Origin-Resource-Policy": "same-origin",
+      "Cache-Control": "private, no-store",
+    },
+  });
+}
