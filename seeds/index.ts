@@ -5,6 +5,7 @@ import { teams } from "@/db/schema/team";
 import { isDemo } from "@/lib/team/demo";
 import { seedCables } from "@/seeds/cables";
 import { seedNotices } from "@/seeds/notices";
+import { seedLots } from "@/seeds/lots";
 import { seedRuns } from "@/seeds/runs";
 import demo from "@/seeds/data/team.json";
 import { seedFirstAdmin, seedTeam } from "@/seeds/team";
@@ -13,6 +14,7 @@ import { seedFirstAdmin, seedTeam } from "@/seeds/team";
 export async function seedDemo(): Promise<void> {
   await seedTeam();
   seedCables();
+  seedLots();
   seedRuns();
   seedNotices();
 }

@@ -2,6 +2,7 @@
 
 import dynamic from "next/dynamic";
 import { CableRows } from "@/components/cables/cable-rows";
+import { CatalogueFiles, type FilesAllowed } from "@/components/cables/catalogue-files";
 import { CatalogueFacets } from "@/components/cables/catalogue-facets";
 import { FacetCards } from "@/components/cables/facet-cards";
 import { ListOrder } from "@/components/cables/list-order";
@@ -28,6 +29,7 @@ const Comparison = dynamic(() => import("@/components/cables/comparison").then((
 interface Props {
   first: FirstPage;
   canStartRun: boolean;
+  files: FilesAllowed;
 }
 
 /** Thickest cable when nobody has one: a row's drawing is then to the usual scale. */
@@ -76,7 +78,7 @@ function useHoldKey(items: readonly CableItem[], toggle: (item: CableItem) => vo
 }
 
 /** The team's cables: searched as typed, narrowed by figures, held up to compare. All of it stands in the address. */
-export function Catalogue({ first, canStartRun }: Props) {
+export function Catalogue({ first, canStartRun, files }: Props) {
   const [asked, change] = useCatalogueAddress();
   const pages = useCablePages(cableRequest(asked), first);
   const { held, waiting, toggle, putBack, exchange } = useHeld(asked.held, change);
@@ -102,6 +104,7 @@ export function Catalogue({ first, canStartRun }: Props) {
           <SearchField asked={asked} change={change} />
           <Count page={page} />
           <ListOrder asked={asked} change={change} />
+          <CatalogueFiles {...files} />
         </div>
         <ReadAs asked={asked} change={change} page={page} />
         {isFolded && !isPhone && (

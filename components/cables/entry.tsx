@@ -1,5 +1,6 @@
 "use client";
 
+import dynamic from "next/dynamic";
 import { Agreement } from "@/components/cables/agreement";
 import { Attenuation } from "@/components/cables/attenuation";
 import { DimensionedSection } from "@/components/cables/dimensioned-section";
@@ -23,6 +24,9 @@ import type { RevisionLine } from "@/lib/cables/revisions/service";
 import type { Cable } from "@/lib/cables/schema";
 import { modelAt } from "@/lib/cables/warm-model";
 import type { RunUse } from "@/lib/runs/uses/service";
+
+// Fetched after the entry itself: what is kept beside it.
+const EntryRecords = dynamic(() => import("@/components/cables/entry-records").then((file) => file.EntryRecords));
 
 interface Props {
   cable: Cable;
@@ -89,6 +93,7 @@ export function Entry({ cable, successor, revisions, uses, canStartRun }: Props)
         <div className="flex min-w-0 flex-col gap-5 folded:col-start-2 phone:col-start-1">
           <Agreement cable={cable} />
           <Sources cable={cable} />
+          <EntryRecords cable={cable} />
           <RevisionList revisions={revisions} current={cable.revision} />
           <UsedIn {...uses} />
         </div>

@@ -27,6 +27,8 @@ export const permissions = {
   "cables.report": ["designer", "librarian", "admin", "installer"],
   /** bring in many entries at once */
   "cables.import": ["librarian", "admin"],
+  /** what was brought in at once, and the rows that became nothing */
+  "cables.readImports": ["librarian", "admin", "auditor"],
   /** take the catalogue out */
   "cables.export": ["designer", "librarian", "admin", "auditor"],
   /** every run a cable is used in; a designer, of their own runs */

@@ -57,7 +57,8 @@ const bareSizes: Partial<Record<QuantityKind, Record<string, string>>> = {
  */
 export function mathUnit(kind: QuantityKind, text: string, usual: string): string {
   if (text === "") return usual;
-  const size = bareSizes[kind]?.[text];
+  const sizes = bareSizes[kind] ?? {};
+  const size = Object.hasOwn(sizes, text) ? sizes[text] : undefined;
   if (size) return size;
   const micro = text.replace(/[µμ]/g, "u").replace(/\u2126/g, "Ω");
   const [over, under] = micro.split("/").map((part) => part.trim());

@@ -2,6 +2,9 @@
 import * as account from "@/lib/auth/operations";
 import * as cables from "@/lib/cables/operations";
 import * as dc from "@/lib/compute/dc/operations";
+import * as evidence from "@/lib/cables/evidence/operations";
+import * as files from "@/lib/cables/exchange/operations";
+import * as lots from "@/lib/cables/lots/operations";
 import * as extract from "@/lib/compute/extract/operations";
 import * as fit from "@/lib/compute/fit/operations";
 import * as geometry from "@/lib/compute/geometry/operations";
@@ -17,12 +20,17 @@ import * as service from "@/lib/http/operations";
 import * as limitLines from "@/lib/limit-lines/operations";
 import * as mail from "@/lib/mail/operations";
 import * as notices from "@/lib/notices/operations";
+import * as reels from "@/lib/runs/reels/operations";
 import * as runs from "@/lib/runs/operations";
 
 export const operations: Operation[] = [
   account,
   cables,
+  files,
+  evidence,
+  lots,
   runs,
+  reels,
   limitLines,
   notices,
   mail,

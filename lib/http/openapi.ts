@@ -11,7 +11,8 @@ export function refusalsOf(declared: Operation): ErrorCode[] {
   const codes = new Set<ErrorCode>(declared.refusals);
   if (declared.permission !== null) codes.add("unauthenticated").add("forbidden");
   if (declared.path.includes("{")) codes.add("not_found");
-  if (declared.body) codes.add("malformed").add("too_large").add("unsupported_media_type").add("invalid_input");
+  if (declared.body || declared.accepts)
+    codes.add("malformed").add("too_large").add("unsupported_media_type").add("invalid_input");
   if (declared.query) codes.add("invalid_input");
   if (declared.needsMatch) codes.add("precondition_required").add("stale");
   return [...codes].sort((a, b) => statusOf[a] - statusOf[b]);
@@ -47,17 +48,27 @@ const entityTagHeader: Json = { description: "the version, for If-Match", schema
 
 function responses(declared: Operation, parts: SchemaParts): Json {
   const { status, description, schema, hasEntityTag } = declared.answer;
-  const content = schema ? parts.reference(schema, "output") : { type: "object" };
+  const json = schema ? parts.reference(schema, "output") : { type: "object" };
+  const mediaTypes = [declared.answer.mediaType ?? "application/json"].flat();
+  const content = mediaTypes.map((type) => [type, { schema: type === "application/json" ? json : { type: "string" } }]);
   const answers: Json = {
     [status]: {
       description,
       ...(hasEntityTag && { headers: { ETag: entityTagHeader } }),
-      ...(status !== 204 && { content: { "application/json": { schema: content } } }),
+      ...(status !== 204 && { content: Object.fromEntries(content) as Json }),
     },
   };
   const problem = { "application/problem+json": { schema: parts.reference(problemSchema, "output") } };
   for (const code of refusalsOf(declared)) answers[statusOf[code]] = { description: titleOf[code], content: problem };
   return answers;
+}
+
+/** The body of a request: JSON by its schema, or what the route accepts by media type. */
+function requestBody({ body, accepts, mostBodyBytes }: Operation, parts: SchemaParts): Json {
+  const types = Object.entries(body ? { "application/json": body } : (accepts ?? {}));
+  const content = types.map(([type, schema]) => [type, { schema: parts.reference(schema, "input") }]);
+  const most = mostBodyBytes && { description: `At most ${Math.round(mostBodyBytes / 1_048_576)} MB.` };
+  return { required: true, ...most, content: Object.fromEntries(content) as Json };
 }
 
 function describe(declared: Operation, parts: SchemaParts): Json {
@@ -72,13 +83,7 @@ function describe(declared: Operation, parts: SchemaParts): Json {
     tags: [declared.path.split("/")[1]],
     security: declared.permission === null ? [] : [{ cookie: [] }, { token: [] }],
     ...(parameters.length > 0 && { parameters }),
-    ...(declared.body && {
-      requestBody: {
-        required: true,
-        ...(declared.mostBodyBytes && { description: `At most ${Math.round(declared.mostBodyBytes / 1_048_576)} MB.` }),
-        content: { "application/json": { schema: parts.reference(declared.body, "input") } },
-      },
-    }),
+    ...((declared.body || declared.accepts) && { requestBody: requestBody(declared, parts) }),
     responses: responses(declared, parts),
   };
 }

@@ -22,7 +22,16 @@ export interface Operation<
   body?: Body;
   /** most bytes of a body; default 1 MB */
   mostBodyBytes?: number;
-  answer: { status: 200 | 201 | 204; description: string; schema?: z.ZodType; mediaType?: string; hasEntityTag?: true };
+  /** a body that the route reads by itself, by media type: a file; what is not JSON is text or a form */
+  accepts?: Record<string, z.ZodType>;
+  answer: {
+    status: 200 | 201 | 204;
+    description: string;
+    schema?: z.ZodType;
+    /** other than JSON; of several the first has the schema */
+    mediaType?: string | readonly string[];
+    hasEntityTag?: true;
+  };
   /** whether If-Match is needed */
   needsMatch?: true;
   /** refusals beyond those that follow from the rest */

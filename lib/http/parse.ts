@@ -7,7 +7,7 @@ type RawIssue = Parameters<NonNullable<z.core.ParseContext<z.core.$ZodIssue>["er
 const most = 500;
 
 /** The sentence for a fault whose schema has none of its own. */
-function plainSentence(issue: RawIssue): string {
+export function plainSentence(issue: RawIssue): string {
   if (issue.code === "invalid_type")
     return issue.input === undefined ? "This is needed." : `This must be ${nounOf(issue.expected)}.`;
   if (issue.code === "unrecognized_keys") return "There is no such field here.";

@@ -74,7 +74,8 @@ describe.each(operations.map((operation) => [operation.id, operation] as const))
     for (const [status, { content }] of Object.entries<Described["responses"][string]>(responses))
       if (Number(status) >= 400) expect(content).toHaveProperty(["application/problem+json"]);
     if (operation.permission !== null) expect(responses).toHaveProperty("401");
-    if (operation.body) for (const status of ["400", "413", "415", "422"]) expect(responses).toHaveProperty(status);
+    if (operation.body ?? operation.accepts)
+      for (const status of ["400", "413", "415", "422"]) expect(responses).toHaveProperty(status);
     if (operation.needsMatch) for (const status of ["412", "428"]) expect(responses).toHaveProperty(status);
   });
 
@@ -82,7 +83,7 @@ describe.each(operations.map((operation) => [operation.id, operation] as const))
     const inPath = [...operation.path.matchAll(/\{(\w+)\}/g)].map(([, name]) => name);
     const parameters = described()?.parameters ?? [];
     expect(parameters.filter((one) => one.in === "path").map(({ name }) => name)).toEqual(inPath);
-    expect(described()?.requestBody !== undefined).toBe(operation.body !== undefined);
+    expect(described()?.requestBody !== undefined).toBe((operation.body ?? operation.accepts) !== undefined);
   });
 });
 

@@ -7,6 +7,8 @@ import type { Run } from "@/lib/runs/schema";
 import { addLimitLine } from "@/lib/limit-lines/service";
 import { createRun } from "@/lib/runs/service";
 import { addCable, newRun } from "@/tests/support/cables";
+import { addFile } from "@/tests/support/evidence";
+import { addImport } from "@/tests/support/imports";
 import { withDatabase } from "@/tests/support/database";
 import { newLimitLine } from "@/tests/support/limit-lines";
 import { actor, addPeople, other, roles } from "@/tests/support/people";
@@ -16,6 +18,8 @@ import { routeFiles } from "@/tests/support/routes";
 withDatabase(async () => {
   await addPeople();
   addCable({ id: "feeder" });
+  addImport("an-import");
+  addFile("feeder", "a-file");
 });
 
 type Access = "anyone" | Role[];
@@ -30,6 +34,19 @@ const expected: Record<string, Access> = {
   readCable: ["designer", "librarian", "admin", "auditor"], // an installer only those in their runs
   createCable: ["designer", "librarian", "admin"],
   removeCable: ["designer", "librarian", "admin"],
+  listEvidence: ["designer", "librarian", "admin", "auditor"], // an installer only of cables in their runs
+  addEvidence: ["librarian", "admin"], // a designer only to a draft of their own
+  readEvidence: ["designer", "librarian", "admin", "auditor"], // as the list
+  listLots: ["designer", "librarian", "admin", "auditor"], // as the list
+  addLot: ["librarian", "admin"], // a designer only to a draft of their own
+  listReels: ["designer", "librarian", "admin", "auditor"], // an installer only of runs assigned to them
+  bindReel: ["designer", "librarian", "admin"],
+  freeReel: ["designer", "librarian", "admin"],
+  exportCables: ["designer", "librarian", "admin", "auditor"],
+  importCables: ["librarian", "admin"],
+  listImports: ["librarian", "admin", "auditor"],
+  readImport: ["librarian", "admin", "auditor"],
+  readCatalogueSchema: "anyone",
   listRuns: roles,
   createRun: ["designer", "librarian", "admin"],
   readRun: ["designer", "librarian", "admin", "auditor"], // an installer only issued ones assigned to them
@@ -63,7 +80,10 @@ const expected: Record<string, Access> = {
 };
 
 /** The refusal an installer gets instead of 403 where the record does not exist for them. */
-const hiddenFromInstallers = ["readCable", "readRun", "listRunComments"];
+const hiddenFromInstallers = [
+  ...["readCable", "readRun", "listRunComments"],
+  ...["listEvidence", "readEvidence", "listLots", "listReels"],
+];
 
 let handlers: Map<string, Handler>;
 beforeAll(async () => {
@@ -86,15 +106,18 @@ function ask(id: string, as: ReturnType<typeof actor> | undefined, run: Run): Pr
   const limitLineId = isOfLine ? addLimitLine(actor("admin"), newLimitLine(`Line of ${run.id}`)).id : "";
   return send(handler, operation.method, {
     as,
-    params: { cableId: "feeder", runId: run.id, limitLineId },
+    params: {
+      ...{ cableId: "feeder", runId: run.id, limitLineId },
+      ...{ importId: "an-import", evidenceId: "a-file", lotId: "a-lot" },
+    },
     headers: operation.needsMatch ? { "if-match": "*" } : {},
     // An impossible body: whoever may is told so (422), whoever may not never gets that far.
-    body: operation.body ? { impossible: true } : undefined,
+    body: (operation.body ?? operation.accepts?.["application/json"]) ? { impossible: true } : undefined,
   });
 }
 
-/** What is asked for is impossible here, an approved entry taken back; only whoever may is told so. */
-const impossible: Record<string, number> = { removeCable: 409 };
+/** What is asked for is impossible here, an approved entry taken back, a file that is none; only whoever may is told so. */
+const impossible: Record<string, number> = { removeCable: 409, addEvidence: 415 };
 
 const isAnswer = (id: string, status: number) => status < 300 || status === 422 || status === impossible[id];
 

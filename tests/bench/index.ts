@@ -2,6 +2,7 @@
 import { benchEngine } from "@/tests/bench/engine";
 import { benchFirstLoad } from "@/tests/bench/first-load";
 import { benchMatchedLoss } from "@/tests/bench/matched-loss";
+import { benchImport } from "@/tests/bench/import";
 import { benchSearch } from "@/tests/bench/search";
 import { benchTouchstone } from "@/tests/bench/touchstone";
 import { benchStep } from "@/tests/bench/step";
@@ -15,4 +16,5 @@ benchStep();
 benchMatchedLoss();
 benchTolerance();
 await benchSearch();
+await benchImport();
 await benchFirstLoad();

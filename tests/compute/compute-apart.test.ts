@@ -1,6 +1,6 @@
 import { monitorEventLoopDelay } from "node:perf_hooks";
 import { afterEach, describe, expect, test, vi } from "vitest";
-import { computeApart } from "@/lib/compute/apart/compute-apart";
+import { computeApart, computePartsApart } from "@/lib/compute/apart/compute-apart";
 import { lineAnswer } from "@/lib/compute/answers";
 import { computed } from "@/lib/compute/refuse";
 import type { Circuit, LineModel } from "@/lib/line/element";
@@ -76,5 +76,49 @@ describe("Computing in a thread of its own", () => {
     await refused;
     vi.useRealTimers();
     expect(read(await computeApart("line", model, asked))).toMatchObject({ frequenciesHz: asked.frequenciesHz });
+  });
+});
+
+describe("An answer in parts", () => {
+  const rows = (count: number) =>
+    new TextEncoder().encode(
+      `Type,Z0,VF,family\n${Array.from({ length: count }, (_, i) => `P${i},50,0.85,coax`).join("\n")}`,
+    );
+  const asked = { as: "csv", fileName: "x.csv" } as const;
+
+  test("comes in order, whole, and each in a turn of its own", async () => {
+    const seen: number[] = [];
+    let turns = 0;
+    const count = () => {
+      turns++;
+      if (seen.length < 2_000) setImmediate(count);
+    };
+    count();
+    await computePartsApart(
+      "importRows",
+      (json) => {
+        const part = read(json) as { rows?: { row: number }[] };
+        seen.push(...(part.rows ?? []).map(({ row }) => row));
+      },
+      rows(2_000),
+      asked,
+    );
+    expect(seen).toEqual(Array.from({ length: 2_000 }, (_, i) => i + 2));
+    expect(turns).toBeGreaterThan(20);
+  });
+
+  test("ends where whoever takes it will have no more, with their reason; the next is computed", async () => {
+    const refused = computePartsApart(
+      "importRows",
+      () => {
+        throw new AppError("conflict", "No more.");
+      },
+      rows(2_000),
+      asked,
+    );
+    await expect(refused).rejects.toMatchObject({ code: "conflict" });
+    let parts = 0;
+    await computePartsApart("importRows", () => parts++, rows(60), asked);
+    expect(parts).toBe(3);
   });
 });

@@ -10,7 +10,7 @@ interface Sent {
   as?: Actor;
   body?: unknown;
   /** sent as it is, instead of `body` as JSON */
-  text?: string;
+  text?: string | Uint8Array<ArrayBuffer> | FormData;
   headers?: Record<string, string>;
   params?: Record<string, string>;
   path?: string;
@@ -29,7 +29,7 @@ export async function send(handler: Handler, method: string, sent: Sent = {}): P
   if (as) headers.set("cookie", await cookieOf(as));
   if (as) headers.set("sec-fetch-site", "same-origin");
   const content = text ?? (body === undefined ? undefined : JSON.stringify(body));
-  if (content !== undefined) headers.set("content-type", "application/json");
+  if (content !== undefined && !(content instanceof FormData)) headers.set("content-type", "application/json");
   for (const [name, value] of Object.entries(sent.headers ?? {})) headers.set(name, value);
   const request = new Request(`${base}${path}`, { method, headers, body: content });
   return handler(request, { params: Promise.resolve(params) });

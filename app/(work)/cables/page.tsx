@@ -19,12 +19,13 @@ interface Props {
 export default async function CataloguePage({ searchParams }: Props) {
   const actor = await currentActor();
   const request = cableRequest(readCatalogueAddress(await searchParams));
+  const files = { canExport: may(actor, "cables.export"), canImport: may(actor, "cables.import") };
   const page = listCables(actor, parse(cableQuerySchema, readRequest(request)));
   return (
     <>
       <WorkBar signedIn={describeActor(actor)} current="/cables" title="Catalogue" />
       <main id="main" className="page-margin pt-2.5 pb-20">
-        <Catalogue first={{ request, page }} canStartRun={may(actor, "runs.write")} />
+        <Catalogue first={{ request, page }} canStartRun={may(actor, "runs.write")} files={files} />
       </main>
     </>
   );

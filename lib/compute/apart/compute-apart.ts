@@ -15,6 +15,7 @@ interface Waiting {
   task: Task;
   take: (json: Uint8Array<ArrayBuffer>) => void;
   fail: (error: Error) => void;
+  takePart?: (json: Uint8Array<ArrayBuffer>) => void;
 }
 
 interface Thread {
@@ -48,6 +49,10 @@ function startThread(): Thread {
 function settle(thread: Thread, outcome: Outcome): void {
   const { current } = thread;
   if (current?.task.id !== outcome.id) return;
+  if ("part" in outcome) {
+    takePart(thread, current, outcome.part);
+    return;
+  }
   clearTimeout(current.timer);
   thread.current = undefined;
   thread.worker.unref();
@@ -59,6 +64,21 @@ function settle(thread: Thread, outcome: Outcome): void {
 
 function refusalOf({ refused, members }: { refused: string; members?: Record<string, unknown> }): RangeError {
   return members ? new Refusal(refused, members) : new RangeError(refused);
+}
+
+/** Whoever takes a part may refuse it; then the rest is not worked out. */
+function takePart(thread: Thread, { task, takePart }: Waiting, part: Uint8Array<ArrayBuffer>): void {
+  try {
+    takePart?.(part);
+    // In a turn of its own, so that whoever else waits comes first.
+    setImmediate(() => {
+      if (!task.taken) return;
+      Atomics.add(task.taken, 0, 1);
+      Atomics.notify(task.taken, 0);
+    });
+  } catch (error) {
+    drop(thread, error as Error);
+  }
 }
 
 /** Ends a thread, and what it was at with the error. */
@@ -86,6 +106,19 @@ function next(): void {
   thread.worker.postMessage(first.task);
 }
 
+type Json = Uint8Array<ArrayBuffer>;
+
+function inTurn(name: JobName, given: unknown[], takePart?: (json: Json) => void): Promise<Json> {
+  const all = pool();
+  if (all.waiting.length >= mostWaiting)
+    throw new AppError("busy", "Too much is being computed just now; try again in a moment.");
+  return new Promise((take, fail) => {
+    const taken = takePart && new Int32Array(new SharedArrayBuffer(4));
+    all.waiting.push({ task: { id: ++all.count, name, given, taken }, take, fail, takePart });
+    next();
+  });
+}
+
 /**
  * Computes one job in a thread of its own.
  * @param name - see `jobs`
@@ -93,15 +126,18 @@ function next(): void {
  * @returns the answer as JSON, UTF-8
  * @throws RangeError what the engine refuses, `Refusal` where there is more to say; AppError `invalid_input` past the deadline, `busy` where too many wait
  */
-export function computeApart<Name extends JobName>(
+export function computeApart<Name extends JobName>(name: Name, ...given: Parameters<Jobs[Name]>): Promise<Json> {
+  return inTurn(name, given);
+}
+
+/**
+ * The same for a job that answers in parts.
+ * @param takePart - given each part as JSON, in order; where it throws, the job ends with that error
+ */
+export async function computePartsApart<Name extends JobName>(
   name: Name,
+  takePart: (json: Json) => void,
   ...given: Parameters<Jobs[Name]>
-): Promise<Uint8Array<ArrayBuffer>> {
-  const all = pool();
-  if (all.waiting.length >= mostWaiting)
-    throw new AppError("busy", "Too much is being computed just now; try again in a moment.");
-  return new Promise((take, fail) => {
-    all.waiting.push({ task: { id: ++all.count, name, given }, take, fail });
-    next();
-  });
+): Promise<void> {
+  await inTurn(name, given, takePart);
 }

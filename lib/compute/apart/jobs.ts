@@ -1,8 +1,12 @@
-/** What can be computed apart from the thread that serves: pure functions of plain data, by name. */
+/**
+ * What can be computed apart from the thread that serves: pure functions of plain data, by name. A function that gives its
+ * answer in parts is a generator.
+ */
 import { dcAnswer } from "@/lib/compute/dc/answer";
 import { solveAnswer } from "@/lib/compute/solve/answer";
 import { swapAnswer } from "@/lib/compute/swap/answer";
 import { toleranceAnswer } from "@/lib/compute/tolerance/answer";
+import { readRows } from "@/lib/cables/exchange/read-rows";
 import { extractAnswer } from "@/lib/compute/extract/answer";
 import { fitAnswer } from "@/lib/compute/fit/answer";
 import { geometryAnswer } from "@/lib/compute/geometry/answer";
@@ -27,6 +31,7 @@ export const jobs = {
   dc: dcAnswer,
   swap: swapAnswer,
   solve: solveAnswer,
+  importRows: readRows,
 };
 
 export type Jobs = typeof jobs;
@@ -37,9 +42,17 @@ export interface Task {
   id: number;
   name: JobName;
   given: unknown[];
+  /** of a job that answers in parts: how many have been taken, counted where both threads see it */
+  taken?: Int32Array<SharedArrayBuffer>;
 }
 
-/** What it sends back: the answer as JSON, the engine's refusal, or a fault of ours. */
+/** How many parts may wait to be taken: more would be handed over in one go, and hold up whoever else is served. */
+export const mostUntaken = 2;
+
+/** What it sends back: parts of the answer, the answer as JSON (of one in parts, null), the engine's refusal, or a fault of ours. */
 export type Outcome = { id: number } & (
-  { json: Uint8Array<ArrayBuffer> } | { refused: string; members?: Record<string, unknown> } | { fault: string }
+  | { part: Uint8Array<ArrayBuffer> }
+  | { json: Uint8Array<ArrayBuffer> }
+  | { refused: string; members?: Record<string, unknown> }
+  | { fault: string }
 );

@@ -1,0 +1,105 @@
+/**
+ * What a file is, by its content: a name or a header can say anything. Only kinds that cannot run in a browser. Pure.
+ */
+
+export const evidenceTypes = [
+  "application/pdf",
+  "image/png",
+  "image/jpeg",
+  "image/webp",
+  "application/touchstone",
+  "text/csv",
+] as const;
+export type EvidenceType = (typeof evidenceTypes)[number];
+
+const latin = (bytes: Uint8Array, from: number, to: number) =>
+  Array.from(bytes.subarray(Math.max(0, from), to), (byte) => String.fromCharCode(byte)).join("");
+
+const startsWith = (bytes: Uint8Array, ...starts: number[]) => starts.every((byte, i) => bytes[i] === byte);
+const wordAt = (bytes: Uint8Array, at: number) => new DataView(bytes.buffer, bytes.byteOffset).getUint32(at, true);
+
+/** ISO 32000-2, 7.5: the header at the start, and at the end where the cross-reference begins, with its mark. */
+function isPdf(bytes: Uint8Array): boolean {
+  if (!/^%PDF-[12]\.\d/.test(latin(bytes, 0, 8))) return false;
+  const end = latin(bytes, bytes.length - 2048, bytes.length);
+  return /startxref\s+\d+\s+%%EOF\s*\0*$/.test(end);
+}
+
+/** W3C PNG, 5.2: signature, IHDR first, IEND last. */
+function isPng(bytes: Uint8Array): boolean {
+  if (!startsWith(bytes, 0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a)) return false;
+  return latin(bytes, 12, 16) === "IHDR" && latin(bytes, bytes.length - 8, bytes.length - 4) === "IEND";
+}
+
+/** ITU-T T.81, annex B: start of image, a marker, end of image. */
+function isJpeg(bytes: Uint8Array): boolean {
+  return startsWith(bytes, 0xff, 0xd8, 0xff) && latin(bytes, bytes.length - 2, bytes.length) === "\u00ff\u00d9";
+}
+
+/** RFC 9649: a RIFF container of the kind WEBP that is as long as it says. */
+function isWebp(bytes: Uint8Array): boolean {
+  if (bytes.length < 16 || latin(bytes, 0, 4) !== "RIFF" || latin(bytes, 8, 12) !== "WEBP") return false;
+  const size = wordAt(bytes, 4) + 8;
+  return size === bytes.length || size + 1 === bytes.length;
+}
+
+function textOf(bytes: Uint8Array): string | undefined {
+  try {
+    const text = new TextDecoder("utf-8", { fatal: true }).decode(bytes);
+    return /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]/.test(text) ? undefined : text;
+  } catch {
+    return undefined;
+  }
+}
+
+const optionLine = /^#\s*(?:[kmg]?hz\s*|[syzhg]\s*|db\s*|ma\s*|ri\s*|r\s+[\d.]+(?:e[+-]?\d+)?\s*)*(?:!.*)?$/i;
+const numbers = /^\s*[+-]?(?:\d+\.?\d*|\.\d+)(?:e[+-]?\d+)?(?:\s+[+-]?(?:\d+\.?\d*|\.\d+)(?:e[+-]?\d+)?)*\s*(?:!.*)?$/i;
+const keyword = /^\s*\[[\w -]+\]/;
+
+/**
+ * Touchstone 1 and 2: comments, one option line, and then nothing but numbers (and, of version 2, keywords in brackets).
+ * Every line is held to it: what only begins like such a file is none.
+ */
+function isTouchstone(text: string): boolean {
+  let [hasOptions, rows] = [false, 0];
+  for (const line of text.split(/\r\n|\r|\n/)) {
+    if (/^\s*(!.*)?$/.test(line) || keyword.test(line)) continue;
+    if (/^\s*#/.test(line)) {
+      if (hasOptions || !optionLine.test(line.trim())) return false;
+      hasOptions = true;
+    } else if (hasOptions && numbers.test(line)) rows++;
+    else return false;
+  }
+  return hasOptions && rows > 0;
+}
+
+const leastShare = 0.9;
+
+/** A table in text: the same sign parts nearly every line into as many cells, at least two; no markup. */
+function isTable(text: string): boolean {
+  if (/<\s*(?:!doctype|html|script|svg|\?xml)/i.test(text.slice(0, 4096))) return false;
+  const lines = text.split(/\r\n|\r|\n/).filter((line) => line.trim() !== "");
+  if (lines.length < 2) return false;
+  return [",", ";", "\t"].some((sign) => {
+    const counts = lines.map((line) => line.replace(/"[^"]*"/g, "").split(sign).length);
+    const usual = counts[0] ?? 0;
+    return usual > 1 && counts.filter((count) => count === usual).length >= leastShare * counts.length;
+  });
+}
+
+/** @returns undefined for anything that is not kept as evidence */
+export function typeByContent(bytes: Uint8Array): EvidenceType | undefined {
+  if (isPdf(bytes)) return "application/pdf";
+  if (isPng(bytes)) return "image/png";
+  if (isJpeg(bytes)) return "image/jpeg";
+  if (isWebp(bytes)) return "image/webp";
+  const text = textOf(bytes);
+  if (text === undefined) return undefined;
+  if (isTouchstone(text)) return "application/touchstone";
+  return isTable(text) ? "text/csv" : undefined;
+}
+
+/** Whether a browser may show it in its own page rather than keep it. */
+export function mayBeShown(type: string): boolean {
+  return type.startsWith("image/") || type === "application/pdf";
+}
