@@ -19,7 +19,7 @@ import { CursorProvider } from "@/components/plot/cursor";
 import { StateNote } from "@/components/ui/state-mark";
 import { outerDiameterMm } from "@/lib/cables/line";
 import { lossTable, tableRange } from "@/lib/cables/loss-rows";
-import type { RevisionLine } from "@/lib/cables/revisions/service";
+import type { RevisionLine } from "@/lib/cables/revisions/schema";
 import type { Cable } from "@/lib/cables/schema";
 import { modelAt } from "@/lib/cables/warm-model";
 import type { RunUse } from "@/lib/runs/uses/service";

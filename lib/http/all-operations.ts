@@ -1,19 +1,25 @@
 /** Every operation of the API, in the order of the description. */
 import * as account from "@/lib/auth/operations";
 import * as cables from "@/lib/cables/operations";
-import * as compute from "@/lib/compute/operations";
+import * as revisions from "@/lib/cables/revisions/operations";
+import * as steps from "@/lib/cables/steps/operations";
 import * as extract from "@/lib/compute/extract/operations";
 import * as fit from "@/lib/compute/fit/operations";
 import * as geometry from "@/lib/compute/geometry/operations";
-import * as service from "@/lib/http/operations";
+import * as compute from "@/lib/compute/operations";
 import * as readings from "@/lib/compute/readings/operations";
 import * as touchstone from "@/lib/compute/touchstone/operations";
-import type { Operation } from "@/lib/http/operation";
+import * as service from "@/lib/http/operations";
 import * as runs from "@/lib/runs/operations";
+import * as team from "@/lib/team/operations";
+import type { Operation } from "@/lib/http/operation";
 
-export const operations: Operation[] = [
+const nouns = [
   account,
+  team,
   cables,
+  revisions,
+  steps,
   runs,
   compute,
   geometry,
@@ -22,4 +28,6 @@ export const operations: Operation[] = [
   extract,
   touchstone,
   service,
-].flatMap((noun) => Object.values<Operation>(noun));
+];
+
+export const operations: Operation[] = nouns.flatMap((noun) => Object.values<Operation>(noun));

@@ -28,6 +28,22 @@ const expected: Record<string, Access> = {
   readCable: ["designer", "librarian", "admin", "auditor"], // an installer only those in their runs
   createCable: ["designer", "librarian", "admin"],
   removeCable: ["designer", "librarian", "admin"],
+  changeCable: ["designer", "librarian", "admin"],
+  listCableRevisions: ["designer", "librarian", "admin", "auditor"],
+  beginCableRevision: ["designer", "librarian", "admin"],
+  readCableRevision: ["designer", "librarian", "admin", "auditor"],
+  listCableEvents: ["designer", "librarian", "admin", "auditor"],
+  submitCable: ["designer", "librarian", "admin"],
+  approveCable: ["librarian", "admin"],
+  returnCable: ["librarian", "admin"],
+  restrictCable: ["librarian", "admin"],
+  quarantineCable: ["librarian", "admin"],
+  releaseCable: ["librarian", "admin"],
+  supersedeCable: ["librarian", "admin"],
+  withdrawCable: ["librarian", "admin"],
+  preferCable: ["librarian", "admin"],
+  readHouseRules: ["admin", "auditor"],
+  changeHouseRules: ["admin"],
   listRuns: roles,
   createRun: ["designer", "librarian", "admin"],
   readRun: ["designer", "librarian", "admin", "auditor"], // an installer only issued ones assigned to them
@@ -50,7 +66,10 @@ const expected: Record<string, Access> = {
 };
 
 /** The refusal an installer gets instead of 403 where the record does not exist for them. */
-const hiddenFromInstallers = ["readCable", "readRun", "listRunComments"];
+const hiddenFromInstallers = [
+  ...["readCable", "listCableRevisions", "readCableRevision", "listCableEvents"],
+  ...["readRun", "listRunComments"],
+];
 
 let handlers: Map<string, Handler>;
 beforeAll(async () => {
@@ -70,15 +89,17 @@ function ask(id: string, as: ReturnType<typeof actor> | undefined, run: Run): Pr
   if (!operation || !handler) throw new Error(`no operation ${id}`);
   return send(handler, operation.method, {
     as,
-    params: { cableId: "feeder", runId: run.id },
+    params: { cableId: "feeder", revision: "1", runId: run.id },
     headers: operation.needsMatch ? { "if-match": "*" } : {},
     // An impossible body: whoever may is told so (422), whoever may not never gets that far.
     body: operation.body ? { impossible: true } : undefined,
   });
 }
 
-/** What is asked for is impossible here, an approved entry taken back; only whoever may is told so. */
-const impossible: Record<string, number> = { removeCable: 409 };
+/** What is asked for is impossible here: nothing of the approved entry is open. Only whoever may is told so. */
+const impossible: Record<string, number> = {
+  ...{ removeCable: 409, changeCable: 409, submitCable: 409, approveCable: 409, returnCable: 409 },
+};
 
 const isAnswer = (id: string, status: number) => status < 300 || status === 422 || status === impossible[id];
 
