@@ -1,4 +1,5 @@
 /** `npm run bench`: how fast the product is, as ratios within one run. Nothing here fails a build; figures go into the notes. */
+import { benchEffects } from "@/tests/bench/effects";
 import { benchEngine } from "@/tests/bench/engine";
 import { benchFirstLoad } from "@/tests/bench/first-load";
 import { benchSearch } from "@/tests/bench/search";
@@ -8,5 +9,6 @@ import { row } from "@/tests/bench/timing";
 row("", "ours", "other", "ratio");
 benchEngine();
 benchTouchstone();
+benchEffects();
 await benchSearch();
 await benchFirstLoad();

@@ -2,7 +2,7 @@
 import { z } from "zod";
 import { entryInputsSchema } from "@/lib/cables/inputs";
 import { newCableSchema } from "@/lib/cables/new-cable";
-import { cableSchema, stateSchema } from "@/lib/cables/schema";
+import { type Cable, cableSchema, stateSchema } from "@/lib/cables/schema";
 
 const time = z.string().describe("ISO 8601");
 
@@ -38,6 +38,12 @@ export const cableRevisionSchema = cableSchema
   })
   .meta({ id: "CableRevision" });
 export type CableRevision = z.infer<typeof cableRevisionSchema>;
+
+/** What a revision says of the cable, without what is said of the revision. */
+export function cableOf(revision: CableRevision): Cable {
+  const keys = Object.keys(cableSchema.shape) as (keyof Cable)[];
+  return Object.fromEntries(keys.map((key) => [key, revision[key]])) as Cable;
+}
 
 const lineSchema = z
   .strictObject({

@@ -5,6 +5,7 @@ import { fitAnswer } from "@/lib/compute/fit/answer";
 import { geometryAnswer } from "@/lib/compute/geometry/answer";
 import { readingsAnswer } from "@/lib/compute/readings/answer";
 import { touchstoneAnswer } from "@/lib/compute/touchstone/answer";
+import { effectsAnswer } from "@/lib/runs/effects/answer";
 
 export const jobs = {
   line: lineAnswer,
@@ -16,6 +17,7 @@ export const jobs = {
   readings: readingsAnswer,
   extract: extractAnswer,
   touchstone: touchstoneAnswer,
+  effects: effectsAnswer,
 };
 
 export type Jobs = typeof jobs;
