@@ -65,6 +65,7 @@ const expected: Record<string, Access> = {
   listWaivers: ["designer", "librarian", "admin", "auditor"],
   giveWaiver: ["librarian", "admin"],
   endWaiver: ["librarian", "admin"],
+  countReviews: roles,
   readReviewQueue: ["librarian", "admin", "auditor"],
   readCableUses: ["designer", "librarian", "admin", "auditor"],
   readHouseRules: ["admin", "auditor"],

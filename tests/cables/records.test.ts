@@ -291,7 +291,7 @@ describe("The queue", () => {
     const find = (as: typeof librarian) => getQueue(as).waiting.find(({ cableId }) => cableId === id);
     expect(find(librarian)).toMatchObject({
       revision: 2,
-      changedFields: 2,
+      changedFields: 1,
       refusal: expect.stringMatching(/your own/),
     });
     expect(find(admin)?.refusal).toBeNull();

@@ -48,3 +48,5 @@ export const queueSchema = z
   })
   .meta({ id: "ReviewQueue" });
 export type ReviewQueue = z.infer<typeof queueSchema>;
+
+export const waitingCountSchema = z.strictObject({ waiting: z.int() }).meta({ id: "WaitingCount" });

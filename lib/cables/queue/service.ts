@@ -11,7 +11,8 @@ import { cannotDecide } from "@/lib/cables/decision";
 import { listEditors } from "@/lib/cables/events/service";
 import type { DueEntry, ReviewQueue, SettledRevision, WaitingRevision } from "@/lib/cables/queue/schema";
 import { listOpenReports } from "@/lib/cables/reports/service";
-import { differences } from "@/lib/cables/revisions/differences";
+import { countGiven, differences } from "@/lib/cables/revisions/differences";
+import { getCurrentRevision, getRevision } from "@/lib/cables/revisions/service";
 import { currentRevision } from "@/lib/cables/rows/service";
 import { rulesInForce } from "@/lib/team/rules/service";
 
@@ -59,7 +60,7 @@ function listWaiting(actor: Actor): WaitingRevision[] {
         authorName,
       },
       submittedAt: revision.submittedAt ?? createdAt,
-      changedFields: isNew ? null : differences(current, revision).filter(({ isGiven }) => isGiven).length,
+      changedFields: isNew ? null : countGiven(differences(current, revision)),
       refusal: cannotDecide(actor, "approve", writers, rules),
     };
   });
@@ -117,4 +118,28 @@ export function getQueue(actor: Actor): ReviewQueue {
     due: listDue(actor),
     reports: listOpenReports(actor),
   };
+}
+
+/**
+ * A revision in review with what it takes the place of, and why the actor may not decide on it; null where nothing of the
+ * entry is in review, or not any more.
+ */
+export function getReviewed(actor: Actor, cableId: string) {
+  requirePermission(actor, "cables.readUnapproved");
+  const row = database()
+    .select({ revision: open.revision })
+    .from(open)
+    .innerJoin(cables, eq(cables.id, open.cableId))
+    .where(and(inReview(actor), eq(cables.id, cableId)))
+    .get();
+  if (!row) return null;
+  const after = getRevision(actor, cableId, row.revision);
+  const before = after.isCurrent ? null : getCurrentRevision(actor, cableId);
+  const writers = [after.authorId, ...listEditors(cableId, row.revision)];
+  const rules = rulesInForce(actor);
+  const refusals = {
+    approve: cannotDecide(actor, "approve", writers, rules),
+    return: cannotDecide(actor, "return", writers, rules),
+  };
+  return { before, after, refusals };
 }

@@ -109,3 +109,9 @@ export function fieldsOfBoth(
 export function differences(before: Compared, after: Compared, lossAtHz?: number): Difference[] {
   return fieldsOfBoth(before, after, lossAtHz).filter((each) => !each.isSame);
 }
+
+/** How many fields somebody has changed: the model follows from the others, unless it alone was changed. */
+export function countGiven(changed: readonly Difference[]): number {
+  const given = changed.filter(({ isGiven }) => isGiven);
+  return given.filter(({ field }) => !field.startsWith("model.")).length || given.length;
+}
