@@ -15,6 +15,7 @@ const pages = [
   "/runs",
   "/runs/new",
   "/cables",
+  "/cables/c50-f10",
   "/calculate",
   "/calculate/pad",
   "/calculate/stub",
