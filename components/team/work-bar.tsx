@@ -2,11 +2,10 @@
 
 import { useQuery } from "@tanstack/react-query";
 import type { Route } from "next";
-import { Bar } from "@/components/ui/bar";
 import { useEffect } from "react";
-import { call, ProblemError, speakFor } from "@/lib/http/call";
+import { Bar } from "@/components/ui/bar";
 import type { TabItem } from "@/components/ui/view-tabs";
-import { call, ProblemError } from "@/lib/http/call";
+import { call, ProblemError, speakFor } from "@/lib/http/call";
 import { countHeld, forgetHeld } from "@/lib/runs/held";
 import type { SignedIn } from "@/lib/team/schema";
 

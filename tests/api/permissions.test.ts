@@ -78,6 +78,7 @@ const expected: Record<string, Access> = {
   handOverRun: ["designer", "librarian", "admin"],
   listRunComments: ["designer", "librarian", "admin", "auditor"], // an installer only of runs assigned to them
   addRunComment: ["designer", "librarian", "admin"],
+  readAffected: ["designer", "librarian", "admin", "auditor"], // an installer only of runs assigned to them
   computeLine: roles,
   computeSweep: roles,
   computeProfile: roles,
@@ -95,7 +96,7 @@ const expected: Record<string, Access> = {
 const hiddenFromInstallers = [
   ...["readCable", "listCableRevisions", "readCableRevision", "listCableEvents"],
   ...["listCableComments", "listCableReports", "reportCable", "listWaivers"],
-  ...["readRun", "listRunComments"],
+  ...["readRun", "listRunComments", "readAffected"],
 ];
 
 let handlers: Map<string, Handler>;

@@ -10,6 +10,7 @@ import { beginRevision, changeDraft } from "@/lib/cables/revising/service";
 import { getOpenRevision } from "@/lib/cables/revisions/service";
 import { approveSchema } from "@/lib/cables/steps/schema";
 import { submit } from "@/lib/cables/steps/service";
+import { getAffected } from "@/lib/runs/affected/service";
 import { analyseRun } from "@/lib/runs/analysis";
 import { judgeable } from "@/lib/runs/effects/judge";
 import type { CableUses } from "@/lib/runs/effects/schema";
@@ -124,6 +125,11 @@ test("Once a revision has been approved, issued runs on the one before are affec
   const sent = submit(librarian, "lively", getOpenRevision(librarian, "lively").version, { note: "" });
   approve(admin, "lively", sent.version, approveSchema.parse({}));
   const later = run("lively", 6, []);
+  const affected = await getAffected(designer, issued.id);
+  expect(affected).toMatchObject({ isAffected: true, cables: [{ cableId: "lively", uses: 1, current: 2 }] });
+  const { now, then } = affected.effect!.effects[0]!;
+  expect(then.value! / now.value!).toBeCloseTo(matchedLoss(lossier, 7) / matchedLoss(coaxModel, 7), 3);
+  expect(await getAffected(designer, later.id)).toEqual({ isAffected: false, cables: [], effect: null });
   const { items } = await usesOf("lively");
   expect(
     Object.fromEntries(items.map(({ runId, isAffected, revisions }) => [runId, [isAffected, ...revisions]])),

@@ -1,5 +1,6 @@
 /** What can be asked of the effect of a cable on runs. */
 import { operation } from "@/lib/http/operation";
+import { affectedSchema } from "@/lib/runs/affected/schema";
 import { usesQuerySchema, usesSchema } from "@/lib/runs/effects/schema";
 
 export const readCableUses = operation({
@@ -10,4 +11,13 @@ export const readCableUses = operation({
   permission: "cables.readUses",
   query: usesQuerySchema,
   answer: { status: 200, description: "The runs, largest change first.", schema: usesSchema },
+});
+
+export const readAffected = operation({
+  id: "readAffected",
+  method: "GET",
+  path: "/runs/{runId}/affected",
+  summary: "Whether cables of a run have a later approved revision, and what taking it would change.",
+  permission: "runs.read",
+  answer: { status: 200, description: "The cables that have moved on, and the run both ways.", schema: affectedSchema },
 });
