@@ -1,10 +1,11 @@
-/** The demo's catalogue: 25 entries, each with one revision. */
+/** The demo's catalogue: 25 entries, each in the revision that people see. */
 import { database } from "@/db/client";
 import { cableRevisions, cables } from "@/db/schema/cables";
 import { derivedFigures } from "@/lib/cables/model";
 import type { Build, CableState, Construction, Family, Figure, Limits } from "@/lib/cables/schema";
 import { cableWords } from "@/lib/cables/words";
 import type { LineModel } from "@/lib/line/element";
+import lives from "@/seeds/data/cable-lives.json";
 import data from "@/seeds/data/cables.json";
 import { figuresOf, type GivenFigures } from "@/seeds/figures";
 import team from "@/seeds/data/team.json";
@@ -44,22 +45,29 @@ export function modelOf(figures: GivenFigures): LineModel {
   };
 }
 
+/** The number of the revision people see: those before it are in `cable-lives.ts`. */
+const currentNumber = (id: string) => 1 + lives.former.filter(({ cableId }) => cableId === id).length;
+
+/** When and why that revision was written: with the whole catalogue, or when it replaced a former one. */
+function writing(id: string) {
+  const { cableId, reason, createdAt, approvedAt: at } = lives.replaced;
+  return cableId === id
+    ? { reason, createdAt, approvedAt: at }
+    : { reason: "First entry.", createdAt: enteredAt, approvedAt };
+}
+
 function revisionOf(entry: Entry): typeof cableRevisions.$inferInsert {
   const { id, name, family, state, condition, construction, build, limits } = entry;
   const model = modelOf(entry.figures);
   const figures: Figure[] = figuresOf(entry.figures, family, build.dielectric);
-  const approval = neverApproved.includes(state) ? {} : { approvedById: approverId, approvedAt };
+  const { reason, createdAt, approvedAt: at } = writing(id);
+  const approval = neverApproved.includes(state) ? {} : { approvedById: approverId, approvedAt: at };
+  const revision = currentNumber(id);
+  const submittedAt = state === "draft" ? null : createdAt;
   return {
-    ...{
-      cableId: id,
-      revision: 1,
-      state,
-      condition,
-      reason: "First entry.",
-      authorId,
-      createdAt: enteredAt,
-      ...approval,
-    },
+    ...{ cableId: id, revision, state, condition, reason, authorId, createdAt, submittedAt, ...approval },
+    // One counter for all revisions of an entry; the former ones are at 1.
+    version: revision,
     ...{ name, family, model, construction, build, figures, limits },
     ...derivedFigures(model, construction, limits),
     words: cableWords(entry),
@@ -77,7 +85,8 @@ export function seedCables(): void {
       const { changes } = tx
         .insert(cables)
         .values({
-          ...{ id, teamId: team.team.id, designation, aliases, preferred, currentRevision: 1, createdAt: enteredAt },
+          ...{ id, teamId: team.team.id, designation, aliases, preferred, createdAt: enteredAt },
+          currentRevision: currentNumber(id),
           successorId: successor?.cableId,
           equivalence: successor?.equivalence,
         })

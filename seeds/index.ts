@@ -3,6 +3,8 @@ import { fileURLToPath } from "node:url";
 import { database } from "@/db/client";
 import { teams } from "@/db/schema/team";
 import { isDemo } from "@/lib/team/demo";
+import { seedCableEvents } from "@/seeds/cable-events";
+import { seedCableLives, seedCableRecords } from "@/seeds/cable-lives";
 import { seedCables } from "@/seeds/cables";
 import { seedNotices } from "@/seeds/notices";
 import { seedLots } from "@/seeds/lots";
@@ -14,8 +16,11 @@ import { seedFirstAdmin, seedTeam } from "@/seeds/team";
 export async function seedDemo(): Promise<void> {
   await seedTeam();
   seedCables();
+  seedCableLives();
+  seedCableEvents();
   seedLots();
   seedRuns();
+  seedCableRecords();
   seedNotices();
 }
 

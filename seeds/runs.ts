@@ -1,6 +1,7 @@
 /** The demo's runs. */
-import { and, eq, or, sql } from "drizzle-orm";
+import { and, eq, lte, max, or, sql } from "drizzle-orm";
 import { database } from "@/db/client";
+import { cableRevisions } from "@/db/schema/cables";
 import { runAssignees, runCables, runRevisions, runs } from "@/db/schema/runs";
 import { people, teams } from "@/db/schema/team";
 import { cableIdsOf } from "@/lib/runs/circuit";
@@ -10,10 +11,24 @@ import team from "@/seeds/data/team.json";
 
 type Seed = (typeof data.runs)[number];
 
+/** The revision of a cable that was approved last when a run was started; a later one leaves the run as it is. */
+function revisionThen(cableId: string, startedAt: string): number {
+  const approved = and(eq(cableRevisions.cableId, cableId), lte(cableRevisions.approvedAt, startedAt));
+  const row = database()
+    .select({ revision: max(cableRevisions.revision) })
+    .from(cableRevisions)
+    .where(approved)
+    .get();
+  return row?.revision ?? 1;
+}
+
 /** The run as the product describes it; the schemas check that the seed is one it would accept. */
 function runOf(seed: Seed, ownerName: string): Run {
   const { id, number, ownerId, state, condition, startedAt, assignees: _assignees, ...content } = seed;
-  const pinned = cableIdsOf(newRunSchema.parse(content).circuit).map((cableId) => ({ cableId, revision: 1 }));
+  const pinned = cableIdsOf(newRunSchema.parse(content).circuit).map((cableId) => ({
+    cableId,
+    revision: revisionThen(cableId, startedAt),
+  }));
   return runSchema.parse({
     ...{ ...content, id, number, state, condition, ownerId, ownerName, version: 1 },
     ...{ changedAt: startedAt, changedByName: ownerName, pinned },

@@ -6,9 +6,11 @@ import { Attenuation } from "@/components/cables/attenuation";
 import { DimensionedSection } from "@/components/cables/dimensioned-section";
 import { EntryConditions } from "@/components/cables/entry-conditions";
 import { EntryHead } from "@/components/cables/entry-head";
+import { EntryHistory } from "@/components/cables/entry-history";
 import { EntryReadings } from "@/components/cables/entry-readings";
+import { EntryReports } from "@/components/cables/entry-reports";
+import { EntrySteps } from "@/components/cables/entry-steps";
 import { PerMetre } from "@/components/cables/per-metre";
-import { RevisionList } from "@/components/cables/revision-list";
 import { enlargementFor, sectionRoomPx } from "@/components/cables/section-parts";
 import { Sources } from "@/components/cables/sources";
 import { StripBack } from "@/components/cables/strip-back";
@@ -20,8 +22,12 @@ import { CursorProvider } from "@/components/plot/cursor";
 import { StateNote } from "@/components/ui/state-mark";
 import { outerDiameterMm } from "@/lib/cables/line";
 import { lossTable, tableRange } from "@/lib/cables/loss-rows";
-import type { RevisionLine } from "@/lib/cables/revisions/service";
+import type { CableEvent } from "@/lib/cables/events/schema";
+import type { EntryStanding } from "@/lib/cables/possible-steps";
+import type { CableReport } from "@/lib/cables/reports/schema";
+import type { RevisionLine } from "@/lib/cables/revisions/schema";
 import type { Cable } from "@/lib/cables/schema";
+import type { Waiver } from "@/lib/cables/waivers/schema";
 import { modelAt } from "@/lib/cables/warm-model";
 import type { RunUse } from "@/lib/runs/uses/service";
 
@@ -32,6 +38,10 @@ interface Props {
   cable: Cable;
   successor: Cable | null;
   revisions: readonly RevisionLine[];
+  events: readonly CableEvent[];
+  waivers: readonly Waiver[];
+  reports: readonly CableReport[];
+  standing: EntryStanding;
   uses: { total: number; items: readonly RunUse[] };
   canStartRun: boolean;
 }
@@ -68,7 +78,8 @@ function Construction({ cable }: { cable: Cable }) {
 }
 
 /** One cable, whole. Frequency, temperature and what is held stand in the address. */
-export function Entry({ cable, successor, revisions, uses, canStartRun }: Props) {
+export function Entry(props: Props) {
+  const { cable, successor, revisions, events, waivers, reports, standing, uses, canStartRun } = props;
   const [asked, change] = useEntryAddress(cable.id);
   const warm = modelAt(cable.model, asked.temperatureC) ?? modelAt(cable.model, 20);
   const table = lossTable(cable.figures);
@@ -94,8 +105,15 @@ export function Entry({ cable, successor, revisions, uses, canStartRun }: Props)
           <Agreement cable={cable} />
           <Sources cable={cable} />
           <EntryRecords cable={cable} />
-          <RevisionList revisions={revisions} current={cable.revision} />
+          <EntryHistory {...{ revisions, events, waivers }} current={cable.revision} />
           <UsedIn {...uses} />
+          <EntrySteps cableId={cable.id} designation={cable.designation} standing={standing} />
+          <EntryReports
+            cableId={cable.id}
+            reports={reports}
+            mayReport={standing.mayReport}
+            maySettle={standing.mayReview}
+          />
         </div>
       </div>
     </CursorProvider>

@@ -1,6 +1,6 @@
 import { stateWords } from "@/components/cables/words";
 import { Section } from "@/components/ui/section";
-import type { RevisionLine } from "@/lib/cables/revisions/service";
+import type { RevisionLine } from "@/lib/cables/revisions/schema";
 
 interface Props {
   revisions: readonly RevisionLine[];

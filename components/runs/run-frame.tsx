@@ -4,6 +4,7 @@ import type { Route } from "next";
 import Link from "next/link";
 import { usePathname, useRouter } from "next/navigation";
 import { useEffect, type ReactNode } from "react";
+import { MovedOn } from "@/components/runs/moved-on";
 import { useRunEditor } from "@/components/runs/run-editor";
 import { Conflict, SavingNote } from "@/components/runs/saving-note";
 import { Button, ButtonLink } from "@/components/ui/button";
@@ -70,6 +71,7 @@ export function RunFrame({ head, children }: Props) {
         />
       </div>
       <Conflict />
+      <MovedOn runId={saved.id} />
       {children}
     </>
   );

@@ -1,27 +1,45 @@
 "use client";
 
+import { useQuery } from "@tanstack/react-query";
 import type { Route } from "next";
+import { useEffect } from "react";
 import { NoticesLink } from "@/components/team/notices-link";
 import { Bar } from "@/components/ui/bar";
-import { useEffect } from "react";
+import type { TabItem } from "@/components/ui/view-tabs";
 import { call, ProblemError, speakFor } from "@/lib/http/call";
 import { countHeld, forgetHeld } from "@/lib/runs/held";
 import type { SignedIn } from "@/lib/team/schema";
 
 interface Props {
   signedIn: SignedIn;
-  current: "/cables" | "/runs" | "/calculate" | "/notices" | "/team/letters";
+  current: "/cables" | "/runs" | "/calculate" | "/review" | "/notices" | "/team/letters";
   /** what a phone shows in place of the name */
   title: string;
   back?: Route;
   hasOwnFoot?: boolean;
 }
 
-const places: { href: Route; label: string }[] = [
+const places: TabItem[] = [
   { href: "/cables", label: "Catalogue" },
   { href: "/runs", label: "Runs" },
   { href: "/calculate" as Route, label: "Calculate" },
 ];
+
+/** Review is a place for those who review, and for those who may read it all. */
+const reviewing: readonly SignedIn["role"][] = ["librarian", "admin"];
+const readingReviews: readonly SignedIn["role"][] = [...reviewing, "auditor"];
+
+/** The places of somebody's role, with how many revisions wait for a reviewer. */
+function usePlaces({ role }: SignedIn): TabItem[] {
+  const isReviewer = reviewing.includes(role);
+  const { data } = useQuery({
+    queryKey: ["review", "waiting"],
+    queryFn: ({ signal }) => call<{ waiting: number }>("/review/waiting", { signal }),
+    enabled: isReviewer,
+  });
+  if (!readingReviews.includes(role)) return places;
+  return [...places, { href: "/review" as Route, label: "Review", count: data?.waiting }];
+}
 
 /** Ends the session and leaves nothing of the team's in the browser's memory: the door is loaded afresh. */
 async function signOut(personId: string) {
@@ -44,7 +62,7 @@ export function WorkBar({ signedIn, current, title, back, hasOwnFoot }: Props) {
   useEffect(() => speakFor(signedIn.person.id), [signedIn.person.id]);
   return (
     <Bar
-      places={places}
+      places={usePlaces(signedIn)}
       current={current}
       home="/runs"
       teamName={signedIn.team.name}

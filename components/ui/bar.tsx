@@ -4,7 +4,7 @@ import type { ReactNode } from "react";
 import { Lay } from "@/components/ui/lay";
 import { Mark, Wordmark } from "@/components/ui/mark";
 import { MemberMenu, type BarMember } from "@/components/ui/member-menu";
-import { FootTabs, type TabItem } from "@/components/ui/view-tabs";
+import { FootTabs, TabCount, type TabItem } from "@/components/ui/view-tabs";
 
 interface BarProps {
   places: TabItem[];
@@ -50,7 +50,7 @@ function Places({ places, current }: Pick<BarProps, "places" | "current">) {
   return (
     <nav aria-label="Places" className="ml-3.5 phone:hidden">
       <ul className="flex h-12.5 gap-5.5">
-        {places.map(({ href, label }) => (
+        {places.map(({ href, label, count }) => (
           <li key={href} className="h-full">
             <Link
               href={href}
@@ -62,6 +62,7 @@ function Places({ places, current }: Pick<BarProps, "places" | "current">) {
               }`}
             >
               {label}
+              <TabCount count={count} />
             </Link>
           </li>
         ))}

@@ -5,6 +5,19 @@ import type { ReactNode } from "react";
 export interface TabItem {
   href: Route;
   label: string;
+  /** what waits there; nothing is shown of none */
+  count?: number;
+}
+
+/** How much waits at a place, after its name. */
+export function TabCount({ count }: Pick<TabItem, "count">) {
+  if (!count) return null;
+  return (
+    <span className="figures ml-1.5 text-copper">
+      {count}
+      <span className="sr-only"> waiting</span>
+    </span>
+  );
 }
 
 interface ViewTabsProps {
@@ -77,6 +90,7 @@ export function FootTabs({ items, current, name }: FootTabsProps) {
                 className={`flex h-full items-center justify-center border-t-[3px] ${isCurrent ? "border-copper font-[640] text-ink" : "border-transparent font-[480] text-ink-2"}`}
               >
                 {item.label}
+                <TabCount count={item.count} />
               </Link>
             </li>
           );

@@ -26,6 +26,7 @@ export const cableEvents = sqliteTable(
     step: text("step", {
       enum: [
         "begin",
+        "edit",
         "submit",
         "approve",
         "return",

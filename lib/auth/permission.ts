@@ -35,8 +35,11 @@ export const permissions = {
   "cables.readUses": ["designer", "librarian", "admin", "auditor"],
   /** the letters the team has sent and those that wait */
   "team.readLetters": ["admin", "auditor"],
-  /** what the team has agreed on */
+  /** change what the team has agreed on */
   "team.rules": ["admin"],
+  "team.readRules": ["admin", "auditor"],
+  /** say something of a revision one may read */
+  "cables.comment": ["designer", "librarian", "admin"],
   /** limit lines of the team's own */
   "limits.write": ["librarian", "admin"],
   /** take back anybody's draft; hand over anybody's run */

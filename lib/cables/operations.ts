@@ -1,7 +1,9 @@
 /** What can be asked of `/cables`. */
+import { z } from "zod";
 import { cablePageSchema, cableQuerySchema } from "@/lib/cables/query";
 import { newCableSchema } from "@/lib/cables/new-cable";
 import { cableSchema } from "@/lib/cables/schema";
+import { daySchema } from "@/lib/cables/waivers/schema";
 import { operation } from "@/lib/http/operation";
 
 export const searchCatalogue = operation({
@@ -18,9 +20,10 @@ export const readCable = operation({
   id: "readCable",
   method: "GET",
   path: "/cables/{cableId}",
-  summary: "One entry, its current revision whole.",
+  summary: "One entry, its current revision whole; with `on`, as people saw it at the end of that day.",
   permission: "cables.read",
-  answer: { status: 200, description: "The entry.", schema: cableSchema },
+  query: z.strictObject({ on: daySchema("The day").optional().describe("a day of UTC, 2026-03-01") }),
+  answer: { status: 200, description: "The entry.", schema: cableSchema, hasEntityTag: true },
 });
 
 export const proposeCable = operation({

@@ -1,7 +1,7 @@
 /** Versions as entity tags (RFC 9110, section 8.8.3 and 13.1.1). */
 import { AppError } from "@/lib/http/errors";
 
-export function entityTag(version: number): string {
+export function entityTag(version: number | string): string {
   return `"${version}"`;
 }
 
@@ -11,7 +11,11 @@ export function entityTag(version: number): string {
  * @param stale - the refusal when the request means another one
  * @throws AppError `precondition_required` without the header
  */
-export function requireMatch(request: Request, current: number, stale: () => AppError): number {
+export function requireMatch<Version extends number | string>(
+  request: Request,
+  current: Version,
+  stale: () => AppError,
+): Version {
   const header = request.headers.get("if-match");
   if (header === null)
     throw new AppError("precondition_required", "Say which version you changed: send its ETag in If-Match.");

@@ -131,7 +131,7 @@ export function updateRun(actor: Actor, runId: string, version: number, change: 
   return database().transaction(
     (tx) => {
       const before = getChangeable(actor, runId, version);
-      const pinned = pinCables(actor, change.circuit ?? before.circuit, before.pinned);
+      const pinned = pinCables(actor, change.circuit ?? before.circuit, before.pinned, runId);
       const sentence = saveSentence(before, { ...before, ...change });
       if (sentence === undefined) return before;
       const changedAt = new Date().toISOString();

@@ -2,6 +2,9 @@
 import type { Analysis } from "@/lib/runs/analysis";
 import type { Target } from "@/lib/runs/schema";
 
+/** What a target is judged by: less than all the Line view shows. */
+export type Judgeable = Pick<Analysis, "band" | "worst" | "worstOver" | "wave">;
+
 /** The quantities that can be worked out now; a target on any other is shown as not worked out. */
 export const judged = ["loss", "returnLoss", "vswr", "voltage"] as const;
 export type Judged = (typeof judged)[number];
@@ -19,34 +22,39 @@ function atLoad(target: Target): boolean {
 }
 
 /** The band a target is judged over: its own, else the run's. */
-export function bandOf(target: Target, analysis: Analysis): readonly [number, number] {
+export function bandOf(target: Target, analysis: Pick<Judgeable, "band">): readonly [number, number] {
   return target.bandHz ?? analysis.band;
 }
 
 /** The value that decides, at its worst over the target's band. Targets on inner planes are not judged here. */
-function deciding(target: Target, analysis: Analysis): { value: number; frequencyHz: number | null } | null {
+function deciding(target: Target, analysis: Judgeable): { value: number; frequencyHz: number | null } | null {
   if (target.plane && !("at" in target.plane)) return null;
   const load = atLoad(target);
-  const { band, wave } = analysis;
+  const { band } = analysis;
   const [from, to] = bandOf(target, analysis);
-  const worst = from === band[0] && to === band[1] ? analysis.worst : analysis.worstOver([from, to]);
-  const found = {
-    loss: worst.loss,
-    returnLoss: load ? worst.loadReturnLoss : worst.sourceReturnLoss,
-    vswr: load ? worst.loadVswr : worst.sourceVswr,
-    voltage: wave && { value: wave.maxVoltageV * Math.SQRT2, frequencyHz: null },
-  }[target.quantity as Judged];
-  return found ?? null;
+  const worst = () => (from === band[0] && to === band[1] ? analysis.worst : analysis.worstOver([from, to]));
+  switch (target.quantity) {
+    case "loss":
+      return worst().loss;
+    case "returnLoss":
+      return load ? worst().loadReturnLoss : worst().sourceReturnLoss;
+    case "vswr":
+      return load ? worst().loadVswr : worst().sourceVswr;
+    case "voltage":
+      return analysis.wave && { value: analysis.wave.maxVoltageV * Math.SQRT2, frequencyHz: null };
+    default:
+      return null;
+  }
 }
 
-export function verdict(target: Target, analysis: Analysis): Verdict {
+export function verdict(target: Target, analysis: Judgeable): Verdict {
   const found = deciding(target, analysis);
   if (!found || Number.isNaN(found.value)) return { target, value: null, frequencyHz: null, isMet: null };
   const { atLeast = -Infinity, atMost = Infinity } = target;
   return { target, ...found, isMet: found.value >= atLeast && found.value <= atMost };
 }
 
-export function verdicts(targets: readonly Target[], analysis: Analysis): Verdict[] {
+export function verdicts(targets: readonly Target[], analysis: Judgeable): Verdict[] {
   return targets.map((target) => verdict(target, analysis));
 }
 

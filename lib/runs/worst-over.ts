@@ -26,12 +26,24 @@ export function worstOfSweep(run: PreparedRun, swept: Sweep, band: Band): WorstO
     const found = worstIn(swept.frequencies, curveHere, band, valueAt);
     return { ...found, value: sign * found.value };
   };
+  const found: Partial<WorstOver> = {};
+  // Each is looked for when it is first asked for: finding the worst costs as much as the sweep.
   return {
-    sourceReturnLoss: least((at) => at.returnLossDb, 1),
-    loadReturnLoss: least((at) => at.atPlanes[0]!.returnLossDb, 1),
-    loss: least((at) => at.transducerLossDb, -1),
-    sourceVswr: least((at) => at.vswr, -1),
-    loadVswr: least((at) => at.atPlanes[0]!.vswr, -1),
+    get sourceReturnLoss() {
+      return (found.sourceReturnLoss ??= least((at) => at.returnLossDb, 1));
+    },
+    get loadReturnLoss() {
+      return (found.loadReturnLoss ??= least((at) => at.atPlanes[0]!.returnLossDb, 1));
+    },
+    get loss() {
+      return (found.loss ??= least((at) => at.transducerLossDb, -1));
+    },
+    get sourceVswr() {
+      return (found.sourceVswr ??= least((at) => at.vswr, -1));
+    },
+    get loadVswr() {
+      return (found.loadVswr ??= least((at) => at.atPlanes[0]!.vswr, -1));
+    },
   };
 }
 

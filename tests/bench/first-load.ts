@@ -17,6 +17,7 @@ const pages = [
   "/cables",
   "/notices",
   "/limits",
+  "/cables/c50-f10",
   "/calculate",
   "/calculate/pad",
   "/calculate/stub",

@@ -1,4 +1,5 @@
 /** `npm run bench`: how fast the product is, as ratios within one run. Nothing here fails a build; figures go into the notes. */
+import { benchEffects } from "@/tests/bench/effects";
 import { benchEngine } from "@/tests/bench/engine";
 import { benchFirstLoad } from "@/tests/bench/first-load";
 import { benchMatchedLoss } from "@/tests/bench/matched-loss";
@@ -15,6 +16,7 @@ benchTouchstone();
 benchStep();
 benchMatchedLoss();
 benchTolerance();
+benchEffects();
 await benchSearch();
 await benchImport();
 await benchFirstLoad();

@@ -1,11 +1,16 @@
 import { readFileSync, readdirSync } from "node:fs";
-import { eq } from "drizzle-orm";
+import { and, eq } from "drizzle-orm";
 import { describe, expect, test } from "vitest";
 import { database } from "@/db/client";
 import { cableRevisions, cables } from "@/db/schema/cables";
+import { notices } from "@/db/schema/notices";
 import { people, teams } from "@/db/schema/team";
 import { findSessionActor, signIn } from "@/lib/auth/service";
 import { lossDbPer100m } from "@/lib/cables/model";
+import { listEvents } from "@/lib/cables/events/service";
+import { getCableOn } from "@/lib/cables/history/service";
+import { getQueue } from "@/lib/cables/queue/service";
+import { getRevision, listRevisions } from "@/lib/cables/revisions/service";
 import { cableSchema } from "@/lib/cables/schema";
 import { getCable } from "@/lib/cables/service";
 import { circuitSchema } from "@/lib/runs/circuit-schema";
@@ -43,9 +48,9 @@ describe("The demo", () => {
     expect(everything()).toEqual(before);
   });
 
-  test("It holds twelve people, 25 entries and runs R1 and R5", () => {
+  test("It holds twelve people, 26 entries and runs R1 and R5", () => {
     expect(database().select().from(people).all()).toHaveLength(12);
-    expect(database().select().from(cables).all()).toHaveLength(25);
+    expect(database().select().from(cables).all()).toHaveLength(26);
   });
 
   test("What its people were told leads to pages of the product, and is of a kind it has", async () => {
@@ -64,12 +69,17 @@ describe("The demo", () => {
 
   test.each(cableData.cables)("$designation is an entry the product would accept, whole", async ({ id }) => {
     const librarian = await signedIn("nils.ferrant@quillhaven.example");
-    expect(cableSchema.parse(getCable(librarian, id))).toMatchObject({ id, revision: 1 });
+    expect(cableSchema.parse(getCable(librarian, id))).toMatchObject({ id, revision: id === "c75-f7" ? 3 : 1 });
   });
 
   // The table gives three decimals, the model's figures three to five digits: half a last digit and 0.1 %.
   test.each(cableData.cables)("$designation loses at each frequency what its loss table says", ({ id, figures }) => {
-    const row = database().select().from(cableRevisions).where(eq(cableRevisions.cableId, id)).get();
+    const row = database()
+      .select({ model: cableRevisions.model })
+      .from(cableRevisions)
+      .innerJoin(cables, eq(cables.currentRevision, cableRevisions.revision))
+      .where(and(eq(cableRevisions.cableId, id), eq(cables.id, id)))
+      .get();
     const frequencies = { "1MHz": 1e6, "10MHz": 1e7, "100MHz": 1e8, "1GHz": 1e9 };
     for (const [at, hz] of Object.entries(frequencies)) {
       const stated = figures.lossDbPer100m[at as keyof typeof frequencies];
@@ -94,6 +104,52 @@ describe("The demo", () => {
       { cableId: "c50-f28", revision: 1 },
     ]);
     expect(circuitSchema.safeParse(run.circuit).success).toBe(true);
+  });
+
+  test("The import whose figures contradict each other is quarantined, and the checks say by how much", async () => {
+    const librarian = await signedIn("nils.ferrant@quillhaven.example");
+    const { state, checks } = getRevision(librarian, "x-imp-07", 1);
+    expect(state).toBe("quarantined");
+    const triangle = checks.find(({ check }) => check === "triangle");
+    expect(triangle?.verdict).toBe("contradiction");
+    expect(triangle?.percent).toBeCloseTo(25, 0);
+  });
+
+  test("C75-F7 stands at its third revision, R5 still uses the second, and its owner has been told", async () => {
+    const owen = await signedIn("owen.castlebay@quillhaven.example");
+    expect(listRevisions(owen, "c75-f7").map(({ revision, state }) => [revision, state])).toEqual([
+      [3, "approved"],
+      [2, "superseded"],
+      [1, "superseded"],
+    ]);
+    expect(getRun(owen, "studio-2-tie-line").pinned).toContainEqual({ cableId: "c75-f7", revision: 2 });
+    const told = database().select().from(notices).where(eq(notices.personId, owen.personId)).all();
+    expect(told.map(({ text }) => text)).toContainEqual(expect.stringMatching(/C75-F7 .*revision 3.*R5/));
+  });
+
+  test("C93-F4 was returned once with its note; C50-F28 waits for Nils Ferrant, who did not write it", async () => {
+    const nils = await signedIn("nils.ferrant@quillhaven.example");
+    expect(listEvents(nils, "c93-f4").map(({ step, note }) => [step, note])).toEqual([
+      ["begin", "First entry."],
+      ["submit", ""],
+      ["return", "tan δ estimated, not measured"],
+      ["submit", "Marked as an estimate."],
+    ]);
+    const waiting = getQueue(nils).waiting.find(({ cableId }) => cableId === "c50-f28");
+    expect(waiting).toMatchObject({ revision: 2, authorName: "Libby Thornquist", refusal: null });
+    expect(getRevision(nils, "c50-f28", 2).checks.filter(({ verdict }) => verdict === "contradiction")).toEqual([]);
+  });
+
+  test("Every entry stands in the state that its steps led to", async () => {
+    const nils = await signedIn("nils.ferrant@quillhaven.example");
+    for (const { id } of database().select({ id: cables.id }).from(cables).all()) {
+      const { state, condition, revision } = getCable(nils, id);
+      expect(getCableOn(nils, id, new Date().toISOString().slice(0, 10)), id).toMatchObject({
+        state,
+        condition,
+        revision,
+      });
+    }
   });
 
   test("A database that holds the demo is not started without it: the demo's passwords are public", () => {

@@ -1,15 +1,33 @@
 /** Drafts of entries: written by anybody who may propose, taken back while nobody has reviewed them. */
-import { and, eq } from "drizzle-orm";
+import { and, eq, ne } from "drizzle-orm";
 import { database } from "@/db/client";
+import { cableEvents } from "@/db/schema/cable-records";
 import { cableRevisions, cables } from "@/db/schema/cables";
 import type { Actor } from "@/lib/auth/actor";
 import { may, requirePermission } from "@/lib/auth/permission";
-import { derivedFigures } from "@/lib/cables/model";
+import { revisionValues } from "@/lib/cables/drafts/values";
+import { recordEvent } from "@/lib/cables/events/service";
 import type { NewCable } from "@/lib/cables/new-cable";
+import { findOpenNumber, getRevision } from "@/lib/cables/revisions/service";
 import type { Cable } from "@/lib/cables/schema";
 import { getCable } from "@/lib/cables/service";
-import { cableWords } from "@/lib/cables/words";
 import { AppError } from "@/lib/http/errors";
+
+/**
+ * Refuses a designation that another entry of the team has.
+ * @throws AppError `conflict`
+ */
+export function requireFree(actor: Actor, designation: string, cableId = ""): void {
+  const isTaken = database()
+    .select({ id: cables.id })
+    .from(cables)
+    .where(and(eq(cables.teamId, actor.teamId), eq(cables.designation, designation), ne(cables.id, cableId)))
+    .get();
+  if (isTaken)
+    throw new AppError("conflict", `The catalogue already has ${designation}.`, {
+      designation: ["Already in the catalogue."],
+    });
+}
 
 /**
  * Adds a draft to the team's catalogue.
@@ -17,34 +35,19 @@ import { AppError } from "@/lib/http/errors";
  */
 export function createDraft(actor: Actor, input: NewCable): Cable {
   requirePermission(actor, "cables.propose");
-  const { designation, aliases, name, family, model, construction, build, figures, limits } = input;
-  const derived = derivedFigures(model, construction, limits);
-  if (!Object.values(derived).every((value) => value === null || Number.isFinite(value)))
-    throw new AppError("invalid_input", "The entry was not added.", {
-      model: ["These values give no finite impedance, velocity or loss."],
-    });
+  const { designation, aliases } = input;
+  const values = revisionValues(input);
   return database().transaction(
     (tx) => {
-      const isTaken = tx
-        .select({ id: cables.id })
-        .from(cables)
-        .where(and(eq(cables.teamId, actor.teamId), eq(cables.designation, designation)))
-        .get();
-      if (isTaken)
-        throw new AppError("conflict", `The catalogue already has ${designation}.`, {
-          designation: ["Already in the catalogue."],
-        });
+      requireFree(actor, designation);
       const id = crypto.randomUUID();
       const createdAt = new Date().toISOString();
+      const reason = "First entry.";
       tx.insert(cables).values({ id, teamId: actor.teamId, designation, aliases, currentRevision: 1, createdAt }).run();
       tx.insert(cableRevisions)
-        .values({
-          ...{ cableId: id, revision: 1, state: "draft", reason: "First entry.", authorId: actor.personId, createdAt },
-          ...{ name, family, model, construction, build, figures, limits },
-          ...derived,
-          words: cableWords(input),
-        })
+        .values({ cableId: id, revision: 1, state: "draft", reason, authorId: actor.personId, createdAt, ...values })
         .run();
+      recordEvent(actor, { cableId: id, revision: 1, step: "begin", state: "draft", note: reason });
       return getCable(actor, id);
     },
     { behavior: "immediate" },
@@ -52,24 +55,30 @@ export function createDraft(actor: Actor, input: NewCable): Cable {
 }
 
 /**
- * Takes a draft back. By its author, a librarian or an admin, and only while it was never submitted.
+ * Takes a draft back, and with its only revision the entry. By its author, a librarian or an admin, and only while it was
+ * never submitted.
  * @throws AppError `not_found`, `forbidden`, `conflict`
  */
 export function deleteDraft(actor: Actor, cableId: string): void {
   requirePermission(actor, "cables.propose");
   database().transaction(
     (tx) => {
-      const cable = getCable(actor, cableId);
-      const revision = tx
-        .select({ authorId: cableRevisions.authorId })
-        .from(cableRevisions)
-        .where(and(eq(cableRevisions.cableId, cableId), eq(cableRevisions.revision, cable.revision)))
-        .get();
-      if (cable.state !== "draft" || cable.revision !== 1)
+      const open = findOpenNumber(actor, cableId);
+      const draft = open === undefined ? undefined : getRevision(actor, cableId, open);
+      if (draft?.state !== "draft" || draft.submittedAt !== null)
         throw new AppError("conflict", "Only a draft that was never submitted can be taken back.");
-      if (revision?.authorId !== actor.personId && !may(actor, "team.tidy"))
+      if (draft.authorId !== actor.personId && !may(actor, "team.tidy"))
         throw new AppError("forbidden", "A draft is taken back by its author, a librarian or an admin.");
-      tx.delete(cables).where(eq(cables.id, cableId)).run();
+      const { revision } = draft;
+      if (draft.isCurrent) tx.delete(cables).where(eq(cables.id, cableId)).run();
+      else {
+        const ofCable = and(eq(cableRevisions.cableId, cableId), eq(cableRevisions.revision, revision));
+        // What nobody was ever shown leaves no trace: its number is given again.
+        tx.delete(cableEvents)
+          .where(and(eq(cableEvents.cableId, cableId), eq(cableEvents.revision, revision)))
+          .run();
+        tx.delete(cableRevisions).where(ofCable).run();
+      }
     },
     { behavior: "immediate" },
   );

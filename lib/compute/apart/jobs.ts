@@ -15,6 +15,7 @@ import { touchstoneAnswer } from "@/lib/compute/touchstone/answer";
 import { lineAnswer, profileAnswer, sweepAnswer } from "@/lib/compute/answers";
 import { matchesAnswer } from "@/lib/compute/matches/answer";
 import { stepAnswer } from "@/lib/compute/step/answer";
+import { effectsAnswer } from "@/lib/runs/effects/answer";
 
 export const jobs = {
   line: lineAnswer,
@@ -32,6 +33,7 @@ export const jobs = {
   swap: swapAnswer,
   solve: solveAnswer,
   importRows: readRows,
+  effects: effectsAnswer,
 };
 
 export type Jobs = typeof jobs;

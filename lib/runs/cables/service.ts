@@ -3,15 +3,14 @@ import { asc, eq } from "drizzle-orm";
 import { database } from "@/db/client";
 import { runCables } from "@/db/schema/runs";
 import type { Actor } from "@/lib/auth/actor";
-import { isUsable } from "@/lib/cables/model";
+import { isUsable, unapprovedStates } from "@/lib/cables/model";
 import type { Cable, CableState } from "@/lib/cables/schema";
 import { cableFinder } from "@/lib/cables/service";
+import { listWaivedCables } from "@/lib/cables/waivers/service";
 import { AppError, type FieldErrors } from "@/lib/http/errors";
-import { cableRefsOf, type CableRef } from "@/lib/runs/circuit";
+import { cableRefsOf } from "@/lib/runs/circuit";
 import type { Circuit } from "@/lib/runs/circuit-schema";
-import type { Run } from "@/lib/runs/schema";
-
-export type Pinned = Run["pinned"];
+import { type Pinned, pinnedRef } from "@/lib/runs/pins";
 
 const refusals: Partial<Record<CableState, string>> = {
   draft: "is a draft; only approved cables go into a run",
@@ -26,23 +25,22 @@ function refusalOf(cable: Cable): string {
   return `${cable.designation} ${refusals[cable.state]}${instead}.`;
 }
 
-/** The revision a reference means in a run: its own, else the one the run already pins, else the current one. */
-function asked(ref: CableRef, pinned: Pinned): CableRef {
-  const pin = pinned.find((one) => one.cableId === ref.cableId);
-  return { cableId: ref.cableId, revision: ref.revision ?? pin?.revision };
-}
+/** What was never approved goes into no run, waiver or not. */
+const isWaived = ({ id, state }: Cable, waived: Set<string>) => waived.has(id) && !unapprovedStates.includes(state);
 
 /**
  * The revisions a circuit uses, once each.
  * @param pinned - what the run uses already: that may stay, whatever has become of it
+ * @param runId - the run, once there is one: a waiver lets it have what others may not
  * @throws AppError `invalid_input` with a sentence at every reference that is unknown or must not be used anew
  */
-export function pinCables(actor: Actor, circuit: Circuit, pinned: Pinned): Pinned {
-  const refs = cableRefsOf(circuit).map(({ path, ref }) => ({ path, ref: asked(ref, pinned) }));
+export function pinCables(actor: Actor, circuit: Circuit, pinned: Pinned, runId?: string): Pinned {
+  const refs = cableRefsOf(circuit).map(({ path, ref }) => ({ path, ref: pinnedRef(ref, pinned) }));
   const find = cableFinder(
     actor,
     refs.map(({ ref }) => ref),
   );
+  const waived = runId === undefined ? new Set<string>() : listWaivedCables(runId);
   const fields: FieldErrors = {};
   const pins = new Map<string, Pinned[number]>();
   for (const { path, ref } of refs) {
@@ -50,7 +48,8 @@ export function pinCables(actor: Actor, circuit: Circuit, pinned: Pinned): Pinne
     const isPinned = pinned.some((pin) => pin.cableId === cable?.id && pin.revision === cable.revision);
     if (!cable)
       fields[`circuit.${path}.cableId`] = ["There is no such cable, or no such revision of it, in the catalogue."];
-    else if (!isPinned && !isUsable(cable.state)) fields[`circuit.${path}.cableId`] = [refusalOf(cable)];
+    else if (!isPinned && !isUsable(cable.state) && !isWaived(cable, waived))
+      fields[`circuit.${path}.cableId`] = [refusalOf(cable)];
     else pins.set(`${cable.id} ${cable.revision}`, { cableId: cable.id, revision: cable.revision });
   }
   if (Object.keys(fields).length > 0) throw new AppError("invalid_input", "A cable of the run cannot be used.", fields);

@@ -4,8 +4,12 @@ import { Entry } from "@/components/cables/entry";
 import { WorkBar } from "@/components/team/work-bar";
 import { currentActor } from "@/lib/auth/actor";
 import { may } from "@/lib/auth/permission";
+import { listEvents } from "@/lib/cables/events/service";
+import { listReports } from "@/lib/cables/reports/service";
 import { listRevisions } from "@/lib/cables/revisions/service";
 import { getCable, listReferredCables } from "@/lib/cables/service";
+import { getStanding } from "@/lib/cables/standing/service";
+import { listWaivers } from "@/lib/cables/waivers/service";
 import { listUses } from "@/lib/runs/uses/service";
 import { describeActor } from "@/lib/team/service";
 
@@ -33,6 +37,10 @@ export default async function CablePage({ params }: Props) {
           cable={cable}
           successor={successor ?? null}
           revisions={listRevisions(actor, cableId)}
+          events={listEvents(actor, cableId)}
+          waivers={listWaivers(actor, cableId)}
+          reports={listReports(actor, cableId)}
+          standing={getStanding(actor, cableId)}
           uses={listUses(actor, cableId)}
           canStartRun={may(actor, "runs.write")}
         />

@@ -1,0 +1,9 @@
+import { stepAnswer } from "@/app/api/v1/cables/[cableId]/step-answer";
+import { release } from "@/lib/cables/steps/service";
+import { getCurrentRevision } from "@/lib/cables/revisions/service";
+import { releaseCable } from "@/lib/cables/steps/operations";
+import { handle, route } from "@/lib/http/handle";
+
+export const { GET, POST, PUT, PATCH, DELETE, OPTIONS } = route({
+  POST: handle(releaseCable, (asked) => stepAnswer(asked, getCurrentRevision, release)),
+});
