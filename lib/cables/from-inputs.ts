@@ -4,10 +4,10 @@
  */
 import type { EntryInputs } from "@/lib/cables/inputs";
 import { derivedFigures } from "@/lib/cables/model";
-import type { Construction, Family } from "@/lib/cables/schema";
+import type { Build, Construction, Family } from "@/lib/cables/schema";
 import { constructionWay } from "@/lib/cables/ways/construction-way";
 import { type Estimate, exactly, share, within } from "@/lib/cables/ways/estimate";
-import { fitOf, smoothCopperResistance, solidCopper, usualForm, withLoop } from "@/lib/cables/ways/loss-way";
+import { fitOf, loopOf, smoothCopperResistance, solidCopper, usualForm, withLoop } from "@/lib/cables/ways/loss-way";
 import { nominalWay } from "@/lib/cables/ways/nominal-way";
 import { readingsWay } from "@/lib/cables/ways/readings-way";
 import { firstSaid, waysInOrder } from "@/lib/cables/ways/ruling";
@@ -21,6 +21,8 @@ import type { ModelFit } from "@/lib/line/fit";
 export interface Entered {
   family: Family;
   construction: Construction | null;
+  /** for the make of the conductor */
+  build?: Build | null;
   inputs: EntryInputs;
   /** what no way in says of the model and an edit must not lose: loss slopes, leakage, another metal's coefficient */
   kept?: Pick<LineModel, "lossSlopes" | "g0SPerM" | "temperatureCoefficientPerK">;
@@ -49,10 +51,10 @@ export interface Worked {
   notes: string[];
 }
 
-function waysOf({ family, construction, inputs }: Entered): Ways {
+function waysOf({ family, construction, build, inputs }: Entered): Ways {
   const { nominal, readings, sweep, form = usualForm(family) } = inputs;
   return {
-    ...(construction && { construction: constructionWay(construction, family) }),
+    ...(construction && { construction: constructionWay(construction, family, build) }),
     ...(nominal && { nominal: nominalWay(nominal, family) }),
     ...(readings && { readings: readingsWay(readings, form) }),
     ...(sweep?.model && { sweep: sweepWay(sweep.model) }),
@@ -69,13 +71,11 @@ function sweepWay(model: LineModel): WayResult {
     velocityFactor: within(velocityFactor, spread),
     capacitance: within(capacitance, 2 * spread),
     inductance: within(inductance, 2 * spread),
-    loopResistance: within(loopOf(model.conductors), usualSpreads.resistance),
+    loopResistance: within(loopOf(model), usualSpreads.resistance),
     model,
     notes: [],
   };
 }
-
-const loopOf = (conductors: readonly Conductor[]) => conductors.reduce((sum, { r0OhmPerM }) => sum + r0OhmPerM, 0);
 
 interface Known {
   z0: Estimate;
@@ -168,7 +168,7 @@ export function fromInputs(entered: Entered): Worked {
     modelFromNominal({ ...line, conductors, ...(lossTangent > 0 && { lossTangent }), ...kept }),
   );
   if (!model || !isFinite(model)) return nothing(ways, "These values give no finite impedance, velocity or loss.");
-  const resistance = from ?? (loopOf(conductors) > 0 ? loss.from : null);
+  const resistance = from ?? (loopOf({ conductors }) > 0 ? loss.from : null);
   return {
     ways,
     model,

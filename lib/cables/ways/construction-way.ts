@@ -1,11 +1,12 @@
 /** What a construction says of its cable. Pure. */
-import type { Construction, Family } from "@/lib/cables/schema";
+import type { Build, Construction, Family } from "@/lib/cables/schema";
 import { propagated, within } from "@/lib/cables/ways/estimate";
+import { loopOf, withLoop } from "@/lib/cables/ways/loss-way";
 import { unlessRefused } from "@/lib/cables/ways/unless-refused";
 import { usualSpreads } from "@/lib/cables/ways/usual-spreads";
 import type { WayResult } from "@/lib/cables/ways/way";
 import { geometryNotes, geometryOf } from "@/lib/compute/geometry/answer";
-import { roundConductor } from "@/lib/line/conductor-shape";
+import type { LineModel } from "@/lib/line/element";
 import type { Geometry } from "@/lib/line/geometry";
 
 /** The construction with its two sizes and its permittivity replaced. */
@@ -28,14 +29,38 @@ function impossible(construction: Construction): string | null {
   return effectivePermittivity >= 1 ? null : "The permittivity is at least 1.";
 }
 
-/** The resistance of the inner conductor, or of one wire with its lay, ohm per metre of cable. */
-function conductorResistance(construction: Construction, { r0, model }: Geometry): number {
-  if (construction.kind === "pair") return r0 / 2;
-  const resistivity = construction.conductorResistivityOhmM;
-  return model.conductors[0]?.r0OhmPerM ?? roundConductor(construction.innerMm / 1000, resistivity).r0OhmPerM;
+/** Copper in the circle round a strand of round wires: 7 of 9 for seven of them, a little less for more. */
+const strandFill = 0.77;
+/** A strand is longer than its cable by its lay. */
+const strandLay = 1.02;
+
+/**
+ * Dc resistance of a conductor over that of a solid one of its diameter: by the cross-section its words state, else by how
+ * full a strand usually is. Loss at high frequency is not changed by it.
+ */
+function strandedTimes(construction: Construction, build: Build | null | undefined): number {
+  const diameter = construction.kind === "coax" ? construction.innerMm : construction.wireMm;
+  const stated = Number(/(\d+(?:\.\d+)?)\s*mm²/.exec(build?.conductor ?? "")?.[1]);
+  if (stated > 0) return (Math.PI * diameter ** 2) / 4 / stated;
+  return build?.isStranded ? strandLay / strandFill : 1;
 }
 
-export function constructionWay(construction: Construction, family: Family): WayResult {
+/** A model whose conductor, or wires, have so many times the dc resistance and the same loss at high frequency. */
+function stranded(model: LineModel, times: number, kind: Construction["kind"]): LineModel {
+  const [first, ...rest] = model.conductors;
+  if (!first || times === 1) return model;
+  const conductors = kind === "pair" ? model.conductors : [first];
+  const loop = conductors.reduce((sum, { r0OhmPerM }) => sum + r0OhmPerM, 0);
+  return { ...model, conductors: [...withLoop(conductors, loop * times), ...(kind === "pair" ? [] : rest)] };
+}
+
+/** The resistance of the inner conductor, or of one wire with its lay, ohm per metre of cable. */
+function conductorResistance(kind: Construction["kind"], model: LineModel): number {
+  return (model.conductors[0]?.r0OhmPerM ?? NaN) / (kind === "pair" ? 2 : 1);
+}
+
+/** @param build - for the make of the conductor; without it a solid one */
+export function constructionWay(construction: Construction, family: Family, build?: Build | null): WayResult {
   const refusal = impossible(construction);
   if (refusal !== null) return { refusal, notes: [] };
   const [inner, outer, permittivity] =
@@ -55,16 +80,17 @@ export function constructionWay(construction: Construction, family: Family): Way
     }, from);
   const geometry = unlessRefused(() => geometryOf(construction));
   if (!geometry) return { refusal: "A cable of this construction cannot be worked out.", notes: [] };
-  const { model, notes } = geometry;
+  const times = strandedTimes(construction, build);
+  const withStrands = (line: LineModel) => stranded(line, times, construction.kind);
   return {
     z0: of(({ z0 }) => z0),
     velocityFactor: of(({ velocityFactor }) => velocityFactor),
     capacitance: of(({ capacitance }) => capacitance),
     inductance: of(({ inductance }) => inductance),
-    loopResistance: of(({ r0 }) => r0),
-    conductorResistance: of((moved) => conductorResistance(construction, moved)),
+    loopResistance: of(({ model }) => loopOf(withStrands(model))),
+    conductorResistance: of(({ model }) => conductorResistance(construction.kind, withStrands(model))),
     lossTangent: construction.lossTangent,
-    model,
-    notes: geometryNotes(notes),
+    model: withStrands(geometry.model),
+    notes: geometryNotes(geometry.notes),
   };
 }

@@ -5,7 +5,7 @@ import { type Provenance, sourceWords } from "@/lib/cables/provenance";
 import type { Figure } from "@/lib/cables/schema";
 import type { Nominal } from "@/lib/cables/ways/nominal-way";
 import { usualMeterHz, type SampleReadings } from "@/lib/cables/ways/readings-way";
-import type { LossTableInput } from "@/lib/cables/ways/loss-way";
+import { loopOf, type LossTableInput } from "@/lib/cables/ways/loss-way";
 import { nominalFigures } from "@/lib/line/cable";
 
 const unnamed = "the entry names no source";
@@ -121,7 +121,7 @@ function derivedRows({ model, ruled, uncertainty }: Worked, stated: ReadonlySet<
         ...(toleranceSi && { toleranceSi }),
       };
     });
-  const r0 = model.conductors.reduce((sum, { r0OhmPerM }) => sum + r0OhmPerM, 0);
+  const r0 = loopOf(model);
   const loop: Figure[] =
     stated.has("r0OhmPerM") || !ruled.resistance
       ? []

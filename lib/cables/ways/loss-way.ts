@@ -6,7 +6,7 @@ import { geometryOf } from "@/lib/compute/geometry/answer";
 import type { KnownLine } from "@/lib/line/closed-mapping";
 import { roundConductor, surfaceResistance, tubeConductor } from "@/lib/line/conductor-shape";
 import { DB_PER_NEPER, MU0, SPEED_OF_LIGHT } from "@/lib/line/constants";
-import type { Conductor, ConductorForm } from "@/lib/line/element";
+import type { Conductor, ConductorForm, LineModel } from "@/lib/line/element";
 import { fitModel, type ModelFit } from "@/lib/line/fit";
 import { USUAL_SHIELD_WALL } from "@/lib/line/geometry";
 import { fitLossTable, type LossRow } from "@/lib/line/loss-table";
@@ -78,12 +78,16 @@ export function smoothCopperResistance(
 /** √(μ0/ε0), ohm */
 const freeSpaceImpedance = MU0 * SPEED_OF_LIGHT;
 
+/** Dc resistance of the loop, ohm per metre. */
+export const loopOf = ({ conductors }: Pick<LineModel, "conductors">) =>
+  conductors.reduce((sum, { r0OhmPerM }) => sum + r0OhmPerM, 0);
+
 /**
  * Conductors with another dc resistance and the same loss at high frequency: R0 times n and the corner times n² leave
  * R0·√(ω/2ωs) as it is.
  */
 export function withLoop(conductors: readonly Conductor[], loop: number): Conductor[] {
-  const now = conductors.reduce((sum, { r0OhmPerM }) => sum + r0OhmPerM, 0);
+  const now = loopOf({ conductors: [...conductors] });
   if (!(now > 0)) return [{ form: "constant", r0OhmPerM: loop }];
   const n = loop / now;
   if (!(n > 0)) return [{ form: "constant", r0OhmPerM: 0 }];

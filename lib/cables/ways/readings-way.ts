@@ -1,6 +1,7 @@
 /** What a meter's readings of a sample say of its cable. Pure. */
 import type { EntryInputs } from "@/lib/cables/inputs";
 import { exactly, type Estimate, propagated, within } from "@/lib/cables/ways/estimate";
+import { loopOf } from "@/lib/cables/ways/loss-way";
 import { unlessRefused } from "@/lib/cables/ways/unless-refused";
 import { usualSpreads } from "@/lib/cables/ways/usual-spreads";
 import type { WayResult } from "@/lib/cables/ways/way";
@@ -50,8 +51,6 @@ const spreads: Record<(typeof moved)[number], number> = {
   delay: usualSpreads.reading.delay,
 };
 
-const loopOf = ({ model }: ReadModel) => model.conductors.reduce((sum, { r0OhmPerM }) => sum + r0OhmPerM, 0);
-
 /** What little a sample says that gives no line: capacitance or resistance alone. */
 function parts({ length, openCapacitance, shortResistance }: Readings): Partial<WayResult> {
   const perMetre = (value: number, spread: number): Estimate =>
@@ -94,7 +93,7 @@ export function readingsWay(sample: SampleReadings, form: ConductorForm): WayRes
     velocityFactor: of(({ model }) => nominalFigures(model).velocityFactor),
     capacitance: of(({ model }) => model.cFPerM),
     inductance: of(({ model }) => model.lInfHPerM),
-    ...(readings.shortResistance !== undefined && { loopResistance: of(loopOf) }),
+    ...(readings.shortResistance !== undefined && { loopResistance: of(({ model }) => loopOf(model)) }),
     model: whole.model,
     notes: whole.notes.map((note) => sentences[note]),
   };
