@@ -1,6 +1,6 @@
 /** Whether an entry agrees with itself, told in sentences: what a reviewer reads before deciding. Pure. */
-import { agreementOfEntry } from "@/lib/cables/agreement";
-import { type Check, type Checked, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import { agreementOfEntry, type Verdict } from "@/lib/cables/agreement";
+import { percentWords, verdictOf } from "@/lib/cables/checking/check";
 import {
   conductorChecks,
   constructionChecks,
@@ -14,6 +14,24 @@ import { readingChecks } from "@/lib/cables/checking/readings";
 import { rowChecks } from "@/lib/cables/checking/rows";
 import { coreCapacitanceChecks, inductanceChecks, triangleChecks } from "@/lib/cables/checking/triangle";
 import { velocityChecks } from "@/lib/cables/checking/velocity";
+import type { EntryInputs } from "@/lib/cables/inputs";
+import type { Cable } from "@/lib/cables/schema";
+
+/** What a check says of an entry. */
+export interface Check {
+  /** its name; a reviewer's answer is kept under it */
+  check: string;
+  verdict: Verdict;
+  sentence: string;
+  /** how far apart, per cent */
+  percent?: number;
+  /** what does not fit the rest */
+  culprit?: string;
+}
+
+export type Checked = Pick<Cable, "model" | "figures" | "construction" | "build" | "limits" | "family"> & {
+  inputs?: EntryInputs | null;
+};
 
 /** The model that runs are worked out with against the figures stated. */
 function modelChecks({ percent }: { percent: number }): Check {

@@ -1,6 +1,5 @@
 import { describe, expect, test } from "vitest";
-import type { Check, Checked } from "@/lib/cables/checking/check";
-import { checksOf } from "@/lib/cables/checks";
+import { type Check, type Checked, checksOf } from "@/lib/cables/checks";
 import type { EntryInputs } from "@/lib/cables/inputs";
 import type { Build, Construction } from "@/lib/cables/schema";
 import { lossTangentOf } from "@/lib/line/closed-mapping";

@@ -2,7 +2,7 @@
  * A data sheet as a librarian gets one: a 75 Ω foam cable whose capacitance was copied from the solid version and whose
  * table has one mistyped row. The true row at 450 MHz is 13.72 dB/100 m.
  */
-import type { Checked } from "@/lib/cables/checking/check";
+import type { Checked } from "@/lib/cables/checks";
 import { fromInputs } from "@/lib/cables/from-inputs";
 import type { EntryInputs } from "@/lib/cables/inputs";
 import type { Build, Construction } from "@/lib/cables/schema";

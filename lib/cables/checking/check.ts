@@ -1,24 +1,7 @@
+/** Verdicts and their words. Pure. */
 import type { Verdict } from "@/lib/cables/agreement";
-import type { EntryInputs } from "@/lib/cables/inputs";
-import type { Cable } from "@/lib/cables/schema";
 import { digits } from "@/lib/format/quantity";
 import { agreementLimits } from "@/lib/line/per-length";
-
-/** What a check says of an entry. */
-export interface Check {
-  /** its name; a reviewer's answer is kept under it */
-  check: string;
-  verdict: Verdict;
-  sentence: string;
-  /** how far apart, per cent */
-  percent?: number;
-  /** what does not fit the rest */
-  culprit?: string;
-}
-
-export type Checked = Pick<Cable, "model" | "figures" | "construction" | "build" | "limits" | "family"> & {
-  inputs?: EntryInputs | null;
-};
 
 /** Up to which share two things agree, and up to which somebody should look; the house's 3 and 6 per cent unless told. */
 export function verdictOf(deviation: number, { fine, look } = agreementLimits): Verdict {

@@ -1,5 +1,6 @@
 /** What is stated against what the construction gives, and the end of the band it can carry. Pure. */
-import { aboveWords, type Check, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import { aboveWords, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import type { Check } from "@/lib/cables/checks";
 import type { Facts } from "@/lib/cables/checking/facts";
 import { quantityShown, quantityWords } from "@/lib/cables/checking/triangle";
 import { frequency, inWords, significantDigits } from "@/lib/format/quantity";

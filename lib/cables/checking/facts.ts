@@ -1,6 +1,6 @@
 /** What the checks of an entry are made from, worked out once. Pure. */
 import { statedFigures } from "@/lib/cables/agreement";
-import type { Checked } from "@/lib/cables/checking/check";
+import type { Checked } from "@/lib/cables/checks";
 import { type LossPoint, lossTable } from "@/lib/cables/loss-rows";
 import type { Figure } from "@/lib/cables/schema";
 import { constructionWay } from "@/lib/cables/ways/construction-way";

@@ -1,5 +1,6 @@
 /** What a loss table says of itself, of the dc resistance, of the conductors and of the insulation. Pure. */
-import { type Check, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import { percentWords, verdictOf } from "@/lib/cables/checking/check";
+import type { Check } from "@/lib/cables/checks";
 import type { Facts } from "@/lib/cables/checking/facts";
 import { usualInsulation } from "@/lib/cables/checking/insulation";
 import { tableRange } from "@/lib/cables/loss-rows";

@@ -1,5 +1,6 @@
 /** What a meter read of a sample against what it should read on the model, at its own frequency. Pure. */
-import { aboveWords, type Check, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import { aboveWords, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import type { Check } from "@/lib/cables/checks";
 import type { Facts } from "@/lib/cables/checking/facts";
 import { modelAt } from "@/lib/cables/warm-model";
 import { unlessRefused } from "@/lib/cables/ways/unless-refused";

@@ -1,5 +1,6 @@
 /** The one row of a loss table that the others contradict while they agree with each other. Pure. */
-import { aboveWords, type Check } from "@/lib/cables/checking/check";
+import { aboveWords } from "@/lib/cables/checking/check";
+import type { Check } from "@/lib/cables/checks";
 import { type Facts, tableOf } from "@/lib/cables/checking/facts";
 import { fitOf, usualForm, loopOf } from "@/lib/cables/ways/loss-way";
 import { frequency, inWords, significantDigits } from "@/lib/format/quantity";

@@ -1,5 +1,6 @@
 /** Whether the stated figures of a metre go together. Pure. */
-import { aboveWords, type Check, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import { aboveWords, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import type { Check } from "@/lib/cables/checks";
 import type { Facts } from "@/lib/cables/checking/facts";
 import { insulationsFor } from "@/lib/cables/checking/insulation";
 import { oddOne } from "@/lib/cables/checking/odd-one";

@@ -1,5 +1,6 @@
 /** Slips in how a velocity is given, and whether it goes with the insulation. Pure. */
-import { type Check, percentWords } from "@/lib/cables/checking/check";
+import { percentWords } from "@/lib/cables/checking/check";
+import type { Check } from "@/lib/cables/checks";
 import type { Facts } from "@/lib/cables/checking/facts";
 import { insulationsFor, outside, usualInsulation } from "@/lib/cables/checking/insulation";
 import { digits, significantDigits } from "@/lib/format/quantity";
