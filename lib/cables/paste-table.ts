@@ -35,6 +35,8 @@ export interface PastedTable {
   rows: PastedRow[];
   /** "9 rows read as frequency in MHz, loss in dB/100 ft, decimal commas." */
   readAs: string;
+  /** of the rows; null where each had its own */
+  lossUnit: LossUnit | null;
 }
 
 export type PasteRead =
@@ -44,6 +46,8 @@ export type PasteRead =
 
 const mostRows = 500;
 const mostLetters = 100_000;
+/** No row of a table is so long; what is would only take time. */
+const longestLine = 2000;
 
 /** Reads a paste. */
 export function readPastedTable(text: string, told: Told = {}): PasteRead {
@@ -57,6 +61,8 @@ export function readPastedTable(text: string, told: Told = {}): PasteRead {
 
 function tableOf(text: string, told: Told): PastedTable {
   if (text.length > mostLetters) throw new Refused("That is more than a loss table: paste at most 500 rows.");
+  if (text.split("\n").some((line) => line.length > longestLine))
+    throw new Refused("A line of that is too long for a row of a table.");
   const { rows: all, separator } = upright(cellsOf(text));
   const start = all.findIndex(({ cells }) => cells.filter(isNumeric).length >= 2);
   if (start < 0) throw new Refused("No row with a frequency and a loss was found: paste two columns of figures.");
@@ -68,7 +74,7 @@ function tableOf(text: string, told: Told): PastedTable {
   const units = { frequency: frequencyUnitOf(head, body, columns, told), loss: lossUnitOf(head, body, columns, told) };
   const { rows, skipped } = rowsOf(body, columns, commas, units);
   if (rows.length === 0) throw new Refused("No row has both a frequency and a loss.");
-  return { rows: inOrder(rows), readAs: readAsWords(rows, skipped, units, commas === "decimal") };
+  return { rows: inOrder(rows), readAs: readAsWords(rows, skipped, units, commas === "decimal"), lossUnit: units.loss };
 }
 
 /** A table that runs across, one line of frequencies and one of losses, set upright. */
