@@ -23,8 +23,9 @@ export interface Edited {
 /** What of an entry no field shows and an edit must not lose. */
 export type Kept = Pick<Cable, "figures" | "model">;
 
-export function editedEntry(texts: EntryTexts, kept: Kept | null): Edited {
-  const read = readTexts(texts);
+/** @param enteredBy - who types, for the sources */
+export function editedEntry(texts: EntryTexts, kept: Kept | null, enteredBy?: string): Edited {
+  const read = readTexts(texts, enteredBy);
   const { designation, aliases, name, construction, build, limits, inputs } = read;
   const { family } = texts;
   const { lossSlopes, g0SPerM, temperatureCoefficientPerK } = kept?.model ?? {};

@@ -105,11 +105,11 @@ function readingsOf(texts: EntryTexts, values: Values): EntryInputs["readings"] 
   };
 }
 
-function sourceOf(texts: SourceTexts): Provenance | undefined {
+function sourceOf(texts: SourceTexts, enteredBy: string | undefined): Provenance | undefined {
   const parts = Object.fromEntries(
     sourceParts.flatMap((part) => (texts[part].trim() ? [[part, texts[part].trim()]] : [])),
   );
-  return texts.kind === "" ? undefined : { kind: texts.kind, ...parts };
+  return texts.kind === "" ? undefined : { kind: texts.kind, ...parts, ...(enteredBy && { enteredBy }) };
 }
 
 function buildOf({ hasBuild, build }: EntryTexts): Build | null {
@@ -118,12 +118,15 @@ function buildOf({ hasBuild, build }: EntryTexts): Build | null {
   return { ...build, pairCount, jacket: build.jacket.trim() || null };
 }
 
-/** Reads the whole editor. What cannot be read is left out and told. */
-export function readTexts(texts: EntryTexts): ReadEntry {
+/**
+ * Reads the whole editor. What cannot be read is left out and told.
+ * @param enteredBy - who types, for the sources
+ */
+export function readTexts(texts: EntryTexts, enteredBy?: string): ReadEntry {
   const { values, faults, understood } = readFigures(texts.figures);
   const table = readRows(texts.rows, texts.lossUnit);
   const { ruling, form } = texts;
-  const sources = given(Object.fromEntries(sourceWays.map((way) => [way, sourceOf(texts.sources[way])])));
+  const sources = given(Object.fromEntries(sourceWays.map((way) => [way, sourceOf(texts.sources[way], enteredBy)])));
   const constructionTyped = typedOf(
     texts.figures,
     texts.kind === "none" ? [] : constructionFigures[texts.kind].map((name) => [name, name] as const),
