@@ -94,13 +94,17 @@ export function EditorHead() {
       <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-3">
         <div className="min-w-0">
           <p className="text-label text-ink-2 phone:hidden">
-            <Link href="/cables" className="hover:text-copper">
+            <Link href="/cables" prefetch={false} className="hover:text-copper">
               Catalogue
             </Link>
             {saved && (
               <>
                 {" / "}
-                <Link href={`/cables/${encodeURIComponent(saved.id)}` as Route} className="hover:text-copper">
+                <Link
+                  href={`/cables/${encodeURIComponent(saved.id)}` as Route}
+                  prefetch={false}
+                  className="hover:text-copper"
+                >
                   {saved.designation}
                 </Link>
               </>
