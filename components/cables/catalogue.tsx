@@ -11,7 +11,7 @@ import { ReadAs, SearchField } from "@/components/cables/search-field";
 import { useCablePages, type FirstPage } from "@/components/cables/use-cable-pages";
 import { useCatalogueAddress } from "@/components/cables/use-catalogue-address";
 import { useHeld } from "@/components/cables/use-held";
-import { Button } from "@/components/ui/button";
+import { Button, ButtonLink } from "@/components/ui/button";
 import { useKeys } from "@/components/ui/keys";
 import { StateNote } from "@/components/ui/state-mark";
 import { useMedia } from "@/components/ui/use-media";
@@ -28,6 +28,8 @@ const Comparison = dynamic(() => import("@/components/cables/comparison").then((
 interface Props {
   first: FirstPage;
   canStartRun: boolean;
+  /** whether the reader may add entries */
+  canPropose: boolean;
 }
 
 /** Thickest cable when nobody has one: a row's drawing is then to the usual scale. */
@@ -76,7 +78,7 @@ function useHoldKey(items: readonly CableItem[], toggle: (item: CableItem) => vo
 }
 
 /** The team's cables: searched as typed, narrowed by figures, held up to compare. All of it stands in the address. */
-export function Catalogue({ first, canStartRun }: Props) {
+export function Catalogue({ first, canStartRun, canPropose }: Props) {
   const [asked, change] = useCatalogueAddress();
   const pages = useCablePages(cableRequest(asked), first);
   const { held, waiting, toggle, putBack, exchange } = useHeld(asked.held, change);
@@ -102,6 +104,7 @@ export function Catalogue({ first, canStartRun }: Props) {
           <SearchField asked={asked} change={change} />
           <Count page={page} />
           <ListOrder asked={asked} change={change} />
+          {canPropose && <ButtonLink href="/cables/new">New cable</ButtonLink>}
         </div>
         <ReadAs asked={asked} change={change} page={page} />
         {isFolded && !isPhone && (
@@ -115,7 +118,7 @@ export function Catalogue({ first, canStartRun }: Props) {
         {isPhone && <FacetCards {...facets} />}
         {pages.error && !pages.isFetchNextPageError && <Trouble pages={pages} />}
         {pages.isPending && !page && <Working label="Looking through the catalogue" />}
-        {page && page.total === 0 && <NothingFound asked={asked} change={change} page={page} />}
+        {page && page.total === 0 && <NothingFound {...{ asked, change, page, canPropose }} />}
         {items.length > 0 && (
           <p className="mt-2 hidden justify-between border-b border-rule pb-1 text-label text-ink-2 phone:flex">
             <span>to scale</span>

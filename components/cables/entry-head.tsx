@@ -21,6 +21,14 @@ export interface EntryHeadProps {
   asked: EntryAsked;
   change: ChangeLook;
   canStartRun: boolean;
+  /** whether the reader may propose entries */
+  canPropose?: boolean;
+}
+
+/** What leads to the editor: a draft is edited, an approved entry gets a new revision; null where neither can be. */
+function editWords(state: CableState): string | null {
+  if (state === "draft") return "Edit";
+  return state === "approved" || state === "restricted" || state === "quarantined" ? "New revision" : null;
 }
 
 const refusals: Record<Exclude<CableState, "approved" | "restricted">, string> = {
@@ -38,10 +46,11 @@ function catalogueWith({ lossAtHz, held }: EntryAsked, family?: Cable["family"])
 }
 
 export function EntryHead(props: EntryHeadProps) {
-  const { cable, asked, change, canStartRun } = props;
+  const { cable, asked, change, canStartRun, canPropose = false } = props;
   const { designation, family, name, build, state, revision, preferred, aliases } = cable;
   const { word, mark } = stateWords[state];
   const refusal = isUsable(state) ? false : refusals[state as keyof typeof refusals];
+  const edit = canPropose ? editWords(state) : null;
   const run = `/runs/new?cable=${encodeURIComponent(cable.id)}` as Route;
   return (
     <>
@@ -74,6 +83,7 @@ export function EntryHead(props: EntryHeadProps) {
         </div>
         <div className="flex flex-wrap items-center gap-2.5">
           <HoldHere cable={cable} asked={asked} change={change} />
+          {edit && <ButtonLink href={`/cables/${encodeURIComponent(cable.id)}/edit` as Route}>{edit}</ButtonLink>}
           {canStartRun &&
             (refusal ? (
               <Button refused={refusal}>Use in a run</Button>

@@ -24,7 +24,11 @@ export default async function CataloguePage({ searchParams }: Props) {
     <>
       <WorkBar signedIn={describeActor(actor)} current="/cables" title="Catalogue" />
       <main id="main" className="page-margin pt-2.5 pb-20">
-        <Catalogue first={{ request, page }} canStartRun={may(actor, "runs.write")} />
+        <Catalogue
+          first={{ request, page }}
+          canStartRun={may(actor, "runs.write")}
+          canPropose={may(actor, "cables.propose")}
+        />
       </main>
     </>
   );
