@@ -21,14 +21,8 @@ export interface EntryHeadProps {
   asked: EntryAsked;
   change: ChangeLook;
   canStartRun: boolean;
-  /** whether the reader may propose entries */
-  canPropose?: boolean;
-}
-
-/** What leads to the editor: a draft is edited, an approved entry gets a new revision; null where neither can be. */
-function editWords(state: CableState): string | null {
-  if (state === "draft") return "Edit";
-  return state === "approved" || state === "restricted" || state === "quarantined" ? "New revision" : null;
+  /** what leads to the editor; null where the reader can neither edit a draft nor begin one */
+  edit: string | null;
 }
 
 const refusals: Record<Exclude<CableState, "approved" | "restricted">, string> = {
@@ -46,11 +40,10 @@ function catalogueWith({ lossAtHz, held }: EntryAsked, family?: Cable["family"])
 }
 
 export function EntryHead(props: EntryHeadProps) {
-  const { cable, asked, change, canStartRun, canPropose = false } = props;
+  const { cable, asked, change, canStartRun, edit } = props;
   const { designation, family, name, build, state, revision, preferred, aliases } = cable;
   const { word, mark } = stateWords[state];
   const refusal = isUsable(state) ? false : refusals[state as keyof typeof refusals];
-  const edit = canPropose ? editWords(state) : null;
   const run = `/runs/new?cable=${encodeURIComponent(cable.id)}` as Route;
   return (
     <>

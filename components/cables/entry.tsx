@@ -40,7 +40,6 @@ interface Props {
   standing: EntryStanding;
   uses: { total: number; items: readonly RunUse[] };
   canStartRun: boolean;
-  canPropose?: boolean;
 }
 
 /** The cable end-on with its sizes, and with its layers laid bare. */
@@ -74,9 +73,16 @@ function Construction({ cable }: { cable: Cable }) {
   );
 }
 
+/** An open draft is edited by its author or a reviewer; where none is open a new revision can be begun. */
+function editWords({ current, open, hasOpen, mayPropose, mayReview }: EntryStanding): string | null {
+  if (!mayPropose) return null;
+  if (open) return open.state === "draft" && (open.isOwn || mayReview) ? `Edit revision ${open.revision}` : null;
+  return !hasOpen && current.state !== "superseded" && current.state !== "withdrawn" ? "New revision" : null;
+}
+
 /** One cable, whole. Frequency, temperature and what is held stand in the address. */
 export function Entry(props: Props) {
-  const { cable, successor, revisions, events, waivers, reports, standing, uses, canStartRun, canPropose } = props;
+  const { cable, successor, revisions, events, waivers, reports, standing, uses, canStartRun } = props;
   const [asked, change] = useEntryAddress(cable.id);
   const warm = modelAt(cable.model, asked.temperatureC) ?? modelAt(cable.model, 20);
   const table = lossTable(cable.figures);
@@ -86,7 +92,7 @@ export function Entry(props: Props) {
   const at = { table, model: warm.model, temperatureC: warm.temperatureC, lossAtHz: asked.lossAtHz };
   return (
     <CursorProvider>
-      <EntryHead {...{ cable, successor, asked, change, canStartRun, canPropose }} />
+      <EntryHead {...{ cable, successor, asked, change, canStartRun, edit: editWords(standing) }} />
       <EntryReadings cable={cable} warm={warm} lossAtHz={asked.lossAtHz} isBeyond={isBeyond} />
       <div className="mt-5 grid grid-cols-[380px_minmax(0,1fr)_342px] gap-x-10 gap-y-6 folded:grid-cols-[380px_minmax(0,1fr)] phone:grid-cols-1">
         <div className="flex min-w-0 flex-col gap-5">

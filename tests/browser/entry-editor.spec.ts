@@ -33,7 +33,7 @@ async function isClean(page: Page): Promise<void> {
 
 test("A librarian pastes a data sheet, is told what contradicts it, corrects it and sends it for review", async ({
   page,
-}, info) => {
+}) => {
   const designation = fresh();
   await signedIn(page, "libby.thornquist");
   await page.goto("/cables");

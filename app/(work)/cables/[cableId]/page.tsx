@@ -43,7 +43,6 @@ export default async function CablePage({ params }: Props) {
           standing={getStanding(actor, cableId)}
           uses={listUses(actor, cableId)}
           canStartRun={may(actor, "runs.write")}
-          canPropose={may(actor, "cables.propose")}
         />
       </main>
     </>
