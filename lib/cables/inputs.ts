@@ -53,7 +53,8 @@ export const readingsInputSchema = z.strictObject({
 
 export const sweepInputSchema = z.strictObject({
   lengthM: positive("The length of the sample"),
-  evidenceId: z.string().max(60).describe("the sweep's file among the entry's evidence"),
+  evidenceId: z.string().max(60).optional().describe("the sweep's file among the entry's evidence"),
+  fileName: z.string().max(200).optional().describe("what the file was called"),
   shortEvidenceId: z.string().max(60).optional().describe("with a one-port sweep: that of the far end shorted"),
   model: lineModelSchema.optional().describe("what was worked out of it when it was read"),
 });

@@ -3,6 +3,7 @@
 import { useEntryForm } from "@/components/cables/editor/entry-form";
 import { FigureInput } from "@/components/cables/editor/figure-input";
 import { SourceFields } from "@/components/cables/editor/source-fields";
+import { SweepField } from "@/components/cables/editor/sweep-field";
 import { Field } from "@/components/ui/field";
 import { Section } from "@/components/ui/section";
 import { StateNote } from "@/components/ui/state-mark";
@@ -40,6 +41,7 @@ export function ReadingFields() {
           {note}
         </p>
       ))}
+      <SweepField />
       <SourceFields way="readings" />
     </Section>
   );

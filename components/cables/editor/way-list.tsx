@@ -28,9 +28,9 @@ const wayNames = {
 } as const;
 
 const choices = {
-  impedance: ["nominal", "construction", "readings"],
-  loss: ["lossTable", "construction", "nominal"],
-  resistance: ["nominal", "construction", "readings"],
+  impedance: ["nominal", "construction", "readings", "sweep"],
+  loss: ["lossTable", "sweep", "construction", "nominal"],
+  resistance: ["nominal", "construction", "readings", "sweep"],
 } as const;
 const labels = { impedance: "Z and velocity", loss: "Loss", resistance: "Dc resistance" } as const;
 

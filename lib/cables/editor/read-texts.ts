@@ -138,6 +138,7 @@ export function readTexts(texts: EntryTexts, enteredBy?: string): ReadEntry {
         ? undefined
         : { temperatureC: values.tableTemperature ?? 20, kind: texts.tableKind, rows: table.rows },
     readings: readingsOf(texts, values),
+    sweep: texts.sweep ?? undefined,
     ...{ ruling, form: form || undefined, constructionTyped },
     sources: Object.keys(sources).length > 0 ? sources : undefined,
   });

@@ -144,6 +144,7 @@ export function startTexts(cable: Opened): EntryTexts {
     ...{ lossUnit, rows: rowTexts(rows, lossUnit), ruling: inputs.ruling ?? emptyTexts.ruling },
     form: formOf(cable),
     instrument: inputs.readings?.instrument ?? "",
+    sweep: inputs.sweep ?? null,
     sources: Object.fromEntries(
       sourceWays.map((way) => [way, sourceTexts(inputs.sources?.[way])]),
     ) as EntryTexts["sources"],

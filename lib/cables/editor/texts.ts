@@ -1,4 +1,5 @@
 /** What stands in the fields of the entry editor: texts, and choices. Pure. */
+import type { EntryInputs } from "@/lib/cables/inputs";
 import type { Provenance } from "@/lib/cables/provenance";
 import type { Build, Family } from "@/lib/cables/schema";
 import { type FigureName, figureNames } from "@/lib/cables/editor/fields";
@@ -38,6 +39,8 @@ export interface EntryTexts {
   ruling: Ruling;
   form: "" | "round" | "sqrt";
   instrument: string;
+  /** what was worked out of a sweep when its file was read */
+  sweep: EntryInputs["sweep"] | null;
   sources: Record<SourceWay, SourceTexts>;
 }
 
@@ -69,5 +72,6 @@ export const emptyTexts: EntryTexts = {
   ruling: { impedance: "nominal", loss: "lossTable", resistance: "nominal" },
   form: "",
   instrument: "",
+  sweep: null,
   sources: { construction: emptySource, nominal: emptySource, lossTable: emptySource, readings: emptySource },
 };

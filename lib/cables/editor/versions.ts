@@ -7,7 +7,8 @@ type Path = readonly string[];
 
 /** The places at which people change something: each field, and of lists the whole. */
 function placesOf(value: unknown, at: Path = []): Path[] {
-  if (value === null || typeof value !== "object" || Array.isArray(value)) return [at];
+  // A sweep is one thing: the line that was worked out of a file.
+  if (at[0] === "sweep" || value === null || typeof value !== "object" || Array.isArray(value)) return [at];
   return Object.entries(value).flatMap(([key, inner]) => placesOf(inner, [...at, key]));
 }
 
@@ -40,6 +41,7 @@ const words: Record<string, string> = {
   tableKind: "Kind of the loss table",
   form: "Form of the conductor",
   instrument: "Instrument",
+  sweep: "Sweep of a sample",
   "ruling.impedance": "Z and velocity are ruled by",
   "ruling.loss": "Loss is ruled by",
   "ruling.resistance": "Dc resistance is ruled by",
@@ -63,7 +65,8 @@ function shown(value: unknown): string {
       })
       .join(", ");
   if (typeof value === "boolean") return value ? "yes" : "no";
-  return value === undefined || value === "" ? "nothing" : String(value as string | number);
+  if (typeof value === "object" && value !== null) return (value as { fileName?: string }).fileName ?? "a sweep";
+  return value === undefined || value === null || value === "" ? "nothing" : String(value as string | number);
 }
 
 export interface Difference {

@@ -40,7 +40,7 @@ function worstOf(checks: readonly Check[], way: SourceWay): { state: WayState["s
 const count = (values: readonly unknown[]) => values.filter((value) => value !== undefined).length;
 
 export function wayStates({ read, worked, checks }: Edited): WayState[] {
-  const { nominal, readings, lossTable } = read.inputs;
+  const { nominal, readings, lossTable, sweep } = read.inputs;
   const rows = lossTable?.rows.length ?? 0;
   const ofNominal = count([nominal?.z0Ohm, nominal?.velocityFactor, nominal?.cFPerM]);
   const ofReadings = count([
@@ -53,7 +53,7 @@ export function wayStates({ read, worked, checks }: Edited): WayState[] {
     construction: [isDrawn, worked.ways.construction?.refusal ?? (isDrawn ? "drawn" : "two sizes and a permittivity")],
     nominal: [nominal !== undefined, `${ofNominal} of 3 given`],
     lossTable: [rows > 0, rows === 1 ? "1 point" : `${rows} points`],
-    readings: [readings !== undefined, `${ofReadings} of 3 given`],
+    readings: [readings !== undefined || sweep !== undefined, `${ofReadings} of 3 given${sweep ? ", a sweep" : ""}`],
   };
   return (Object.keys(titles) as SourceWay[]).map((way) => {
     const [isGiven, words] = given[way];
