@@ -12,7 +12,7 @@ import { ReadAs, SearchField } from "@/components/cables/search-field";
 import { useCablePages, type FirstPage } from "@/components/cables/use-cable-pages";
 import { useCatalogueAddress } from "@/components/cables/use-catalogue-address";
 import { useHeld } from "@/components/cables/use-held";
-import { Button } from "@/components/ui/button";
+import { Button, ButtonLink } from "@/components/ui/button";
 import { useKeys } from "@/components/ui/keys";
 import { StateNote } from "@/components/ui/state-mark";
 import { useMedia } from "@/components/ui/use-media";
@@ -30,6 +30,8 @@ interface Props {
   first: FirstPage;
   canStartRun: boolean;
   files: FilesAllowed;
+  /** whether the reader may add entries */
+  canPropose: boolean;
 }
 
 /** Thickest cable when nobody has one: a row's drawing is then to the usual scale. */
@@ -78,7 +80,7 @@ function useHoldKey(items: readonly CableItem[], toggle: (item: CableItem) => vo
 }
 
 /** The team's cables: searched as typed, narrowed by figures, held up to compare. All of it stands in the address. */
-export function Catalogue({ first, canStartRun, files }: Props) {
+export function Catalogue({ first, canStartRun, canPropose, files }: Props) {
   const [asked, change] = useCatalogueAddress();
   const pages = useCablePages(cableRequest(asked), first);
   const { held, waiting, toggle, putBack, exchange } = useHeld(asked.held, change);
@@ -105,6 +107,7 @@ export function Catalogue({ first, canStartRun, files }: Props) {
           <Count page={page} />
           <ListOrder asked={asked} change={change} />
           <CatalogueFiles {...files} />
+          {canPropose && <ButtonLink href="/cables/new">New cable</ButtonLink>}
         </div>
         <ReadAs asked={asked} change={change} page={page} />
         {isFolded && !isPhone && (
@@ -118,7 +121,7 @@ export function Catalogue({ first, canStartRun, files }: Props) {
         {isPhone && <FacetCards {...facets} />}
         {pages.error && !pages.isFetchNextPageError && <Trouble pages={pages} />}
         {pages.isPending && !page && <Working label="Looking through the catalogue" />}
-        {page && page.total === 0 && <NothingFound asked={asked} change={change} page={page} />}
+        {page && page.total === 0 && <NothingFound {...{ asked, change, page, canPropose }} />}
         {items.length > 0 && (
           <p className="mt-2 hidden justify-between border-b border-rule pb-1 text-label text-ink-2 phone:flex">
             <span>to scale</span>

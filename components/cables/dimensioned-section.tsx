@@ -17,13 +17,13 @@ const lineHeight = 14;
 /** Where parts are pointed at, degrees above the horizontal, from the sheath inwards. */
 const angles: Record<SectionPart["layer"], number> = { jacket: 49, screen: 28, dielectric: -26, conductor: -50 };
 
-interface Place {
+export interface Place {
   x: number;
   y: number;
 }
 
 /** The point of a part that its leader ends in, px from the middle of the cable. */
-function pointAt({ layer, atMm }: SectionPart, shape: CableShape, mmToPx: number): Place {
+export function pointAt({ layer, atMm }: SectionPart, shape: CableShape, mmToPx: number): Place {
   if (shape.kind === "pair" && (layer === "dielectric" || layer === "conductor")) {
     const [pair] = pairPlaces(shape, mmToPx);
     const half = (shape.coreMm * mmToPx) / 2;
@@ -85,7 +85,7 @@ function LabelText({ label, x }: { label: Label; x: number }) {
   );
 }
 
-function Leader({ from, to }: { from: Place; to: Place }) {
+export function Leader({ from, to }: { from: Place; to: Place }) {
   return (
     <g stroke="var(--ink)">
       <circle cx={from.x.toFixed(1)} cy={from.y.toFixed(1)} r="2.6" fill="var(--paper)" />

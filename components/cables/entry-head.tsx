@@ -21,6 +21,8 @@ export interface EntryHeadProps {
   asked: EntryAsked;
   change: ChangeLook;
   canStartRun: boolean;
+  /** what leads to the editor; null where the reader can neither edit a draft nor begin one */
+  edit: string | null;
 }
 
 const refusals: Record<Exclude<CableState, "approved" | "restricted">, string> = {
@@ -38,7 +40,7 @@ function catalogueWith({ lossAtHz, held }: EntryAsked, family?: Cable["family"])
 }
 
 export function EntryHead(props: EntryHeadProps) {
-  const { cable, asked, change, canStartRun } = props;
+  const { cable, asked, change, canStartRun, edit } = props;
   const { designation, family, name, build, state, revision, preferred, aliases } = cable;
   const { word, mark } = stateWords[state];
   const refusal = isUsable(state) ? false : refusals[state as keyof typeof refusals];
@@ -74,6 +76,7 @@ export function EntryHead(props: EntryHeadProps) {
         </div>
         <div className="flex flex-wrap items-center gap-2.5">
           <HoldHere cable={cable} asked={asked} change={change} />
+          {edit && <ButtonLink href={`/cables/${encodeURIComponent(cable.id)}/edit` as Route}>{edit}</ButtonLink>}
           {canStartRun &&
             (refusal ? (
               <Button refused={refusal}>Use in a run</Button>

@@ -77,6 +77,13 @@ function Construction({ cable }: { cable: Cable }) {
   );
 }
 
+/** An open draft is edited by its author or a reviewer; where none is open a new revision can be begun. */
+function editWords({ current, open, hasOpen, mayPropose, mayReview }: EntryStanding): string | null {
+  if (!mayPropose) return null;
+  if (open) return open.state === "draft" && (open.isOwn || mayReview) ? `Edit revision ${open.revision}` : null;
+  return !hasOpen && current.state !== "superseded" && current.state !== "withdrawn" ? "New revision" : null;
+}
+
 /** One cable, whole. Frequency, temperature and what is held stand in the address. */
 export function Entry(props: Props) {
   const { cable, successor, revisions, events, waivers, reports, standing, uses, canStartRun } = props;
@@ -89,7 +96,7 @@ export function Entry(props: Props) {
   const at = { table, model: warm.model, temperatureC: warm.temperatureC, lossAtHz: asked.lossAtHz };
   return (
     <CursorProvider>
-      <EntryHead {...{ cable, successor, asked, change, canStartRun }} />
+      <EntryHead {...{ cable, successor, asked, change, canStartRun, edit: editWords(standing) }} />
       <EntryReadings cable={cable} warm={warm} lossAtHz={asked.lossAtHz} isBeyond={isBeyond} />
       <div className="mt-5 grid grid-cols-[380px_minmax(0,1fr)_342px] gap-x-10 gap-y-6 folded:grid-cols-[380px_minmax(0,1fr)] phone:grid-cols-1">
         <div className="flex min-w-0 flex-col gap-5">

@@ -1,3 +1,5 @@
+import type { Route } from "next";
+import Link from "next/link";
 import type { ChangeAsked } from "@/components/cables/use-catalogue-address";
 import { stateWords } from "@/components/cables/words";
 import { Button } from "@/components/ui/button";
@@ -9,6 +11,8 @@ interface Props {
   asked: CatalogueAsked;
   change: ChangeAsked;
   page: CablePage;
+  /** whether the reader may add entries */
+  canPropose: boolean;
 }
 
 interface Way {
@@ -45,7 +49,7 @@ function filterWays(asked: CatalogueAsked, facets: Facets): Way[] {
 }
 
 /** Nothing found is never the end: what to leave out, and how many cables that gives. */
-export function NothingFound({ asked, change, page }: Props) {
+export function NothingFound({ asked, change, page, canPropose }: Props) {
   const { loosenings = [], facets, outOf } = page;
   const words = loosenings.map(({ without, q, count }) => ({
     ...{ words: `Without “${without}”`, count },
@@ -77,6 +81,15 @@ export function NothingFound({ asked, change, page }: Props) {
             {way.words}: {way.count} {way.count === 1 ? "cable" : "cables"}
           </button>
         ))}
+        {canPropose && text && (
+          <Link
+            href={`/cables/new?designation=${encodeURIComponent(text.slice(0, 40))}` as Route}
+            prefetch={false}
+            className="link phone:min-h-11"
+          >
+            Add “{text}” as a draft
+          </Link>
+        )}
         {outOf > 0 && (
           <Button
             size="small"

@@ -11,15 +11,30 @@ function bySource(figures: readonly Figure[]): [string, Figure[]][] {
 
 const namesOf = (figures: readonly Figure[]) => [...new Set(figures.map(({ quantity }) => quantityName(quantity)))];
 
+/** The parts of a source beyond its title, issue and page, which its one line has. */
+function provenanceWords({ provenance }: Figure): string {
+  if (!provenance) return "";
+  const { enteredBy, checkedBy, instrument, calibration } = provenance;
+  const parts = [
+    enteredBy && `entered by ${enteredBy}`,
+    checkedBy && `checked by ${checkedBy}`,
+    instrument && `instrument ${instrument}`,
+    calibration && `calibration ${calibration}`,
+  ];
+  return parts.filter(Boolean).join("; ");
+}
+
 function Line({ figure }: { figure: Figure }) {
   const { asTyped, kind, quantity, toleranceSi } = figure;
   const words = [kind, toleranceSi ? toleranceWords(quantity, toleranceSi) : "", conditionWords(figure)];
+  const provenance = provenanceWords(figure);
   return (
     <li className="flex justify-between gap-3 py-0.5">
       <span className="text-ink-2">{figureName(figure)}</span>
       <span className="text-right">
         <span className="figures">{asTyped}</span>
         <span className="block text-note text-ink-3">{words.filter(Boolean).join(", ")}</span>
+        {provenance && <span className="block text-note text-ink-3">{provenance}</span>}
       </span>
     </li>
   );

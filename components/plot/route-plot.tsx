@@ -29,7 +29,7 @@ function ends(routes: readonly Route[], band: readonly [number, number] | undefi
   return [low - room, high + room];
 }
 
-/** Several ways to one figure on one axis: a dot each, and how far its tolerances let it reach. */
+/** Several ways to one figure on one axis: a dot each, a triangle outside the band, and how far its tolerances reach. */
 export function RoutePlot({ routes, band, format }: RoutePlotProps) {
   const { ref, width } = useMeasuredWidth(342);
   const [left, right] = [nameRoom, Math.max(nameRoom + 60, width - valueRoom)];
@@ -55,13 +55,19 @@ export function RoutePlot({ routes, band, format }: RoutePlotProps) {
         ))}
         {routes.map(({ name, value, from, to }, i) => {
           const y = i * rowHeight + rowHeight / 2;
+          const isOut = band !== undefined && (value < band[0] || value > band[1]);
+          const colour = isOut ? "var(--warn)" : "var(--ink)";
           return (
             <g key={name}>
               <text y={y + 4} style={{ fontSize: 12 }}>
                 {name}
               </text>
-              <path d={`M${x(from)} ${y}H${x(to)}`} stroke="var(--ink)" strokeWidth="1.5" />
-              <circle cx={x(value)} cy={y} r="3.8" fill="var(--ink)" />
+              <path d={`M${x(from)} ${y}H${x(to)}`} stroke={colour} strokeWidth="1.5" />
+              {isOut ? (
+                <path d={`M${x(value)} ${y - 4.6}l4.8 8.6h-9.6z`} fill={colour} />
+              ) : (
+                <circle cx={x(value)} cy={y} r="3.8" fill={colour} />
+              )}
               <text
                 x={width}
                 y={y + 4}

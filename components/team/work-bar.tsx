@@ -44,7 +44,7 @@ function usePlaces({ role }: SignedIn): TabItem[] {
 /** Ends the session and leaves nothing of the team's in the browser's memory: the door is loaded afresh. */
 async function signOut(personId: string) {
   const unsent = countHeld(personId);
-  const question = `Changes in ${unsent} of your runs are not on the server yet. Sign out and lose them?`;
+  const question = `Changes in ${unsent} of your runs and cables are not on the server yet. Sign out and lose them?`;
   if (unsent > 0 && !window.confirm(question)) return;
   try {
     await call("/session", { method: "DELETE" });

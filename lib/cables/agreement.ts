@@ -44,7 +44,7 @@ const perLength: Record<string, PerLengthQuantity> = {
 type StatedFigure = Pick<Figure, "valueSi" | "toleranceSi">;
 
 /** What the entry states of its own accord; what was worked out from it cannot bear witness. */
-function statedFigures(figures: readonly Figure[]): Map<PerLengthQuantity, StatedFigure> {
+export function statedFigures(figures: readonly Figure[]): Map<PerLengthQuantity, StatedFigure> {
   const stated = new Map<PerLengthQuantity, StatedFigure>();
   for (const { quantity, kind, valueSi, toleranceSi } of figures) {
     const name = Object.hasOwn(perLength, quantity) ? perLength[quantity] : undefined;

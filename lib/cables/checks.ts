@@ -1,9 +1,21 @@
 /** Whether an entry agrees with itself, told in sentences: what a reviewer reads before deciding. Pure. */
-import { agreementOfEntry, type Check as Agreement, type Verdict } from "@/lib/cables/agreement";
+import { agreementOfEntry, type Verdict } from "@/lib/cables/agreement";
+import { percentWords, verdictOf } from "@/lib/cables/checking/check";
+import {
+  conductorChecks,
+  constructionChecks,
+  cutoffChecks,
+  impossibleChecks,
+  loopChecks,
+} from "@/lib/cables/checking/construction";
+import { type Facts, factsOf } from "@/lib/cables/checking/facts";
+import { dielectricChecks, floorChecks, risingChecks, smoothChecks, tableChecks } from "@/lib/cables/checking/loss";
+import { readingChecks } from "@/lib/cables/checking/readings";
+import { rowChecks } from "@/lib/cables/checking/rows";
+import { coreCapacitanceChecks, inductanceChecks, triangleChecks } from "@/lib/cables/checking/triangle";
+import { velocityChecks } from "@/lib/cables/checking/velocity";
 import type { EntryInputs } from "@/lib/cables/inputs";
 import type { Cable } from "@/lib/cables/schema";
-import { digits, frequency, inWords } from "@/lib/format/quantity";
-import type { PerLengthQuantity } from "@/lib/line/per-length";
 
 /** What a check says of an entry. */
 export interface Check {
@@ -13,7 +25,7 @@ export interface Check {
   sentence: string;
   /** how far apart, per cent */
   percent?: number;
-  /** the figure that does not fit the others */
+  /** what does not fit the rest */
   culprit?: string;
 }
 
@@ -21,42 +33,42 @@ export type Checked = Pick<Cable, "model" | "figures" | "construction" | "build"
   inputs?: EntryInputs | null;
 };
 
-const named: Record<PerLengthQuantity, string> = {
-  z0: "the impedance",
-  velocityFactor: "the velocity factor",
-  capacitance: "the capacitance",
-  inductance: "the inductance",
-  delay: "the delay",
-};
-
-const apart = (percent: number) => `${digits(Math.abs(percent), 1)} %`;
-
-function sentenceOf({ check, verdict, percent, frequencyHz }: Agreement, culprit: string | undefined): string {
-  const odd = culprit ? ` The one that does not fit is ${culprit}.` : "";
-  switch (check) {
-    case "triangle":
-      return verdict === "fine"
-        ? `Impedance, velocity factor and capacitance agree within ${apart(percent)}.`
-        : `Impedance, velocity factor and capacitance are ${apart(percent)} apart.${odd}`;
-    case "model":
-      return verdict === "fine"
-        ? `The model has the figures stated within ${apart(percent)}.`
-        : `The model is ${apart(percent)} from the figures stated.`;
-    case "lossTable":
-      return `The model is ${apart(percent)} from the loss table on average.`;
-    case "cutoff":
-      return verdict === "fine"
-        ? `Its second mode begins at ${inWords(frequency(frequencyHz))}, above the highest frequency it is rated for.`
-        : `It is rated above ${inWords(frequency(frequencyHz))}, where its second mode begins.`;
-  }
+/** The model that runs are worked out with against the figures stated. */
+function modelChecks({ percent }: { percent: number }): Check {
+  const verdict = verdictOf(percent / 100);
+  const sentence =
+    verdict === "fine"
+      ? `The model has the figures stated within ${percentWords(percent / 100)}.`
+      : `The model is ${percentWords(percent / 100)} from a figure stated: another way rules, or the stated figures do not agree.`;
+  return { check: "model", verdict, percent, sentence };
 }
+
+const all: readonly ((facts: Facts) => Check[])[] = [
+  triangleChecks,
+  inductanceChecks,
+  coreCapacitanceChecks,
+  impossibleChecks,
+  constructionChecks,
+  conductorChecks,
+  loopChecks,
+  velocityChecks,
+  risingChecks,
+  rowChecks,
+  floorChecks,
+  smoothChecks,
+  dielectricChecks,
+  readingChecks,
+  cutoffChecks,
+];
 
 /** Every check that the entry's figures allow. */
 export function checksOf(cable: Checked): Check[] {
-  const { checks, oddOneOut } = agreementOfEntry(cable);
-  return checks.map((each) => {
-    const culprit = each.check === "triangle" && each.verdict !== "fine" && oddOneOut ? named[oddOneOut] : undefined;
-    const { check, verdict, percent } = each;
-    return { check, verdict, percent, sentence: sentenceOf(each, culprit), ...(culprit && { culprit }) };
-  });
+  const facts = factsOf(cable);
+  const { checks } = agreementOfEntry(cable);
+  const [model, table] = ["model", "lossTable"].map((name) => checks.find(({ check }) => check === name));
+  return [
+    ...all.flatMap((of) => of(facts)),
+    ...(model ? [modelChecks(model)] : []),
+    ...tableChecks(table && table.percent / 100),
+  ];
 }

@@ -3,7 +3,8 @@
  * kept as they were given; construction stands in the entry's own field. Pure.
  */
 import { z } from "zod";
-import { notNegative, positive, temperature } from "@/lib/cables/schema";
+import { provenanceSchema } from "@/lib/cables/provenance";
+import { lineModelSchema, notNegative, positive, temperature } from "@/lib/cables/schema";
 
 const typed = z
   .record(z.string().max(60), z.string().max(120))
@@ -52,8 +53,10 @@ export const readingsInputSchema = z.strictObject({
 
 export const sweepInputSchema = z.strictObject({
   lengthM: positive("The length of the sample"),
-  evidenceId: z.string().max(60).describe("the sweep's file among the entry's evidence"),
+  evidenceId: z.string().max(60).optional().describe("the sweep's file among the entry's evidence"),
+  fileName: z.string().max(200).optional().describe("what the file was called"),
   shortEvidenceId: z.string().max(60).optional().describe("with a one-port sweep: that of the far end shorted"),
+  model: lineModelSchema.optional().describe("what was worked out of it when it was read"),
 });
 
 /** Which way rules for what; a way that has nothing to say about it is passed over. */
@@ -63,13 +66,25 @@ export const rulingSchema = z.strictObject({
   resistance: z.enum(["construction", "nominal", "readings", "sweep"], { error: "Say which way rules." }),
 });
 
+export const sourcesSchema = z
+  .strictObject({
+    construction: provenanceSchema,
+    nominal: provenanceSchema,
+    lossTable: provenanceSchema,
+    readings: provenanceSchema,
+  })
+  .partial();
+
 export const entryInputsSchema = z
   .strictObject({
+    /** the construction as it was typed; its values stand in the entry's own field */
+    constructionTyped: typed.optional(),
     nominal: nominalInputSchema.optional(),
     lossTable: lossTableInputSchema.optional(),
     readings: readingsInputSchema.optional(),
     sweep: sweepInputSchema.optional(),
     ruling: rulingSchema.optional(),
+    sources: sourcesSchema.optional().describe("where each way's figures come from"),
     form: z.enum(["round", "sqrt"], { error: "The form is round or sqrt." }).optional(),
   })
   .meta({ id: "EntryInputs" });

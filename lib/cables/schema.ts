@@ -3,6 +3,7 @@
  * document. Units are in the keys; SI on the wire. Pure, runs in the browser too.
  */
 import { z } from "zod";
+import { provenanceSchema } from "@/lib/cables/provenance";
 
 const finite = (what: string) => z.number({ error: `${what} must be a number.` });
 export const positive = (what: string) => finite(what).positive({ error: `${what} must be more than 0.` });
@@ -82,6 +83,7 @@ export const figureSchema = z
     fromHz: positive("The lower frequency").optional(),
     toHz: positive("The upper frequency").optional(),
     source: z.string().min(1).max(300),
+    provenance: provenanceSchema.optional().describe("the source in its parts"),
   })
   .meta({ id: "Figure" });
 export type Figure = z.infer<typeof figureSchema>;

@@ -48,8 +48,16 @@ export function addCable(given: Given): void {
   const { id, designation = id.toUpperCase(), name = "test cable", aliases = [], state = "approved" } = given;
   const { family = "coaxial", team = home, model = coaxModel, outerDiameterMm, maxFrequencyHz } = given;
   const createdAt = "2026-01-01T00:00:00.000Z";
+  // Of the 50 Ω and 0.8339 that the model has.
   const construction: Construction = {
-    ...{ kind: "coax", innerMm: 2, dielectricMm: 6, relativePermittivity: 1.5, lossTangent: 1e-4, outerDiameterMm },
+    ...{
+      kind: "coax",
+      innerMm: 2,
+      dielectricMm: 5.436,
+      relativePermittivity: 1.438,
+      lossTangent: 1e-4,
+      outerDiameterMm,
+    },
   };
   const limits = { maxFrequencyHz };
   const authorId = given.authorId ?? actor(team === home ? "librarian" : "admin", team).personId;

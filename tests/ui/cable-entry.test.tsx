@@ -181,3 +181,16 @@ describe("Where a cable is used", () => {
     expect(screen.getByText("The 5 changed last.")).toBeTruthy();
   });
 });
+
+test("A source says in its parts who entered and checked a figure, and with what it was measured", () => {
+  const provenance = {
+    ...{ kind: "measurement" as const, title: "Sample of reel 7", enteredBy: "L. Thornquist", checkedBy: "N. Ferrant" },
+    ...{ instrument: "meter 12", calibration: "until May 2027" },
+  };
+  render(<Sources cable={cable({ figures: [figure("cFPerM", 53.6e-12, { provenance })] })} />);
+  expect(
+    screen.getByText(
+      "entered by L. Thornquist; checked by N. Ferrant; instrument meter 12; calibration until May 2027",
+    ),
+  ).toBeTruthy();
+});

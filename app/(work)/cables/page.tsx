@@ -25,7 +25,12 @@ export default async function CataloguePage({ searchParams }: Props) {
     <>
       <WorkBar signedIn={describeActor(actor)} current="/cables" title="Catalogue" />
       <main id="main" className="page-margin pt-2.5 pb-20">
-        <Catalogue first={{ request, page }} canStartRun={may(actor, "runs.write")} files={files} />
+        <Catalogue
+          first={{ request, page }}
+          canStartRun={may(actor, "runs.write")}
+          canPropose={may(actor, "cables.propose")}
+          files={files}
+        />
       </main>
     </>
   );

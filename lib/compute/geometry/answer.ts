@@ -40,6 +40,11 @@ const sentences: Record<GeometryNote, string> = {
   screenFormulaRough: "The screen is close to the wires; the formula for the screened pair is rough there.",
 };
 
+/** What a construction's figures take for granted, in sentences. */
+export function geometryNotes(notes: readonly GeometryNote[]): string[] {
+  return notes.map((note) => sentences[note]);
+}
+
 export function geometryAnswer({ construction, frequencyHz }: GeometryRequest): GeometryAnswer {
   const geometry = geometryOf(construction);
   const omega = 2 * Math.PI * (frequencyHz ?? 0);
@@ -55,6 +60,6 @@ export function geometryAnswer({ construction, frequencyHz }: GeometryRequest): 
       rOhmPerM: perMetre(geometry.model, { re: 0, im: omega }).z.re,
       highFrequencyROhmPerM: geometry.highFrequencyResistance(frequencyHz),
     }),
-    notes: geometry.notes.map((note) => sentences[note]),
+    notes: geometryNotes(geometry.notes),
   };
 }
