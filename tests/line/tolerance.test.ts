@@ -1,10 +1,12 @@
 import { describe, expect, test } from "vitest";
 import { nominalFigures } from "@/lib/line/cable";
-import type { Circuit, Element } from "@/lib/line/element";
+import type { Circuit, Element, LineModel } from "@/lib/line/element";
+import { lineFigures } from "@/lib/line/line-figures";
+import { withValues } from "@/lib/line/moved-circuit";
 import { sweep } from "@/lib/line/run";
 import { distributions } from "@/lib/line/distribution";
 import { startTolerance, tolerance, type ToleranceRequest } from "@/lib/line/tolerance";
-import type { Spread } from "@/lib/line/spread";
+import { putCorner, type Spread } from "@/lib/line/spread";
 import { anyRun } from "@/tests/support/arbitrary-run";
 import { bothForms, modelOf, type CheckCable } from "@/tests/support/line-checks";
 import { cable, ohm, run } from "@/tests/support/lossy-run";
@@ -82,6 +84,38 @@ describe.each(bothForms<CornerInputs>("tolerance-corners"))("$name", ({ inputs, 
     closeTo(corners!.returnLossDb.max, expected.return_loss_db_maximum!, "greatest return loss");
     closeTo(corners!.transducerLossDb.min, expected.transducer_loss_db_minimum!, "least loss");
     closeTo(corners!.transducerLossDb.max, expected.transducer_loss_db_maximum!, "greatest loss");
+  });
+
+  test("every other figure of the check is that of the corners, each swept as a run of its own", () => {
+    const { circuit, frequencies: at, spread } = request;
+    const [low, high] = [new Map<string, number[]>(), new Map<string, number[]>()];
+    const note = (name: string, values: ArrayLike<number>) => {
+      const extreme = (map: typeof low, pick: typeof Math.min) =>
+        map.set(
+          name,
+          Array.from(values, (value, k) => pick(value, map.get(name)?.[k] ?? value)),
+        );
+      extreme(low, Math.min);
+      extreme(high, Math.max);
+    };
+    const corner = new Float64Array(spread.length);
+    for (let n = 0; n < 2 ** spread.length; n++) {
+      putCorner(spread, n, corner);
+      const made = withValues(circuit, Object.fromEntries(spread.map(({ path }, k) => [path, corner[k]!])));
+      const swept = sweep(made, at);
+      const element = made.elements[0] as { lengthM: number; temperatureC?: number; line: { model: LineModel } };
+      const { phaseRadPerM } = lineFigures(element.line.model, at, element.temperatureC ?? 20);
+      note("vswr", swept.vswr);
+      note("matched_loss_db", swept.matchedLossDb);
+      note("zin_re_ohm", swept.inputImpedance.re);
+      note(
+        "one_way_delay_s",
+        at.map((f, k) => (phaseRadPerM[k]! * element.lengthM) / (2 * Math.PI * f)),
+      );
+    }
+    for (const [name, values] of low) closeTo(values, expected[`${name}_minimum`]!, `least ${name}`);
+    for (const [name, values] of high) closeTo(values, expected[`${name}_maximum`]!, `greatest ${name}`);
+    expect(Object.keys(expected)).toHaveLength(2 * (low.size + 3));
   });
 
   test("no draw loses more or less than the corners", () => {
