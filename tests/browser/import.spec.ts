@@ -69,7 +69,7 @@ test("An entry shows its measured lot against the model, and takes evidence that
   await page.goto("/cables/c50-f10");
   const lots = page.locator("section", { has: page.getByRole("heading", { name: "Measured lots" }) });
   await expect(lots.getByText("Q-114")).toBeVisible();
-  await expect(lots.getByText("0.843")).toBeVisible();
+  await expect(lots.getByText("0.843", { exact: true })).toBeVisible();
   const evidence = page.locator("section", { has: page.getByRole("heading", { name: "Evidence" }) });
   await evidence.getByText("Add a file").click();
   const title = `Sweep of 20 m, ${mark(browserName, info.project.name)} ${Date.now()}`;

@@ -26,7 +26,8 @@ export function useUndo(form: UseFormReturn<EntryTexts>, start: EntryTexts) {
     [form],
   );
   function show(texts: EntryTexts) {
-    form.reset(copyOf(texts), { keepDefaultValues: true });
+    // The fields stay the ones that are on the screen: rendering does not register them anew.
+    form.reset(copyOf(texts), { keepDefaultValues: true, keepFieldsRef: true });
   }
   const go = (to: typeof undone) => () => {
     const next = to(now);
