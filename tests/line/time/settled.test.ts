@@ -63,6 +63,16 @@ describe("ends that are nothing at dc", () => {
     expect(behind).toMatchObject({ settledV: 0, overshoot: NaN, riseS: NaN, delayS: NaN });
   });
 
+  test("a voltage on the way is reached even where the signal comes back to nothing", () => {
+    const drive = { kind: "step", amplitudeV: 1, riseS: 1e-9 } as const;
+    const { reachedS, settledV } = stepFigures(run([capacitor], ohm(50)), drive, { thresholdV: 0.25 });
+    // v = ½·(e − ∫e dt/T), T = 100 Ω·1 nF, e the edge: at tr/2 the integral is (1/8 − 1/2π²)·tr and e rises by 2/tr
+    expect(reachedS / 1e-9).toBeCloseTo(0.5 + ((1 / 8 - 1 / (2 * Math.PI ** 2)) * 1e-9) / (2 * 1e-7), 5);
+    expect(settledV).toBe(0);
+    const fallen = stepFigures(run([capacitor], ohm(50)), { ...drive, amplitudeV: -1 }, { thresholdV: -0.25 });
+    expect(fallen.reachedS).toBeCloseTo(reachedS, 15);
+  });
+
   test("behind a dead short there is nothing", () => {
     expect(level(run([{ kind: "shunt", termination: { kind: "short" } }, cable(1)]))).toBe(0);
   });
