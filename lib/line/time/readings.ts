@@ -43,7 +43,9 @@ export function readings(signal: Signal, drive: Drive, level: number, options: R
   if (!(band > 0)) throw new RangeError(`readings: band must be positive, got ${band}`);
   const [first] = transitions(drive);
   const held = level * (first?.jumpV ?? 0);
-  const reachedS = passes(signal, thresholdV ?? fraction * held, held);
+  // a voltage that is named is passed whatever is left in the end
+  const toward = held === 0 ? (thresholdV ?? 0) : held;
+  const reachedS = passes(signal, thresholdV ?? fraction * held, toward);
   const settledV = level * finalEmf(drive);
   return {
     reachedS,
@@ -61,7 +63,7 @@ function emfReaches(drive: Drive, fraction: number): number {
   return first === undefined ? NaN : first.atS + edgePart(drive.edge ?? "sineSquared", fraction) * drive.riseS;
 }
 
-/** First time at a level on the way from 0 to where the signal is held. */
+/** First time at a level on the way from 0 to where the signal is held, or, held nowhere, to that level. */
 function passes(signal: Signal, level: number, held: number): number {
   return held === 0 || !Number.isFinite(held) ? NaN : crossing(signal, level, held > 0);
 }

@@ -4,6 +4,8 @@ import { portAt, prepareRun, walk, type Walk } from "@/lib/line/walk";
 
 /** rad/s; low enough that whatever takes less than an hour to settle has settled */
 const nearlyDc = 1e-9;
+/** Two decades further down a level that is one has not moved by this part; one that vanishes is a tenth or less. */
+const vanishing = 0.5;
 
 /**
  * Where the voltages along a run come to rest, per volt of e.m.f. that stays: the limit of s·V(s) as s → 0 for a unit
@@ -19,11 +21,17 @@ export function settledLevels(circuit: Circuit, planes: readonly number[], tempe
   if (isPlain(still)) return planes.map((plane) => levelAt(still, plane));
   // behind a capacitor in the line, or beside a coil across it, the level is a ratio of two that vanish
   const slow = walk(run, { re: nearlyDc, im: 0 });
-  return planes.map((plane) => levelAt(slow, plane));
+  const slower = walk(run, { re: nearlyDc / 100, im: 0 });
+  return planes.map((plane) => limitOf(levelAt(slow, plane), levelAt(slower, plane)));
 }
 
 function isPlain({ scales, drive }: Walk): boolean {
   return scales.every(Number.isFinite) && Number.isFinite(drive.re) && drive.re !== 0;
+}
+
+/** What is left over of a level that goes on falling toward dc is none: nothing may be read against it. */
+function limitOf(slow: number, slower: number): number {
+  return Math.abs(slower) < vanishing * Math.abs(slow) ? 0 : slow;
 }
 
 function levelAt(at: Walk, plane: number): number {

@@ -1,6 +1,7 @@
 import { describe, expect, test } from "vitest";
 import { modelFromNominal } from "@/lib/line/cable";
 import type { Circuit, Element, Termination } from "@/lib/line/element";
+import { stepFigures } from "@/lib/line/time/step-figures";
 import { settledLevels } from "@/lib/line/time/settled";
 import { cable, ohm, rope, run } from "@/tests/support/lossy-run";
 
@@ -49,6 +50,27 @@ describe("ends that are nothing at dc", () => {
     const coil: Element = { kind: "part", connection: "shunt", lH: 1e-6 };
     expect(level(run([coil], ohm(50), ohm(0)))).toBeCloseTo(1, 6);
     expect(level(run([coil], ohm(50)))).toBeCloseTo(0, 9);
+  });
+
+  test("what a capacitor in the line or a coil across it leaves to a resistor is exactly nothing", () => {
+    // 50 Ω, C, 50 Ω: V(s)·s = 50sC/(1 + 100sC); 50 Ω, L to ground: sL/(sL + 50): both go to 0 with s
+    expect(level(run([capacitor, cable(10)], ohm(50)))).toBe(0);
+    expect(level(run([{ kind: "part", connection: "shunt", lH: 1e-6 }], { kind: "open" }))).toBe(0);
+  });
+
+  test("overshoot and rise, which are shares of the settled level, do not exist where it is nothing", () => {
+    const behind = stepFigures(run([capacitor, cable(10)], ohm(50)), { kind: "step", amplitudeV: 1, riseS: 1e-9 });
+    expect(behind).toMatchObject({ settledV: 0, overshoot: NaN, riseS: NaN, delayS: NaN });
+  });
+
+  test("a voltage on the way is reached even where the signal comes back to nothing", () => {
+    const drive = { kind: "step", amplitudeV: 1, riseS: 1e-9 } as const;
+    const { reachedS, settledV } = stepFigures(run([capacitor], ohm(50)), drive, { thresholdV: 0.25 });
+    // v = ½·(e − ∫e dt/T), T = 100 Ω·1 nF, e the edge: at tr/2 the integral is (1/8 − 1/2π²)·tr and e rises by 2/tr
+    expect(reachedS / 1e-9).toBeCloseTo(0.5 + ((1 / 8 - 1 / (2 * Math.PI ** 2)) * 1e-9) / (2 * 1e-7), 5);
+    expect(settledV).toBe(0);
+    const fallen = stepFigures(run([capacitor], ohm(50)), { ...drive, amplitudeV: -1 }, { thresholdV: -0.25 });
+    expect(fallen.reachedS).toBeCloseTo(reachedS, 15);
   });
 
   test("behind a dead short there is nothing", () => {
