@@ -1,6 +1,7 @@
 import { RoutePlot } from "@/components/plot/route-plot";
 import { Section } from "@/components/ui/section";
 import { StateGlyph, StateMark, type MarkedState } from "@/components/ui/state-mark";
+import { withinWords } from "@/lib/cables/checking/check";
 import { agreementOfEntry, type Check, type ImpedanceRoute, type Verdict } from "@/lib/cables/agreement";
 import type { Cable } from "@/lib/cables/schema";
 import { digits, inWords, scaled } from "@/lib/format/quantity";
@@ -46,7 +47,9 @@ function Overall({ checks }: { checks: readonly Check[] }) {
     .filter(({ check }) => check !== "cutoff")
     .reduce((far, { percent }) => Math.max(far, Math.abs(percent)), 0);
   return (
-    <StateMark state={marks[worst]}>{worst === "fine" ? `within ${digits(most, 1)} %` : verdictWords[worst]}</StateMark>
+    <StateMark state={marks[worst]}>
+      {worst === "fine" ? `within ${withinWords(most / 100)}` : verdictWords[worst]}
+    </StateMark>
   );
 }
 

@@ -5,6 +5,7 @@ import { ChartFrame } from "@/components/plot/chart-frame";
 import type { CurveSeries } from "@/components/plot/curve-paths";
 import { CurvePlot } from "@/components/plot/curve-plot";
 import { ResidualStrip } from "@/components/plot/residual-strip";
+import { withinWords } from "@/lib/cables/checking/check";
 import { tableFit, tableRange, type LossTable } from "@/lib/cables/loss-rows";
 import { lossDbPer100m } from "@/lib/cables/model";
 import type { Cable } from "@/lib/cables/schema";
@@ -80,7 +81,7 @@ function Sentence({ table, fit, modelRms, isLossless }: SentenceProps) {
     <>
       Table of {table.points.length} rows, {from}, fitted by <span className="figures text-ink">{fitWords(fit)}</span>{" "}
       dB/100 m, f in MHz. The curve is the model that runs are worked out with
-      {modelRms !== null && <>; it is within {digits(modelRms, 1)} % rms of the table</>}.
+      {modelRms !== null && <>; it is within {withinWords(modelRms / 100)} rms of the table</>}.
     </>
   );
 }

@@ -29,9 +29,7 @@ export function CatalogueFiles({ canExport, canImport }: FilesAllowed) {
         if (!event.currentTarget.contains(event.relatedTarget)) close();
       }}
     >
-      <summary
-        className={`${buttonClass("plain", "small")} cursor-pointer list-none [&::-webkit-details-marker]:hidden`}
-      >
+      <summary className={`${buttonClass("plain")} cursor-pointer list-none [&::-webkit-details-marker]:hidden`}>
         {canImport ? "Take out, bring in" : "Take out"}
       </summary>
       <ul className="absolute right-0 z-10 mt-1 rounded border border-ink bg-paper p-1 text-label phone:right-auto phone:left-0">

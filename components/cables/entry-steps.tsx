@@ -45,6 +45,7 @@ export function EntrySteps(props: Props) {
   const [asked, setAsked] = useState<PossibleStep | null>(null);
   const steps = offeredSteps(standing);
   if (steps.length === 0) return null;
+  const refused = steps.filter(({ refusal }) => refusal !== null);
   const done = (step: PossibleStep) => {
     setAsked(null);
     const isGone = step === "takeBack" && standing.open?.revision === standing.current.revision;
@@ -67,6 +68,15 @@ export function EntrySteps(props: Props) {
           </Button>
         ))}
       </div>
+      {refused.length > 0 && (
+        <ul className="mt-2 text-note text-ink-3">
+          {refused.map(({ step, refusal }) => (
+            <li key={step}>
+              {stepWords[step].label}: {refusal}
+            </li>
+          ))}
+        </ul>
+      )}
       {asked && (
         <StepDialog
           key={asked}

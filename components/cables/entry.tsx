@@ -107,13 +107,6 @@ export function Entry(props: Props) {
           <EntryConditions cable={cable} warm={warm} asked={asked} change={change} />
           <Attenuation cable={cable} {...at} />
           <PerMetre {...at} />
-        </div>
-        <div className="flex min-w-0 flex-col gap-5 folded:col-start-2 phone:col-start-1">
-          <Agreement cable={cable} />
-          <Sources cable={cable} />
-          <EntryRecords cable={cable} />
-          <EntryHistory {...{ revisions, events, waivers }} current={cable.revision} />
-          <UsedIn {...uses} />
           <EntrySteps cableId={cable.id} designation={cable.designation} standing={standing} />
           <EntryReports
             cableId={cable.id}
@@ -121,6 +114,13 @@ export function Entry(props: Props) {
             mayReport={standing.mayReport}
             maySettle={standing.mayReview}
           />
+        </div>
+        <div className="flex min-w-0 flex-col gap-5 folded:col-start-2 phone:col-start-1">
+          <Agreement cable={cable} />
+          <Sources cable={cable} />
+          <EntryRecords cable={cable} />
+          <EntryHistory {...{ revisions, events, waivers }} current={cable.revision} />
+          <UsedIn {...uses} />
         </div>
       </div>
     </CursorProvider>

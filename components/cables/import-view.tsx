@@ -1,5 +1,6 @@
 "use client";
 
+import Link from "next/link";
 import { useState } from "react";
 import { ImportReport } from "@/components/cables/import-report";
 import { broughtIn } from "@/components/cables/import-words";
@@ -23,10 +24,16 @@ export function ImportView() {
   const count = report ? report.counts.draft + report.counts.quarantined : 0;
   return (
     <div className="max-w-280">
-      <h1>Bring in cables</h1>
+      <p className="text-label text-ink-2 phone:hidden">
+        <Link href="/cables" className="hover:text-copper">
+          Catalogue
+        </Link>
+        {" / "}
+      </p>
+      <h1 className="phone:sr-only">Bring in cables</h1>
       <p className="mt-1 max-w-160 text-ink-2">
-        First nothing is stored: you see what each row was understood to be. What contradicts itself comes into
-        quarantine, everything else as your drafts; all of it or nothing.
+        Choosing a file stores nothing: you see first what each row was understood to be. Then they come in together, or
+        none does: rows that contradict themselves go into quarantine, the others become your drafts.
       </p>
       <div className="mt-4 flex flex-wrap items-end gap-4">
         <Select

@@ -72,7 +72,7 @@ function Asked(props: AskedProps) {
     );
   return (
     <label className="block text-note text-ink-2">
-      {field.label}
+      {field.isNeeded ? field.label : `${field.label} (optional)`}
       <textarea value={value} maxLength={500} rows={3} onChange={(e) => change(e.target.value)} className={area} />
       {error && <span className="text-fail">{error}</span>}
     </label>

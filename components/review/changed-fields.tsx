@@ -1,7 +1,7 @@
 "use client";
 
 import { useState } from "react";
-import { fieldWords } from "@/components/review/field-words";
+import { fieldWords, valueClass } from "@/components/review/field-words";
 import { Cell, HeadCell, RowHead, Table } from "@/components/ui/table";
 import { fieldsOfBoth, type Difference } from "@/lib/cables/revisions/differences";
 import type { CableRevision } from "@/lib/cables/revisions/schema";
@@ -23,7 +23,7 @@ function Row({ field, lossAtHz }: { field: Field; lossAtHz: number }) {
   return (
     <tr>
       <RowHead>{name}</RowHead>
-      <Cell isRight className="figures">
+      <Cell isRight className={valueClass(field.before)}>
         {field.isSame ? (
           before
         ) : (
@@ -33,7 +33,7 @@ function Row({ field, lossAtHz }: { field: Field; lossAtHz: number }) {
           </s>
         )}
       </Cell>
-      <Cell isRight className="figures">
+      <Cell isRight className={valueClass(field.after)}>
         {field.isSame ? (
           after
         ) : (
@@ -55,9 +55,15 @@ function Row({ field, lossAtHz }: { field: Field; lossAtHz: number }) {
 /** Every field that changed, given ones first and then what follows from them; the others on request. */
 export function ChangedFields({ before, after, lossAtHz }: Props) {
   const [isWhole, setWhole] = useState(false);
-  const all = fieldsOfBoth(before, after, lossAtHz);
+  const isDerived = ({ isGiven, field }: Field) =>
+    !isGiven || field.startsWith("model.") || /^figure\..+\.derived\b/.test(field);
+  // What is worked out moves in digits that nobody sees; it has changed where its printed value has.
+  const isAlike = (field: Field) => {
+    const words = fieldWords(field, lossAtHz);
+    return field.isSame || (isDerived(field) && words.before === words.after);
+  };
+  const all = fieldsOfBoth(before, after, lossAtHz).map((field) => ({ ...field, isSame: isAlike(field) }));
   const shown = isWhole ? all : all.filter(({ isSame }) => !isSame);
-  const isDerived = ({ isGiven, field }: Field) => !isGiven || field.startsWith("model.");
   const [given, derived] = [shown.filter((field) => !isDerived(field)), shown.filter(isDerived)];
   const same = all.filter(({ isSame }) => isSame).length;
   const rows = (fields: readonly Field[]) =>

@@ -32,10 +32,16 @@ export function Decide({ revision, decision }: Props) {
     <div className="flex flex-col gap-2">
       <div className="flex flex-wrap gap-2.5">
         <Button kind="main" refused={refusedApproval} onClick={decision.approve}>
-          Approve revision {revision} <KeyCap>A</KeyCap>
+          Approve revision {revision}{" "}
+          <span className="phone:hidden">
+            <KeyCap isOnFill>A</KeyCap>
+          </span>
         </Button>
         <Button refused={refusedReturn} onClick={askReturn}>
-          Return with notes <KeyCap>R</KeyCap>
+          Return with notes{" "}
+          <span className="phone:hidden">
+            <KeyCap>R</KeyCap>
+          </span>
         </Button>
       </div>
       {refusedApproval && <p className="text-label text-ink-2">{refusedApproval}</p>}

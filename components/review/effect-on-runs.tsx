@@ -37,7 +37,7 @@ function Figures({ effect }: { effect: Effect }) {
       <Cell isRight className="figures font-[650]">
         {effectDigits(effect, effect.then.value)}
       </Cell>
-      <Cell className="unit whitespace-nowrap">{effectUnit(effect)}</Cell>
+      <Cell className="unit pl-1 whitespace-nowrap">{effectUnit(effect)}</Cell>
       <Cell className="w-32">
         {effect.now.isMet !== effect.then.isMet && (
           <StateMark state={effect.then.isMet ? "pass" : "fail"}>

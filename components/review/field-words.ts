@@ -1,6 +1,15 @@
 /** What the fields of a revision are called, and how their values are shown. */
 import { figureValue, quantityName } from "@/components/cables/figure-words";
-import { digits, frequency, inWords, notComputed, significantDigits } from "@/lib/format/quantity";
+import { familyWords } from "@/components/cables/words";
+import type { Family } from "@/lib/cables/schema";
+import {
+  digits,
+  frequency,
+  inWords,
+  notComputed,
+  significantDigits,
+  withoutTrailingZeros,
+} from "@/lib/format/quantity";
 import type { Difference } from "@/lib/cables/revisions/differences";
 
 interface Named {
@@ -11,7 +20,10 @@ interface Named {
   show?: (value: number) => string;
 }
 
-const mm = (name: string): Named => ({ name, unit: "mm", show: (value) => significantDigits(value, 4) });
+/** What somebody gave, without zeros that they did not give. */
+const asGiven = (value: number) => withoutTrailingZeros(significantDigits(value, 4));
+
+const mm = (name: string): Named => ({ name, unit: "mm", show: asGiven });
 
 const known: Record<string, Named> = {
   "entry.name": { name: "Name", unit: "" },
@@ -38,12 +50,12 @@ const known: Record<string, Named> = {
   "build.screen": { name: "Screen layers", unit: "" },
   "build.screenName": { name: "Screen, in words", unit: "" },
   "build.jacket": { name: "Jacket", unit: "" },
-  "build.pairCount": { name: "Pairs", unit: "" },
-  "limits.maxFrequencyHz": { name: "Highest frequency", unit: "MHz", factor: 1e-6 },
-  "limits.maxVoltageV": { name: "Highest voltage", unit: "V" },
-  "limits.minBendMm": { name: "Least bend radius", unit: "mm" },
-  "limits.minTemperatureC": { name: "Lowest temperature", unit: "°C" },
-  "limits.maxTemperatureC": { name: "Highest temperature", unit: "°C" },
+  "build.pairCount": { name: "Pairs", unit: "", show: asGiven },
+  "limits.maxFrequencyHz": { name: "Highest frequency", unit: "MHz", factor: 1e-6, show: asGiven },
+  "limits.maxVoltageV": { name: "Highest voltage", unit: "V", show: asGiven },
+  "limits.minBendMm": { name: "Least bend radius", unit: "mm", show: asGiven },
+  "limits.minTemperatureC": { name: "Lowest temperature", unit: "°C", show: asGiven },
+  "limits.maxTemperatureC": { name: "Highest temperature", unit: "°C", show: asGiven },
   "model.lInfHPerM": { name: "Model: inductance", unit: "nH/m", factor: 1e9 },
   "model.cFPerM": { name: "Model: capacitance", unit: "pF/m", factor: 1e12 },
   "model.lossTangent": { name: "Model: loss tangent", unit: "", show: (value) => significantDigits(value, 2) },
@@ -80,9 +92,32 @@ function conductorWords(text: string): string {
     .join("; ");
 }
 
+/** A text, a choice or a list of an entry as it is said. */
+function textWords(field: string, text: string): string {
+  switch (field) {
+    case "model.conductors":
+      return conductorWords(text);
+    case "entry.family":
+      return Object.hasOwn(familyWords, text) ? familyWords[text as Family] : text;
+    case "construction.kind":
+      return text === "coax" ? "Coaxial" : "Pair";
+    case "construction.screen":
+      return `${asGiven((JSON.parse(text) as { innerMm: number }).innerMm)} mm inside`;
+    case "build.isStranded":
+      return text === "true" ? "yes" : "no";
+    case "build.screen":
+      return (JSON.parse(text) as string[]).join(" and ") || "none";
+    default:
+      return text;
+  }
+}
+
+/** Figures are set in figures, words in words. */
+export const valueClass = (value: Difference["before"]) => (typeof value === "string" ? "" : "figures");
+
 function shown(field: string, value: Difference["before"], named: Named | undefined): string {
   if (value === null) return notComputed;
-  if (typeof value === "string") return field === "model.conductors" ? conductorWords(value) : value;
+  if (typeof value === "string") return textWords(field, value);
   const scaledValue = value * (named?.factor ?? 1);
   return named?.show?.(scaledValue) ?? significantDigits(scaledValue, 4);
 }

@@ -1,7 +1,7 @@
 "use client";
 
 import { Sources } from "@/components/cables/sources";
-import { fieldWords } from "@/components/review/field-words";
+import { fieldWords, valueClass } from "@/components/review/field-words";
 import { Cell, HeadCell, RowHead, Table } from "@/components/ui/table";
 import { fieldsOfBoth } from "@/lib/cables/revisions/differences";
 import type { CableRevision } from "@/lib/cables/revisions/schema";
@@ -30,7 +30,7 @@ export function NewEntry({ revision }: { revision: CableRevision }) {
               return (
                 <tr key={field.field}>
                   <RowHead>{name}</RowHead>
-                  <Cell isRight className="figures">
+                  <Cell isRight className={valueClass(field.after)}>
                     {after}
                   </Cell>
                   <Cell className="unit pl-2">{unit}</Cell>

@@ -49,7 +49,7 @@ export function PairedSections({ before, after }: { before: CableRevision | null
         ))}
       </div>
       {before && (
-        <div className="min-w-0">
+        <div className="w-74 max-w-full min-w-0">
           <h3 className="mb-2 text-label">From the centre outwards</h3>
           <RadialProfile
             before={{ revision: before.revision, cable: drawn(before) }}

@@ -97,45 +97,47 @@ export function QueueList({ queue, shown, now }: Props) {
   const outer = Math.max(1, ...waiting.map((item) => cableShape(item)?.outerMm ?? 0));
   const { mmToPx } = enlargementFor(outer, room);
   return (
-    <div className="flex flex-col gap-7">
+    <div className="flex flex-col gap-7 phone:contents">
       <ul aria-label="Waiting for a reviewer" className="border-t-[1.5px] border-ink">
         {waiting.map((item) => (
           <Waiting key={item.cableId} {...{ item, mmToPx, now }} isShown={item.cableId === shown} />
         ))}
       </ul>
-      {reports.length > 0 && (
-        <Section title="Problems reported" rule="light">
-          <ul>
-            {reports.map(({ id, cableId, designation, personName, text }) => (
-              <li key={id} className="border-b border-line py-1.25 text-label">
-                <Link href={`/cables/${encodeURIComponent(cableId)}` as Route} prefetch={false} className="link">
-                  {designation}
-                </Link>
-                <span className="text-ink-2">, {personName}</span>
-                <p className="break-words">{text}</p>
-              </li>
-            ))}
-          </ul>
-        </Section>
-      )}
-      {due.length > 0 && (
-        <Section title="Due for another look" rule="light">
-          <ul>
-            {due.map((item) => (
-              <Due key={item.cableId} item={item} />
-            ))}
-          </ul>
-        </Section>
-      )}
-      {settled.length > 0 && (
-        <Section title="Settled lately" rule="light">
-          <ul>
-            {settled.map((item) => (
-              <Settled key={`${item.cableId} ${item.at} ${item.step}`} item={item} />
-            ))}
-          </ul>
-        </Section>
-      )}
+      <div className="flex flex-col gap-7 phone:order-last">
+        {reports.length > 0 && (
+          <Section title="Problems reported" rule="light">
+            <ul>
+              {reports.map(({ id, cableId, designation, personName, text }) => (
+                <li key={id} className="border-b border-line py-1.25 text-label">
+                  <Link href={`/cables/${encodeURIComponent(cableId)}` as Route} prefetch={false} className="link">
+                    {designation}
+                  </Link>
+                  <span className="text-ink-2">, {personName}</span>
+                  <p className="break-words">{text}</p>
+                </li>
+              ))}
+            </ul>
+          </Section>
+        )}
+        {due.length > 0 && (
+          <Section title="Due for another look" rule="light">
+            <ul>
+              {due.map((item) => (
+                <Due key={item.cableId} item={item} />
+              ))}
+            </ul>
+          </Section>
+        )}
+        {settled.length > 0 && (
+          <Section title="Settled lately" rule="light">
+            <ul>
+              {settled.map((item) => (
+                <Settled key={`${item.cableId} ${item.at} ${item.step}`} item={item} />
+              ))}
+            </ul>
+          </Section>
+        )}
+      </div>
     </div>
   );
 }

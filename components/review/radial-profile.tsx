@@ -37,6 +37,9 @@ interface Props {
 }
 
 const width = 250;
+/** room at the end for the radius of an edge that lies there, and the unit */
+const tail = 46;
+const edgeLabelPx = 44;
 const left = 18;
 const rowHeight = 40;
 const gap = 9;
@@ -57,11 +60,12 @@ export function RadialProfile({ before, after }: Props) {
   });
   const foot = 2 * rowHeight + gap;
   const [main] = moved;
+  const unitAt = Math.max(width - 20, main ? x(Math.max(main.was, main.is)) + edgeLabelPx : 0);
   return (
     <figure>
       <svg
-        viewBox={`0 0 ${width} ${foot + 24}`}
-        width={width}
+        viewBox={`0 0 ${width + tail} ${foot + 24}`}
+        width={width + tail}
         role="img"
         aria-label={moved.length === 0 ? "No layer has moved" : movedWords(moved)}
         className="block max-w-full overflow-visible"
@@ -88,7 +92,7 @@ export function RadialProfile({ before, after }: Props) {
           0
         </text>
         {main && <Edges was={main.was} is={main.is} x={x} foot={foot} />}
-        <text x={width} y={foot + 16} textAnchor="end">
+        <text x={unitAt} y={foot + 16}>
           mm
         </text>
       </svg>

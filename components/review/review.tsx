@@ -13,6 +13,7 @@ import { PairedSections } from "@/components/review/paired-sections";
 import { QueueList } from "@/components/review/queue-list";
 import { Talk } from "@/components/review/talk";
 import { useDecision, type Refusals } from "@/components/review/use-decision";
+import { stateWords } from "@/components/cables/words";
 import { CursorProvider } from "@/components/plot/cursor";
 import { Hook } from "@/components/ui/hook";
 import type { ReviewQueue } from "@/lib/cables/queue/schema";
@@ -74,6 +75,14 @@ function Empty() {
   );
 }
 
+/** "approved 2026-01-19"; another state is named beside it. */
+function standsSince({ state, approvedAt }: CableRevision): string {
+  const word = stateWords[state].word.toLowerCase();
+  if (!approvedAt) return word;
+  const approved = `approved ${approvedAt.slice(0, 10)}`;
+  return state === "approved" ? approved : `${word}, ${approved}`;
+}
+
 /** Which revisions are held side by side, who wrote them and why. */
 function Standing({ before, after }: Reviewed) {
   const sent = (after.submittedAt ?? after.createdAt).slice(0, 10);
@@ -86,8 +95,7 @@ function Standing({ before, after }: Reviewed) {
           </Link>
         </h2>
         <p className="text-label text-ink-2">
-          {before &&
-            `revision ${before.revision}, ${before.state}${before.approvedAt ? `, approved ${before.approvedAt.slice(0, 10)}` : ""}  →  `}
+          {before && `revision ${before.revision}, ${standsSince(before)}  →  `}
           revision {after.revision}, sent by {after.authorName} {sent}
         </p>
       </div>
@@ -133,7 +141,7 @@ export function Review({ queue, reviewed, canDecide, now }: Props) {
     <CursorProvider>
       <Head {...{ queue, canDecide, now }} />
       <div className="mt-6 grid grid-cols-[276px_minmax(0,1fr)_340px] gap-x-8 gap-y-7 folded:grid-cols-[276px_minmax(0,1fr)] phone:grid-cols-1">
-        <div className="min-w-0 folded:row-span-2">
+        <div className="min-w-0 folded:row-span-2 phone:contents">
           <QueueList queue={queue} shown={reviewed?.after.id ?? null} now={now} />
         </div>
         {reviewed ? (

@@ -156,8 +156,8 @@ describe("The fields that changed", () => {
   test("stand with the old value struck and the new one marked, and the others on request", () => {
     render(<ChangedFields before={before} after={after} lossAtHz={100e6} />);
     const row = screen.getByRole("row", { name: /Dielectric diameter/ });
-    expect(row.querySelector("s")?.textContent).toContain("5.050");
-    expect(row.querySelector("b")?.textContent).toContain("5.190");
+    expect(row.querySelector("s")?.textContent).toContain("5.05");
+    expect(row.querySelector("b")?.textContent).toContain("5.19");
     expect(row.textContent).toContain("+2.8 %");
     expect(screen.queryByRole("row", { name: /Outer diameter/ })).toBeNull();
     fireEvent.click(screen.getByRole("button", { name: /fields that did not change/ }));

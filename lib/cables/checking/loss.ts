@@ -1,5 +1,5 @@
 /** What a loss table says of itself, of the dc resistance, of the conductors and of the insulation. Pure. */
-import { percentWords, verdictOf } from "@/lib/cables/checking/check";
+import { percentWords, verdictOf, withinWords } from "@/lib/cables/checking/check";
 import type { Check } from "@/lib/cables/checks";
 import type { Facts } from "@/lib/cables/checking/facts";
 import { usualInsulation } from "@/lib/cables/checking/insulation";
@@ -125,7 +125,7 @@ export function tableChecks(rms: number | undefined): Check[] {
   const verdict = verdictOf(rms);
   const sentence =
     verdict === "fine"
-      ? `The model is within ${percentWords(rms)} rms of the loss table.`
+      ? `The model is within ${withinWords(rms)} rms of the loss table.`
       : `The model is ${percentWords(rms)} rms from the loss table, more than the ${percentWords(agreementLimits.fine)} that rounding explains.`;
   return [{ check: "lossTable", verdict, percent: 100 * rms, sentence }];
 }

@@ -1,5 +1,5 @@
 /** What a meter read of a sample against what it should read on the model, at its own frequency. Pure. */
-import { aboveWords, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import { aboveWords, verdictOf, withinWords } from "@/lib/cables/checking/check";
 import type { Check } from "@/lib/cables/checks";
 import type { Facts } from "@/lib/cables/checking/facts";
 import { modelAt } from "@/lib/cables/warm-model";
@@ -62,7 +62,7 @@ export function readingChecks(facts: Facts): Check[] {
     const expected = `The model’s sample should read ${shown(should)}${at}`;
     const sentence =
       verdict === "fine"
-        ? `The meter’s ${what} is within ${percentWords(by)} of what the model’s sample reads${at}.${explained(facts, each, lengthM)}`
+        ? `The meter’s ${what} is within ${withinWords(by)} of what the model’s sample reads${at}.${explained(facts, each, lengthM)}`
         : `${expected}; the meter’s ${what} is ${aboveWords(by)} that.${explained(facts, each, lengthM)}`;
     return [
       { check, verdict, percent: 100 * by, sentence, ...(verdict !== "fine" && { culprit: `the meter’s ${what}` }) },
