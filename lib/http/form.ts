@@ -4,6 +4,17 @@ import { fileTooLarge, mediaTypeOf, mostFileBytes, readBytes } from "@/lib/http/
 
 /** What a form's own lines and fields may take beside its file. */
 const mostAround = 64 * 1024;
+/** Many small parts would take seconds to read. */
+const mostParts = 50;
+
+function hasTooManyParts(bytes: Uint8Array<ArrayBuffer>, contentType: string): boolean {
+  const boundary = /boundary="?([^";]+)/i.exec(contentType)?.[1] ?? "";
+  const line = `\r\n--${boundary}`;
+  const body = Buffer.from(bytes.buffer, bytes.byteOffset, bytes.byteLength);
+  let count = 0;
+  for (let at = body.indexOf(line); at >= 0 && count <= mostParts; at = body.indexOf(line, at + line.length)) count++;
+  return count > mostParts;
+}
 
 export interface Upload {
   fileName: string;
@@ -30,9 +41,19 @@ async function parsed(bytes: Uint8Array<ArrayBuffer>, contentType: string): Prom
 export function plainFileName(name: string): string {
   const last = name.split(/[/\\]/).at(-1) ?? "";
   const plain = last
-    .replace(/[\u0000-\u001f\u007f-\u009f\u200b-\u200f\u202a-\u202e\u2060-\u2069\ufeff<>:"|?*]/g, "")
+    .replace(/[\u0000-\u001f\u007f-\u009f\u00ad\u061c\u200b-\u200f\u2028-\u202e\u2060-\u2069\ufeff<>:"|?*]/g, "")
     .trim();
-  return plain.replace(/^\.+/, "").slice(-120) || "file";
+  // By whole characters: a half one would be a name that nothing can write.
+  return (
+    Array.from(
+      plain
+        .slice(-300)
+        .replace(/^[\udc00-\udfff]/, "")
+        .replace(/^\.+/, ""),
+    )
+      .slice(-120)
+      .join("") || "file"
+  );
 }
 
 /**
@@ -43,7 +64,9 @@ export async function readForm(request: Request, fileField = "file"): Promise<Re
   const contentType = request.headers.get("content-type") ?? "";
   if (mediaTypeOf(request) !== "multipart/form-data")
     throw new AppError("unsupported_media_type", "Send a form, with Content-Type: multipart/form-data.");
-  const form = await parsed(await readBytes(request, mostFileBytes + mostAround, fileTooLarge), contentType);
+  const sent = await readBytes(request, mostFileBytes + mostAround, fileTooLarge);
+  if (hasTooManyParts(sent, contentType)) throw new AppError("too_large", `A form has at most ${mostParts} parts.`);
+  const form = await parsed(sent, contentType);
   const read: ReadForm = { file: undefined, fields: {} };
   for (const [name, value] of form) {
     if (typeof value === "string") {

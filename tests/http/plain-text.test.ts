@@ -17,6 +17,7 @@ test.each([
   ["a mark that turns direction", "C50\u202e01F"],
   ["an isolate", "a\u2066b"],
   ["a line separator", "a\u2028b"],
+  ["half a character", "a\ud800b"],
 ])("%s in a name is refused with a sentence", (_, name) => {
   const circuit = { source: { kind: "constant", reOhm: 50, imOhm: 0 }, elements: [], load: { kind: "open" } };
   const { error } = newRunSchema.safeParse({ name, circuit });

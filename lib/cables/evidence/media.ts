@@ -1,6 +1,7 @@
 /**
  * What a file is, by its content: a name or a header can say anything. Only kinds that cannot run in a browser. Pure.
  */
+import { isTable, isText, isTouchstone } from "@/lib/cables/evidence/text-kinds";
 
 export const evidenceTypes = [
   "application/pdf",
@@ -43,60 +44,15 @@ function isWebp(bytes: Uint8Array): boolean {
   return size === bytes.length || size + 1 === bytes.length;
 }
 
-function textOf(bytes: Uint8Array): string | undefined {
-  try {
-    const text = new TextDecoder("utf-8", { fatal: true }).decode(bytes);
-    return /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]/.test(text) ? undefined : text;
-  } catch {
-    return undefined;
-  }
-}
-
-const optionLine = /^#\s*(?:[kmg]?hz\s*|[syzhg]\s*|db\s*|ma\s*|ri\s*|r\s+[\d.]+(?:e[+-]?\d+)?\s*)*(?:!.*)?$/i;
-const numbers = /^\s*[+-]?(?:\d+\.?\d*|\.\d+)(?:e[+-]?\d+)?(?:\s+[+-]?(?:\d+\.?\d*|\.\d+)(?:e[+-]?\d+)?)*\s*(?:!.*)?$/i;
-const keyword = /^\s*\[[\w -]+\]/;
-
-/**
- * Touchstone 1 and 2: comments, one option line, and then nothing but numbers (and, of version 2, keywords in brackets).
- * Every line is held to it: what only begins like such a file is none.
- */
-function isTouchstone(text: string): boolean {
-  let [hasOptions, rows] = [false, 0];
-  for (const line of text.split(/\r\n|\r|\n/)) {
-    if (/^\s*(!.*)?$/.test(line) || keyword.test(line)) continue;
-    if (/^\s*#/.test(line)) {
-      if (hasOptions || !optionLine.test(line.trim())) return false;
-      hasOptions = true;
-    } else if (hasOptions && numbers.test(line)) rows++;
-    else return false;
-  }
-  return hasOptions && rows > 0;
-}
-
-const leastShare = 0.9;
-
-/** A table in text: the same sign parts nearly every line into as many cells, at least two; no markup. */
-function isTable(text: string): boolean {
-  if (/<\s*(?:!doctype|html|script|svg|\?xml)/i.test(text.slice(0, 4096))) return false;
-  const lines = text.split(/\r\n|\r|\n/).filter((line) => line.trim() !== "");
-  if (lines.length < 2) return false;
-  return [",", ";", "\t"].some((sign) => {
-    const counts = lines.map((line) => line.replace(/"[^"]*"/g, "").split(sign).length);
-    const usual = counts[0] ?? 0;
-    return usual > 1 && counts.filter((count) => count === usual).length >= leastShare * counts.length;
-  });
-}
-
 /** @returns undefined for anything that is not kept as evidence */
 export function typeByContent(bytes: Uint8Array): EvidenceType | undefined {
   if (isPdf(bytes)) return "application/pdf";
   if (isPng(bytes)) return "image/png";
   if (isJpeg(bytes)) return "image/jpeg";
   if (isWebp(bytes)) return "image/webp";
-  const text = textOf(bytes);
-  if (text === undefined) return undefined;
-  if (isTouchstone(text)) return "application/touchstone";
-  return isTable(text) ? "text/csv" : undefined;
+  if (!isText(bytes)) return undefined;
+  if (isTouchstone(bytes)) return "application/touchstone";
+  return isTable(bytes) ? "text/csv" : undefined;
 }
 
 /** Whether a browser may show it in its own page rather than keep it. */
