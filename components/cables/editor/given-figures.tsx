@@ -26,17 +26,21 @@ export function GivenFigures() {
   ];
   return (
     <>
-      <dl className={`mt-2 flex flex-wrap gap-x-5 gap-y-1 border-t border-rule pt-1.5 ${isBehind ? "opacity-60" : ""}`}>
-        <dt className="font-[560]">gives</dt>
-        {figures.map(({ label, ...figure }) => (
-          <div key={label}>
-            <dt className="text-label text-ink-2">{label}</dt>
-            <dd>
-              <Figure {...figure} />
-            </dd>
-          </div>
-        ))}
-      </dl>
+      <div
+        className={`mt-2 flex flex-wrap gap-x-5 gap-y-1 border-t border-rule pt-1.5 ${isBehind ? "opacity-60" : ""}`}
+      >
+        <p className="font-[560]">gives</p>
+        <dl className="contents">
+          {figures.map(({ label, ...figure }) => (
+            <div key={label}>
+              <dt className="text-label text-ink-2">{label}</dt>
+              <dd>
+                <Figure {...figure} />
+              </dd>
+            </div>
+          ))}
+        </dl>
+      </div>
       {way.notes.map((note) => (
         <p key={note} className="mt-0.5 text-note text-ink-3">
           {note}
