@@ -4,6 +4,7 @@
  */
 import { z } from "zod";
 import { provenanceSchema } from "@/lib/cables/provenance";
+import { plain } from "@/lib/http/plain-text";
 
 const finite = (what: string) => z.number({ error: `${what} must be a number.` });
 export const positive = (what: string) => finite(what).positive({ error: `${what} must be more than 0.` });
@@ -74,15 +75,15 @@ const figureKinds = ["nominal", "typical", "minimum", "maximum", "measured", "de
 
 export const figureSchema = z
   .strictObject({
-    quantity: z.string().min(1).max(60).describe("what it is, with its SI unit, for example z0Ohm or lossDbPerM"),
+    quantity: plain(z.string().min(1).max(60), "The quantity").describe("with its SI unit, as z0Ohm or lossDbPerM"),
     valueSi: finite("The value"),
-    asTyped: z.string().max(120).describe("as the source gives it, with its unit"),
+    asTyped: plain(z.string().max(120), "The figure").describe("as the source gives it, with its unit"),
     kind: z.enum(figureKinds),
     toleranceSi: notNegative("The tolerance").optional(),
     temperatureC: temperature().optional(),
     fromHz: positive("The lower frequency").optional(),
     toHz: positive("The upper frequency").optional(),
-    source: z.string().min(1).max(300),
+    source: plain(z.string().min(1).max(300), "The source"),
     provenance: provenanceSchema.optional().describe("the source in its parts"),
   })
   .meta({ id: "Figure" });
@@ -121,13 +122,13 @@ export type Construction = z.infer<typeof constructionSchema>;
 /** What the drawing needs beyond the electrical construction. Each word is drawn, and searched for. */
 export const buildSchema = z
   .strictObject({
-    conductor: z.string().max(120).describe("inner conductor or wires, in words"),
+    conductor: plain(z.string().max(120), "The conductor").describe("inner conductor or wires, in words"),
     isStranded: z.boolean(),
     dielectric: z.enum(["solid", "foam", "airSpaced"]),
-    dielectricName: z.string().max(80),
+    dielectricName: plain(z.string().max(80), "The dielectric"),
     screen: z.array(z.enum(["foil", "braid", "doubleBraid", "strip", "tube", "corrugated", "drain"])).max(4),
-    screenName: z.string().max(120),
-    jacket: z.string().max(60).nullable().describe("sheath material, null without one"),
+    screenName: plain(z.string().max(120), "The screen"),
+    jacket: plain(z.string().max(60), "The jacket").nullable().describe("sheath material, null without one"),
     pairCount: z.int().min(1).max(100),
   })
   .meta({ id: "Build" });

@@ -2,7 +2,7 @@
 import { eq } from "drizzle-orm";
 import { describe, expect, test } from "vitest";
 import { database } from "@/db/client";
-import { cables } from "@/db/schema/cables";
+import { cableRevisions, cables } from "@/db/schema/cables";
 import { notices } from "@/db/schema/notices";
 import { approve } from "@/lib/cables/approval/service";
 import { addCableComment, listCableComments } from "@/lib/cables/comments/service";
@@ -128,6 +128,15 @@ describe("A waiver", () => {
     giveWaiver(librarian, id, { runId: one.run.id, reason: "Nothing else is on the shelf.", until: today() });
     expect(one.take().pinned).toEqual([{ cableId: id, revision: 1 }]);
     expect(another.take).toThrow(expect.objectContaining({ code: "invalid_input" }));
+  });
+
+  test("is not given for what was quarantined without ever having been approved", () => {
+    const id = entry({ state: "quarantined" });
+    const { run } = inRun(id);
+    database().update(cableRevisions).set({ approvedAt: null }).where(eq(cableRevisions.cableId, id)).run();
+    expect(() => giveWaiver(librarian, id, { runId: run.id, reason: "Now.", until: today() })).toThrow(
+      expect.objectContaining({ code: "conflict", message: expect.stringContaining("was never approved") }),
+    );
   });
 
   test("that was taken back lets nothing more in, and stays in the list", () => {

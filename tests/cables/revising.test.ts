@@ -7,6 +7,7 @@ import { notices } from "@/db/schema/notices";
 import { members, people } from "@/db/schema/team";
 import { approve } from "@/lib/cables/approval/service";
 import { createDraft, deleteDraft } from "@/lib/cables/drafts/service";
+import { addEvidence, getEvidence, listEvidence } from "@/lib/cables/evidence/service";
 import { listEvents } from "@/lib/cables/events/service";
 import { newCableSchema } from "@/lib/cables/new-cable";
 import { beginRevision, changeDraft } from "@/lib/cables/revising/service";
@@ -136,6 +137,20 @@ test("Taking back a draft revision that was never submitted leaves the entry as 
   deleteDraft(designer, id);
   expect(listRevisions(librarian, id).map(({ revision }) => revision)).toEqual([1]);
   expect(beginRevision(designer, id, "In earnest.").revision).toBe(2);
+});
+
+test("A file of somebody else's stays when a draft is taken back, and the draft's own are not shown before it is approved", () => {
+  const id = entry();
+  beginRevision(designer, id, "A whim.");
+  const file = (text: string) => ({ fileName: "a.csv", bytes: new TextEncoder().encode(`a,b\n1,${text}\n`) });
+  addEvidence(librarian, id, { file: file("kept"), fields: { title: "Kept" } });
+  const { id: own } = addEvidence(designer, id, { file: file("draft"), fields: { title: "Of the draft" } });
+  expect(listEvidence(actor("auditor"), id).items).toHaveLength(2);
+  const colleague: Actor = { ...designer, personId: "another-designer" };
+  expect(listEvidence(colleague, id).items).toEqual([]);
+  expect(() => getEvidence(colleague, id, own)).toThrow(expect.objectContaining({ code: "not_found" }));
+  deleteDraft(designer, id);
+  expect(listEvidence(colleague, id).items).toMatchObject([{ title: "Kept", revision: 1 }]);
 });
 
 test("A draft goes to review by its author alone, and the reviewers are told", () => {

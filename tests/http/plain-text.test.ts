@@ -1,5 +1,10 @@
 import { expect, test } from "vitest";
 import { newRunSchema } from "@/lib/runs/schema";
+import { newCableCommentSchema } from "@/lib/cables/comments/schema";
+import { newReportSchema } from "@/lib/cables/reports/schema";
+import { newRevisionSchema } from "@/lib/cables/revisions/schema";
+import { buildSchema, figureSchema } from "@/lib/cables/schema";
+import { restrictSchema, returnSchema } from "@/lib/cables/steps/schema";
 import { isPlainText } from "@/lib/http/plain-text";
 
 test.each([
@@ -24,4 +29,21 @@ test.each([
   expect(error?.issues).toMatchObject([
     { path: ["name"], message: "The name holds characters that cannot be seen; type it anew." },
   ]);
+});
+
+const turned = "50 \u202e05";
+test.each([
+  ["a comment", newCableCommentSchema, { text: turned }],
+  ["a report", newReportSchema, { text: turned }],
+  ["why there is a revision", newRevisionSchema, { reason: turned }],
+  ["a condition", restrictSchema, { condition: turned }],
+  ["what has to change", returnSchema, { note: turned }],
+  [
+    "a figure as typed",
+    figureSchema,
+    { quantity: "z0Ohm", valueSi: 50, asTyped: turned, kind: "nominal", source: "x" },
+  ],
+  ["a word of the build", buildSchema.pick({ jacket: true }), { jacket: turned }],
+])("%s refuses characters that cannot be seen: a reviewer reads what is kept", (_, schema, given) => {
+  expect(schema.safeParse(given).error?.issues).toMatchObject([{ message: expect.stringContaining("cannot be seen") }]);
 });

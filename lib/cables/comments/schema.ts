@@ -1,13 +1,17 @@
 /** What is said of a revision. Pure. */
 import { z } from "zod";
+import { plain } from "@/lib/http/plain-text";
 
 export const newCableCommentSchema = z
   .strictObject({
-    text: z
-      .string({ error: "A comment is text." })
-      .trim()
-      .min(1, { error: "Say something." })
-      .max(2000, { error: "A comment has at most 2000 characters." }),
+    text: plain(
+      z
+        .string({ error: "A comment is text." })
+        .trim()
+        .min(1, { error: "Say something." })
+        .max(2000, { error: "A comment has at most 2000 characters." }),
+      "A comment",
+    ),
     revision: z
       .int({ error: "The revision is a whole number." })
       .positive({ error: "Revisions are counted from 1." })

@@ -2,13 +2,14 @@
 import { and, eq, ne } from "drizzle-orm";
 import { database } from "@/db/client";
 import { cableEvents } from "@/db/schema/cable-records";
+import { cableEvidence } from "@/db/schema/evidence";
 import { cableRevisions, cables } from "@/db/schema/cables";
 import type { Actor } from "@/lib/auth/actor";
 import { may, requirePermission } from "@/lib/auth/permission";
 import { revisionValues } from "@/lib/cables/drafts/values";
 import { recordEvent } from "@/lib/cables/events/service";
 import type { NewCable } from "@/lib/cables/new-cable";
-import { findOpenNumber, getRevision } from "@/lib/cables/revisions/service";
+import { findOpenNumber, getCurrentRevision, getRevision } from "@/lib/cables/revisions/service";
 import type { Cable } from "@/lib/cables/schema";
 import { getCable } from "@/lib/cables/service";
 import { AppError } from "@/lib/http/errors";
@@ -73,6 +74,17 @@ export function deleteDraft(actor: Actor, cableId: string): void {
       if (draft.isCurrent) tx.delete(cables).where(eq(cables.id, cableId)).run();
       else {
         const ofCable = and(eq(cableRevisions.cableId, cableId), eq(cableRevisions.revision, revision));
+        // A file that somebody else added meanwhile bears out the entry, and does not go with the draft.
+        tx.update(cableEvidence)
+          .set({ revision: getCurrentRevision(actor, cableId).revision })
+          .where(
+            and(
+              eq(cableEvidence.cableId, cableId),
+              eq(cableEvidence.revision, revision),
+              ne(cableEvidence.addedById, draft.authorId),
+            ),
+          )
+          .run();
         // What nobody was ever shown leaves no trace: its number is given again.
         tx.delete(cableEvents)
           .where(and(eq(cableEvents.cableId, cableId), eq(cableEvents.revision, revision)))

@@ -2,11 +2,12 @@
 import { createHash } from "node:crypto";
 import { and, count, desc, eq, sql } from "drizzle-orm";
 import { database } from "@/db/client";
-import { cables } from "@/db/schema/cables";
+import { cableRevisions, cables } from "@/db/schema/cables";
 import { cableEvidence } from "@/db/schema/evidence";
 import { people } from "@/db/schema/team";
 import type { Actor } from "@/lib/auth/actor";
 import { requirePermission } from "@/lib/auth/permission";
+import { readableCables } from "@/lib/auth/visibility/service";
 import { evidenceFieldsSchema, type Evidence, type EvidenceList } from "@/lib/cables/evidence/schema";
 import { type EvidenceType, typeByContent } from "@/lib/cables/evidence/media";
 import { mayAddRecords, requireRecords } from "@/lib/cables/records/service";
@@ -81,7 +82,15 @@ export function addEvidence(actor: Actor, cableId: string, { file, fields }: Rea
   return { ...told, addedByName: actor.name, addedAt };
 }
 
-/** @throws AppError `not_found`, `forbidden` as reading the entry */
+const revisionOf = and(
+  eq(cableRevisions.cableId, cableEvidence.cableId),
+  eq(cableRevisions.revision, cableEvidence.revision),
+);
+
+/**
+ * Of an entry that the actor may read; what was added to an open revision is for those who may read that.
+ * @throws AppError `not_found`, `forbidden` as reading the entry
+ */
 export function listEvidence(actor: Actor, cableId: string): EvidenceList {
   requirePermission(actor, "cables.read");
   getCable(actor, cableId);
@@ -90,7 +99,9 @@ export function listEvidence(actor: Actor, cableId: string): EvidenceList {
     .select({ id, revision, fileName, mediaType, sizeBytes, hash, title, addedAt, addedByName: people.name })
     .from(cableEvidence)
     .innerJoin(people, eq(people.id, cableEvidence.addedById))
-    .where(eq(cableEvidence.cableId, cableId))
+    .innerJoin(cables, eq(cables.id, cableEvidence.cableId))
+    .innerJoin(cableRevisions, revisionOf)
+    .where(and(readableCables(actor), eq(cables.id, cableId)))
     .orderBy(desc(addedAt))
     .all();
   return { items: rows as Evidence[], mayAdd: mayAddRecords(actor, cableId) };
@@ -104,7 +115,9 @@ export function getEvidence(actor: Actor, cableId: string, evidenceId: string) {
   const found = database()
     .select({ fileName, mediaType, content })
     .from(cableEvidence)
-    .where(and(eq(cableEvidence.cableId, cableId), eq(cableEvidence.id, evidenceId)))
+    .innerJoin(cables, eq(cables.id, cableEvidence.cableId))
+    .innerJoin(cableRevisions, revisionOf)
+    .where(and(readableCables(actor), eq(cables.id, cableId), eq(cableEvidence.id, evidenceId)))
     .get();
   if (!found) throw new AppError("not_found", "There is no such file.");
   return found;

@@ -2,6 +2,7 @@
 import { z } from "zod";
 import { strangeIn } from "@/lib/cables/exchange/plain-text";
 import { figureSchema, lineModelSchema, notNegative, positive, temperature } from "@/lib/cables/schema";
+import { plain } from "@/lib/http/plain-text";
 
 const name = (what: string) =>
   z
@@ -32,7 +33,7 @@ export const newLotSchema = z
       .max(200)
       .default("")
       .describe("instrument, method, uncertainty: the source of the figures"),
-    note: z.string().trim().max(500, { error: "A note has at most 500 characters." }).default(""),
+    note: plain(z.string().trim().max(500, { error: "A note has at most 500 characters." }), "A note").default(""),
   })
   .refine(
     ({ z0Ohm, velocityFactor, loopResistanceOhmPerM, losses }) =>

@@ -1,12 +1,16 @@
 /** A problem with a cable, reported and settled. Pure. */
 import { z } from "zod";
+import { plain } from "@/lib/http/plain-text";
 
 const sentence = (what: string, missing: string) =>
-  z
-    .string({ error: `${what} is text.` })
-    .trim()
-    .min(1, { error: missing })
-    .max(2000, { error: `${what} has at most 2000 characters.` });
+  plain(
+    z
+      .string({ error: `${what} is text.` })
+      .trim()
+      .min(1, { error: missing })
+      .max(2000, { error: `${what} has at most 2000 characters.` }),
+    what,
+  );
 
 export const newReportSchema = z
   .strictObject({ text: sentence("A report", "Say what is wrong with the cable.") })

@@ -3,6 +3,7 @@ import { z } from "zod";
 import { entryInputsSchema } from "@/lib/cables/inputs";
 import { newCableSchema } from "@/lib/cables/new-cable";
 import { type Cable, cableSchema, stateSchema } from "@/lib/cables/schema";
+import { plain } from "@/lib/http/plain-text";
 
 const time = z.string().describe("ISO 8601");
 
@@ -65,11 +66,14 @@ export const revisionLinesSchema = z.strictObject({ items: z.array(lineSchema).d
 
 export const newRevisionSchema = z
   .strictObject({
-    reason: z
-      .string({ error: "The reason is text." })
-      .trim()
-      .min(1, { error: "Say why there is to be a new revision." })
-      .max(500, { error: "A reason has at most 500 characters." }),
+    reason: plain(
+      z
+        .string({ error: "The reason is text." })
+        .trim()
+        .min(1, { error: "Say why there is to be a new revision." })
+        .max(500, { error: "A reason has at most 500 characters." }),
+      "The reason",
+    ),
   })
   .meta({ id: "NewRevision" });
 

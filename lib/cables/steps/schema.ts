@@ -1,13 +1,17 @@
 /** What is given with a step in the life of a revision. Pure. */
 import { z } from "zod";
 import { successorSchema } from "@/lib/cables/schema";
+import { plain } from "@/lib/http/plain-text";
 
 const most = 1000;
 const text = (what: string) =>
-  z
-    .string({ error: `${what} is text.` })
-    .trim()
-    .max(most, { error: `${what} has at most ${most} characters.` });
+  plain(
+    z
+      .string({ error: `${what} is text.` })
+      .trim()
+      .max(most, { error: `${what} has at most ${most} characters.` }),
+    what,
+  );
 const note = text("A note");
 const needed = (what: string, sentence: string) => text(what).min(1, { error: sentence });
 

@@ -1,5 +1,6 @@
 /** Waivers: one run may have one cable that it otherwise could not, until a date. Pure. */
 import { z } from "zod";
+import { plain } from "@/lib/http/plain-text";
 
 /** A day that is on the calendar, "2026-03-01". */
 export const daySchema = (what: string) =>
@@ -8,11 +9,14 @@ export const daySchema = (what: string) =>
 export const newWaiverSchema = z
   .strictObject({
     runId: z.string({ error: "Name the run by its id." }).min(1, { error: "Name the run." }).max(100),
-    reason: z
-      .string({ error: "The reason is text." })
-      .trim()
-      .min(1, { error: "Say why the run may have it." })
-      .max(1000, { error: "A reason has at most 1000 characters." }),
+    reason: plain(
+      z
+        .string({ error: "The reason is text." })
+        .trim()
+        .min(1, { error: "Say why the run may have it." })
+        .max(1000, { error: "A reason has at most 1000 characters." }),
+      "The reason",
+    ),
     until: daySchema("The end").describe("the last day it holds"),
   })
   .meta({ id: "NewWaiver" });

@@ -7,6 +7,7 @@ import { people } from "@/db/schema/team";
 import type { Actor } from "@/lib/auth/actor";
 import { requirePermission } from "@/lib/auth/permission";
 import { visibleRuns } from "@/lib/auth/visibility/service";
+import { getCurrentRevision } from "@/lib/cables/revisions/service";
 import { getCable } from "@/lib/cables/service";
 import { decided } from "@/lib/cables/steps/service";
 import { holdsOn, type NewWaiver, today, type Waiver } from "@/lib/cables/waivers/schema";
@@ -46,10 +47,10 @@ const refused = (field: keyof NewWaiver, sentence: string) =>
 export function giveWaiver(actor: Actor, cableId: string, { runId, reason, until }: NewWaiver): Waiver {
   requirePermission(actor, "cables.review");
   return decided(() => {
-    const { state, designation } = getCable(actor, cableId);
+    const { state, designation, approvedAt } = getCurrentRevision(actor, cableId);
     if (state === "approved") throw new AppError("conflict", `${designation} is approved: any run may have it.`);
-    if (state === "draft" || state === "inReview")
-      throw new AppError("conflict", `${designation} was never approved; review it instead.`);
+    // A row brought in may be quarantined without ever having been approved.
+    if (approvedAt === null) throw new AppError("conflict", `${designation} was never approved; review it instead.`);
     const run = database()
       .select({ id: runs.id })
       .from(runs)

@@ -1,13 +1,17 @@
 /** What is said about a run. Pure. */
 import { z } from "zod";
+import { plain } from "@/lib/http/plain-text";
 
 export const newCommentSchema = z
   .strictObject({
-    text: z
-      .string({ error: "A comment is text." })
-      .trim()
-      .min(1, { error: "Say something." })
-      .max(2000, { error: "A comment has at most 2000 characters." }),
+    text: plain(
+      z
+        .string({ error: "A comment is text." })
+        .trim()
+        .min(1, { error: "Say something." })
+        .max(2000, { error: "A comment has at most 2000 characters." }),
+      "A comment",
+    ),
   })
   .meta({ id: "NewComment" });
 
