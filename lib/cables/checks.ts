@@ -1,6 +1,6 @@
 /** Whether an entry agrees with itself, told in sentences: what a reviewer reads before deciding. Pure. */
 import { agreementOfEntry, type Verdict } from "@/lib/cables/agreement";
-import { percentWords, verdictOf } from "@/lib/cables/checking/check";
+import { percentWords, verdictOf, withinWords } from "@/lib/cables/checking/check";
 import {
   conductorChecks,
   constructionChecks,
@@ -38,7 +38,7 @@ function modelChecks({ percent }: { percent: number }): Check {
   const verdict = verdictOf(percent / 100);
   const sentence =
     verdict === "fine"
-      ? `The model has the figures stated within ${percentWords(percent / 100)}.`
+      ? `The model has the figures stated within ${withinWords(percent / 100)}.`
       : `The model is ${percentWords(percent / 100)} from a figure stated: another way rules, or the stated figures do not agree.`;
   return { check: "model", verdict, percent, sentence };
 }

@@ -13,5 +13,8 @@ export function verdictOf(deviation: number, { fine, look } = agreementLimits): 
 /** "4.3 %", without a sign. */
 export const percentWords = (share: number) => `${digits(Math.abs(share) * 100, 1)} %`;
 
+/** After “within”: never less than the last digit shown. */
+export const withinWords = (share: number) => percentWords(Math.max(Math.abs(share), 0.001));
+
 /** "4.3 % above" */
 export const aboveWords = (share: number) => `${percentWords(share)} ${share < 0 ? "below" : "above"}`;

@@ -1,5 +1,5 @@
 /** What is stated against what the construction gives, and the end of the band it can carry. Pure. */
-import { aboveWords, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import { aboveWords, verdictOf, withinWords } from "@/lib/cables/checking/check";
 import type { Check } from "@/lib/cables/checks";
 import type { Facts } from "@/lib/cables/checking/facts";
 import { quantityShown, quantityWords } from "@/lib/cables/checking/triangle";
@@ -34,7 +34,7 @@ export function constructionChecks({ drawn, stated }: Facts): Check[] {
   const verdict = verdictOf(worst.by);
   const base = { check: "construction", verdict, percent: 100 * worst.by };
   if (verdict === "fine")
-    return [{ ...base, sentence: `The construction gives the figures stated within ${percentWords(worst.by)}.` }];
+    return [{ ...base, sentence: `The construction gives the figures stated within ${withinWords(worst.by)}.` }];
   const isOff = (quantity: Compared) =>
     apart.some((each) => each.quantity === quantity && Math.abs(each.by) > agreementLimits.fine);
   const { quantity, value } = worst;
@@ -102,7 +102,7 @@ export function conductorChecks({ drawn, core, loop, construction, build, family
     return [
       {
         ...base,
-        sentence: `The dc resistance of the ${what} is that of its cross-section within ${percentWords(by)}.`,
+        sentence: `The dc resistance of the ${what} is that of its cross-section within ${withinWords(by)}.`,
       },
     ];
   const clad = by > 1.5 ? " So much more is not copper: is the conductor clad steel, or aluminium?" : "";

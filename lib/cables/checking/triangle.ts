@@ -1,5 +1,5 @@
 /** Whether the stated figures of a metre go together. Pure. */
-import { aboveWords, percentWords, verdictOf } from "@/lib/cables/checking/check";
+import { aboveWords, percentWords, verdictOf, withinWords } from "@/lib/cables/checking/check";
 import type { Check } from "@/lib/cables/checks";
 import type { Facts } from "@/lib/cables/checking/facts";
 import { insulationsFor } from "@/lib/cables/checking/insulation";
@@ -46,7 +46,7 @@ export function triangleChecks(facts: Facts): Check[] {
   const base = { check: "triangle", verdict, percent: 100 * deviation };
   if (verdict === "fine")
     return [
-      { ...base, sentence: `Impedance, velocity factor and capacitance agree within ${percentWords(deviation)}.` },
+      { ...base, sentence: `Impedance, velocity factor and capacitance agree within ${withinWords(deviation)}.` },
     ];
   const odd = oddOne(facts);
   const apart = `Impedance, velocity factor and capacitance are ${percentWords(deviation)} apart.`;
@@ -88,7 +88,7 @@ export function inductanceChecks({ stated }: Facts): Check[] {
       ...(verdict !== "fine" && { culprit: "the inductance" }),
       sentence:
         verdict === "fine"
-          ? `The inductance agrees with ${with_} within ${percentWords(deviation)}.`
+          ? `The inductance agrees with ${with_} within ${withinWords(deviation)}.`
           : `The inductance is ${aboveWords(deviation)} the ${shown.inductance(line.inductance)} that ${with_} give.`,
     },
   ];
