@@ -40,6 +40,7 @@ export function limitSentence(line: LimitLineItem): string {
 
 /** Where a line is from: "ANSI/TIA-568, C.2, clause not seen". */
 export function sourceWords({ source: { title, edition, clause }, isStandard }: LimitLineItem): string {
-  const place = clause ?? (isStandard ? "clause not seen" : "");
+  const numbered = clause && /^\d/.test(clause) ? `clause ${clause}` : clause;
+  const place = numbered ?? (isStandard ? "clause not seen" : "");
   return [title, edition, place].filter((part) => part !== "").join(", ");
 }

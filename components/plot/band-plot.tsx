@@ -4,6 +4,7 @@ import { AxisX, AxisY, axisScale, type AxisScale } from "@/components/plot/axes"
 import { useMeasuredWidth } from "@/components/plot/measured-width";
 import { usePlotPointer } from "@/components/plot/plot-pointer";
 import { Readout } from "@/components/plot/readout";
+import { separate } from "@/components/plot/series";
 
 export interface BandCurves {
   min: ArrayLike<number>;
@@ -91,7 +92,7 @@ export function BandPlot(props: BandPlotProps) {
         )}
         <AxisX scale={x} ticks={x.ticks(7)} format={formatX} fromY={room.top} toY={bottom} />
         <AxisY scale={y} ticks={y.ticks(6)} format={formatY} fromX={left} toX={right} />
-        <text x={right + 8} y={bottom + 14}>
+        <text x={right} y={bottom + 28} textAnchor="end">
           {xUnit}
         </text>
         <path d={wash(props, x, y)} fill="var(--copper-wash)" />
@@ -118,7 +119,7 @@ export function BandPlot(props: BandPlotProps) {
             </text>
           </g>
         )}
-        <Names curves={curves} last={last} x={right + 8} y={clampY} />
+        <Names curves={curves} last={last} x={right + 8} y={clampY} limits={[room.top, bottom]} />
         {pointed >= 0 && cursor !== null && (
           <Readout
             x={x(cursor)}
@@ -143,10 +144,12 @@ interface NamesProps {
   last: number;
   x: number;
   y: (value: number) => number;
+  /** px they stay within */
+  limits: readonly [number, number];
 }
 
 /** The names of the curves at their right ends, kept apart. */
-function Names({ curves, last, x, y }: NamesProps) {
+function Names({ curves, last, x, y, limits }: NamesProps) {
   const wished = [
     { words: "highest", at: curves.max[last]! },
     { words: "95 %", at: curves.p95[last]! },
@@ -154,19 +157,17 @@ function Names({ curves, last, x, y }: NamesProps) {
     { words: "5 %", at: curves.p05[last]! },
     { words: "lowest", at: curves.min[last]! },
   ].filter(({ at }) => !Number.isNaN(at));
-  let floor = -Infinity;
-  return wished.map(({ words, at }) => {
-    floor = Math.max(floor + 13, y(at));
-    return (
-      <text
-        key={words}
-        x={x}
-        y={floor}
-        dy="0.36em"
-        style={words === "median" ? { fill: "var(--series-1)", fontWeight: 600 } : undefined}
-      >
-        {words}
-      </text>
-    );
-  });
+  const wishes = wished.map(({ at }) => y(at));
+  const places = separate(wishes, 13, ...limits);
+  return wished.map(({ words }, i) => (
+    <text
+      key={words}
+      x={x}
+      y={places[i]}
+      dy="0.36em"
+      style={words === "median" ? { fill: "var(--series-1)", fontWeight: 600 } : undefined}
+    >
+      {words}
+    </text>
+  ));
 }

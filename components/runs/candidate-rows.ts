@@ -81,9 +81,13 @@ function notchRow({ notchLossDb }: Candidate): Row {
   return { label, value: notchLossDb ?? Infinity, better: "more", figure: decibels(notchLossDb, 1) };
 }
 
-/** Best among those side by side, and not shared by all of them. */
+const shown = ({ figure }: Row) => `${figure.digits} ${figure.unit}`;
+
+/** Best among those side by side, and not shared by all of them; what reads the same is equally good. */
 export function isBest(row: Row, index: number, columns: Row[][]): boolean {
-  const values = columns.map((rows) => rows[index]?.value ?? NaN);
+  const rows = columns.flatMap((column) => column[index] ?? []);
+  const values = rows.map(({ value }) => value);
   const best = row.better === "less" ? Math.min(...values) : Math.max(...values);
-  return columns.length > 1 && row.value === best && values.some((value) => value !== best);
+  const theBest = rows.find(({ value }) => value === best);
+  return theBest !== undefined && shown(row) === shown(theBest) && rows.some((other) => shown(other) !== shown(row));
 }

@@ -32,7 +32,7 @@ export function Contributors({ result, spread }: { result: ToleranceResult; spre
         <tbody>
           {shown.map(({ path, effectDb }) => (
             <tr key={path}>
-              <RowHead className="wrap-break-word">{names.get(path)}</RowHead>
+              <RowHead>{names.get(path)}</RowHead>
               <Cell isRight className="figures">
                 {digits(effectDb, 2)}
               </Cell>

@@ -32,7 +32,7 @@ export function TapTable({ signals: { taps } }: { signals: TimeSignals }) {
         <tbody>
           {taps.map(({ element, readings }) => (
             <tr key={element}>
-              <RowHead className="wrap-break-word">{pieceName(draft.circuit.elements, element, lines)}</RowHead>
+              <RowHead>{pieceName(draft.circuit.elements, element, lines)}</RowHead>
               <Cell isRight>{time(readings.reachedS)}</Cell>
               <Cell isRight className="phone:hidden">
                 {time(readings.riseS)}

@@ -30,7 +30,7 @@ export function ToleranceReadings({ drawing: { result, isCurrent } }: { drawing:
   const judged = result && targets.length > 0 && Number.isFinite(result.yieldPercent);
   return (
     <Readings
-      className={`min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3 ${isCurrent ? "" : "opacity-60"}`}
+      className={`min-w-0 flex-1 phone:grid phone:w-full phone:grid-cols-2 phone:gap-y-3 ${isCurrent ? "" : "[&_*]:text-ink-3!"}`}
     >
       <Reading
         label="Builds that keep every target"

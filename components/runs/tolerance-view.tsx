@@ -30,7 +30,7 @@ export function ToleranceView() {
         </div>
       )}
       {result && !cannot && (
-        <div className={isCurrent ? "" : "opacity-60"}>
+        <div aria-busy={!isCurrent} className={isCurrent ? "" : "[&_*]:text-ink-3! [&_svg]:opacity-60"}>
           <div className="mt-5 grid grid-cols-[minmax(0,1fr)_400px] gap-x-10 gap-y-8 folded:grid-cols-1">
             <div className="grid gap-8">
               <ToleranceChart which="returnLoss" result={result} />

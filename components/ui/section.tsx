@@ -38,12 +38,13 @@ export function Section({
   return (
     <section id={id} className={`${rules[rule]} ${className}`}>
       <div className="flex flex-wrap items-baseline justify-between gap-x-4">
-        <div className={isNoteBelow ? "" : "flex flex-wrap items-baseline gap-x-3"}>
+        <div className="flex flex-wrap items-baseline gap-x-3">
           <Heading>{title}</Heading>
-          {note && <p className="text-label text-ink-2">{note}</p>}
+          {note && !isNoteBelow && <p className="text-label text-ink-2">{note}</p>}
         </div>
         {aside}
       </div>
+      {note && isNoteBelow && <p className="text-label text-ink-2">{note}</p>}
       {children}
     </section>
   );

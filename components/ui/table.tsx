@@ -39,7 +39,7 @@ export function RowHead({ className = "", ...rest }: ComponentProps<"th">) {
     <th
       {...rest}
       scope="row"
-      className={`border-b border-line py-1.25 pr-2 text-left align-baseline font-normal ${className}`}
+      className={`border-b border-line py-1.25 pr-2 text-left align-baseline font-normal wrap-anywhere ${className}`}
     />
   );
 }

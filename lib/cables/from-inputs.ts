@@ -184,7 +184,11 @@ export function fromInputs(entered: Entered): Worked {
     notes: [
       ...notesOf(ways),
       ...(from === "smoothCopper"
-        ? ["No dc resistance is given: that of smooth copper with this loss was taken."]
+        ? [
+            inputs.nominal?.conductorResistanceOhmPerM === undefined
+              ? "No dc resistance is given: that of smooth copper with this loss was taken."
+              : "The dc resistance given is of one conductor: for the loop, that of smooth copper with this loss was taken.",
+          ]
         : []),
       ...(loss.from === "nominal" ? ["No loss is given: the conductors were taken for solid copper."] : []),
     ],

@@ -10,6 +10,8 @@ export interface QuantityBounds {
   isWhole?: boolean;
 }
 
+const figure = (value: number) => String(value).replace("-", "\u2212");
+
 /** What a value breaks of its bounds; null where it keeps them. */
 export function brokenBound(
   value: number,
@@ -18,7 +20,7 @@ export function brokenBound(
   if (isPositive && !(value > 0)) return "More than 0.";
   if (isNotNegative && !(value >= 0)) return "0 or more.";
   if (isWhole && !Number.isInteger(value)) return "A whole number.";
-  if (least !== undefined && value < least) return `At least ${least}.`;
-  if (most !== undefined && value > most) return `At most ${most}.`;
+  if (least !== undefined && value < least) return `At least ${figure(least)}.`;
+  if (most !== undefined && value > most) return `At most ${figure(most)}.`;
   return null;
 }

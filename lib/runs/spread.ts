@@ -54,11 +54,18 @@ function ofCable(element: Element, at: string, name: string, choices: SpreadChoi
   return rows;
 }
 
+/** Pieces called the same are told apart by their place in the run. */
+function nameOf(names: readonly string[], k: number): string {
+  const name = names[k];
+  if (name === undefined) return `piece ${k + 1}`;
+  return names.filter((other) => other === name).length > 1 ? `${name}, piece ${k + 1}` : name;
+}
+
 /** @param names - of the elements, in order */
 export function spreadOf(circuit: Circuit, names: readonly string[], choices: SpreadChoices): NamedSpread[] {
   const rows = circuit.elements.flatMap((element, k): NamedSpread[] => {
     const at = `elements.${k}`;
-    const name = names[k] ?? `piece ${k + 1}`;
+    const name = nameOf(names, k);
     if (element.kind === "part" && choices.partPercent)
       return [{ path: `${at}.valuePercent`, limits: about(choices.partPercent), name: `value of ${name}` }];
     return ofCable(element, at, name, choices);

@@ -75,7 +75,7 @@ test("A librarian begins a revision, cannot approve it, and a colleague does by 
 
   await signedIn(page, "nils.ferrant");
   await page.goto("/review");
-  await page.getByRole("link", { name: new RegExp(designation) }).click();
+  await page.getByRole("link", { name: new RegExp(`${designation} Revision 2`) }).click();
   await expect(page).toHaveURL(new RegExp(`cable=${id}`));
   await expect(page.getByRole("row", { name: /Dielectric diameter/ })).toContainText("4.700");
   await expect(page.getByRole("row", { name: /Slipway camera/ })).toContainText("would be missed");

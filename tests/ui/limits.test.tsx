@@ -62,7 +62,9 @@ describe("The list of limit lines", () => {
     expect(screen.getByRole("status").textContent).toBe("1 of the standards, 1 of your team");
     const [first, second] = screen.getAllByRole("listitem");
     expect(first?.textContent).toContain("Line own");
-    expect(first?.textContent).toContain("House specification 12, 3, 2025, 4.2 · added by Nils Ferrant, 2026-03-01");
+    expect(first?.textContent).toContain(
+      "House specification 12, 3, 2025, clause 4.2 · added by Nils Ferrant, 2026-03-01",
+    );
     expect(second?.textContent).toContain("check your edition");
     expect(screen.queryByRole("button")).toBeNull();
   });

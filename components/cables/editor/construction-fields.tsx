@@ -30,11 +30,12 @@ function useLayers(): Layer[] {
   const word = (
     name: "build.jacket" | "build.screenName" | "build.dielectricName" | "build.conductor",
     label: string,
+    placeholder = label.toLowerCase(),
   ) => (
     <Field
       label={label}
       isLabelHidden
-      placeholder={label.toLowerCase()}
+      placeholder={placeholder}
       autoComplete="off"
       maxLength={60}
       {...form.register(name)}
@@ -73,7 +74,7 @@ function useLayers(): Layer[] {
             <option value="solid">Solid</option>
             <option value="airSpaced">Air-spaced</option>
           </Select>
-          {word("build.dielectricName", "Material of the dielectric")}
+          {word("build.dielectricName", "Material of the dielectric", "material")}
           <FigureInput name="permittivity" label="Permittivity" isLabelHidden placeholder="ε" />
         </>
       ),
@@ -83,7 +84,7 @@ function useLayers(): Layer[] {
       fields: (
         <>
           {size("conductor", isPair ? "Diameter of a wire" : "Diameter of the inner conductor")}
-          {word("build.conductor", "Make of the conductor")}
+          {word("build.conductor", "Make of the conductor", "make")}
           <Select label="Metal" isLabelHidden {...form.register("metal")}>
             <option value="copper">Copper</option>
             <option value="silver">Silver</option>

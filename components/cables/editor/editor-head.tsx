@@ -16,8 +16,9 @@ import type { CableRevision } from "@/lib/cables/revisions/schema";
 /** Why the entry cannot be sent as it is; false where it can. */
 function useRefusal(): string | false {
   const { edited, saving } = useEntryForm();
-  const faults = Object.keys(edited.read.faults).length;
-  if (faults > 0) return faults === 1 ? "One field cannot be read." : `${faults} fields cannot be read.`;
+  const { length } = Object.keys(edited.read.faults);
+  if (length > 1) return `${length} fields cannot be read.`;
+  if (length === 1) return edited.read.faults.designation ?? "One field cannot be read.";
   if (!edited.draft) return edited.worked.missing ?? "There is no model yet.";
   return saving.state.kind === "conflict" && "Somebody else changed this draft: say first which version stands.";
 }

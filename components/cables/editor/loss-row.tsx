@@ -56,7 +56,7 @@ export function LossRow({ index, remove }: { index: number; remove: () => void }
           {model}
         </Cell>
         <Cell isRight className={`figures border-b-0 ${isOdd ? "font-[650] text-warn" : ""}`}>
-          {percent === null ? "–" : `${percent > 0 ? "+" : ""}${digits(percent, 1)}`}
+          {percent === null ? "–" : `${percent >= 0.05 ? "+" : ""}${digits(percent, 1)}`}
         </Cell>
         <Cell isRight className="border-b-0 whitespace-nowrap">
           <button

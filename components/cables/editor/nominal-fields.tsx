@@ -15,9 +15,9 @@ export function NominalFields() {
         <FigureInput name="velocityTolerance" label="±" />
         <FigureInput name="c" />
         <FigureInput name="cTolerance" label="±" />
-        <FigureInput name="l" className="col-span-2 phone:col-span-1" />
+        <FigureInput name="l" />
         <FigureInput name="loop" hint="there and back" className="col-span-2 phone:col-span-1" />
-        <FigureInput name="core" hint="inner, or one wire" className="col-span-1" />
+        <FigureInput name="core" hint="inner, or one wire" className="col-span-2 phone:col-span-1" />
         <FigureInput name="nominalTangent" />
       </div>
       <SourceFields way="nominal" />

@@ -1,5 +1,6 @@
 "use client";
 
+import { useFormState } from "react-hook-form";
 import { useEntryForm } from "@/components/cables/editor/entry-form";
 import { FigureInput } from "@/components/cables/editor/figure-input";
 import { Field } from "@/components/ui/field";
@@ -11,6 +12,9 @@ import { familyWords } from "@/components/cables/words";
 export function Particulars() {
   const { form, edited, saving } = useEntryForm();
   const { faults } = edited.read;
+  const { isDirty, touchedFields } = useFormState({ control: form.control });
+  // Nothing is wrong with a form nobody has begun.
+  const isBegun = isDirty || touchedFields.designation;
   // What an approved entry is called stays: runs and sheets name it.
   const isNamed = saving.saved !== null && !saving.saved.isCurrent;
   return (
@@ -21,7 +25,7 @@ export function Particulars() {
           autoComplete="off"
           readOnly={isNamed}
           hint={isNamed ? "Stays: runs and sheets name it." : undefined}
-          error={faults.designation}
+          error={isBegun ? faults.designation : undefined}
           {...form.register("designation")}
         />
         <Field

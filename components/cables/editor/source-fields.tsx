@@ -29,7 +29,7 @@ export function SourceFields({ way }: { way: SourceWay }) {
   return (
     <details className="mt-3">
       <summary className="link text-label">Where these figures come from</summary>
-      <div className="mt-2 grid grid-cols-4 gap-x-3 gap-y-2.5 phone:grid-cols-2">
+      <div className="mt-2 grid grid-cols-[repeat(auto-fill,minmax(8rem,1fr))] gap-x-3 gap-y-2.5 phone:grid-cols-2">
         <Select label="Kind of source" {...form.register(`sources.${way}.kind`)}>
           {Object.entries(kindWords).map(([kind, words]) => (
             <option key={kind} value={kind}>

@@ -13,13 +13,15 @@ const tagOf = (name: string) => (name === "rows" ? null : name);
 /** Every change of the form can be undone; Ctrl Z outside a field, the browser's own inside one. */
 export function useUndo(form: UseFormReturn<EntryTexts>, start: EntryTexts) {
   const [now, setNow] = useState(() => steps(copyOf(start)));
+  // While texts are put on the screen whole, each field says that it has changed.
+  const isShowing = useRef(false);
   useEffect(
     () =>
       form.subscribe({
         formState: { values: true },
         callback: ({ values, name }) => {
           // What is put on the screen whole has no name, and is no change of anybody’s.
-          if (name === undefined) return;
+          if (name === undefined || isShowing.current) return;
           setNow((before) => stepped(before, copyOf(values), tagOf(name)));
         },
       }),
@@ -27,7 +29,9 @@ export function useUndo(form: UseFormReturn<EntryTexts>, start: EntryTexts) {
   );
   function show(texts: EntryTexts) {
     // The fields stay the ones that are on the screen: rendering does not register them anew.
+    isShowing.current = true;
     form.reset(copyOf(texts), { keepDefaultValues: true, keepFieldsRef: true });
+    isShowing.current = false;
   }
   const go = (to: typeof undone) => () => {
     const next = to(now);

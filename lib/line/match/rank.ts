@@ -31,6 +31,9 @@ export function rank(candidates: readonly Candidate[], returnLossDb: number): Ca
   return [...candidates].sort((a, b) => compare(keys.get(a)!, keys.get(b)!) || a.title.localeCompare(b.title));
 }
 
+/** Without the last digits, in which two engines differ: server and browser put equal matches in the same order. */
+const rounded = (value: number) => Number(value.toPrecision(6));
+
 /** Smaller is better, first entry first. */
 function keyOf(candidate: Candidate, returnLossDb: number): number[] {
   const worst = orInfinite(candidate.worstReturnLossDb);
@@ -44,8 +47,8 @@ function keyOf(candidate: Candidate, returnLossDb: number): number[] {
     -Math.floor((candidate.yieldPercent ?? 100) / yieldStep),
     -Math.floor(worst / returnLossStep),
     Math.floor(orInfinite(candidate.worstTransducerLossDb) / lossStep),
-    -candidate.bandwidthHz,
-    candidate.totalLengthM,
+    -rounded(candidate.bandwidthHz),
+    rounded(candidate.totalLengthM),
   ];
 }
 
