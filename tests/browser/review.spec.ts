@@ -77,7 +77,7 @@ test("A librarian begins a revision, cannot approve it, and a colleague does by 
   await page.goto("/review");
   await page.getByRole("link", { name: new RegExp(`${designation} Revision 2`) }).click();
   await expect(page).toHaveURL(new RegExp(`cable=${id}`));
-  await expect(page.getByRole("row", { name: /Dielectric diameter/ })).toContainText("4.700");
+  await expect(page.getByRole("row", { name: /Dielectric diameter/ })).toContainText("is now 4.7");
   await expect(page.getByRole("row", { name: /Slipway camera/ })).toContainText("would be missed");
   await expect(page.getByText(/One target that is met would be missed/)).toBeVisible();
   await page.getByLabel("Write a note").fill("Looked at with the author.");

@@ -13,15 +13,13 @@ const tagOf = (name: string) => (name === "rows" ? null : name);
 /** Every change of the form can be undone; Ctrl Z outside a field, the browser's own inside one. */
 export function useUndo(form: UseFormReturn<EntryTexts>, start: EntryTexts) {
   const [now, setNow] = useState(() => steps(copyOf(start)));
-  // While texts are put on the screen whole, each field says that it has changed.
-  const isShowing = useRef(false);
   useEffect(
     () =>
       form.subscribe({
         formState: { values: true },
         callback: ({ values, name }) => {
           // What is put on the screen whole has no name, and is no change of anybody’s.
-          if (name === undefined || isShowing.current) return;
+          if (name === undefined) return;
           setNow((before) => stepped(before, copyOf(values), tagOf(name)));
         },
       }),
@@ -29,14 +27,13 @@ export function useUndo(form: UseFormReturn<EntryTexts>, start: EntryTexts) {
   );
   function show(texts: EntryTexts) {
     // The fields stay the ones that are on the screen: rendering does not register them anew.
-    isShowing.current = true;
     form.reset(copyOf(texts), { keepDefaultValues: true, keepFieldsRef: true });
-    isShowing.current = false;
   }
   const go = (to: typeof undone) => () => {
     const next = to(now);
-    setNow(next);
     show(next.present);
+    // Last: each field has just said that it changed, which was nobody's step.
+    setNow(next);
   };
   const undo = now.past.length > 0 ? go(undone) : null;
   const redo = now.future.length > 0 ? go(redone) : null;
@@ -58,8 +55,8 @@ export function useUndo(form: UseFormReturn<EntryTexts>, start: EntryTexts) {
   }, []);
   /** Puts other texts on the screen, as a change that can be undone. */
   const take = (texts: EntryTexts) => {
-    setNow((before) => stepped(before, copyOf(texts), null));
     show(texts);
+    setNow(stepped(now, copyOf(texts), null));
   };
   return { undo, redo, take };
 }
