@@ -15,6 +15,11 @@ export async function computed<Answer>(answer: Promise<Answer>): Promise<Answer>
     return await answer;
   } catch (error) {
     if (!(error instanceof RangeError)) throw error;
-    throw new AppError("invalid_input", `This cannot be computed: ${error.message.replace(/^\w+: /, "")}.`);
+    throw new AppError("invalid_input", `This cannot be computed: ${inWords(error.message)}.`);
   }
+}
+
+/** Without the name of the function, and without what is no number: it was too large or undefined, which says less. */
+function inWords(message: string): string {
+  return message.replace(/^\w+: /, "").replace(/,? got -?(Infinity|NaN)\b/g, "");
 }

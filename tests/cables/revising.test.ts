@@ -139,6 +139,16 @@ test("Taking back a draft revision that was never submitted leaves the entry as 
   expect(beginRevision(designer, id, "In earnest.").revision).toBe(2);
 });
 
+test("A page that still shows a draft taken back cannot write into the next one", () => {
+  const id = entry();
+  const { version } = beginRevision(designer, id, "A whim.");
+  deleteDraft(designer, id);
+  beginRevision(designer, id, "In earnest.");
+  expect(() => changeDraft(designer, id, version, { name: "Of the whim" })).toThrow(
+    expect.objectContaining({ code: "stale" }),
+  );
+});
+
 test("A file of somebody else's stays when a draft is taken back, and the draft's own are not shown before it is approved", () => {
   const id = entry();
   beginRevision(designer, id, "A whim.");

@@ -9,7 +9,7 @@ import { may, requirePermission } from "@/lib/auth/permission";
 import { revisionValues } from "@/lib/cables/drafts/values";
 import { recordEvent } from "@/lib/cables/events/service";
 import type { NewCable } from "@/lib/cables/new-cable";
-import { findOpenNumber, getCurrentRevision, getRevision } from "@/lib/cables/revisions/service";
+import { findOpenNumber, getCurrentRevision, getRevision, nextVersion } from "@/lib/cables/revisions/service";
 import type { Cable } from "@/lib/cables/schema";
 import { getCable } from "@/lib/cables/service";
 import { AppError } from "@/lib/http/errors";
@@ -74,9 +74,10 @@ export function deleteDraft(actor: Actor, cableId: string): void {
       if (draft.isCurrent) tx.delete(cables).where(eq(cables.id, cableId)).run();
       else {
         const ofCable = and(eq(cableRevisions.cableId, cableId), eq(cableRevisions.revision, revision));
+        const current = getCurrentRevision(actor, cableId).revision;
         // A file that somebody else added meanwhile bears out the entry, and does not go with the draft.
         tx.update(cableEvidence)
-          .set({ revision: getCurrentRevision(actor, cableId).revision })
+          .set({ revision: current })
           .where(
             and(
               eq(cableEvidence.cableId, cableId),
@@ -88,6 +89,11 @@ export function deleteDraft(actor: Actor, cableId: string): void {
         // What nobody was ever shown leaves no trace: its number is given again.
         tx.delete(cableEvents)
           .where(and(eq(cableEvents.cableId, cableId), eq(cableEvents.revision, revision)))
+          .run();
+        // Its versions are not: a page that still shows it must not fit the next draft.
+        tx.update(cableRevisions)
+          .set({ version: nextVersion(cableId) })
+          .where(and(eq(cableRevisions.cableId, cableId), eq(cableRevisions.revision, current)))
           .run();
         tx.delete(cableRevisions).where(ofCable).run();
       }
