@@ -5,6 +5,9 @@ import path from "node:path";
 const root = path.resolve(import.meta.dirname, "..");
 const alias = { "server-only": path.join(root, "tests/support/server-only.ts") };
 
+/** A busy machine is slow; a test that says how fast something must be measures it itself. */
+const patience = { testTimeout: 60_000, hookTimeout: 60_000 };
+
 export default defineConfig({
   root,
   resolve: { tsconfigPaths: true },
@@ -19,6 +22,7 @@ export default defineConfig({
           include: ["tests/**/*.test.ts"],
           exclude: ["tests/browser/**"],
           setupFiles: ["tests/setup.ts"],
+          ...patience,
           execArgv: ["--import", path.join(root, "tests/support/threads.mjs")],
         },
       },
@@ -26,7 +30,13 @@ export default defineConfig({
         root,
         plugins: [react()],
         resolve: { tsconfigPaths: true, alias },
-        test: { name: "dom", environment: "jsdom", include: ["tests/**/*.test.tsx"], setupFiles: ["tests/setup.ts"] },
+        test: {
+          name: "dom",
+          environment: "jsdom",
+          include: ["tests/**/*.test.tsx"],
+          setupFiles: ["tests/setup.ts"],
+          ...patience,
+        },
       },
     ],
   },
