@@ -82,10 +82,12 @@ export interface Ground {
   /** of each column's middle, metres from the source */
   positionsM: number[];
   rows: number;
-  /** volt above where the line comes to rest there; row by row, rows·columns of them */
+  /** volt above where the line comes to rest there, 0 until the first front has arrived; row by row, rows·columns of them */
   aboveSettledV: Float32Array;
 }
 
+/** A front has arrived when the voltage has come to this part of the edge. */
+const arrived = 5e-3;
 const columns = 56;
 const rowsShown = 160;
 /** Transform values times columns beyond which the ground is not worked out: it would take longer than one waits for. */
@@ -129,8 +131,12 @@ export function groundOf(circuit: Circuit, drive: Drive, windowS: number, temper
   const response = timeResponse(whole, drive, { windowS, points: rowsShown }, { planes, temperatureC });
   const settled = levels.map((level) => level * finalEmf(drive));
   const aboveSettledV = new Float32Array(rowsShown * planes.length);
-  for (let row = 0; row < rowsShown; row++)
-    for (let n = 0; n < planes.length; n++)
-      aboveSettledV[row * planes.length + n] = response.planes[n]!.values[row * response.every]! - settled[n]!;
+  for (let n = 0; n < planes.length; n++) {
+    const { values } = response.planes[n]!;
+    const arrives = values.findIndex((volt) => Math.abs(volt) > arrived * Math.abs(drive.amplitudeV));
+    for (let row = 0; row < rowsShown; row++)
+      if (arrives >= 0 && row * response.every >= arrives)
+        aboveSettledV[row * planes.length + n] = values[row * response.every]! - settled[n]!;
+  }
   return { positionsM, rows: rowsShown, aboveSettledV };
 }
