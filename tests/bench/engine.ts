@@ -4,8 +4,10 @@ import type { Circuit, Line } from "@/lib/line/element";
 import { findMatches } from "@/lib/line/match/find-matches";
 import type { MatchRequest } from "@/lib/line/match/match-request";
 import { shortlist } from "@/lib/line/match/shortlist";
+import { movedResponse } from "@/lib/line/moved-response";
 import { sweep } from "@/lib/line/run";
 import { analyseRun } from "@/lib/runs/analysis";
+import { withNumpy } from "@/tests/bench/numpy";
 import { sweepWithMathjs } from "@/tests/bench/with-mathjs";
 import { medianMs, ms, pairedMs, row, times } from "@/tests/bench/timing";
 
@@ -37,8 +39,42 @@ function checkAgreement(): void {
   });
 }
 
+interface Theirs {
+  ms: number;
+  returnLossDb: number;
+  lossDb: number;
+}
+
+/** Return loss and loss alone, by the columns that draws are swept with; the whole sweep answers eight figures more. */
+function sweepTwo(): [Float64Array, Float64Array] {
+  const found: [Float64Array, Float64Array] = [new Float64Array(1001), new Float64Array(1001)];
+  movedResponse(circuit, [], frequencies).respond([], ...found, 0);
+  return found;
+}
+
+function benchWithNumpy(): void {
+  const theirs = withNumpy<Theirs>("sweep.py");
+  const [returnLoss, loss] = sweepTwo();
+  if (
+    theirs &&
+    !(Math.abs(returnLoss[500]! - theirs.returnLossDb) < 1e-6 && Math.abs(loss[500]! - theirs.lossDb) < 1e-6)
+  )
+    throw new Error("the sweeps differ");
+  const two = medianMs(sweepTwo, 41, 10);
+  const whole = medianMs(() => sweep(circuit, frequencies), 41, 10);
+  const beside = (ours: number) => (theirs ? [ms(theirs.ms), times(theirs.ms / ours)] : ["no numpy"]);
+  row("Sweep, 1,001 points × 5 cables, return loss and loss; numpy", ms(two), ...beside(two));
+  row("  every figure, exact group delay too; numpy's two figures", ms(whole), ...beside(whole));
+  for (const points of [1001, 2001, 4001, 8001]) {
+    const some = Float64Array.from({ length: points }, (_, i) => 440e6 + (i * 24e6) / (points - 1));
+    const time = medianMs(() => sweep(circuit, some), 9);
+    row(`  ${points} points`, ms(time), `${((1e3 * time) / points).toFixed(2)} µs a point`);
+  }
+}
+
 export function benchEngine(): void {
   checkAgreement();
+  benchWithNumpy();
   const [ours, theirs] = pairedMs(
     () => sweep(circuit, frequencies),
     () => sweepWithMathjs(circuit, frequencies),
