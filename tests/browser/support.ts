@@ -10,12 +10,30 @@ export const test = base.extend<{ page: Page }>({
       if (message.type() === "error" && !isRefusal) wrong.push(message.text());
     });
     page.on("pageerror", (error) => wrong.push(error.message));
+    onceAwake(page);
     await run(page);
     expect(wrong, "errors in the browser's console").toEqual([]);
   },
 });
 
 export { expect } from "@playwright/test";
+
+/** Whether every button and field of the page answers: until React has taken them over, what is typed is not heard. */
+function isAwake(): boolean {
+  const controls = [...document.querySelectorAll("main button, main input, main textarea, main select")];
+  return controls.every((control) => Object.keys(control).some((key) => key.startsWith("__reactProps")));
+}
+
+/** Opening or loading a page lasts until it answers, as it does for people, who are slower than a journey. */
+function onceAwake(page: Page): void {
+  const [goto, reload] = [page.goto.bind(page), page.reload.bind(page)];
+  const awake = async <Answer>(answer: Answer): Promise<Answer> => {
+    await page.waitForFunction(isAwake, undefined, { timeout: 10_000 }).catch(() => undefined);
+    return answer;
+  };
+  page.goto = async (...asked) => awake(await goto(...asked));
+  page.reload = async (...asked) => awake(await reload(...asked));
+}
 
 /** Signs in by the front door. */
 export async function signIn(page: Page, name: string): Promise<void> {
