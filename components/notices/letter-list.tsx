@@ -2,7 +2,7 @@
 
 import { useInfiniteQuery } from "@tanstack/react-query";
 import { useState } from "react";
-import { minuteOf } from "@/components/notices/notice-words";
+import { minuteOf } from "@/components/ui/minute";
 import { Button } from "@/components/ui/button";
 import { Select } from "@/components/ui/select";
 import { StateMark, StateNote, type MarkedState } from "@/components/ui/state-mark";

@@ -4,8 +4,9 @@ import { useInfiniteQuery, useMutation, useQueryClient } from "@tanstack/react-q
 import type { Route } from "next";
 import Link from "next/link";
 import type { ReactNode } from "react";
-import { minuteOf, noticeWords } from "@/components/notices/notice-words";
+import { noticeWords } from "@/components/notices/notice-words";
 import { Button } from "@/components/ui/button";
+import { minuteOf } from "@/components/ui/minute";
 import { StateMark, StateNote } from "@/components/ui/state-mark";
 import { call } from "@/lib/http/call";
 import type { NoticeItem, NoticePage, Reading, Unread } from "@/lib/notices/schema";

@@ -14,6 +14,3 @@ export const noticeWords: Record<NoticeItem["kind"], { mark: MarkedState; word: 
   reported: { mark: "warn", word: "Problem reported" },
   settled: { mark: "pass", word: "Settled" },
 };
-
-/** A time as a person reads it, to the minute: 2026-03-01 12:00 UTC. */
-export const minuteOf = (at: string): string => `${at.slice(0, 10)} ${at.slice(11, 16)} UTC`;

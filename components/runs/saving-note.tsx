@@ -2,11 +2,10 @@
 
 import { useRunEditor } from "@/components/runs/run-editor";
 import { Button } from "@/components/ui/button";
+import { NotSaved } from "@/components/ui/not-saved";
 import { StateMark } from "@/components/ui/state-mark";
 import { draftOf } from "@/lib/runs/edit";
 import { changedFields } from "@/lib/runs/changed";
-
-const clock = (date: Date) => date.toLocaleTimeString(undefined, { hour: "2-digit", minute: "2-digit" });
 
 /** Where the work stands: saved, being saved, or not and why. */
 export function SavingNote() {
@@ -14,16 +13,7 @@ export function SavingNote() {
   if (cannotEditBecause) return <span>{cannotEditBecause}</span>;
   if (Object.keys(faults).length > 0)
     return <StateMark state="warn">A field cannot be read; saving waits for it</StateMark>;
-  if (saving.kind === "unsaved")
-    return (
-      <span role="status" className="flex flex-wrap items-center gap-2">
-        <StateMark state="fail">Not saved since {clock(saving.since)}</StateMark>
-        <span>{saving.message}</span>
-        <Button size="small" onClick={retry}>
-          Try again
-        </Button>
-      </span>
-    );
+  if (saving.kind === "unsaved") return <NotSaved since={saving.since} message={saving.message} retry={retry} />;
   if (saving.kind === "conflict") return <StateMark state="warn">Someone else saved first</StateMark>;
   return (
     <span role="status">

@@ -2,6 +2,7 @@
 
 import { useEffect, useRef, useState } from "react";
 import { useSendingOnLeave, type OnServer } from "@/components/runs/use-sending-on-leave";
+import { useAskingAgain } from "@/components/ui/use-asking-again";
 import { AwayError, call, ProblemError } from "@/lib/http/call";
 import { changeBetween, draftOf, type RunDraft } from "@/lib/runs/edit";
 import { hold, readHeld } from "@/lib/runs/held";
@@ -16,8 +17,6 @@ export type Saving =
   | { kind: "conflict"; theirs: Run };
 
 const pause = 700;
-/** while the server is away it is asked again this often */
-const awayPause = 10_000;
 
 interface UseSaving {
   saved: Run;
@@ -141,23 +140,6 @@ function useKept({
     take(mine);
     if (held.version !== opened.version) onConflict();
   });
-}
-
-function useAskingAgain(isAway: boolean, retry: () => void) {
-  const again = useRef(retry);
-  useEffect(() => {
-    again.current = retry;
-  });
-  useEffect(() => {
-    if (!isAway) return;
-    const ask = () => again.current();
-    const timer = setInterval(ask, awayPause);
-    window.addEventListener("online", ask);
-    return () => {
-      clearInterval(timer);
-      window.removeEventListener("online", ask);
-    };
-  }, [isAway]);
 }
 
 function useAskingBeforeLeaving(isChanged: boolean) {

@@ -2,28 +2,18 @@
 
 import { useEntryForm } from "@/components/cables/editor/entry-form";
 import { Button } from "@/components/ui/button";
+import { NotSaved } from "@/components/ui/not-saved";
 import { StateMark } from "@/components/ui/state-mark";
 import { Cell, HeadCell, RowHead } from "@/components/ui/table";
 import { startTexts } from "@/lib/cables/editor/start-texts";
 import { differences } from "@/lib/cables/editor/versions";
-
-const clock = (date: Date) => date.toLocaleTimeString(undefined, { hour: "2-digit", minute: "2-digit" });
 
 /** Where the work stands: saved, kept in the browser, being saved, or not and why. */
 export function EntrySaveNote() {
   const { saving, edited } = useEntryForm();
   const { state, retry } = saving;
   const hasFaults = Object.keys(edited.read.faults).length > 0;
-  if (state.kind === "trouble")
-    return (
-      <span role="status" className="flex flex-wrap items-center gap-2">
-        <StateMark state="fail">Not saved since {clock(state.since)}</StateMark>
-        <span>{state.message}</span>
-        <Button size="small" onClick={retry}>
-          Try again
-        </Button>
-      </span>
-    );
+  if (state.kind === "trouble") return <NotSaved since={state.since} message={state.message} retry={retry} />;
   if (state.kind === "conflict") return <StateMark state="warn">Somebody else saved first</StateMark>;
   if (!saving.saved) return <span role="status">Kept in this browser</span>;
   if (state.kind === "waiting" && (hasFaults || !edited.draft))

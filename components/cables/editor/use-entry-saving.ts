@@ -1,6 +1,7 @@
 "use client";
 
 import { useEffect, useRef, useState } from "react";
+import { useAskingAgain } from "@/components/ui/use-asking-again";
 import { changeBetween, type Edited } from "@/lib/cables/editor/entry-draft";
 import { holdEntry, readHeldEntry } from "@/lib/cables/editor/held-entry";
 import { currentOf, draftOf, refusalWords, saveEntry } from "@/lib/cables/editor/send-entry";
@@ -44,7 +45,6 @@ interface Given {
 }
 
 const restMs = 900;
-const awayMs = 10_000;
 const isSame = (a: EntryTexts, b: EntryTexts) => JSON.stringify(a) === JSON.stringify(b);
 
 /**
@@ -147,21 +147,4 @@ function useHeldBefore({ opened, start, key, take, setBase, onConflict }: Before
     setBase(held.base);
     onConflict(opened);
   });
-}
-
-function useAskingAgain(isAway: boolean, retry: () => void) {
-  const again = useRef(retry);
-  useEffect(() => {
-    again.current = retry;
-  });
-  useEffect(() => {
-    if (!isAway) return;
-    const ask = () => again.current();
-    const timer = setInterval(ask, awayMs);
-    window.addEventListener("online", ask);
-    return () => {
-      clearInterval(timer);
-      window.removeEventListener("online", ask);
-    };
-  }, [isAway]);
 }

@@ -1,17 +1,9 @@
 /** What is said of a revision. Pure. */
 import { z } from "zod";
-import { plain } from "@/lib/http/plain-text";
+import { commentSchema, newCommentSchema } from "@/lib/runs/comments/schema";
 
-export const newCableCommentSchema = z
-  .strictObject({
-    text: plain(
-      z
-        .string({ error: "A comment is text." })
-        .trim()
-        .min(1, { error: "Say something." })
-        .max(2000, { error: "A comment has at most 2000 characters." }),
-      "A comment",
-    ),
+export const newCableCommentSchema = newCommentSchema
+  .extend({
     revision: z
       .int({ error: "The revision is a whole number." })
       .positive({ error: "Revisions are counted from 1." })
@@ -21,15 +13,7 @@ export const newCableCommentSchema = z
   .meta({ id: "NewCableComment" });
 export type NewCableComment = z.output<typeof newCableCommentSchema>;
 
-export const cableCommentSchema = z
-  .strictObject({
-    id: z.string(),
-    revision: z.int(),
-    personName: z.string(),
-    saidAt: z.string().describe("ISO 8601"),
-    text: z.string(),
-  })
-  .meta({ id: "CableComment" });
+export const cableCommentSchema = commentSchema.extend({ revision: z.int() }).meta({ id: "CableComment" });
 export type CableComment = z.infer<typeof cableCommentSchema>;
 
 export const cableCommentsSchema = z.strictObject({ items: z.array(cableCommentSchema).describe("oldest first") });
